@@ -31,8 +31,9 @@ import org.spanloom.language.text.Span;
 /**
  * Writes what a check found as markers of the file.
  *
- * <p>Each basis gets one marker that carries its numbers. If a finding is about that basis, the worst one gives the
- * marker its severity and message; otherwise the marker is a mere note, and not a problem.
+ * <p>Each basis gets one marker that carries its numbers. If a finding is about that basis, the
+ * worst one gives the marker its severity and message; otherwise the marker is a mere note, and not
+ * a problem.
  */
 public final class FindingMarkers {
 
@@ -51,7 +52,8 @@ public final class FindingMarkers {
    *
    * @throws CoreException if the file is gone
    */
-  public static void write(IFile file, CheckReport report, IProgressMonitor monitor) throws CoreException {
+  public static void write(IFile file, CheckReport report, IProgressMonitor monitor)
+      throws CoreException {
     replace(file, entries(report), monitor);
   }
 
@@ -60,7 +62,8 @@ public final class FindingMarkers {
    *
    * @throws CoreException if the file is gone
    */
-  public static void write(IFile file, ModelFile.Content.Unreadable content, IProgressMonitor monitor)
+  public static void write(
+      IFile file, ModelFile.Content.Unreadable content, IProgressMonitor monitor)
       throws CoreException {
     Map<String, Object> attributes = new HashMap<>();
     attributes.put(IMarker.SEVERITY, IMarker.SEVERITY_ERROR);
@@ -77,7 +80,8 @@ public final class FindingMarkers {
    *
    * @throws CoreException if the file is gone
    */
-  public static void write(IFile file, SourceText source, List<Finding> findings, IProgressMonitor monitor)
+  public static void write(
+      IFile file, SourceText source, List<Finding> findings, IProgressMonitor monitor)
       throws CoreException {
     replace(file, findings.stream().map(f -> problem(f, source)).toList(), monitor);
   }
@@ -94,7 +98,8 @@ public final class FindingMarkers {
     resource.deleteMarkers(Ids.REQUIREMENT, true, depth);
   }
 
-  private static void replace(IFile file, List<Entry> entries, IProgressMonitor monitor) throws CoreException {
+  private static void replace(IFile file, List<Entry> entries, IProgressMonitor monitor)
+      throws CoreException {
     IWorkspace workspace = file.getWorkspace();
     workspace.run(
         m -> {
@@ -129,14 +134,16 @@ public final class FindingMarkers {
       if (!told.contains(finding)) {
         Entry entry = problem(finding, source);
         // A basis that could not be computed has no numbers, but belongs to the same list.
-        entries.add(isAboutBasis(finding) ? new Entry(Ids.BASIS_FINDING, entry.attributes()) : entry);
+        entries.add(
+            isAboutBasis(finding) ? new Entry(Ids.BASIS_FINDING, entry.attributes()) : entry);
       }
     }
     return entries;
   }
 
   /** Returns the worst finding about a basis that no other basis took. */
-  private static Optional<Finding> about(BasisReport basis, List<Finding> findings, Set<Finding> told) {
+  private static Optional<Finding> about(
+      BasisReport basis, List<Finding> findings, Set<Finding> told) {
     Finding worst = null;
     for (Finding f : findings) {
       if (isAboutBasis(f)
@@ -170,14 +177,13 @@ public final class FindingMarkers {
     Map<String, Object> attributes =
         finding
             .map(f -> problem(f, source).attributes())
-            .orElseGet(
-                () -> {
-                  Map<String, Object> sound = place(basis.span(), source);
-                  sound.put(IMarker.SEVERITY, IMarker.SEVERITY_INFO);
-                  sound.put(IMarker.MESSAGE, soundMessage(basis));
-                  sound.put(MarkerAttributes.CODE, "basis-sound");
-                  return sound;
-                });
+            .orElseGet(() -> {
+              Map<String, Object> sound = place(basis.span(), source);
+              sound.put(IMarker.SEVERITY, IMarker.SEVERITY_INFO);
+              sound.put(IMarker.MESSAGE, soundMessage(basis));
+              sound.put(MarkerAttributes.CODE, "basis-sound");
+              return sound;
+            });
     attributes.put(MarkerAttributes.SYSTEM, basis.system());
     attributes.put(MarkerAttributes.BASIS, basis.name());
     attributes.put(MarkerAttributes.RAW, Double.toString(basis.worstRaw()));
@@ -186,16 +192,18 @@ public final class FindingMarkers {
     attributes.put(MarkerAttributes.SCALED_TIME, Double.toString(basis.worstScaledTime()));
     attributes.put(MarkerAttributes.TIME_UNIT, system.system().timeUnit().code());
     attributes.put(MarkerAttributes.DIGITS_LEFT, Double.toString(basis.digitsLeft()));
-    basis
-        .windows()
-        .ifPresent(n -> attributes.put(MarkerAttributes.WINDOWS, Integer.toString(n)));
+    basis.windows().ifPresent(n -> attributes.put(MarkerAttributes.WINDOWS, Integer.toString(n)));
     boolean problem = finding.isPresent() && finding.get().severity() != Severity.NOTE;
     return new Entry(problem ? Ids.BASIS_FINDING : Ids.BASIS, attributes);
   }
 
   private static String soundMessage(BasisReport basis) {
     return String.format(
-        Locale.ROOT, "Basis %s of %s is sound: about %.0f digits are left.", basis.name(), basis.system(), basis.digitsLeft());
+        Locale.ROOT,
+        "Basis %s of %s is sound: about %.0f digits are left.",
+        basis.name(),
+        basis.system(),
+        basis.digitsLeft());
   }
 
   private static Entry requirement(RequirementResult result, SourceText source) {
@@ -234,6 +242,8 @@ public final class FindingMarkers {
   }
 
   private static String shortened(String message) {
-    return message.length() <= LONGEST_MESSAGE ? message : message.substring(0, LONGEST_MESSAGE) + "...";
+    return message.length() <= LONGEST_MESSAGE
+        ? message
+        : message.substring(0, LONGEST_MESSAGE) + "...";
   }
 }

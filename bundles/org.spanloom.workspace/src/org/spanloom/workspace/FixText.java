@@ -13,8 +13,8 @@ import org.spanloom.language.text.SourceText;
 import org.spanloom.language.text.Span;
 
 /**
- * Fixes as the text of a marker's attribute. Each edit is kept with the characters it replaces, so that it can be
- * refused when the file has changed meanwhile.
+ * Fixes as the text of a marker's attribute. Each edit is kept with the characters it replaces, so
+ * that it can be refused when the file has changed meanwhile.
  */
 public final class FixText {
 
@@ -45,7 +45,10 @@ public final class FixText {
     for (Fix fix : fixes) {
       StringBuilder one = new StringBuilder(fix.label());
       for (TextEdit edit : fix.edits()) {
-        one.append(FIELD).append(edit.span().start()).append(FIELD).append(source.slice(edit.span()));
+        one.append(FIELD)
+            .append(edit.span().start())
+            .append(FIELD)
+            .append(source.slice(edit.span()));
         one.append(FIELD).append(edit.replacement());
       }
       if (all.length() + one.length() >= LONGEST) {

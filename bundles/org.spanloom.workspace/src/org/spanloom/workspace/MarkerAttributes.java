@@ -6,8 +6,8 @@
 package org.spanloom.workspace;
 
 /**
- * Names of the attributes of our markers, beside those of the platform. Numbers are text in the form of {@link
- * Double#toString}, since a marker holds no doubles.
+ * Names of the attributes of our markers, beside those of the platform. Numbers are text in the
+ * form of {@link Double#toString}, since a marker holds no doubles.
  */
 public final class MarkerAttributes {
 

@@ -16,6 +16,9 @@ import java.nio.charset.UnsupportedCharsetException;
 import org.eclipse.core.filesystem.EFS;
 import org.eclipse.core.resources.IFile;
 import org.eclipse.core.runtime.CoreException;
+import org.eclipse.core.runtime.Platform;
+import org.eclipse.core.runtime.content.IContentType;
+import org.spanloom.analysis.settings.Settings;
 import org.spanloom.language.text.SourceText;
 
 /** Reads model files, which nobody vouches for: of bounded size, and only if they are text. */
@@ -25,7 +28,6 @@ public final class ModelFile {
   public static final int LARGEST = 64 << 20;
 
   private static final String EXTENSION = "span";
-  private static final String SETTINGS = "spanloom.settings";
 
   private ModelFile() {}
 
@@ -44,23 +46,21 @@ public final class ModelFile {
     record Unreadable(String code, String message) implements Content {}
   }
 
-  /** Tells whether a file holds a model, going by the name alone or by the content type the user gave it. */
+  /**
+   * Tells whether a file holds a model, going by the name alone or by the content type the user
+   * gave it.
+   */
   public static boolean isModel(IFile file) {
     if (EXTENSION.equals(file.getFileExtension())) {
       return true;
     }
-    var type = org.eclipse.core.runtime.Platform.getContentTypeManager().findContentTypeFor(file.getName());
+    IContentType type = Platform.getContentTypeManager().findContentTypeFor(file.getName());
     return type != null && type.getId().equals(Ids.MODEL_CONTENT_TYPE);
   }
 
   /** Tells whether a file holds the settings of the models beside and below it. */
   public static boolean isSettings(IFile file) {
-    return file.getName().equals(SETTINGS);
-  }
-
-  /** Returns the name of a settings file. */
-  public static String settingsName() {
-    return SETTINGS;
+    return file.getName().equals(Settings.FILE_NAME);
   }
 
   /** Reads a file as it is on disk. */
@@ -77,7 +77,8 @@ public final class ModelFile {
         return bytes.length > LARGEST ? tooLarge() : decode(file, bytes);
       }
     } catch (CoreException | IOException e) {
-      return new Content.Unreadable("file-unreadable", "The file cannot be read: " + e.getMessage());
+      return new Content.Unreadable(
+          "file-unreadable", "The file cannot be read: " + e.getMessage());
     }
   }
 
@@ -95,7 +96,8 @@ public final class ModelFile {
       if (b == 0) {
         return new Content.Unreadable(
             "file-not-text",
-            "The file holds bytes that are not text. Check that this is a model file, saved as UTF-8.");
+            "The file holds bytes that are not text. Check that this is a model file, saved as"
+                + " UTF-8.");
       }
     }
     String charset = file.getCharset();
@@ -113,11 +115,15 @@ public final class ModelFile {
     } catch (CharacterCodingException e) {
       return new Content.Unreadable(
           "file-not-text",
-          "The file is not " + charset + " text. Save it as UTF-8, or set its encoding in its properties.");
+          "The file is not "
+              + charset
+              + " text. Save it as UTF-8, or set its encoding in its properties.");
     } catch (IllegalCharsetNameException | UnsupportedCharsetException e) {
       return new Content.Unreadable(
           "file-not-text",
-          "The encoding " + charset + " is not known here. Choose UTF-8 in the properties of the file.");
+          "The encoding "
+              + charset
+              + " is not known here. Choose UTF-8 in the properties of the file.");
     }
   }
 }

@@ -10,7 +10,10 @@ import org.eclipse.core.runtime.IProgressMonitor;
 import org.eclipse.core.runtime.SubMonitor;
 import org.spanloom.numerics.Progress;
 
-/** Shows the progress of our plain bundles on a monitor of the workbench and passes its cancelling on. */
+/**
+ * Shows the progress of our plain bundles on a monitor of the workbench and passes its cancelling
+ * on.
+ */
 public final class MonitorProgress implements Progress {
 
   private static final int TICKS = 1000;

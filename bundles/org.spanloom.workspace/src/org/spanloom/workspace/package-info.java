@@ -6,10 +6,10 @@
 /**
  * Model files in an Eclipse workspace, without a screen.
  *
- * <p>A project with the {@linkplain org.spanloom.workspace.ModelNature nature} is watched by the {@linkplain
- * org.spanloom.workspace.ModelBuilder builder}. Whenever a model file or the settings change, the file is read ({@link
- * org.spanloom.workspace.ModelFile}), checked, and its findings are written as markers ({@link
- * org.spanloom.workspace.FindingMarkers}):
+ * <p>A project with the {@linkplain org.spanloom.workspace.ModelNature nature} is watched by the
+ * {@linkplain org.spanloom.workspace.ModelBuilder builder}. Whenever a model file or the settings
+ * change, the file is read ({@link org.spanloom.workspace.ModelFile}), checked, and its findings
+ * are written as markers ({@link org.spanloom.workspace.FindingMarkers}):
  *
  * <pre>
  *   file -- ModelFile --&gt; SourceText -- ModelReader, ModelCheck --&gt; CheckReport -- FindingMarkers --&gt; markers
