@@ -11,8 +11,8 @@ import java.util.Optional;
 import org.spanloom.language.units.Dimension;
 
 /**
- * The functions a model may call. Values are those of {@link StrictMath}, so that every machine gets the same bits;
- * whatever compiles terms calls the same methods.
+ * The functions a model may call. Values are those of {@link StrictMath}, so that every machine
+ * gets the same bits; whatever compiles terms calls the same methods.
  */
 public enum Function {
   /** Sine of an angle in radians. */

@@ -1,0 +1,37 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.model;
+
+import java.util.List;
+import org.spanloom.language.problem.Problem;
+import org.spanloom.language.problem.Severity;
+import org.spanloom.language.syntax.SyntaxFile;
+import org.spanloom.language.text.SourceText;
+
+/**
+ * What a model file means.
+ *
+ * @param source the text
+ * @param syntax its tree
+ * @param systems its systems, in order; those with errors too, as far as they can be understood
+ * @param problems everything found, in the order of the text
+ */
+public record Model(
+    SourceText source, SyntaxFile syntax, List<SystemModel> systems, List<Problem> problems) {
+
+  /** Copies the lists. */
+  public Model {
+    systems = List.copyOf(systems);
+    problems = List.copyOf(problems);
+  }
+
+  /** Tells whether no error lies inside a system, so that it can be solved. */
+  public boolean isSound(SystemModel system) {
+    return system.equations().isPresent()
+        && problems.stream()
+            .noneMatch(p -> p.severity() == Severity.ERROR && system.span().contains(p.span()));
+  }
+}

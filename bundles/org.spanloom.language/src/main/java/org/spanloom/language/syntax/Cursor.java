@@ -1,0 +1,211 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.syntax;
+
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import org.spanloom.language.problem.Fix;
+import org.spanloom.language.problem.Problem;
+import org.spanloom.language.problem.ProblemKind;
+import org.spanloom.language.text.Span;
+
+/**
+ * Walks over the tokens of one statement and keeps the first problem of it; later ones follow from
+ * the first.
+ */
+final class Cursor {
+
+  private final String text;
+  private final List<Token> tokens;
+  private final Token end;
+  private int at;
+  private Optional<Problem> problem = Optional.empty();
+
+  Cursor(String text, StatementLine line) {
+    this.text = text;
+    this.tokens = line.tokens();
+    int last = line.span().end();
+    this.end = new Token(TokenKind.NEWLINE, last, last);
+  }
+
+  /** Returns the coming token; at the end one of no length whose kind is a line end. */
+  Token peek() {
+    return at < tokens.size() ? tokens.get(at) : end;
+  }
+
+  TokenKind kind() {
+    return peek().kind();
+  }
+
+  /** Returns the kind of the token behind the coming one. */
+  TokenKind kindAfter() {
+    return at + 1 < tokens.size() ? tokens.get(at + 1).kind() : TokenKind.NEWLINE;
+  }
+
+  Token take() {
+    Token token = peek();
+    at = Math.min(at + 1, tokens.size());
+    return token;
+  }
+
+  boolean atEnd() {
+    return at >= tokens.size();
+  }
+
+  boolean is(TokenKind kind) {
+    return kind() == kind;
+  }
+
+  /** Tells whether the coming token is a word with this text. */
+  boolean isWord(String word) {
+    Token token = peek();
+    return token.kind().isWord() && text(token).equals(word);
+  }
+
+  boolean accept(TokenKind kind) {
+    boolean found = is(kind);
+    if (found) {
+      take();
+    }
+    return found;
+  }
+
+  boolean acceptWord(String word) {
+    boolean found = isWord(word);
+    if (found) {
+      take();
+    }
+    return found;
+  }
+
+  /** Returns the offset behind the last token taken. */
+  int lastEnd() {
+    return at == 0 ? peek().start() : tokens.get(at - 1).end();
+  }
+
+  Span from(int start) {
+    return new Span(start, Math.max(start, lastEnd()));
+  }
+
+  String text(Token token) {
+    return text.substring(token.start(), token.end());
+  }
+
+  String text(Span span) {
+    return text.substring(span.start(), span.end());
+  }
+
+  boolean failed() {
+    return problem.isPresent();
+  }
+
+  Optional<Problem> problem() {
+    return problem;
+  }
+
+  void fail(ProblemKind kind, Span span, String message, Fix... fixes) {
+    if (problem.isEmpty()) {
+      problem = Optional.of(new Problem(kind, span, message, List.of(fixes)));
+    }
+    at = tokens.size();
+  }
+
+  /** Reports that something else belongs here, unless the coming token is bad by itself. */
+  void failHere(ProblemKind kind, String expected, Fix... fixes) {
+    Token token = peek();
+    if (!failBadToken()) {
+      String found = atEnd() ? "the statement ends" : "\"" + shortened(token) + "\" stands";
+      fail(kind, token.span(), expected + ", but here " + found + ".", fixes);
+    }
+  }
+
+  /** Reports the coming token if no statement can hold it, and tells whether it did. */
+  boolean failBadToken() {
+    Token token = peek();
+    String shown = shortened(token);
+    switch (token.kind()) {
+      case BAD_NUMBER ->
+          fail(
+              ProblemKind.NUMBER_MALFORMED,
+              token.span(),
+              "\""
+                  + shown
+                  + "\" is not a number: write digits on both sides of the point, as in 0.5, and digits"
+                  + " behind e, as in 1e-3.");
+      case OPEN_UNIT ->
+          fail(
+              ProblemKind.UNIT_NOT_CLOSED,
+              token.span(),
+              "The unit \"" + shown + "\" is not closed: write \"]\" directly behind it.",
+              Fix.insert("Close the unit", token.end(), "]"));
+      case OPEN_STRING ->
+          fail(
+              ProblemKind.TEXT_NOT_CLOSED,
+              token.span(),
+              "The text " + shown + " is not closed: write \" behind it, on the same line.",
+              Fix.insert("Close the text", token.end(), "\""));
+      case BAD -> failBadCharacters(token, shown);
+      default -> {
+        return false;
+      }
+    }
+    return true;
+  }
+
+  private void failBadCharacters(Token token, String shown) {
+    String meant =
+        switch (shown) {
+          case "\u2212", "\u2013", "\u2014" -> "-";
+          case "\u00B7", "\u00D7", "\u22C5" -> "*";
+          case "\u00F7", "\u2215" -> "/";
+          case "\u2264" -> "<=";
+          case "\u2265" -> ">=";
+          case "\u2019", "\u2032", "`" -> "'";
+          case "\u201C", "\u201D" -> "\"";
+          default -> "";
+        };
+    if (meant.isEmpty()) {
+      fail(
+          ProblemKind.CHARACTER_UNKNOWN,
+          token.span(),
+          "\"" + printable(shown) + "\" means nothing in a model: remove it.",
+          Fix.replace("Remove it", token.span(), ""));
+    } else {
+      fail(
+          ProblemKind.CHARACTER_UNKNOWN,
+          token.span(),
+          "\"" + shown + "\" means nothing in a model: write " + meant + " instead.",
+          Fix.replace("Write " + meant, token.span(), meant));
+    }
+  }
+
+  /** Shows characters that have no face by their code. */
+  private static String printable(String shown) {
+    StringBuilder out = new StringBuilder();
+    shown
+        .codePoints()
+        .forEach(c -> {
+          boolean faceless =
+              Character.isISOControl(c)
+                  || Character.getType(c) == Character.FORMAT
+                  || Character.getType(c) == Character.SURROGATE
+                  || Character.getType(c) == Character.UNASSIGNED;
+          if (faceless) {
+            out.append("U+")
+                .append(Integer.toHexString(0x10000 + c).substring(1).toUpperCase(Locale.ROOT));
+          } else {
+            out.appendCodePoint(c);
+          }
+        });
+    return out.toString();
+  }
+
+  private String shortened(Token token) {
+    String shown = text(token);
+    return shown.length() <= 40 ? shown : shown.substring(0, 37) + "...";
+  }
+}

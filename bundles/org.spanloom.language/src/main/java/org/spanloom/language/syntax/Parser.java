@@ -1,0 +1,403 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.syntax;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import org.spanloom.language.problem.Fix;
+import org.spanloom.language.problem.Problem;
+import org.spanloom.language.problem.ProblemKind;
+import org.spanloom.language.syntax.Statement.BasisStatement;
+import org.spanloom.language.syntax.Statement.InitialValuesStatement;
+import org.spanloom.language.syntax.Statement.LaterStatement;
+import org.spanloom.language.syntax.Statement.Row;
+import org.spanloom.language.syntax.Statement.Setting;
+import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Statement.UnreadStatement;
+import org.spanloom.language.text.SourceText;
+import org.spanloom.language.text.Span;
+
+/**
+ * Reads the text of a model file into a tree; never fails. Each statement has at most one problem,
+ * and what cannot be read stays in the tree as its text. The work is linear in the length of the
+ * text.
+ *
+ * <p>{@code file = { statement } ; statement = simple statement | system | initial values | basis
+ * ;} where a line end or {@code ;} stands between statements.
+ */
+public final class Parser {
+
+  private final SourceText source;
+  private final String text;
+  private final StatementSplitter lines;
+  private final List<Problem> problems = new ArrayList<>();
+
+  /**
+   * The last line of the statement read last, rows included; its end may close the block around the
+   * statement.
+   */
+  private StatementLine last;
+
+  private Parser(SourceText source) {
+    this.source = source;
+    this.text = source.content();
+    this.lines = new StatementSplitter(text);
+    this.last = new StatementLine(List.of(), new Token(TokenKind.NEWLINE, 0, 0), "");
+  }
+
+  /** Returns the tree of a text. */
+  public static SyntaxFile parse(SourceText source) {
+    return new Parser(source).file();
+  }
+
+  private SyntaxFile file() {
+    List<Statement> statements = new ArrayList<>();
+    while (!lines.peek().span().equals(endOfText())) {
+      StatementLine line = take();
+      if (isWord(line, "system")) {
+        system(line, statements);
+      } else {
+        if (!line.tokens().isEmpty()) {
+          statements.add(statement(line));
+        } else if (line.opensBlock()) {
+          skipBlock();
+        }
+        if (last.closesBlock()) {
+          closesNothing(last.end());
+        }
+      }
+    }
+    return new SyntaxFile(source, statements, lines.comments(), problems);
+  }
+
+  private Span endOfText() {
+    return new Span(text.length(), text.length());
+  }
+
+  /**
+   * {@code system = "system", name, over, "{", { statement }, "}" ;} A system whose closing brace
+   * is missing ends before the next one.
+   */
+  private void system(StatementLine line, List<Statement> statements) {
+    StatementParser parser = new StatementParser(text, line);
+    parser.cursor().take();
+    Name name = parser.name("system");
+    Optional<OverClause> over = parser.systemHeader();
+    boolean open = line.opensBlock() || acceptOpeningBrace();
+    if (!open && !parser.cursor().failed()) {
+      int end = line.span().end();
+      parser
+          .cursor()
+          .fail(
+              ProblemKind.BRACE_MISSING,
+              new Span(end, end),
+              "The statements of a system stand in braces: write \"{\" at the end of this line.",
+              Fix.insert("Insert {", end, " {"));
+    }
+    note(parser.cursor());
+    List<Statement> body = new ArrayList<>();
+    int end = line.closesBlock() ? line.span().end() : body(name, body);
+    statements.add(
+        new SystemStatement(
+            name,
+            over,
+            body,
+            line.documentation(),
+            line.span(),
+            new Span(line.span().start(), end)));
+  }
+
+  private boolean acceptOpeningBrace() {
+    boolean found = lines.peek().kind() == TokenKind.OPEN_BRACE;
+    if (found) {
+      lines.next();
+    }
+    return found;
+  }
+
+  private StatementLine take() {
+    last = lines.next();
+    return last;
+  }
+
+  /** Reads statements up to the closing brace and returns the offset behind it. */
+  private int body(Name system, List<Statement> body) {
+    int end = system.span().end();
+    while (true) {
+      Token next = lines.peek();
+      boolean over = next.span().equals(endOfText());
+      if (over || isWord(next, "system")) {
+        problem(
+            ProblemKind.BRACE_MISSING,
+            system.span(),
+            "The system "
+                + system.text()
+                + " is not closed: write \"}\" behind its last statement.",
+            Fix.insert("Insert }", end, "\n}"));
+        return end;
+      }
+      StatementLine line = take();
+      if (!line.tokens().isEmpty()) {
+        Statement statement = statement(line);
+        body.add(statement);
+        end = Math.max(end, statement.span().end());
+      } else if (line.opensBlock()) {
+        problem(
+            ProblemKind.WORD_UNEXPECTED,
+            line.end().span(),
+            "A block belongs to the statement before it: remove the brace or write the statement.");
+        skipBlock();
+      }
+      if (last.closesBlock()) {
+        return last.end().end();
+      }
+    }
+  }
+
+  private Statement statement(StatementLine line) {
+    Token first = line.tokens().getFirst();
+    String word = first.kind() == TokenKind.STATEMENT_WORD ? text(first) : "";
+    return switch (word) {
+      case "initial" -> initialValues(line);
+      case "basis" -> basis(line);
+      case "row" -> strayRow(line);
+      case "import", "table", "input", "matrix", "for", "part", "transfer", "jump", "boundary" ->
+          later(line, word);
+      default -> simple(line);
+    };
+  }
+
+  private Statement simple(StatementLine line) {
+    StatementParser parser = new StatementParser(text, line);
+    Statement statement = parser.statement();
+    parser.expectNoBlock();
+    note(parser.cursor());
+    if (line.opensBlock()) {
+      skipBlock();
+      return parser.unread();
+    }
+    return statement;
+  }
+
+  /**
+   * {@code initial values = "initial", "values", name, [ time ], "{", { setting, ( ";" | line end )
+   * }, "}" ;}
+   */
+  private Statement initialValues(StatementLine line) {
+    StatementParser parser = new StatementParser(text, line);
+    Cursor cursor = parser.cursor();
+    cursor.take();
+    if (!cursor.acceptWord("values")) {
+      cursor.failHere(
+          ProblemKind.WORD_UNEXPECTED,
+          "The word \"values\" belongs here, as in \"initial values warm { ... }\"");
+    }
+    Name name = cursor.failed() ? new Name("", line.span()) : parser.name("initial values");
+    Optional<Expression> time = parser.time();
+    parser.expectEnd();
+    boolean open = line.opensBlock() || !line.closesBlock() && acceptOpeningBrace();
+    if (!open && !cursor.failed()) {
+      cursor.fail(
+          ProblemKind.BRACE_MISSING,
+          cursor.peek().span(),
+          "The values stand in braces, as in \"{ T = 293; P = 0 }\": write them here.");
+    }
+    boolean headerRead = !cursor.failed();
+    note(cursor);
+    if (!open) {
+      return parser.unread();
+    }
+    List<Setting> settings = new ArrayList<>();
+    boolean allRead = true;
+    int end = line.end().end();
+    boolean closed = false;
+    while (!closed && !endsBlock(lines.peek())) {
+      StatementLine inner = lines.next();
+      end = inner.end().end();
+      closed = inner.closesBlock();
+      if (!inner.tokens().isEmpty()) {
+        StatementParser settingParser = new StatementParser(text, inner);
+        Optional<Setting> setting = settingParser.setting();
+        settingParser.expectNoBlock();
+        note(settingParser.cursor());
+        setting.ifPresent(settings::add);
+        allRead &= setting.isPresent();
+      }
+      if (inner.opensBlock()) {
+        end = skipBlock();
+        allRead = false;
+      }
+    }
+    if (!closed) {
+      allRead = false;
+      problem(
+          ProblemKind.BRACE_MISSING,
+          line.span(),
+          "The block of initial values is not closed: write \"}\" behind its last value.");
+    }
+    Span span =
+        new Span(line.span().start(), closed ? end : Math.min(end, lastEnd(settings, line)));
+    if (!headerRead) {
+      Optional<Name> declared = name.text().isEmpty() ? Optional.empty() : Optional.of(name);
+      return new UnreadStatement(text.substring(span.start(), span.end()), declared, span);
+    }
+    return new InitialValuesStatement(name, time, settings, allRead, line.documentation(), span);
+  }
+
+  private static int lastEnd(List<Setting> settings, StatementLine line) {
+    return settings.isEmpty() ? line.end().end() : settings.getLast().span().end();
+  }
+
+  /**
+   * Tells whether a block cannot go on here: at the end of the text and before a word that begins a
+   * statement.
+   */
+  private boolean endsBlock(Token next) {
+    return next.span().equals(endOfText()) || next.kind() == TokenKind.STATEMENT_WORD;
+  }
+
+  /**
+   * {@code basis = "basis", name, ( time, [ "=", rows ] | "(", name, ")", "=", rows ) ; rows = row,
+   * { row } ;} each row on a line of its own.
+   */
+  private Statement basis(StatementLine line) {
+    StatementParser parser = new StatementParser(text, line);
+    Cursor cursor = parser.cursor();
+    cursor.take();
+    Name name = parser.name("basis");
+    Optional<Name> argument = parser.argument();
+    Optional<Expression> time = parser.time();
+    if (time.isEmpty() && argument.isEmpty() && !cursor.failed()) {
+      cursor.failHere(
+          ProblemKind.WORD_UNEXPECTED,
+          "A basis has a time, as in \"basis p at 0\", or closed forms, as in \"basis c(t) =\"");
+    }
+    if (time.isPresent() && argument.isPresent()) {
+      cursor.fail(
+          ProblemKind.WORD_UNEXPECTED,
+          time.get().span(),
+          "Closed forms hold at every time: remove the time or the argument of the basis.");
+    }
+    boolean hasRows = cursor.accept(TokenKind.EQUALS);
+    if (argument.isPresent() && !hasRows && !cursor.failed()) {
+      cursor.failHere(
+          ProblemKind.WORD_UNEXPECTED, "\"=\" belongs here, and the rows on the lines below");
+    }
+    if (hasRows && !cursor.atEnd()) {
+      cursor.failHere(
+          ProblemKind.WORD_UNEXPECTED, "The rows stand on the lines below, as in \"row x = 1, 0\"");
+    }
+    parser.expectEnd();
+    parser.expectNoBlock();
+    List<Row> rows = new ArrayList<>();
+    boolean allRead = true;
+    Span span = line.span();
+    boolean mayHaveRows = hasRows || cursor.failed();
+    while (mayHaveRows
+        && !last.closesBlock()
+        && !last.opensBlock()
+        && isWord(lines.peek(), "row")) {
+      take();
+      StatementParser rowParser = new StatementParser(text, last);
+      Optional<Row> row = rowParser.row();
+      rowParser.expectNoBlock();
+      note(rowParser.cursor());
+      row.ifPresent(rows::add);
+      allRead &= row.isPresent();
+      span = span.join(last.span());
+    }
+    if (hasRows && allRead && rows.isEmpty() && !cursor.failed()) {
+      cursor.fail(
+          ProblemKind.WORD_UNEXPECTED,
+          cursor.peek().span(),
+          "The rows of the basis are missing: write a line such as \"row x = 1, 0\" for each state below.");
+    }
+    note(cursor);
+    if (last.opensBlock()) {
+      skipBlock();
+    }
+    return cursor.failed()
+        ? parser.unread()
+        : new BasisStatement(
+            name, argument, time, hasRows, rows, allRead, line.documentation(), span);
+  }
+
+  private Statement strayRow(StatementLine line) {
+    StatementParser parser = new StatementParser(text, line);
+    problem(
+        ProblemKind.STATEMENT_MISPLACED,
+        line.span(),
+        "A row belongs to the basis in the lines before it: end the line of the basis with \"=\".");
+    if (line.opensBlock()) {
+      skipBlock();
+    }
+    return parser.unread();
+  }
+
+  /** Passes over a statement, its block and its rows, of a kind that this version does not read. */
+  private Statement later(StatementLine line, String word) {
+    Span span = line.span();
+    problem(
+        ProblemKind.STATEMENT_NOT_SUPPORTED,
+        line.tokens().getFirst().span(),
+        "\"" + word + "\" is not read by this version yet: write the model without it.");
+    if (line.opensBlock()) {
+      span = new Span(span.start(), skipBlock());
+    } else if (word.equals("matrix")) {
+      while (!last.closesBlock() && isWord(lines.peek(), "row")) {
+        span = span.join(take().span());
+      }
+    }
+    Optional<Name> declares =
+        line.tokens().size() > 1 && line.tokens().get(1).kind().isName() && !word.equals("for")
+            ? Optional.of(new Name(text(line.tokens().get(1)), line.tokens().get(1).span()))
+            : Optional.empty();
+    return new LaterStatement(word, declares, span);
+  }
+
+  /**
+   * Passes over everything up to the brace that closes the block and returns the offset behind it.
+   */
+  private int skipBlock() {
+    int depth = 1;
+    int end = lines.peek().start();
+    while (depth > 0 && !lines.peek().span().equals(endOfText())) {
+      StatementLine line = lines.next();
+      depth += line.opensBlock() ? 1 : line.closesBlock() ? -1 : 0;
+      end = line.end().end();
+    }
+    return end;
+  }
+
+  private void closesNothing(Token brace) {
+    problem(
+        ProblemKind.BRACE_NOT_OPEN,
+        brace.span(),
+        "\"}\" closes nothing: remove it.",
+        Fix.replace("Remove it", brace.span(), ""));
+  }
+
+  private boolean isWord(StatementLine line, String word) {
+    return !line.tokens().isEmpty() && isWord(line.tokens().getFirst(), word);
+  }
+
+  private boolean isWord(Token token, String word) {
+    return token.kind() == TokenKind.STATEMENT_WORD && text(token).equals(word);
+  }
+
+  private String text(Token token) {
+    return text.substring(token.start(), token.end());
+  }
+
+  private void note(Cursor cursor) {
+    cursor.problem().ifPresent(problems::add);
+  }
+
+  private void problem(ProblemKind kind, Span span, String message, Fix... fixes) {
+    problems.add(new Problem(kind, span, message, List.of(fixes)));
+  }
+}

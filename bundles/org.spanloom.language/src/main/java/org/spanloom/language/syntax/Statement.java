@@ -1,0 +1,172 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.syntax;
+
+import java.util.List;
+import java.util.Optional;
+import org.spanloom.language.syntax.Expression.NameExpression;
+import org.spanloom.language.text.Span;
+
+/** A statement as written; spans reach from the first to the last token of the statement. */
+public sealed interface Statement {
+
+  /** Returns its place. */
+  Span span();
+
+  /** A statement that declares a name. */
+  sealed interface Declaration extends Statement {
+    /** Returns the name declared. */
+    Name name();
+
+    /** Returns the documentation comments, empty if none. */
+    String documentation();
+  }
+
+  /**
+   * {@code system ColdStore over t [h] from 0 to 48 { ... }}.
+   *
+   * @param over the independent variable and its interval; empty where it cannot be read
+   * @param header the first line
+   */
+  record SystemStatement(
+      Name name,
+      Optional<OverClause> over,
+      List<Statement> body,
+      String documentation,
+      Span header,
+      Span span)
+      implements Declaration {
+    /** Copies the list. */
+    public SystemStatement {
+      body = List.copyOf(body);
+    }
+  }
+
+  /** {@code parameter g [kW/K] = 0.12 ± 5 %}. */
+  record ParameterStatement(
+      Name name,
+      Optional<UnitText> unit,
+      Expression value,
+      Optional<Uncertainty> uncertainty,
+      String documentation,
+      Span span)
+      implements Declaration {}
+
+  /** {@code let w(t) [1/s] = 2*pi*f}. */
+  record LetStatement(
+      Name name,
+      Optional<Name> argument,
+      Optional<UnitText> unit,
+      Expression value,
+      String documentation,
+      Span span)
+      implements Declaration {}
+
+  /** {@code state T [K] = 277 scale 10}, {@code state x' [m/s] = 0}. */
+  record StateStatement(
+      Name name,
+      int primes,
+      Optional<UnitText> unit,
+      Optional<Expression> initial,
+      Optional<Expression> scale,
+      String documentation,
+      Span span)
+      implements Declaration {
+    /** Returns the name with its primes. */
+    public String label() {
+      return name.text() + "'".repeat(primes);
+    }
+  }
+
+  /** {@code output q [kW] = g*(T_wall - T_air)}. */
+  record OutputStatement(
+      Name name, Optional<UnitText> unit, Expression value, String documentation, Span span)
+      implements Declaration {}
+
+  /** {@code C*T' = q}. */
+  record EquationStatement(Expression left, Expression right, String documentation, Span span)
+      implements Statement {}
+
+  /**
+   * {@code initial values warm at 2 { T = 293 }}.
+   *
+   * @param allRead whether every line of the block could be read
+   */
+  record InitialValuesStatement(
+      Name name,
+      Optional<Expression> time,
+      List<Setting> settings,
+      boolean allRead,
+      String documentation,
+      Span span)
+      implements Declaration {
+    /** Copies the list. */
+    public InitialValuesStatement {
+      settings = List.copyOf(settings);
+    }
+  }
+
+  /**
+   * {@code basis p at 0}, {@code basis s at 0 =} with rows, {@code basis c(t) =} with rows.
+   *
+   * @param argument the independent variable of closed forms, if there is one
+   * @param time the time after {@code at}, if there is one
+   * @param hasRows whether an equals sign announces rows
+   * @param allRead whether every row could be read
+   */
+  record BasisStatement(
+      Name name,
+      Optional<Name> argument,
+      Optional<Expression> time,
+      boolean hasRows,
+      List<Row> rows,
+      boolean allRead,
+      String documentation,
+      Span span)
+      implements Declaration {
+    /** Copies the list. */
+    public BasisStatement {
+      rows = List.copyOf(rows);
+    }
+  }
+
+  /** {@code require T < 300 [K] throughout}. */
+  record RequireStatement(RequireClause clause, String documentation, Span span)
+      implements Statement {}
+
+  /** {@code accuracy 1e-9}. */
+  record AccuracyStatement(Expression value, Span span) implements Statement {}
+
+  /**
+   * A statement of the language that this version does not read yet.
+   *
+   * @param word its first word
+   * @param declares the name it declares, if it does
+   */
+  record LaterStatement(String word, Optional<Name> declares, Span span) implements Statement {}
+
+  /**
+   * A statement that could not be read; the reason is among the problems of the file.
+   *
+   * @param text what stands there
+   * @param declares the name it would declare, if that much is known
+   */
+  record UnreadStatement(String text, Optional<Name> declares, Span span) implements Statement {}
+
+  /** {@code ± 5 %}; half the width of the interval of uncertainty. */
+  record Uncertainty(Expression halfWidth, boolean percent, Span span) {}
+
+  /** {@code T_air = 293}. */
+  record Setting(NameExpression target, Expression value, Span span) {}
+
+  /** {@code row x' = 1, 0}. */
+  record Row(NameExpression target, List<Expression> values, Span span) {
+    /** Copies the list. */
+    public Row {
+      values = List.copyOf(values);
+    }
+  }
+}

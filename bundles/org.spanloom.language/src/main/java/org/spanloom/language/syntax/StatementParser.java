@@ -1,0 +1,357 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.syntax;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import org.spanloom.language.problem.Fix;
+import org.spanloom.language.problem.Nearest;
+import org.spanloom.language.problem.ProblemKind;
+import org.spanloom.language.syntax.Expression.NameExpression;
+import org.spanloom.language.syntax.OverClause.Bound;
+import org.spanloom.language.syntax.Statement.AccuracyStatement;
+import org.spanloom.language.syntax.Statement.EquationStatement;
+import org.spanloom.language.syntax.Statement.LetStatement;
+import org.spanloom.language.syntax.Statement.OutputStatement;
+import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.RequireStatement;
+import org.spanloom.language.syntax.Statement.Row;
+import org.spanloom.language.syntax.Statement.Setting;
+import org.spanloom.language.syntax.Statement.StateStatement;
+import org.spanloom.language.syntax.Statement.Uncertainty;
+import org.spanloom.language.syntax.Statement.UnreadStatement;
+import org.spanloom.language.text.Span;
+
+/**
+ * Reads statements of one line and the first lines of blocks; each method carries its rule in EBNF
+ * (ISO/IEC 14977). After a problem the rest of the line is skipped.
+ */
+final class StatementParser {
+
+  private final Cursor cursor;
+  private final ExpressionParser expressions;
+  private final StatementLine line;
+
+  StatementParser(String text, StatementLine line) {
+    this.line = line;
+    this.cursor = new Cursor(text, line);
+    this.expressions = new ExpressionParser(cursor);
+  }
+
+  Cursor cursor() {
+    return cursor;
+  }
+
+  /**
+   * {@code simple statement = parameter | let | state | output | require | accuracy | equation ;}
+   * for any other word see {@link Parser}.
+   */
+  Statement statement() {
+    String word = cursor.is(TokenKind.STATEMENT_WORD) ? cursor.text(cursor.peek()) : "";
+    Statement statement =
+        switch (word) {
+          case "parameter" -> parameter();
+          case "let" -> let();
+          case "state" -> state();
+          case "output" -> output();
+          case "require" -> require();
+          case "accuracy" -> accuracy();
+          default -> equation();
+        };
+    expectEnd();
+    return cursor.failed() ? unread() : statement;
+  }
+
+  /** Returns the line as one that could not be read, with the name it declares if there is one. */
+  UnreadStatement unread() {
+    return new UnreadStatement(cursor.text(line.span()), declaredName(), line.span());
+  }
+
+  private Optional<Name> declaredName() {
+    List<Token> tokens = line.tokens();
+    boolean declares =
+        tokens.size() > 1
+            && tokens.get(0).kind() == TokenKind.STATEMENT_WORD
+            && tokens.get(1).kind().isName()
+            && !cursor.text(tokens.get(0)).equals("row")
+            && !cursor.text(tokens.get(0)).equals("require");
+    return declares ? Optional.of(nameOf(tokens.get(1))) : Optional.empty();
+  }
+
+  /** {@code parameter = "parameter", name, [ unit ], "=", expression, [ uncertainty ] ;} */
+  private Statement parameter() {
+    cursor.take();
+    Name name = name("parameter");
+    Optional<UnitText> unit = unit();
+    equalsSign();
+    Expression value = expressions.expression();
+    Optional<Uncertainty> uncertainty =
+        cursor.is(TokenKind.PLUS_MINUS) ? Optional.of(uncertainty()) : Optional.empty();
+    return new ParameterStatement(
+        name, unit, value, uncertainty, line.documentation(), line.span());
+  }
+
+  /** {@code uncertainty = ( "±" | "+/-" ), expression, [ "%" ] ;} */
+  private Uncertainty uncertainty() {
+    int start = cursor.take().start();
+    Expression halfWidth = expressions.expression();
+    boolean percent = cursor.accept(TokenKind.PERCENT);
+    return new Uncertainty(halfWidth, percent, cursor.from(start));
+  }
+
+  /** {@code let = "let", name, [ "(", name, ")" ], [ unit ], "=", expression ;} */
+  private Statement let() {
+    cursor.take();
+    Name name = name("named expression");
+    Optional<Name> argument = argument();
+    Optional<UnitText> unit = unit();
+    equalsSign();
+    return new LetStatement(
+        name, argument, unit, expressions.expression(), line.documentation(), line.span());
+  }
+
+  /**
+   * {@code state = "state", name, [ primes ], [ unit ], [ "=", expression ], [ "scale", expression
+   * ] ;}
+   */
+  private Statement state() {
+    cursor.take();
+    Name name = name("state");
+    int primes = cursor.is(TokenKind.PRIMES) ? cursor.take().span().length() : 0;
+    Optional<UnitText> unit = unit();
+    Optional<Expression> initial =
+        cursor.accept(TokenKind.EQUALS) ? Optional.of(expressions.expression()) : Optional.empty();
+    Optional<Expression> scale =
+        cursor.acceptWord("scale") ? Optional.of(expressions.expression()) : Optional.empty();
+    return new StateStatement(
+        name, primes, unit, initial, scale, line.documentation(), line.span());
+  }
+
+  /** {@code output = "output", name, [ unit ], "=", expression ;} */
+  private Statement output() {
+    cursor.take();
+    Name name = name("output");
+    Optional<UnitText> unit = unit();
+    equalsSign();
+    return new OutputStatement(
+        name, unit, expressions.expression(), line.documentation(), line.span());
+  }
+
+  /** {@code require = "require", clause ;} */
+  private Statement require() {
+    cursor.take();
+    return new RequireStatement(
+        new RequireParser(cursor, expressions).clause(), line.documentation(), line.span());
+  }
+
+  /** {@code accuracy = "accuracy", expression ;} */
+  private Statement accuracy() {
+    cursor.take();
+    return new AccuracyStatement(expressions.expression(), line.span());
+  }
+
+  /** {@code equation = expression, "=", expression ;} */
+  private Statement equation() {
+    if (failMisspeltWord()) {
+      return unread();
+    }
+    Expression left = expressions.expression();
+    if (!cursor.failed() && cursor.atEnd()) {
+      cursor.fail(
+          ProblemKind.STATEMENT_UNKNOWN,
+          line.span(),
+          "This line is neither a statement nor an equation: an equation has one \"=\", and every other"
+              + " statement begins with its word, such as state or require.");
+    }
+    if (!cursor.failed() && !cursor.accept(TokenKind.EQUALS)) {
+      expressions.failOperator("An operator or \"=\" belongs here");
+    }
+    Expression right = expressions.expression();
+    return new EquationStatement(left, right, line.documentation(), line.span());
+  }
+
+  /** Two names in a row at the start can only be a statement whose word is misspelt. */
+  private boolean failMisspeltWord() {
+    Token first = cursor.peek();
+    if (!first.kind().isName() || !cursor.kindAfter().isWord()) {
+      return false;
+    }
+    String word = cursor.text(first);
+    Optional<String> meant = Nearest.of(word, Words.STATEMENT);
+    cursor.fail(
+        ProblemKind.STATEMENT_UNKNOWN,
+        first.span(),
+        "No statement begins with \""
+            + word
+            + "\""
+            + meant
+                .map(m -> ": did you mean " + m + "?")
+                .orElse(
+                    ": write one of " + String.join(", ", Words.STATEMENT) + ", or an equation."),
+        meant.stream().map(m -> Fix.replace("Write " + m, first.span(), m)).toArray(Fix[]::new));
+    return true;
+  }
+
+  /** {@code system header = "system", name, over ;} before the opening brace. */
+  Optional<OverClause> systemHeader() {
+    if (!cursor.isWord("over")) {
+      cursor.failHere(
+          ProblemKind.WORD_UNEXPECTED,
+          "A system names its independent variable and its interval, as in \"over t [h] from 0 to 48\"");
+      return Optional.empty();
+    }
+    OverClause over = over();
+    expectEnd();
+    return cursor.failed() && over.name().text().isEmpty() ? Optional.empty() : Optional.of(over);
+  }
+
+  /**
+   * {@code over = "over", name, [ unit ], [ ( "from" | "after" ), expression ], [ ( "to" | "before"
+   * ), expression ] ;}
+   */
+  private OverClause over() {
+    int start = cursor.take().start();
+    Name name = name("independent variable");
+    Optional<UnitText> unit = unit();
+    Optional<Bound> left = bound("from", "after");
+    Optional<Bound> right = bound("to", "before");
+    return new OverClause(name, unit, left, right, cursor.from(start));
+  }
+
+  private Optional<Bound> bound(String closed, String open) {
+    boolean isOpen = cursor.isWord(open);
+    if (cursor.failed() || !isOpen && !cursor.isWord(closed)) {
+      return Optional.empty();
+    }
+    int start = cursor.take().start();
+    Expression value = expressions.expression();
+    return Optional.of(new Bound(value, isOpen, cursor.from(start)));
+  }
+
+  /** {@code time = "at", expression ;} */
+  Optional<Expression> time() {
+    return cursor.acceptWord("at") ? Optional.of(expressions.expression()) : Optional.empty();
+  }
+
+  /** {@code setting = name, [ primes ], "=", expression ;} */
+  Optional<Setting> setting() {
+    NameExpression target = target("The name of a state belongs here, as in \"T = 293\"");
+    equalsSign();
+    Expression value = expressions.expression();
+    expectEnd();
+    return cursor.failed()
+        ? Optional.empty()
+        : Optional.of(new Setting(target, value, line.span()));
+  }
+
+  /** {@code row = "row", name, [ primes ], "=", expression, { ",", expression } ;} */
+  Optional<Row> row() {
+    cursor.take();
+    NameExpression target = target("The name of a state belongs here, as in \"row x = 1, 0\"");
+    equalsSign();
+    List<Expression> values = new ArrayList<>();
+    do {
+      values.add(expressions.expression());
+    } while (cursor.accept(TokenKind.COMMA));
+    expectEnd();
+    return cursor.failed() ? Optional.empty() : Optional.of(new Row(target, values, line.span()));
+  }
+
+  private NameExpression target(String expected) {
+    if (!cursor.kind().isName()) {
+      cursor.failHere(ProblemKind.NAME_MISSING, expected);
+      Span here = cursor.peek().span();
+      return new NameExpression(new Name("", here), 0, here);
+    }
+    return expressions.reference();
+  }
+
+  /**
+   * {@code name = letter, { letter | digit | "_" } ;} that is no reserved word; names of outputs
+   * and such have no primes.
+   */
+  Name name(String what) {
+    Token token = cursor.peek();
+    if (token.kind().isName()) {
+      cursor.take();
+      if (!what.equals("state") && cursor.is(TokenKind.PRIMES)) {
+        cursor.fail(
+            ProblemKind.WORD_UNEXPECTED,
+            cursor.peek().span(),
+            "Primes stand on states only: remove them.",
+            Fix.replace("Remove the primes", cursor.peek().span(), ""));
+      }
+      return nameOf(token);
+    }
+    if (token.kind().isWord()) {
+      cursor.fail(
+          ProblemKind.NAME_RESERVED,
+          token.span(),
+          "\""
+              + cursor.text(token)
+              + "\" is a word of the language and cannot name anything: choose another name.");
+    } else {
+      cursor.failHere(ProblemKind.NAME_MISSING, "The name of the " + what + " belongs here");
+    }
+    return new Name("", token.span());
+  }
+
+  private Name nameOf(Token token) {
+    return new Name(cursor.text(token), token.span());
+  }
+
+  /** {@code argument = "(", name, ")" ;} the independent variable. */
+  Optional<Name> argument() {
+    if (!cursor.accept(TokenKind.OPEN_PARENTHESIS)) {
+      return Optional.empty();
+    }
+    Name name = name("independent variable");
+    if (!cursor.accept(TokenKind.CLOSE_PARENTHESIS)) {
+      cursor.failHere(ProblemKind.PARENTHESIS_NOT_CLOSED, "\")\" belongs here");
+    }
+    return Optional.of(name);
+  }
+
+  private Optional<UnitText> unit() {
+    if (cursor.is(TokenKind.UNIT)) {
+      return Optional.of(expressions.unit());
+    }
+    if (cursor.is(TokenKind.INDEX_RANGE)) {
+      cursor.fail(
+          ProblemKind.STATEMENT_NOT_SUPPORTED,
+          cursor.peek().span(),
+          "Index ranges are not read by this version yet: declare each state by a name of its own.");
+    } else if (cursor.is(TokenKind.OPEN_UNIT)) {
+      cursor.failBadToken();
+    }
+    return Optional.empty();
+  }
+
+  private void equalsSign() {
+    if (!cursor.accept(TokenKind.EQUALS) && !cursor.failed()) {
+      cursor.failHere(ProblemKind.WORD_UNEXPECTED, "\"=\" belongs here");
+    }
+  }
+
+  /** Reports whatever stands behind a complete statement. */
+  void expectEnd() {
+    if (!cursor.failed() && !cursor.atEnd()) {
+      expressions.failOperator("The statement should end here");
+    }
+  }
+
+  /** Reports a block behind a statement that has none. */
+  void expectNoBlock() {
+    if (!cursor.failed() && line.opensBlock()) {
+      cursor.fail(
+          ProblemKind.WORD_UNEXPECTED,
+          line.end().span(),
+          "This statement has no block: remove the brace.",
+          Fix.replace("Remove it", line.end().span(), ""));
+    }
+  }
+}
