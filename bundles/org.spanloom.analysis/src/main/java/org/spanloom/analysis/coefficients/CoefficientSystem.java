@@ -1,0 +1,54 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.analysis.coefficients;
+
+import org.spanloom.numerics.LinearSystem;
+import org.spanloom.numerics.Side;
+import org.spanloom.numerics.SparsityPattern;
+import org.spanloom.numerics.TimeRange;
+
+/**
+ * A linear system whose coefficients are compiled terms; states and time in declared units.
+ *
+ * @param dimension n
+ * @param range the interval in the time unit
+ * @param matrix A row by row, n*n values
+ * @param forcing b, n values
+ * @param pattern entries of A that are not zero by structure
+ */
+record CoefficientSystem(
+    int dimension,
+    TimeRange range,
+    CompiledTerms matrix,
+    CompiledTerms forcing,
+    SparsityPattern pattern)
+    implements LinearSystem {
+
+  @Override
+  public void matrix(double t, Side side, double[] a) {
+    matrix.evaluate(t, a);
+  }
+
+  @Override
+  public void forcing(double t, Side side, double[] b) {
+    forcing.evaluate(t, b);
+  }
+
+  @Override
+  public boolean hasConstantMatrix() {
+    return matrix.isConstant();
+  }
+
+  @Override
+  public boolean hasConstantForcing() {
+    return forcing.isConstant();
+  }
+
+  @Override
+  public double[] breakpoints() {
+    return new double[0];
+  }
+}

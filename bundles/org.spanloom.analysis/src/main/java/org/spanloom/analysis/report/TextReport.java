@@ -1,0 +1,152 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.analysis.report;
+
+import java.util.List;
+import java.util.Locale;
+import java.util.stream.Collectors;
+import org.spanloom.analysis.CheckReport;
+import org.spanloom.analysis.Finding;
+import org.spanloom.analysis.SystemReport;
+import org.spanloom.analysis.basis.BasisReport;
+import org.spanloom.analysis.requirement.RequirementResult;
+import org.spanloom.analysis.solve.Choice;
+import org.spanloom.language.model.SystemModel;
+import org.spanloom.language.problem.Severity;
+import org.spanloom.language.text.Position;
+
+/** A check as text for people; lines end in a line feed, numbers have a point. */
+public final class TextReport {
+
+  /** The cautions that go with every report. */
+  public static final String CAUTION =
+      "Numerical results are approximations with an estimated error; a model that passes every check can still be the\n"
+          + "wrong model. Results that bear on health, structures, pressure, electricity or radiation need review by a\n"
+          + "qualified, where required licensed, practitioner under the local codes. Spanloom is not a medical device and\n"
+          + "not a certified design tool.\n";
+
+  private TextReport() {}
+
+  /**
+   * Returns the report of one file: findings with their places, then systems, bases and
+   * requirements.
+   */
+  public static String of(CheckReport report) {
+    StringBuilder text = new StringBuilder();
+    String name = report.model().source().name();
+    text.append(name).append('\n');
+    for (Finding finding : report.findings()) {
+      text.append(finding(report, finding));
+    }
+    for (SystemReport system : report.systems()) {
+      text.append(system(system));
+    }
+    if (report.cancelled()) {
+      text.append("  the check was cancelled; this report is not whole\n");
+    }
+    return text.toString();
+  }
+
+  private static String finding(CheckReport report, Finding finding) {
+    Position position = report.model().source().position(finding.span().start());
+    return String.format(
+        "%s:%d:%d: %s: %s [%s]\n",
+        report.model().source().name(),
+        position.line(),
+        position.column(),
+        finding.severity().name().toLowerCase(Locale.ROOT),
+        finding.message(),
+        finding.id());
+  }
+
+  private static String system(SystemReport report) {
+    SystemModel system = report.system();
+    StringBuilder text = new StringBuilder();
+    text.append(
+        String.format(
+            Locale.ROOT,
+            "  system %s: %d %s, %s\n",
+            system.name(),
+            system.states().size(),
+            system.states().size() == 1 ? "state" : "states",
+            Choice.describe(system)));
+    for (BasisReport basis : report.bases()) {
+      text.append("    ").append(basis(system, basis)).append('\n');
+    }
+    for (RequirementResult result : report.requirements()) {
+      text.append(
+          String.format(
+              "    %-9s %s: %s\n",
+              result.status().name().toLowerCase(Locale.ROOT), result.text(), result.detail()));
+    }
+    return text.toString();
+  }
+
+  private static String basis(SystemModel system, BasisReport basis) {
+    String unit = system.timeUnit().code().equals("1") ? "" : " " + system.timeUnit().code();
+    return String.format(
+        Locale.ROOT,
+        "basis     %s%s: condition %s at %s%s, scaled %s at %s%s; %.1f digits left; %s",
+        basis.name(),
+        basis.declared() ? "" : " (not declared)",
+        condition(basis.worstRaw()),
+        time(basis.worstRawTime()),
+        unit,
+        condition(basis.worstScaled()),
+        time(basis.worstScaledTime()),
+        unit,
+        basis.digitsLeft(),
+        windows(basis));
+  }
+
+  private static String windows(BasisReport basis) {
+    String limit = String.format(Locale.ROOT, "%.0e", basis.windowLimit());
+    if (basis.windows().isEmpty()) {
+      return "windows below " + limit + " not counted";
+    }
+    int count = basis.windows().getAsInt();
+    return count == 1 ? "one window below " + limit : count + " windows keep it below " + limit;
+  }
+
+  private static String condition(double value) {
+    return Double.isInfinite(value) ? "beyond 1e16" : String.format(Locale.ROOT, "%.3g", value);
+  }
+
+  private static String time(double value) {
+    return String.format(Locale.ROOT, "%.6g", value).replaceFirst("\\.?0+$", "");
+  }
+
+  /** Returns the closing line over all files. */
+  public static String summary(List<CheckReport> reports) {
+    long systems = reports.stream().mapToLong(r -> r.systems().size()).sum();
+    List<RequirementResult> requirements =
+        reports.stream()
+            .flatMap(r -> r.systems().stream())
+            .flatMap(s -> s.requirements().stream())
+            .toList();
+    long held =
+        requirements.stream().filter(r -> r.status() == RequirementResult.Status.HELD).count();
+    String counts =
+        List.of(Severity.values()).stream()
+            .map(s -> counted(reports.stream().mapToLong(r -> r.count(s)).sum(), noun(s)))
+            .collect(Collectors.joining(", "));
+    return String.format(
+        "%s, %s checked: %s; %d of %s hold\n",
+        counted(reports.size(), "file"),
+        counted(systems, "system"),
+        counts,
+        held,
+        counted(requirements.size(), "requirement"));
+  }
+
+  private static String noun(Severity severity) {
+    return severity.name().toLowerCase(Locale.ROOT);
+  }
+
+  private static String counted(long count, String noun) {
+    return count + " " + noun + (count == 1 ? "" : "s");
+  }
+}

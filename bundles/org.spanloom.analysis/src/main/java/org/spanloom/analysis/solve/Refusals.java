@@ -1,0 +1,41 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.analysis.solve;
+
+import java.util.Locale;
+import org.spanloom.analysis.coefficients.CompiledSystem;
+import org.spanloom.numerics.Outcome;
+
+/** Says in words why the numerics have no result. */
+public final class Refusals {
+
+  private Refusals() {}
+
+  /** Returns one sentence or two: what happened, where, and what to do. */
+  public static String text(CompiledSystem system, Outcome.Unsolved<?> unsolved) {
+    String place =
+        String.format(
+            Locale.ROOT,
+            "%s: at %s = %.10g [%s] ",
+            system.model().name(),
+            system.model().timeName(),
+            unsolved.time(),
+            system.model().timeUnit().code());
+    String what =
+        switch (unsolved.reason()) {
+          case COEFFICIENT_NOT_FINITE ->
+              "a coefficient is not a finite number; look at divisions, logarithms and powers there";
+          case OVERFLOW ->
+              "the solution grows beyond the largest floating point number; end the range earlier";
+          case STEP_TOO_SMALL ->
+              "the steps become too small to go on; a coefficient is probably unbounded there";
+          case TOO_MUCH_WORK ->
+              "the work limit was reached; ask for a shorter range or a larger relative error";
+          case RANGE -> "the range asked for is not inside the interval of the system";
+        };
+    return place + what + (unsolved.detail().isEmpty() ? "" : " (" + unsolved.detail() + ")") + ".";
+  }
+}
