@@ -1,0 +1,325 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.numerics.collocation;
+
+import java.util.Arrays;
+import java.util.Optional;
+import org.spanloom.numerics.LinearSystem;
+import org.spanloom.numerics.Outcome.Reason;
+import org.spanloom.numerics.TimeRange;
+import org.spanloom.numerics.internal.algebra.Rows;
+import org.spanloom.numerics.internal.work.Hopeless;
+import org.spanloom.numerics.internal.work.Watch;
+
+/**
+ * Steps through a range in one direction.
+ *
+ * <p>Each step of length H is also done as two of H/2, whose result is kept; the difference gives
+ * the local error of the kept one (step doubling; Hairer, N&oslash;rsett &amp; Wanner, Solving
+ * Ordinary Differential Equations I (1993), section II.4; from memory). Local errors and rounding
+ * errors are passed on by the same factored equations as the solution, so that what stands beside
+ * each value is an estimate of its <i>global</i> error:
+ *
+ * <pre>
+ * E(t + H) = R(t + H, t) E(t) + k (x_H - x_(H/2)) + rounding.
+ * </pre>
+ *
+ * For smooth, well resolved steps the factor k would be 2^-2s. Where fast directions are not
+ * resolved the order drops to about s (Prothero &amp; Robinson 1974), so k = 2^-s is used there,
+ * and 2^-1.5s elsewhere.
+ */
+final class CollocationIntegrator {
+
+  private static final int MOST_STEPS = 1_000_000;
+  private static final double ROUNDOFF = 0x1p-53;
+
+  private final LinearSystem system;
+  private final StageCoefficients.Shape shape;
+  private final CollocationTableau tableau;
+  private final int n;
+  private final int m;
+  private final boolean forced;
+  private final ErrorWeights weights;
+  private final double localRelative;
+  private final double range;
+  private final Watch watch;
+  private final double[] balance;
+  private final double[][] weight;
+  private StageSystem lastWhole;
+  private StageSystem lastHalf;
+  private long signs = 0x9E3779B97F4A7C15L;
+
+  /**
+   * Prepares a run.
+   *
+   * @param system the system
+   * @param tableau the method
+   * @param m number of columns
+   * @param forced whether b counts
+   * @param weights how errors are measured
+   * @param localRelative error allowed for one step
+   * @param span the range as a whole
+   * @param balance scaling of the states in which A has a small norm
+   * @param watch asked while working
+   */
+  CollocationIntegrator(
+      LinearSystem system,
+      CollocationTableau tableau,
+      int m,
+      boolean forced,
+      ErrorWeights weights,
+      double localRelative,
+      TimeRange span,
+      double[] balance,
+      Watch watch) {
+    this.system = system;
+    this.shape = StageCoefficients.Shape.of(system);
+    this.tableau = tableau;
+    this.n = system.dimension();
+    this.m = m;
+    this.forced = forced;
+    this.weights = weights;
+    this.localRelative = localRelative;
+    this.range = span.length();
+    this.balance = balance.clone();
+    this.watch = watch;
+    this.weight = new double[n][m];
+  }
+
+  /**
+   * Where a run was given up because its error exceeded what was asked.
+   *
+   * @param fraction of the range that was done
+   * @param ratio error estimate over error asked
+   */
+  record TooLoose(double fraction, double ratio) {}
+
+  /**
+   * Runs from one end to the other.
+   *
+   * @param t0 start
+   * @param x0 values there, n by m
+   * @param stops times to stop at, in the order in which they are reached; the last is the end
+   * @param nodes receives what is found
+   * @param giveUp whether to stop when the error exceeds what was asked
+   * @return why it gave up, or empty when the end was reached
+   */
+  Optional<TooLoose> run(
+      double t0, double[][] x0, double[] stops, CollocationNodes nodes, boolean giveUp) {
+    double t = t0;
+    double[][] x = Rows.copy(x0);
+    double[][] error = new double[n][m];
+    nodes.add(t, x, error);
+    StepControl control = new StepControl(tableau.stages());
+    double step = 0;
+    int count = 0;
+    for (double stop : stops) {
+      double direction = Math.signum(stop - t);
+      step = Math.min(step == 0 ? firstStep(t, stop) : step, range / 8);
+      while (t != stop) {
+        watch.ask();
+        if (++count > MOST_STEPS) {
+          throw new Hopeless(
+              Reason.TOO_MUCH_WORK, t, "more than " + MOST_STEPS + " steps were needed");
+        }
+        double left = Math.abs(stop - t);
+        double wanted = step;
+        double h = left <= 1.1 * step ? left : left < 2 * step ? left / 2 : step;
+        double to = h == left ? stop : t + direction * h;
+        Step done = tryStep(t, to, direction * h, x);
+        if (done.error() <= 1) {
+          error = passOn(done, x, error);
+          t = to;
+          x = done.second().values();
+          nodes.add(done.middle(), done.first().values(), done.first().errors());
+          nodes.add(t, x, error);
+          double ratio = worstRatio(x, error);
+          if (giveUp && ratio > 1) {
+            return Optional.of(new TooLoose(Math.abs(t - t0) / range, ratio));
+          }
+          step = Math.min(nextStep(control, h, wanted, done.error()), range / 8);
+        } else {
+          step = control.afterFailure(h, done.error());
+          if (step < 32 * Math.ulp(Math.max(Math.abs(t), Math.abs(stop)))) {
+            throw stuck(t, x);
+          }
+        }
+      }
+    }
+    return Optional.empty();
+  }
+
+  /**
+   * A step cut short by a stop does not shorten the next one; a known factorisation is worth a
+   * shorter step.
+   */
+  private double nextStep(StepControl control, double h, double wanted, double error) {
+    double next = control.afterSuccess(h, error);
+    if (h < wanted) {
+      return Math.max(next, wanted);
+    }
+    return system.hasConstantMatrix() && next > h && next < 2 * h ? h : next;
+  }
+
+  private Hopeless stuck(double t, double[][] x) {
+    double size = Rows.oneNorm(x);
+    return size > 1e280
+        ? new Hopeless(
+            Reason.OVERFLOW, t, "the solution grows beyond the largest floating point number")
+        : new Hopeless(
+            Reason.STEP_TOO_SMALL, t, "the step size fell below what the time axis resolves");
+  }
+
+  /** One half of a step, with what is known at its end. */
+  private record Half(StageSystem stages, double[][] values, double[][] errors) {}
+
+  /** A step done both ways. */
+  private record Step(
+      double middle, Half first, Half second, double[][] whole, double share, double error) {}
+
+  private Step tryStep(double t, double to, double h, double[][] x) {
+    double middle = t + (to - t) / 2;
+    StageSystem whole = stages(t, to, h, lastWhole);
+    lastWhole = whole;
+    double[][] far = whole.end(x, whole.solve(x, m), m);
+    StageSystem one = stages(t, middle, h / 2, lastHalf);
+    double[][] halfway = one.end(x, one.solve(x, m), m);
+    StageSystem two = stages(middle, to, h / 2, one);
+    lastHalf = two;
+    double[][] end = two.end(halfway, two.solve(halfway, m), m);
+    double speed = Math.abs(h) / 2 * whole.coefficients().norm(balance);
+    double power = speed <= 1.5 * tableau.stages() ? 1.5 : 1;
+    double share = Math.pow(2, -power * tableau.stages());
+    double error =
+        Rows.areFinite(far) && Rows.areFinite(end)
+            ? localError(x, far, end, share)
+            : Double.POSITIVE_INFINITY;
+    return new Step(
+        middle,
+        new Half(one, halfway, new double[n][m]),
+        new Half(two, end, new double[n][m]),
+        far,
+        share,
+        error);
+  }
+
+  private StageSystem stages(double from, double to, double h, StageSystem known) {
+    StageCoefficients coefficients =
+        new StageCoefficients(system, shape, tableau, from, to, forced);
+    if (system.hasConstantMatrix() && known != null && known.length() == h) {
+      return known.with(coefficients);
+    }
+    return StageSystem.of(tableau, coefficients, h, watch);
+  }
+
+  private double localError(double[][] x, double[][] far, double[][] end, double share) {
+    weights.write(x, end, weight, m);
+    double largest = 0;
+    for (int i = 0; i < n; i++) {
+      for (int j = 0; j < m; j++) {
+        double allowed = localRelative * weight[i][j] + 2 * ROUNDOFF * Math.abs(end[i][j]);
+        largest = Math.max(largest, share * Math.abs(far[i][j] - end[i][j]) / allowed);
+      }
+    }
+    return Double.isNaN(largest) ? Double.POSITIVE_INFINITY : largest;
+  }
+
+  /**
+   * Passes the error estimates on through both halves; writes those at the middle into the first
+   * half.
+   */
+  private double[][] passOn(Step step, double[][] x, double[][] error) {
+    double[][] middle = passOn(step.first().stages(), x, error, step.first().values());
+    copyInto(middle, step.first().errors());
+    double[][] end =
+        passOn(step.second().stages(), step.first().values(), middle, step.second().values());
+    for (int i = 0; i < n; i++) {
+      for (int j = 0; j < m; j++) {
+        double local = step.share() * (step.whole()[i][j] - step.second().values()[i][j]);
+        end[i][j] += local;
+        step.first().errors()[i][j] += local / 2;
+      }
+    }
+    return end;
+  }
+
+  private double[][] passOn(StageSystem stages, double[][] x, double[][] error, double[][] values) {
+    double[] shares = new double[n];
+    for (int i = 0; i < n; i++) {
+      shares[i] = nextSign() * ROUNDOFF;
+    }
+    double[][] end = stages.end(error, stages.solveErrors(error, x, shares, m), m);
+    for (int i = 0; i < n; i++) {
+      for (int j = 0; j < m; j++) {
+        end[i][j] += nextSign() * ROUNDOFF * Math.abs(values[i][j]);
+      }
+    }
+    return end;
+  }
+
+  private static void copyInto(double[][] source, double[][] target) {
+    for (int i = 0; i < source.length; i++) {
+      System.arraycopy(source[i], 0, target[i], 0, source[i].length);
+    }
+  }
+
+  /** Signs of rounding errors: the same in every run (xorshift generator, Marsaglia 2003). */
+  private double nextSign() {
+    signs ^= signs << 13;
+    signs ^= signs >>> 7;
+    signs ^= signs << 17;
+    return (signs & 1) == 0 ? 1 : -1;
+  }
+
+  private double worstRatio(double[][] x, double[][] error) {
+    weights.write(x, x, weight, m);
+    double worst = 0;
+    for (int i = 0; i < n; i++) {
+      for (int j = 0; j < m; j++) {
+        worst =
+            Math.max(
+                worst,
+                CollocationSolution.SAFETY
+                    * Math.abs(error[i][j])
+                    / (weights.relative() * weight[i][j]));
+      }
+    }
+    return worst;
+  }
+
+  /**
+   * The first step resolves the fastest direction; it grows quickly where that direction does not
+   * matter.
+   */
+  private double firstStep(double t, double stop) {
+    double left = Math.abs(stop - t);
+    StageCoefficients here =
+        new StageCoefficients(
+            system,
+            shape,
+            CollocationTableau.of(CollocationTableau.Family.GAUSS, 2),
+            t,
+            t + (stop - t) * 1e-3,
+            false);
+    double speed = here.norm(balance);
+    double step = speed * left > 1 ? 1 / speed : left;
+    return Math.max(step, 64 * Math.ulp(Math.max(Math.abs(t), Math.abs(stop))));
+  }
+
+  /** Returns the times to stop at from t0 to the end: breakpoints in between, then the end. */
+  static double[] stops(LinearSystem system, double t0, double end) {
+    double low = Math.min(t0, end);
+    double high = Math.max(t0, end);
+    double[] inside =
+        Arrays.stream(system.breakpoints()).filter(t -> t > low && t < high).toArray();
+    double[] stops = new double[inside.length + 1];
+    for (int k = 0; k < inside.length; k++) {
+      stops[k] = end > t0 ? inside[k] : inside[inside.length - 1 - k];
+    }
+    stops[inside.length] = end;
+    return stops;
+  }
+}

@@ -1,0 +1,212 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.numerics.collocation;
+
+import java.util.Arrays;
+import java.util.LinkedHashMap;
+import java.util.Map;
+import org.spanloom.numerics.LinearSystem;
+import org.spanloom.numerics.Side;
+import org.spanloom.numerics.TimeRange;
+import org.spanloom.numerics.internal.algebra.Rows;
+import org.spanloom.numerics.solution.Solution;
+
+/**
+ * A solution found by collocation: values and error estimates at the nodes, and polynomials between
+ * them that are found when a time there is first asked for.
+ */
+final class CollocationSolution implements Solution {
+
+  /** How many times the estimated error counts. */
+  static final double SAFETY = 2;
+
+  /**
+   * Share of the largest error of a column that every entry of it is given, so that no entry is
+   * right by chance.
+   */
+  private static final double SHARE = 0.1;
+
+  private static final long MOST_NUMBERS_REMEMBERED = 4_000_000;
+
+  private final LinearSystem system;
+  private final CollocationTableau method;
+  private final CollocationTableau between;
+  private final int n;
+  private final int m;
+  private final boolean forced;
+  private final ErrorWeights weights;
+  private final int start;
+  private final double[] times;
+  private final double[][] values;
+  private final double[][] errors;
+  private final Map<Integer, StepInterpolant> remembered = new LinkedHashMap<>(16, 0.75f, true);
+  private long numbersRemembered;
+
+  /**
+   * Puts both directions together.
+   *
+   * @param earlier what was found towards the start of the range
+   * @param later what was found towards its end
+   */
+  CollocationSolution(
+      LinearSystem system,
+      CollocationTableau method,
+      int m,
+      boolean forced,
+      ErrorWeights weights,
+      CollocationNodes earlier,
+      CollocationNodes later) {
+    this.system = system;
+    this.method = method;
+    this.between = CollocationTableau.of(CollocationTableau.Family.RADAU_IIA, method.stages() + 4);
+    this.n = system.dimension();
+    this.m = m;
+    this.forced = forced;
+    this.weights = weights;
+    start = earlier.count() - 1;
+    int count = start + later.count();
+    times = new double[count];
+    values = new double[count][];
+    errors = new double[count][];
+    for (int k = 0; k < count; k++) {
+      CollocationNodes side = k < start ? earlier : later;
+      int index = k < start ? start - k : k - start;
+      times[k] = side.time(index);
+      values[k] = side.values(index);
+      errors[k] = side.errors(index);
+    }
+    shareErrors();
+  }
+
+  /**
+   * Turns signed estimates at single nodes into bounds that do not rely on where one happens to
+   * pass through zero.
+   */
+  private void shareErrors() {
+    double[][] size = new double[n][m];
+    double[][] own = new double[times.length][];
+    for (int k = 0; k < times.length; k++) {
+      own[k] = new double[n * m];
+      if (k == start) {
+        continue;
+      }
+      double[][] x = Rows.of(values[k], n, m);
+      weights.write(x, x, size, m);
+      for (int j = 0; j < m; j++) {
+        double largest = 0;
+        for (int i = 0; i < n; i++) {
+          largest = Math.max(largest, Math.abs(errors[k][i * m + j]) / size[i][j]);
+        }
+        for (int i = 0; i < n; i++) {
+          double error = Math.max(Math.abs(errors[k][i * m + j]), SHARE * largest * size[i][j]);
+          own[k][i * m + j] = SAFETY * error + 4 * Math.ulp(x[i][j]);
+        }
+      }
+    }
+    for (int k = 0; k < times.length; k++) {
+      for (int e = 0; e < n * m; e++) {
+        double before = own[Math.max(k - 1, 0)][e];
+        double after = own[Math.min(k + 1, times.length - 1)][e];
+        double error = k == start ? 0 : Math.max(own[k][e], Math.max(before, after));
+        errors[k][e] = Math.min(error, Double.MAX_VALUE);
+      }
+    }
+  }
+
+  @Override
+  public int dimension() {
+    return n;
+  }
+
+  @Override
+  public int columns() {
+    return m;
+  }
+
+  @Override
+  public double startTime() {
+    return times[start];
+  }
+
+  @Override
+  public TimeRange range() {
+    return new TimeRange(times[0], times[times.length - 1]);
+  }
+
+  @Override
+  public void value(double t, Side side, double[] x) {
+    int k = find(t);
+    if (k >= 0) {
+      System.arraycopy(values[k], 0, x, 0, n * m);
+    } else {
+      interpolant(-k - 2).value(t, x);
+    }
+  }
+
+  @Override
+  public void errorEstimate(double t, double[] error) {
+    int k = find(t);
+    if (k >= 0) {
+      System.arraycopy(errors[k], 0, error, 0, n * m);
+      return;
+    }
+    int left = -k - 2;
+    double[] own = interpolant(left).error(t);
+    for (int e = 0; e < n * m; e++) {
+      error[e] = Math.max(errors[left][e], errors[left + 1][e]) + own[e];
+    }
+  }
+
+  /** Returns the number of the node at a time, or -(the number of the node after it) - 1. */
+  private int find(double t) {
+    if (!(t >= times[0] && t <= times[times.length - 1])) {
+      throw new IllegalArgumentException("time " + t + " is outside " + range());
+    }
+    return Arrays.binarySearch(times, t);
+  }
+
+  private StepInterpolant interpolant(int left) {
+    synchronized (remembered) {
+      StepInterpolant known = remembered.get(left);
+      if (known != null) {
+        return known;
+      }
+    }
+    int from = left >= start ? left : left + 1;
+    int to = left >= start ? left + 1 : left;
+    StepInterpolant found =
+        new StepInterpolant(
+            system,
+            between,
+            m,
+            forced,
+            weights,
+            times[from],
+            times[to],
+            Rows.of(values[from], n, m));
+    synchronized (remembered) {
+      if (remembered.putIfAbsent(left, found) == null) {
+        numbersRemembered += found.size();
+        var oldest = remembered.entrySet().iterator();
+        while (numbersRemembered > MOST_NUMBERS_REMEMBERED && remembered.size() > 1) {
+          numbersRemembered -= oldest.next().getValue().size();
+          oldest.remove();
+        }
+      }
+    }
+    return found;
+  }
+
+  @Override
+  public double[] nodes() {
+    return times.clone();
+  }
+
+  @Override
+  public String method() {
+    return method.family().label() + " collocation, order " + method.order();
+  }
+}

@@ -1,0 +1,126 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.numerics.collocation;
+
+import java.util.Optional;
+import org.spanloom.numerics.Accuracy;
+import org.spanloom.numerics.LinearSystem;
+import org.spanloom.numerics.TimeRange;
+import org.spanloom.numerics.collocation.CollocationIntegrator.TooLoose;
+import org.spanloom.numerics.internal.algebra.Rows;
+import org.spanloom.numerics.internal.work.Watch;
+import org.spanloom.numerics.solution.Solution;
+
+/**
+ * Solves by collocation to the global error asked for: where the estimate exceeds it, the run
+ * starts again with a smaller error allowed for one step, as long as that helps.
+ */
+public final class CollocationSolver {
+
+  private static final int MOST_RUNS = 5;
+
+  /** Below this a smaller error per step is not seen any more. */
+  private static final double SMALLEST_LOCAL = 0x1p-51;
+
+  private final LinearSystem system;
+  private final CollocationTableau tableau;
+  private final int m;
+  private final boolean forced;
+  private final TimeRange span;
+  private final ErrorWeights weights;
+  private final double[] balance;
+  private final Watch watch;
+
+  private CollocationSolver(
+      LinearSystem system,
+      CollocationTableau tableau,
+      int m,
+      boolean forced,
+      TimeRange span,
+      ErrorWeights weights,
+      Watch watch) {
+    this.system = system;
+    this.tableau = tableau;
+    this.m = m;
+    this.forced = forced;
+    this.span = span;
+    this.weights = weights;
+    this.watch = watch;
+    StageCoefficients.Shape shape = StageCoefficients.Shape.of(system);
+    CollocationTableau places = CollocationTableau.of(CollocationTableau.Family.GAUSS, 5);
+    balance =
+        Balance.of(
+            system,
+            shape,
+            new StageCoefficients(system, shape, places, span.start(), span.end(), false));
+  }
+
+  /**
+   * Solves.
+   *
+   * @param system the system
+   * @param tableau the method
+   * @param t0 time of the start values
+   * @param x0 start values, n by m, row by row
+   * @param m number of columns
+   * @param forced whether b counts
+   * @param span bounded range with t0 in it, longer than 0
+   * @param accuracy error asked for
+   * @param watch asked while working
+   */
+  public static Solution solve(
+      LinearSystem system,
+      CollocationTableau tableau,
+      double t0,
+      double[] x0,
+      int m,
+      boolean forced,
+      TimeRange span,
+      Accuracy accuracy,
+      Watch watch) {
+    ErrorWeights weights = new ErrorWeights(accuracy, !forced);
+    return new CollocationSolver(system, tableau, m, forced, span, weights, watch)
+        .solve(t0, Rows.of(x0, system.dimension(), m));
+  }
+
+  private Solution solve(double t0, double[][] x0) {
+    CollocationNodes earlier = direction(t0, x0, span.start());
+    CollocationNodes later = direction(t0, x0, span.end());
+    return new CollocationSolution(system, tableau, m, forced, weights, earlier, later);
+  }
+
+  private CollocationNodes direction(double t0, double[][] x0, double end) {
+    if (t0 == end) {
+      CollocationNodes nodes = new CollocationNodes(m);
+      nodes.add(t0, x0, new double[system.dimension()][m]);
+      return nodes;
+    }
+    double[] stops = CollocationIntegrator.stops(system, t0, end);
+    double local = Math.max(0.1 * weights.relative(), SMALLEST_LOCAL);
+    double reached = 0;
+    for (int run = 1; ; run++) {
+      boolean last = run == MOST_RUNS || local <= SMALLEST_LOCAL;
+      CollocationNodes nodes = new CollocationNodes(m);
+      CollocationIntegrator integrator =
+          new CollocationIntegrator(
+              system, tableau, m, forced, weights, local, span, balance, watch);
+      Optional<TooLoose> gaveUp = integrator.run(t0, x0, stops, nodes, !last);
+      if (gaveUp.isEmpty()) {
+        return nodes;
+      }
+      TooLoose where = gaveUp.get();
+      if (where.fraction() < 1.2 * reached) {
+        // Ten times less per step and hardly further: what is left is rounding, which smaller steps
+        // do not cure.
+        local = SMALLEST_LOCAL;
+      } else {
+        reached = where.fraction();
+        double factor = Math.clamp(0.5 * where.fraction() / where.ratio(), 1e-5, 0.1);
+        local = Math.max(local * factor, SMALLEST_LOCAL);
+      }
+    }
+  }
+}

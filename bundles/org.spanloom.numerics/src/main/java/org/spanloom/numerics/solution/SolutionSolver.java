@@ -1,0 +1,193 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.numerics.solution;
+
+import java.util.Optional;
+import org.spanloom.numerics.Accuracy;
+import org.spanloom.numerics.LinearSystem;
+import org.spanloom.numerics.Outcome;
+import org.spanloom.numerics.Outcome.Reason;
+import org.spanloom.numerics.Progress;
+import org.spanloom.numerics.Side;
+import org.spanloom.numerics.TimeRange;
+import org.spanloom.numerics.collocation.CollocationSolver;
+import org.spanloom.numerics.collocation.CollocationTableau;
+import org.spanloom.numerics.collocation.CollocationTableau.Family;
+import org.spanloom.numerics.exponential.ExponentialSolution;
+import org.spanloom.numerics.internal.algebra.Rows;
+import org.spanloom.numerics.internal.work.Cancelled;
+import org.spanloom.numerics.internal.work.Hopeless;
+import org.spanloom.numerics.internal.work.Watch;
+
+/** Computes solutions; chooses the method by the system. */
+public final class SolutionSolver {
+
+  private SolutionSolver() {}
+
+  /**
+   * Solves the homogeneous system {@code X' = A(t) X, X(t0) = X0} for all columns at once.
+   *
+   * @param system the system; its forcing is not used
+   * @param t0 time at which the columns are given, inside {@code span}
+   * @param x0 columns at t0, n by m, row by row
+   * @param span bounded range to cover, inside the system's range; both directions from t0 are
+   *     solved
+   * @param accuracy error asked for, with n scales
+   * @param progress watched and asked while working
+   * @return the columns over the range
+   */
+  public static Outcome<Solution> homogeneous(
+      LinearSystem system,
+      double t0,
+      double[] x0,
+      TimeRange span,
+      Accuracy accuracy,
+      Progress progress) {
+    int n = system.dimension();
+    int m = n == 0 ? 0 : x0.length / n;
+    return solve(system, t0, x0, m, false, span, accuracy, progress);
+  }
+
+  /**
+   * Solves {@code x' = A(t) x + b(t), x(t0) = x0}.
+   *
+   * @param system the system
+   * @param t0 time of the initial values, inside {@code span}
+   * @param x0 initial values, length n
+   * @param span bounded range to cover, inside the system's range; both directions from t0 are
+   *     solved
+   * @param accuracy error asked for, with n scales
+   * @param progress watched and asked while working
+   * @return the trajectory over the range, one column
+   */
+  public static Outcome<Solution> trajectory(
+      LinearSystem system,
+      double t0,
+      double[] x0,
+      TimeRange span,
+      Accuracy accuracy,
+      Progress progress) {
+    return solve(system, t0, x0, 1, true, span, accuracy, progress);
+  }
+
+  private static Outcome<Solution> solve(
+      LinearSystem system,
+      double t0,
+      double[] x0,
+      int m,
+      boolean forced,
+      TimeRange span,
+      Accuracy accuracy,
+      Progress progress) {
+    try {
+      requireSolvable(system, t0, x0, span);
+      Solution solution = bySystem(system, t0, x0, m, forced, span, accuracy, new Watch(progress));
+      progress.worked(1);
+      return new Outcome.Solved<>(solution);
+    } catch (Cancelled cancelled) {
+      return new Outcome.Cancelled<>();
+    } catch (Hopeless hopeless) {
+      return hopeless.outcome();
+    }
+  }
+
+  private static void requireSolvable(LinearSystem system, double t0, double[] x0, TimeRange span) {
+    TimeRange whole = system.range();
+    if (!span.isBounded() || !(span.length() < Double.POSITIVE_INFINITY)) {
+      throw new Hopeless(
+          Reason.RANGE,
+          t0,
+          "the range from " + span.start() + " to " + span.end() + " is not bounded");
+    }
+    if (!whole.contains(span.start()) || !whole.contains(span.end())) {
+      throw new Hopeless(
+          Reason.RANGE,
+          whole.contains(span.start()) ? span.end() : span.start(),
+          "the system is defined from " + whole.start() + " to " + whole.end());
+    }
+    if (!span.contains(t0)) {
+      throw new Hopeless(
+          Reason.RANGE,
+          t0,
+          "the values are given at " + t0 + ", outside the range to be solved on");
+    }
+    if (!Rows.isFinite(x0)) {
+      throw new Hopeless(Reason.COEFFICIENT_NOT_FINITE, t0, "a start value is not a finite number");
+    }
+  }
+
+  private static Solution bySystem(
+      LinearSystem system,
+      double t0,
+      double[] x0,
+      int m,
+      boolean forced,
+      TimeRange span,
+      Accuracy accuracy,
+      Watch watch) {
+    int n = system.dimension();
+    if (n == 0 || m == 0 || span.length() == 0) {
+      return new ConstantSolution(n, m, t0, span, x0);
+    }
+    watch.ask();
+    MethodChoice choice = MethodChoice.of(system, forced, span, accuracy);
+    return switch (choice.method()) {
+      case MATRIX_EXPONENTIAL -> exponential(system, t0, x0, m, forced, span, accuracy, watch);
+      case RADAU_COLLOCATION ->
+          CollocationSolver.solve(
+              system,
+              CollocationTableau.of(Family.RADAU_IIA, choice.stages()),
+              t0,
+              x0,
+              m,
+              forced,
+              span,
+              accuracy,
+              watch);
+      case GAUSS_COLLOCATION ->
+          CollocationSolver.solve(
+              system,
+              CollocationTableau.of(Family.GAUSS, choice.stages()),
+              t0,
+              x0,
+              m,
+              forced,
+              span,
+              accuracy,
+              watch);
+    };
+  }
+
+  private static Solution exponential(
+      LinearSystem system,
+      double t0,
+      double[] x0,
+      int m,
+      boolean forced,
+      TimeRange span,
+      Accuracy accuracy,
+      Watch watch) {
+    int n = system.dimension();
+    double[] a = new double[n * n];
+    system.matrix(t0, Side.AFTER, a);
+    requireFinite(a, t0, "A");
+    Optional<double[]> b = Optional.empty();
+    if (forced) {
+      double[] values = new double[n];
+      system.forcing(t0, Side.AFTER, values);
+      requireFinite(values, t0, "b");
+      b = Rows.isZero(values) ? Optional.empty() : Optional.of(values);
+    }
+    return ExponentialSolution.of(a, b, n, t0, x0, m, span, accuracy.scale(), watch);
+  }
+
+  private static void requireFinite(double[] values, double t, String name) {
+    if (!Rows.isFinite(values)) {
+      throw new Hopeless(
+          Reason.COEFFICIENT_NOT_FINITE, t, "an entry of " + name + " is not a finite number");
+    }
+  }
+}
