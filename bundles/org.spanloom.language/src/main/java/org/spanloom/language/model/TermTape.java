@@ -1,0 +1,124 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.model;
+
+import java.util.ArrayDeque;
+import java.util.ArrayList;
+import java.util.Deque;
+import java.util.IdentityHashMap;
+import java.util.List;
+import java.util.Map;
+
+/**
+ * The nodes of a term in an order in which every node comes after its operands, shared sub-terms
+ * once. Whatever is computed over a term runs along it in a loop, so that neither a long sum nor a
+ * named expression used a thousand times costs depth or repetition.
+ */
+final class TermTape {
+
+  private final List<Term> nodes = new ArrayList<>();
+  private final List<int[]> operands = new ArrayList<>();
+  private final List<Boolean> varying = new ArrayList<>();
+
+  private TermTape() {}
+
+  /** Lays out a term; the values of its parameters and named expressions belong to it. */
+  static TermTape of(Term root) {
+    TermTape tape = new TermTape();
+    Map<Object, Integer> places = new IdentityHashMap<>();
+    Deque<Term> open = new ArrayDeque<>();
+    open.push(root);
+    while (!open.isEmpty()) {
+      Term term = open.peek();
+      if (places.containsKey(identity(term))) {
+        open.pop();
+        continue;
+      }
+      List<Term> below = operands(term);
+      boolean ready = true;
+      for (Term operand : below) {
+        if (!places.containsKey(identity(operand))) {
+          open.push(operand);
+          ready = false;
+        }
+      }
+      if (ready) {
+        open.pop();
+        int[] indices = below.stream().mapToInt(operand -> places.get(identity(operand))).toArray();
+        places.put(identity(term), tape.add(term, indices));
+      }
+    }
+    return tape;
+  }
+
+  /**
+   * Returns what stands for a term: time is one node, and so is each parameter and each named
+   * expression.
+   */
+  private static Object identity(Term term) {
+    return switch (term) {
+      case Term.Time time -> Term.Time.class;
+      case Term.ParameterTerm parameter -> parameter.parameter();
+      case Term.LetTerm let -> let.let();
+      case Term.Constant number -> number;
+      case Term.Sum sum -> sum;
+      case Term.Difference difference -> difference;
+      case Term.Product product -> product;
+      case Term.Quotient quotient -> quotient;
+      case Term.Negation negation -> negation;
+      case Term.Power power -> power;
+      case Term.FunctionTerm call -> call;
+    };
+  }
+
+  private int add(Term term, int[] below) {
+    boolean varies = term instanceof Term.Time;
+    for (int operand : below) {
+      varies |= varying.get(operand);
+    }
+    nodes.add(term);
+    operands.add(below);
+    varying.add(varies);
+    return nodes.size() - 1;
+  }
+
+  /** Returns the terms right below a term; for a parameter or a named expression, its value. */
+  static List<Term> operands(Term term) {
+    return switch (term) {
+      case Term.Constant number -> List.of();
+      case Term.Time time -> List.of();
+      case Term.ParameterTerm parameter -> List.of(parameter.parameter().value());
+      case Term.LetTerm let -> List.of(let.let().value());
+      case Term.Sum sum -> List.of(sum.left(), sum.right());
+      case Term.Difference difference -> List.of(difference.left(), difference.right());
+      case Term.Product product -> List.of(product.left(), product.right());
+      case Term.Quotient quotient -> List.of(quotient.left(), quotient.right());
+      case Term.Negation negation -> List.of(negation.operand());
+      case Term.Power power -> List.of(power.base(), power.exponent());
+      case Term.FunctionTerm call -> call.arguments();
+    };
+  }
+
+  /** Returns the number of nodes; the last one is the term itself. */
+  int size() {
+    return nodes.size();
+  }
+
+  /** Returns a node. */
+  Term node(int index) {
+    return nodes.get(index);
+  }
+
+  /** Returns the index of an operand of a node. */
+  int operand(int index, int which) {
+    return operands.get(index)[which];
+  }
+
+  /** Tells whether time occurs in a node. */
+  boolean varies(int index) {
+    return varying.get(index);
+  }
+}
