@@ -1,0 +1,187 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.model;
+
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import org.spanloom.language.model.AffineValue.Sample;
+import org.spanloom.language.model.Meaning.StateMeaning;
+import org.spanloom.language.problem.Fix;
+import org.spanloom.language.problem.Nearest;
+import org.spanloom.language.problem.ProblemKind;
+import org.spanloom.language.syntax.Expression;
+import org.spanloom.language.syntax.Expression.NameExpression;
+import org.spanloom.language.syntax.Statement.StateStatement;
+import org.spanloom.language.text.Span;
+import org.spanloom.language.units.UnitOfMeasure;
+
+/** The components of a system's state vector with their declarations. */
+final class Components {
+
+  private final SystemScope system;
+  private final StateVector vector;
+  private final List<StateComponent> list = new ArrayList<>();
+  private final List<Optional<StateStatement>> declarations = new ArrayList<>();
+  private final Map<String, Integer> indices = new HashMap<>();
+
+  Components(SystemScope system, StateVector vector, LinearFormBuilder equations) {
+    this.system = system;
+    this.vector = vector;
+    for (StateMeaning state : vector.states()) {
+      for (int k = 0; k < vector.order(state.index()); k++) {
+        add(state, k, equations.governing(state));
+      }
+    }
+  }
+
+  private void add(StateMeaning state, int primes, Span equation) {
+    String label = StateVector.label(state, primes);
+    Optional<SystemScope.Derivative> derivative = system.derivative(label);
+    Optional<StateStatement> declaration =
+        primes == 0
+            ? Optional.of(state.statement())
+            : derivative.map(SystemScope.Derivative::statement);
+    UnitOfMeasure unit =
+        derivative
+            .map(SystemScope.Derivative::unit)
+            .orElseGet(() -> system.derivativeUnit(state, primes));
+    Span declared = declaration.orElse(state.statement()).span();
+    boolean highest = primes == vector.order(state.index()) - 1;
+    indices.put(label, list.size());
+    list.add(
+        new StateComponent(
+            list.size(),
+            label,
+            state.statement().name().text(),
+            primes,
+            unit,
+            declaration.flatMap(StateStatement::scale).flatMap(s -> scale(s, unit)).orElse(1.0),
+            declaration.map(StateStatement::documentation).orElse(""),
+            declared,
+            highest ? equation : declared));
+    declarations.add(declaration);
+  }
+
+  private Optional<Double> scale(Expression expression, UnitOfMeasure unit) {
+    Optional<Quantity> value =
+        system.resolver().givenDifference(expression, unit, "the state", Place.SCALE);
+    if (value.isEmpty()) {
+      return Optional.empty();
+    }
+    boolean plain = value.get().constant().term() instanceof Term.Constant;
+    double size = plain ? TermEvaluator.constant(value.get().constant().term()) / unit.factor() : 0;
+    if (!(size > 0) || Double.isInfinite(size)) {
+      system
+          .problems()
+          .report(
+              ProblemKind.SCALE_NOT_POSITIVE,
+              expression.span(),
+              "A scale is a positive number in the unit of the state: \""
+                  + system.resolver().shown(expression.span())
+                  + "\" is not.");
+      return Optional.empty();
+    }
+    return Optional.of(size);
+  }
+
+  int dimension() {
+    return list.size();
+  }
+
+  List<StateComponent> list() {
+    return list;
+  }
+
+  StateComponent get(int index) {
+    return list.get(index);
+  }
+
+  /** Returns the statement that declares a component itself; empty for a derivative without one. */
+  Optional<StateStatement> declaration(int index) {
+    return declarations.get(index);
+  }
+
+  /** Returns the labels of some components for a message. */
+  String labels(List<Integer> some) {
+    List<String> labels =
+        some.stream().limit(5).map(i -> "\"" + list.get(i).label() + "\"").toList();
+    return String.join(", ", labels)
+        + (some.size() > 5 ? " and " + (some.size() - 5) + " more" : "");
+  }
+
+  /** Returns the component of a name with primes; reports it if there is none. */
+  Optional<StateComponent> find(NameExpression name) {
+    Integer index = indices.get(name.label());
+    if (index != null) {
+      return Optional.of(list.get(index));
+    }
+    Optional<Meaning> meaning = system.scope().own(name.name().text());
+    boolean broken =
+        meaning.isPresent() && meaning.get() instanceof Meaning.BrokenMeaning
+            || system.derivative(name.label()).isPresent();
+    if (!broken) {
+      Optional<String> nearest =
+          system.problems().isFull()
+              ? Optional.empty()
+              : Nearest.of(name.label(), indices.keySet().stream().sorted().toList());
+      system
+          .problems()
+          .report(
+              meaning.isPresent() ? ProblemKind.NAME_MISUSED : ProblemKind.NAME_UNKNOWN,
+              name.span(),
+              "\""
+                  + name.label()
+                  + "\" is no component of the state vector"
+                  + nearest
+                      .map(n -> ": did you mean " + n + "?")
+                      .orElse(": name a state, with fewer primes than its equation has."),
+              nearest.stream()
+                  .map(n -> Fix.replace("Write " + n, name.span(), n))
+                  .toArray(Fix[]::new));
+    }
+    return Optional.empty();
+  }
+
+  /**
+   * Returns a quantity over the components; reports a derivative that is none of them.
+   *
+   * @param span its text
+   * @param unit the unit to show it in
+   */
+  Optional<AffineValue> affine(Quantity quantity, UnitOfMeasure unit, Span span) {
+    List<Sample> samples = new ArrayList<>();
+    for (Map.Entry<StateKey, Quantity.Part> entry : quantity.coefficients().entrySet()) {
+      StateKey key = entry.getKey();
+      if (!vector.isComponent(key)) {
+        reportDerivative(key, span);
+        return Optional.empty();
+      }
+      samples.add(
+          new Sample(vector.component(key), key.at(), key.before(), entry.getValue().term()));
+    }
+    samples.sort(Comparator.comparingInt(Sample::component));
+    return Optional.of(
+        new AffineValue(samples, quantity.constant().term(), quantity.dimension(), unit, span));
+  }
+
+  private void reportDerivative(StateKey key, Span span) {
+    StateMeaning state = vector.states().get(key.state());
+    String found = StateVector.label(state, key.order());
+    system
+        .problems()
+        .report(
+            ProblemKind.DERIVATIVE_MISPLACED,
+            span,
+            "\""
+                + found
+                + "\" is no component of the state vector, since the equations give it: write what they say it is"
+                + " instead.");
+  }
+}

@@ -1,0 +1,353 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.model;
+
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.HashMap;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.Set;
+import org.spanloom.language.model.Meaning.BrokenMeaning;
+import org.spanloom.language.model.Meaning.LetMeaning;
+import org.spanloom.language.model.Meaning.OutputMeaning;
+import org.spanloom.language.model.Meaning.ParameterMeaning;
+import org.spanloom.language.problem.Fix;
+import org.spanloom.language.problem.ProblemKind;
+import org.spanloom.language.syntax.Expression.NumberExpression;
+import org.spanloom.language.syntax.Name;
+import org.spanloom.language.syntax.Statement.Declaration;
+import org.spanloom.language.syntax.Statement.LetStatement;
+import org.spanloom.language.syntax.Statement.OutputStatement;
+import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.Uncertainty;
+import org.spanloom.language.text.Span;
+import org.spanloom.language.units.Dimension;
+import org.spanloom.language.units.UnitNames;
+import org.spanloom.language.units.UnitOfMeasure;
+
+/**
+ * Reads the parameters, named expressions and outputs of a system or of the file around the
+ * systems.
+ */
+final class Declarations {
+
+  private final Scope scope;
+  private final Problems problems;
+  private final UnitResolver units;
+  private final Resolver resolver;
+  private final List<Declaration> collected = new ArrayList<>();
+  private final Map<String, Name> taken = new HashMap<>();
+  private final List<Parameter> parameters = new ArrayList<>();
+  private final List<Let> lets = new ArrayList<>();
+  private final List<ReadOutput> outputs = new ArrayList<>();
+
+  /** An output whose place in the state vector is not known yet. */
+  record ReadOutput(OutputStatement statement, Quantity value, UnitOfMeasure unit) {}
+
+  Declarations(Scope scope, Problems problems, UnitResolver units, Resolver resolver) {
+    this.scope = scope;
+    this.problems = problems;
+    this.units = units;
+    this.resolver = resolver;
+  }
+
+  /** Returns the parameters read, in the order of the text. */
+  List<Parameter> parameters() {
+    parameters.sort(Comparator.comparingInt(p -> p.span().start()));
+    return parameters;
+  }
+
+  /** Returns the named expressions read, in the order of the text. */
+  List<Let> lets() {
+    lets.sort(Comparator.comparingInt(l -> l.span().start()));
+    return lets;
+  }
+
+  /** Returns the outputs read, in the order of the text. */
+  List<ReadOutput> outputs() {
+    outputs.sort(Comparator.comparingInt(o -> o.statement().span().start()));
+    return outputs;
+  }
+
+  /** Takes a declaration to be read later; reports a name that is not free. */
+  void collect(Declaration declaration) {
+    if (takesName(declaration.name())) {
+      collected.add(declaration);
+    }
+  }
+
+  /** Takes a name; reports it and returns false if it is not free. */
+  boolean takesName(Name name) {
+    String text = name.text();
+    Name earlier = taken.get(text);
+    boolean builtIn = Function.named(text).isPresent() || NamedConstant.named(text).isPresent();
+    if (builtIn) {
+      problems.report(
+          ProblemKind.NAME_RESERVED,
+          name.span(),
+          "\"" + text + "\" is built in and cannot be declared: choose another name.");
+      scope.define(text, new BrokenMeaning(name.span()));
+    } else if (earlier != null) {
+      problems.report(
+          ProblemKind.NAME_DUPLICATE,
+          name.span(),
+          "\"" + text + "\" is declared twice: rename or remove one of the two declarations.");
+    } else if (scope.isDeclaredOutside(text)) {
+      problems.report(
+          ProblemKind.NAME_SHADOWED,
+          name.span(),
+          "\""
+              + text
+              + "\" hides the declaration of that name outside of the system: rename one of them if both are meant.");
+    }
+    if (earlier == null) {
+      taken.put(text, name);
+    }
+    return !builtIn && earlier == null;
+  }
+
+  /** Gives everything collected a meaning. */
+  void read() {
+    Set<String> cyclic = new HashSet<>();
+    List<Declaration> ordered = DeclarationOrder.of(collected, cycle -> reportCycle(cycle, cyclic));
+    for (Declaration declaration : ordered) {
+      Name name = declaration.name();
+      Optional<? extends Meaning> meaning =
+          cyclic.contains(name.text())
+              ? Optional.empty()
+              : switch (declaration) {
+                case ParameterStatement parameter -> parameter(parameter);
+                case LetStatement let -> let(let);
+                case OutputStatement output -> output(output);
+                default -> Optional.empty();
+              };
+      scope.define(
+          name.text(), meaning.isPresent() ? meaning.get() : new BrokenMeaning(name.span()));
+    }
+  }
+
+  private void reportCycle(List<Declaration> cycle, Set<String> cyclic) {
+    List<String> names = new ArrayList<>();
+    boolean fresh = false;
+    for (Declaration declaration : cycle) {
+      names.add(declaration.name().text());
+      fresh |= cyclic.add(declaration.name().text());
+    }
+    if (fresh) {
+      names.add(names.getFirst());
+      String circle =
+          names.size() <= 8
+              ? String.join(" -> ", names)
+              : String.join(" -> ", names.subList(0, 7)) + " -> ...";
+      problems.report(
+          ProblemKind.NAME_CYCLE,
+          cycle.getFirst().name().span(),
+          names.size() == 2
+              ? "\"" + names.getFirst() + "\" is declared by itself: give it a value."
+              : "These need each other in a circle, so that none has a value: "
+                  + circle
+                  + ". Break the circle.");
+    }
+  }
+
+  private Optional<ParameterMeaning> parameter(ParameterStatement statement) {
+    String name = statement.name().text();
+    Optional<UnitOfMeasure> unit = units.declared(statement.unit());
+    if (unit.isEmpty()) {
+      return Optional.empty();
+    }
+    String what = "the parameter " + name;
+    Optional<Quantity> value = resolver.given(statement.value(), unit.get(), what, Place.PARAMETER);
+    if (value.isEmpty() || !isFinite(value.get(), statement)) {
+      return Optional.empty();
+    }
+    Term term = value.get().constant().term();
+    Optional<Term> halfWidth = Optional.empty();
+    if (statement.uncertainty().isPresent()) {
+      halfWidth = halfWidth(statement.uncertainty().get(), term, unit.get(), what);
+      if (halfWidth.isEmpty()) {
+        return Optional.empty();
+      }
+    }
+    Parameter parameter =
+        new Parameter(
+            name,
+            unit.get(),
+            term,
+            halfWidth,
+            statement.documentation(),
+            statement.span(),
+            statement.name().span());
+    parameters.add(parameter);
+    return Optional.of(new ParameterMeaning(parameter, value.get().depth() + 1));
+  }
+
+  private boolean isFinite(Quantity value, ParameterStatement statement) {
+    Term term = value.constant().term();
+    boolean finite = term instanceof Term.Constant || Double.isFinite(TermEvaluator.constant(term));
+    if (!finite) {
+      problems.report(
+          ProblemKind.NUMBER_OUT_OF_RANGE,
+          statement.value().span(),
+          "The value of the parameter "
+              + statement.name().text()
+              + " is not a finite number: check divisors, roots and logarithms.");
+    }
+    return finite;
+  }
+
+  /** Returns half the width of the interval of uncertainty, absolute, in coherent SI units. */
+  private Optional<Term> halfWidth(
+      Uncertainty uncertainty, Term value, UnitOfMeasure unit, String what) {
+    if (uncertainty.percent() && unit.offset() != 0) {
+      problems.report(
+          ProblemKind.UNIT_OFFSET,
+          uncertainty.span(),
+          "A relative uncertainty has no meaning on the scale "
+              + unit.code()
+              + ", whose zero point is arbitrary: give it as a difference, as in ± 0.5.");
+      return Optional.empty();
+    }
+    UnitOfMeasure asked = uncertainty.percent() ? UnitOfMeasure.ONE : unit;
+    Optional<Quantity> given =
+        resolver.givenDifference(
+            uncertainty.halfWidth(),
+            asked,
+            uncertainty.percent() ? "a number of per cent" : what,
+            Place.UNCERTAINTY);
+    if (given.isEmpty()) {
+      return Optional.empty();
+    }
+    Term halfWidth = given.get().constant().term();
+    if (!(TermEvaluator.constant(halfWidth) >= 0)) {
+      problems.report(
+          ProblemKind.UNCERTAINTY_INVALID,
+          uncertainty.span(),
+          "An uncertainty is half the width of an interval and cannot be negative: remove the sign.");
+      return Optional.empty();
+    }
+    return Optional.of(
+        uncertainty.percent()
+            ? Simplifier.product(
+                Simplifier.call(Function.ABS, value),
+                Simplifier.quotient(halfWidth, new Term.Constant(100)))
+            : halfWidth);
+  }
+
+  private Optional<LetMeaning> let(LetStatement statement) {
+    boolean ofTime = statement.argument().isPresent();
+    if (ofTime && !isTime(statement.argument().get())) {
+      return Optional.empty();
+    }
+    Place place = ofTime ? Place.LET_OF_TIME : Place.LET;
+    String what = "the named expression " + statement.name().text();
+    Optional<UnitOfMeasure> unit = units.declared(statement.unit());
+    if (unit.isEmpty()) {
+      return Optional.empty();
+    }
+    Optional<Quantity> value =
+        statement.unit().isPresent()
+            ? resolver.given(statement.value(), unit.get(), what, place)
+            : resolver.quantity(statement.value(), place);
+    if (value.isEmpty()) {
+      return Optional.empty();
+    }
+    UnitOfMeasure shown =
+        statement.unit().isPresent() ? unit.get() : inferred(statement, value.get());
+    Let let =
+        new Let(
+            statement.name().text(),
+            shown,
+            value.get().constant().term(),
+            ofTime,
+            statement.documentation(),
+            statement.span(),
+            statement.name().span());
+    lets.add(let);
+    return Optional.of(new LetMeaning(let, value.get().depth() + 1));
+  }
+
+  private static UnitOfMeasure inferred(LetStatement statement, Quantity value) {
+    return Literals.alone(statement.value())
+        .flatMap(NumberExpression::unit)
+        .flatMap(UnitResolver::known)
+        .orElseGet(() -> coherent(value.dimension()));
+  }
+
+  static UnitOfMeasure coherent(Dimension dimension) {
+    return dimension.isNone() ? UnitOfMeasure.ONE : UnitNames.coherent(dimension);
+  }
+
+  private boolean isTime(Name argument) {
+    String time = scope.timeName();
+    if (argument.text().equals(time)) {
+      scope.markUsed(time);
+      return true;
+    }
+    if (time.isEmpty()) {
+      problems.report(
+          ProblemKind.STATEMENT_MISPLACED,
+          argument.span(),
+          "A function of time belongs into a system, where time has a name: move the line there.");
+    } else {
+      problems.report(
+          ProblemKind.NAME_MISUSED,
+          argument.span(),
+          "The argument of a let is the independent variable: write " + time + ".",
+          Fix.replace("Write " + time, argument.span(), time));
+    }
+    return false;
+  }
+
+  private Optional<OutputMeaning> output(OutputStatement statement) {
+    Optional<UnitOfMeasure> unit = units.declared(statement.unit());
+    if (unit.isEmpty()) {
+      return Optional.empty();
+    }
+    Optional<Quantity> value =
+        statement.unit().isPresent()
+            ? resolver.given(
+                statement.value(),
+                unit.get(),
+                "the output " + statement.name().text(),
+                Place.OUTPUT)
+            : resolver.quantity(statement.value(), Place.OUTPUT);
+    if (value.isEmpty()) {
+      return Optional.empty();
+    }
+    Quantity found = value.get();
+    // A lone 0 given to a declared unit has its dimension, not that of a pure number.
+    Dimension dimension = statement.unit().isPresent() ? unit.get().dimension() : found.dimension();
+    QuantitySum placed = new QuantitySum();
+    placed.add(false, found, statement.value().span());
+    Quantity output = placed.total(dimension);
+    UnitOfMeasure shown = statement.unit().isPresent() ? unit.get() : coherent(dimension);
+    outputs.add(new ReadOutput(statement, output, shown));
+    return Optional.of(new OutputMeaning(output, shown, statement.name().span()));
+  }
+
+  /** Reports parameters and named expressions that nothing uses. */
+  void reportUnused() {
+    for (Parameter parameter : parameters()) {
+      reportUnused(parameter.name(), "parameter", parameter.nameSpan());
+    }
+    for (Let let : lets()) {
+      reportUnused(let.name(), "named expression", let.nameSpan());
+    }
+  }
+
+  private void reportUnused(String name, String what, Span nameSpan) {
+    if (!scope.isUsed(name)) {
+      problems.report(
+          ProblemKind.NAME_UNUSED,
+          nameSpan,
+          "The " + what + " \"" + name + "\" is used nowhere: remove it, or use it.");
+    }
+  }
+}

@@ -1,0 +1,123 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.model;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Optional;
+import java.util.Set;
+import org.spanloom.language.model.Meaning.StateMeaning;
+import org.spanloom.language.problem.ProblemKind;
+import org.spanloom.language.syntax.Expression;
+import org.spanloom.language.syntax.Expression.NameExpression;
+import org.spanloom.language.syntax.Statement.EquationStatement;
+
+/** Gives the equations of a system their meaning and finds the orders of its states. */
+final class EquationReader {
+
+  private final SystemScope system;
+  private final Problems problems;
+  private final List<ResolvedEquation> equations = new ArrayList<>();
+  private final boolean[] mentioned;
+  private final int[] orders;
+  private boolean allRead = true;
+
+  EquationReader(SystemScope system) {
+    this.system = system;
+    this.problems = system.problems();
+    this.orders = new int[system.states().size()];
+    this.mentioned = new boolean[orders.length];
+  }
+
+  /** Takes an equation. */
+  void read(EquationStatement statement) {
+    noteDerivatives(statement.left());
+    noteDerivatives(statement.right());
+    Optional<Quantity> left = system.resolver().quantity(statement.left(), Place.EQUATION);
+    Optional<Quantity> right = system.resolver().quantity(statement.right(), Place.EQUATION);
+    if (left.isEmpty() || right.isEmpty() || !sidesAgree(statement, left.get(), right.get())) {
+      allRead = false;
+      return;
+    }
+    equations.add(new ResolvedEquation(statement, left.get(), right.get()));
+    noteOrders(left.get());
+    noteOrders(right.get());
+  }
+
+  /**
+   * Notes that an equation may be missing because a statement could not be read.
+   *
+   * @param namesWithPrimes names in it that primes follow
+   */
+  void noteUnread(Set<String> namesWithPrimes) {
+    allRead = false;
+    for (String name : namesWithPrimes) {
+      system.state(name).ifPresent(state -> mentioned[state.index()] = true);
+    }
+  }
+
+  /** Returns the equations that have a meaning. */
+  List<ResolvedEquation> equations() {
+    return equations;
+  }
+
+  /** Tells whether every equation has a meaning. */
+  boolean allRead() {
+    return allRead;
+  }
+
+  /** Tells whether a derivative of a state stands in some equation, with or without a meaning. */
+  boolean isMentioned(int state) {
+    return mentioned[state];
+  }
+
+  private void noteDerivatives(Expression side) {
+    for (NameExpression name : ExpressionNames.of(side)) {
+      if (name.primes() > 0) {
+        Optional<StateMeaning> state = system.state(name.name().text());
+        if (state.isPresent()) {
+          mentioned[state.get().index()] = true;
+          raise(state.get().index(), name.primes());
+        }
+      }
+    }
+  }
+
+  private void noteOrders(Quantity side) {
+    side.coefficients().keySet().forEach(key -> raise(key.state(), key.order()));
+  }
+
+  private void raise(int state, int order) {
+    orders[state] = Math.max(orders[state], Math.min(order, StateVector.ORDER_LIMIT));
+  }
+
+  private boolean sidesAgree(EquationStatement statement, Quantity left, Quantity right) {
+    if (left.zero() || right.zero() || left.dimension().equals(right.dimension())) {
+      return true;
+    }
+    problems.report(
+        ProblemKind.UNIT_MISMATCH,
+        statement.span(),
+        "The left side is "
+            + Resolver.in(left.dimension())
+            + ", but the right side is "
+            + Resolver.in(right.dimension())
+            + ": both sides of an equation have one dimension; check the factors and their units.");
+    return false;
+  }
+
+  /**
+   * Returns the components of the state vector, known from the equations and the declarations of
+   * derivatives.
+   */
+  StateVector stateVector() {
+    int[] atLeastOne = new int[orders.length];
+    Arrays.setAll(
+        atLeastOne, i -> Math.max(1, Math.max(orders[i], system.declaredDerivatives(i) + 1)));
+    return new StateVector(system.states(), atLeastOne);
+  }
+}

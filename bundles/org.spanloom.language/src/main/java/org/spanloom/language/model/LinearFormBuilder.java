@@ -1,0 +1,189 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.model;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.TreeMap;
+import org.spanloom.language.model.LinearForm.MatrixEntry;
+import org.spanloom.language.model.LinearForm.VectorEntry;
+import org.spanloom.language.model.Meaning.StateMeaning;
+import org.spanloom.language.problem.Fix;
+import org.spanloom.language.problem.ProblemKind;
+import org.spanloom.language.text.Span;
+
+/** Finds the equation that governs each state and builds the linear form. */
+final class LinearFormBuilder {
+
+  private final SystemScope system;
+  private final EquationReader reader;
+  private final StateVector vector;
+  private final List<ResolvedEquation> equations;
+  private final List<Quantity> massSides = new ArrayList<>();
+  private final boolean[] held;
+  private final EquationMatching matching;
+
+  LinearFormBuilder(SystemScope system, EquationReader reader, StateVector vector) {
+    this.system = system;
+    this.reader = reader;
+    this.vector = vector;
+    this.equations = reader.equations();
+    this.held = new boolean[vector.states().size()];
+    List<int[]> statesOf = new ArrayList<>();
+    for (ResolvedEquation equation : equations) {
+      Quantity side = equation.massSide(vector);
+      massSides.add(side);
+      int[] states =
+          side.coefficients().keySet().stream().mapToInt(StateKey::state).distinct().toArray();
+      statesOf.add(states);
+      for (int state : states) {
+        held[state] = true;
+      }
+    }
+    this.matching = EquationMatching.of(statesOf, held.length);
+  }
+
+  /** Returns the statement that governs a state; its declaration where there is none. */
+  Span governing(StateMeaning state) {
+    int equation = matching.equationOf(state.index());
+    return equation < 0 ? state.statement().span() : equations.get(equation).span();
+  }
+
+  /**
+   * Reports states and equations that do not fit together, and returns the linear form where all
+   * do.
+   */
+  Optional<LinearForm> build() {
+    boolean complete = reader.allRead();
+    for (int e = 0; e < equations.size(); e++) {
+      if (matching.stateOf(e) < 0) {
+        complete = false;
+        reportSpareEquation(e);
+      }
+    }
+    for (StateMeaning state : vector.states()) {
+      if (matching.equationOf(state.index()) < 0) {
+        complete = false;
+        reportStateAlone(state);
+      }
+    }
+    return complete && vector.dimension() > 0 ? Optional.of(form()) : Optional.empty();
+  }
+
+  private void reportSpareEquation(int index) {
+    ResolvedEquation equation = equations.get(index);
+    int[] states =
+        massSides.get(index).coefficients().keySet().stream().mapToInt(StateKey::state).toArray();
+    if (states.length == 0) {
+      system
+          .problems()
+          .report(
+              ProblemKind.EQUATION_WITHOUT_STATE,
+              equation.span(),
+              "The equation gives no derivative: " + reasonForNoDerivative(equation));
+    } else if (reader.allRead()) {
+      StateMeaning state = vector.states().get(states[0]);
+      String highest = StateVector.label(state, vector.order(states[0]));
+      system
+          .problems()
+          .report(
+              ProblemKind.TOO_MANY_EQUATIONS,
+              equation.span(),
+              "There is one equation too many: \""
+                  + highest
+                  + "\""
+                  + (states.length == 1 ? " is" : " and the other derivatives in this one are")
+                  + " given by other equations already. Remove one of them or declare another state.");
+    }
+  }
+
+  private String reasonForNoDerivative(ResolvedEquation equation) {
+    List<StateKey> keys = new ArrayList<>(equation.left().coefficients().keySet());
+    keys.addAll(equation.right().coefficients().keySet());
+    Optional<StateKey> lower = keys.stream().filter(k -> k.order() > 0).findFirst();
+    if (lower.isEmpty()) {
+      return "no state in it has a prime. Write a derivative such as x', or declare an output or a let.";
+    }
+    StateMeaning state = vector.states().get(lower.get().state());
+    String highest = StateVector.label(state, vector.order(state.index()));
+    String found = StateVector.label(state, lower.get().order());
+    boolean cancels = lower.get().order() == vector.order(state.index());
+    return cancels
+        ? "\"" + highest + "\" cancels in it. Check both sides."
+        : "\""
+            + highest
+            + "\" stands elsewhere, so that \""
+            + found
+            + "\" is a state of its own here. Use one order for \""
+            + state.statement().name().text()
+            + "\".";
+  }
+
+  private void reportStateAlone(StateMeaning state) {
+    String name = state.statement().name().text();
+    String highest = StateVector.label(state, vector.order(state.index()));
+    if (held[state.index()]) {
+      if (reader.allRead()) {
+        system
+            .problems()
+            .report(
+                ProblemKind.SINGULAR_MASS_MATRIX,
+                state.statement().name().span(),
+                "The equations cannot be solved for \""
+                    + highest
+                    + "\": every equation that holds it is needed for another derivative. Write one more.");
+      }
+    } else if (!reader.isMentioned(state.index()) || reader.allRead()) {
+      system
+          .problems()
+          .report(
+              ProblemKind.STATE_WITHOUT_EQUATION,
+              state.statement().name().span(),
+              "The state \""
+                  + name
+                  + "\" has no equation: \""
+                  + highest
+                  + "\" stands in none. Write one, or declare a parameter instead.",
+              Fix.insert(
+                  "Insert an equation",
+                  system.lastStatementEnd(),
+                  "\n" + system.indent(state.statement().span()) + highest + " = 0"));
+    }
+  }
+
+  private LinearForm form() {
+    List<MatrixEntry> mass = new ArrayList<>();
+    List<MatrixEntry> matrix = new ArrayList<>();
+    List<VectorEntry> forcing = new ArrayList<>();
+    for (StateMeaning state : vector.states()) {
+      List<Span> declaration = List.of(state.statement().span());
+      int row = vector.last(state.index());
+      for (int i = vector.first(state.index()); i < row; i++) {
+        mass.add(new MatrixEntry(i, i, Term.ONE, declaration));
+        matrix.add(new MatrixEntry(i, i + 1, Term.ONE, declaration));
+      }
+      int equation = matching.equationOf(state.index());
+      addRow(row, massSides.get(equation), mass);
+      Quantity force = equations.get(equation).forceSide(vector);
+      addRow(row, force, matrix);
+      if (!Simplifier.isZero(force.constant().term())) {
+        forcing.add(new VectorEntry(row, force.constant().term(), force.constant().sources()));
+      }
+    }
+    return new LinearForm(vector.dimension(), mass, matrix, forcing);
+  }
+
+  private void addRow(int row, Quantity side, List<MatrixEntry> entries) {
+    TreeMap<Integer, MatrixEntry> byColumn = new TreeMap<>();
+    side.coefficients()
+        .forEach((key, part) -> {
+          int column = vector.isComponent(key) ? vector.component(key) : vector.last(key.state());
+          byColumn.put(column, new MatrixEntry(row, column, part.term(), part.sources()));
+        });
+    entries.addAll(byColumn.values());
+  }
+}

@@ -1,0 +1,68 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.model;
+
+import org.spanloom.language.syntax.Statement.StateStatement;
+import org.spanloom.language.text.Span;
+import org.spanloom.language.units.UnitOfMeasure;
+
+/** What a declared name stands for. */
+sealed interface Meaning {
+
+  /** Returns the place of the name in its declaration. */
+  Span nameSpan();
+
+  /** The independent variable. */
+  record TimeMeaning(UnitOfMeasure unit, Span nameSpan) implements Meaning {}
+
+  /** A parameter. */
+  record ParameterMeaning(Parameter parameter, int depth) implements Meaning {
+    @Override
+    public Span nameSpan() {
+      return parameter.nameSpan();
+    }
+  }
+
+  /** A named expression. */
+  record LetMeaning(Let let, int depth) implements Meaning {
+    @Override
+    public Span nameSpan() {
+      return let.nameSpan();
+    }
+  }
+
+  /**
+   * A state.
+   *
+   * @param index place among the states of the system
+   * @param statement its declaration
+   * @param unit its unit
+   */
+  record StateMeaning(int index, StateStatement statement, UnitOfMeasure unit) implements Meaning {
+    @Override
+    public Span nameSpan() {
+      return statement.name().span();
+    }
+  }
+
+  /** An output. */
+  record OutputMeaning(Quantity value, UnitOfMeasure unit, Span nameSpan) implements Meaning {}
+
+  /** Something whose declaration has a problem of its own; uses of it are not reported again. */
+  record BrokenMeaning(Span nameSpan) implements Meaning {}
+
+  /** Returns what this is, for messages. */
+  default String kind() {
+    return switch (this) {
+      case TimeMeaning m -> "the independent variable";
+      case ParameterMeaning m -> "a parameter";
+      case LetMeaning m -> "a named expression";
+      case StateMeaning m -> "a state";
+      case OutputMeaning m -> "an output";
+      case BrokenMeaning m -> "a broken declaration";
+    };
+  }
+}

@@ -1,0 +1,132 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.model;
+
+import java.util.ArrayList;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Optional;
+import java.util.Set;
+import java.util.concurrent.CancellationException;
+import java.util.function.BooleanSupplier;
+import org.spanloom.language.model.Meaning.BrokenMeaning;
+import org.spanloom.language.problem.ProblemKind;
+import org.spanloom.language.syntax.Name;
+import org.spanloom.language.syntax.Parser;
+import org.spanloom.language.syntax.Statement;
+import org.spanloom.language.syntax.Statement.LaterStatement;
+import org.spanloom.language.syntax.Statement.LetStatement;
+import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Statement.UnreadStatement;
+import org.spanloom.language.syntax.SyntaxFile;
+import org.spanloom.language.text.SourceText;
+
+/**
+ * Reads a model file: text to tree to meaning. Every text has a model; what is wrong with it is
+ * among the problems of the model. The same text gives the same model.
+ */
+public final class ModelReader {
+
+  private final SyntaxFile file;
+  private final BooleanSupplier cancelled;
+  private final Problems problems = new Problems();
+  private final Scope scope = new Scope(Optional.empty());
+  private final Declarations globals;
+
+  private ModelReader(SyntaxFile file, BooleanSupplier cancelled) {
+    this.file = file;
+    this.cancelled = cancelled;
+    UnitResolver units = new UnitResolver(problems);
+    this.globals =
+        new Declarations(
+            scope, problems, units, new Resolver(file.source(), scope, problems, units));
+  }
+
+  /** Returns the model of a text. */
+  public static Model read(SourceText source) {
+    return read(source, () -> false);
+  }
+
+  /**
+   * Returns the model of a text.
+   *
+   * @param source the text
+   * @param cancelled asked now and then; once it says true, the work ends
+   * @throws CancellationException if the work was cancelled
+   */
+  public static Model read(SourceText source, BooleanSupplier cancelled) {
+    return read(Parser.parse(source), cancelled);
+  }
+
+  /**
+   * Returns the model of a tree.
+   *
+   * @param file the tree
+   * @param cancelled asked now and then; once it says true, the work ends
+   * @throws CancellationException if the work was cancelled
+   */
+  public static Model read(SyntaxFile file, BooleanSupplier cancelled) {
+    check(cancelled);
+    return new ModelReader(file, cancelled).read();
+  }
+
+  static void check(BooleanSupplier cancelled) {
+    if (cancelled.getAsBoolean()) {
+      throw new CancellationException("reading the model was cancelled");
+    }
+  }
+
+  private Model read() {
+    for (Statement statement : file.statements()) {
+      switch (statement) {
+        case ParameterStatement parameter -> globals.collect(parameter);
+        case LetStatement let -> globals.collect(let);
+        case SystemStatement system -> {}
+        case UnreadStatement unread -> unread.declares().ifPresent(this::broken);
+        case LaterStatement later -> later.declares().ifPresent(this::broken);
+        default -> misplaced(statement);
+      }
+    }
+    globals.read();
+    List<SystemModel> systems = new ArrayList<>();
+    Set<String> names = new HashSet<>();
+    for (Statement statement : file.statements()) {
+      if (statement instanceof SystemStatement system) {
+        reportDuplicate(system.name(), names);
+        systems.add(
+            new SystemReader(file.source(), system, globals, scope, problems, cancelled).read());
+      }
+    }
+    boolean complete =
+        file.statements().stream()
+            .noneMatch(s -> s instanceof UnreadStatement || s instanceof LaterStatement);
+    if (complete) {
+      globals.reportUnused();
+    }
+    return new Model(file.source(), file, systems, problems.inTextOrder(file.problems()));
+  }
+
+  private void broken(Name name) {
+    scope.define(name.text(), new BrokenMeaning(name.span()));
+  }
+
+  private void misplaced(Statement statement) {
+    problems.report(
+        ProblemKind.STATEMENT_MISPLACED,
+        statement.span(),
+        "Only parameters and named expressions stand outside of systems: move this line into a system.");
+  }
+
+  private void reportDuplicate(Name name, Set<String> names) {
+    if (!name.text().isEmpty() && !names.add(name.text())) {
+      problems.report(
+          ProblemKind.NAME_DUPLICATE,
+          name.span(),
+          "There are two systems named \"" + name.text() + "\": rename one of them.");
+    }
+  }
+}

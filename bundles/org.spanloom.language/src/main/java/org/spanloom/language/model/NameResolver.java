@@ -1,0 +1,465 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.model;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import org.spanloom.language.model.Meaning.BrokenMeaning;
+import org.spanloom.language.model.Meaning.LetMeaning;
+import org.spanloom.language.model.Meaning.OutputMeaning;
+import org.spanloom.language.model.Meaning.ParameterMeaning;
+import org.spanloom.language.model.Meaning.StateMeaning;
+import org.spanloom.language.model.Meaning.TimeMeaning;
+import org.spanloom.language.problem.Fix;
+import org.spanloom.language.problem.ProblemKind;
+import org.spanloom.language.syntax.Expression;
+import org.spanloom.language.syntax.Expression.Argument;
+import org.spanloom.language.syntax.Expression.CallExpression;
+import org.spanloom.language.syntax.Expression.NameExpression;
+import org.spanloom.language.text.Span;
+import org.spanloom.language.units.Dimension;
+import org.spanloom.language.units.UnitOfMeasure;
+
+/** Gives names and calls in expressions their meaning. */
+final class NameResolver {
+
+  private final Resolver resolver;
+  private final Scope scope;
+  private final Problems problems;
+
+  NameResolver(Resolver resolver, Scope scope, Problems problems) {
+    this.resolver = resolver;
+    this.scope = scope;
+    this.problems = problems;
+  }
+
+  boolean isStateOrOutput(NameExpression name) {
+    return scope
+        .own(name.name().text())
+        .filter(m -> m instanceof StateMeaning || m instanceof OutputMeaning)
+        .isPresent();
+  }
+
+  /** Returns the value of a name without arguments. */
+  Optional<Quantity> name(NameExpression name, Place place) {
+    Optional<Meaning> meaning = scope.use(name.name().text());
+    if (meaning.isEmpty()) {
+      return builtIn(name);
+    }
+    if (name.primes() > 0 && hasNoDerivative(name, meaning.get())) {
+      return Optional.empty();
+    }
+    return switch (meaning.get()) {
+      case TimeMeaning time -> time(time, name, place);
+      case ParameterMeaning m -> Optional.of(parameter(m));
+      case LetMeaning m when m.let().dependsOnTime() -> bareLet(name);
+      case LetMeaning m -> Optional.of(let(m));
+      case StateMeaning m -> state(m, name, place);
+      case OutputMeaning m -> output(m, name, place);
+      case BrokenMeaning m -> Optional.empty();
+    };
+  }
+
+  /** Returns the value of a name with arguments. */
+  Optional<Quantity> call(CallExpression call, Place place) {
+    NameExpression callee = call.callee();
+    Optional<Meaning> meaning = scope.use(callee.name().text());
+    if (meaning.isEmpty()) {
+      return function(call, place);
+    }
+    if (callee.primes() > 0 && hasNoDerivative(callee, meaning.get())) {
+      return Optional.empty();
+    }
+    return switch (meaning.get()) {
+      case TimeMeaning m -> notCallable(call, m);
+      case ParameterMeaning m -> notCallable(call, m);
+      case LetMeaning m when m.let().dependsOnTime() -> letOfTime(m, call, place);
+      case LetMeaning m -> notCallable(call, m);
+      case StateMeaning m ->
+          isRunningTime(call) ? state(m, callee, place) : sampledState(m, call, place);
+      case OutputMeaning m ->
+          isRunningTime(call) ? output(m, callee, place) : sampledOutput(m, call, place);
+      case BrokenMeaning m -> Optional.empty();
+    };
+  }
+
+  private Optional<Quantity> builtIn(NameExpression name) {
+    String word = name.name().text();
+    Optional<NamedConstant> constant = NamedConstant.named(word);
+    if (constant.isPresent() && name.primes() == 0) {
+      return Optional.of(
+          Quantity.constant(new Term.Constant(constant.get().value()), Dimension.NONE, 1));
+    }
+    Optional<Function> function = Function.named(word);
+    if (function.isPresent()) {
+      problems.report(
+          ProblemKind.NAME_MISUSED,
+          name.span(),
+          "\"" + word + "\" is a function: write its argument in parentheses behind it.");
+    } else {
+      unknown(name);
+    }
+    return Optional.empty();
+  }
+
+  private void unknown(NameExpression name) {
+    String word = name.name().text();
+    Optional<String> nearest = problems.isFull() ? Optional.empty() : scope.nearest(word);
+    problems.report(
+        ProblemKind.NAME_UNKNOWN,
+        name.name().span(),
+        "\""
+            + Quotes.shortened(word)
+            + "\" is not declared: "
+            + nearest
+                .map(n -> "did you mean " + n + "?")
+                .orElse("declare it as a parameter, a named expression or a state."),
+        nearest.stream()
+            .map(n -> Fix.replace("Write " + n, name.name().span(), n))
+            .toArray(Fix[]::new));
+  }
+
+  private boolean hasNoDerivative(NameExpression name, Meaning meaning) {
+    if (meaning instanceof StateMeaning || meaning instanceof BrokenMeaning) {
+      return false;
+    }
+    problems.report(
+        ProblemKind.NAME_MISUSED,
+        name.span(),
+        "\""
+            + name.label()
+            + "\": primes count derivatives of states, and \""
+            + name.name().text()
+            + "\" is "
+            + meaning.kind()
+            + ": remove the primes.");
+    return true;
+  }
+
+  private Optional<Quantity> time(TimeMeaning time, NameExpression name, Place place) {
+    if (!place.time()) {
+      String remedy =
+          place == Place.LET
+              ? "name it as an argument, as in let f(" + name.name().text() + ") = ..."
+              : "use numbers and parameters only";
+      problems.report(
+          ProblemKind.TIME_MISPLACED,
+          name.span(),
+          "\""
+              + name.name().text()
+              + "\" changes all the time and cannot stand in "
+              + place.what()
+              + " that is constant: "
+              + remedy
+              + ".");
+      return Optional.empty();
+    }
+    return Optional.of(Quantity.constant(new Term.Time(), time.unit().dimension(), 1));
+  }
+
+  private static Quantity parameter(ParameterMeaning meaning) {
+    return Quantity.constant(
+        new Term.ParameterTerm(meaning.parameter()),
+        meaning.parameter().unit().dimension(),
+        meaning.depth() + 1);
+  }
+
+  private static Quantity let(LetMeaning meaning) {
+    return Quantity.constant(
+        new Term.LetTerm(meaning.let()), meaning.let().unit().dimension(), meaning.depth() + 1);
+  }
+
+  private Optional<Quantity> bareLet(NameExpression name) {
+    String time = timeName();
+    problems.report(
+        ProblemKind.NAME_MISUSED,
+        name.span(),
+        "\""
+            + name.name().text()
+            + "\" is a function of "
+            + time
+            + ": write "
+            + name.name().text()
+            + "("
+            + time
+            + ").",
+        Fix.insert("Insert (" + time + ")", name.span().end(), "(" + time + ")"));
+    return Optional.empty();
+  }
+
+  private Optional<Quantity> letOfTime(LetMeaning meaning, CallExpression call, Place place) {
+    if (!isRunningTime(call)) {
+      String name = call.callee().name().text();
+      problems.report(
+          ProblemKind.NAME_MISUSED,
+          call.span(),
+          "\""
+              + name
+              + "\" is known at the running time only: write "
+              + name
+              + "("
+              + timeName()
+              + ").");
+      return Optional.empty();
+    }
+    scope.markUsed(timeName());
+    if (!place.time()) {
+      problems.report(
+          ProblemKind.TIME_MISPLACED,
+          call.span(),
+          "\""
+              + resolver.shown(call.span())
+              + "\" changes all the time and cannot stand in "
+              + place.what()
+              + " that is constant: use numbers and parameters only.");
+      return Optional.empty();
+    }
+    return Optional.of(let(meaning));
+  }
+
+  private Optional<Quantity> state(StateMeaning state, NameExpression name, Place place) {
+    if (!place.states()) {
+      problems.report(
+          ProblemKind.STATE_MISPLACED,
+          name.span(),
+          "The state \""
+              + name.label()
+              + "\" cannot stand in "
+              + place.what()
+              + ": only numbers and parameters can"
+              + (place.time() ? ", and functions of time." : ".")
+              + (place.what().startsWith("a named") ? " Declare it as an output instead." : ""));
+      return Optional.empty();
+    }
+    return Optional.of(
+        Quantity.state(StateKey.running(state.index(), name.primes()), dimension(state, name)));
+  }
+
+  private Dimension dimension(StateMeaning state, NameExpression name) {
+    Dimension dimension = state.unit().dimension();
+    Dimension time =
+        scope.own(timeName()).map(NameResolver::dimensionOfTime).orElse(Dimension.NONE);
+    return dimension.over(time.power(Math.min(name.primes(), StateVector.ORDER_LIMIT)));
+  }
+
+  private static Dimension dimensionOfTime(Meaning meaning) {
+    return meaning instanceof TimeMeaning time ? time.unit().dimension() : Dimension.NONE;
+  }
+
+  private Optional<Quantity> output(OutputMeaning output, NameExpression name, Place place) {
+    if (!place.states()) {
+      problems.report(
+          ProblemKind.STATE_MISPLACED,
+          name.span(),
+          "The output \""
+              + name.label()
+              + "\" depends on states and cannot stand in "
+              + place.what()
+              + ".");
+      return Optional.empty();
+    }
+    return Optional.of(output.value().inherited());
+  }
+
+  private Optional<Quantity> sampledState(StateMeaning state, CallExpression call, Place place) {
+    return namedTime(call, place)
+        .map(at -> {
+          StateKey key =
+              new StateKey(
+                  state.index(),
+                  call.callee().primes(),
+                  Optional.of(at),
+                  call.arguments().getFirst().before());
+          return Quantity.state(key, dimension(state, call.callee()));
+        });
+  }
+
+  private Optional<Quantity> sampledOutput(OutputMeaning output, CallExpression call, Place place) {
+    boolean before = call.arguments().size() == 1 && call.arguments().getFirst().before();
+    return namedTime(call, place).map(at -> TimeSubstitution.of(output.value(), at, before));
+  }
+
+  /** Returns the one time in the parentheses behind a state or output. */
+  private Optional<Term> namedTime(CallExpression call, Place place) {
+    String label = call.callee().label();
+    if (call.arguments().size() != 1 || call.arguments().getFirst().label().isPresent()) {
+      problems.report(
+          ProblemKind.ARGUMENT_COUNT,
+          call.span(),
+          "\"" + label + "\" takes one time in its parentheses, as in " + label + "(2).");
+      return Optional.empty();
+    }
+    Expression time = call.arguments().getFirst().value();
+    if (!place.samples()) {
+      boolean delayed =
+          ExpressionNames.of(time).stream().anyMatch(n -> n.name().text().equals(timeName()));
+      problems.report(
+          delayed ? ProblemKind.STATE_DELAYED : ProblemKind.STATE_MISPLACED,
+          call.span(),
+          delayed
+              ? "\""
+                  + resolver.shown(call.span())
+                  + "\" is a state at another time than the running one: that is a delay equation, not an ordinary"
+                  + " differential equation. Write "
+                  + label
+                  + ", or model the delay by states of its own."
+              : "\""
+                  + resolver.shown(call.span())
+                  + "\" is a value at a fixed time and cannot stand in "
+                  + place.what()
+                  + ": write "
+                  + label
+                  + " for the value at the running time.");
+      return Optional.empty();
+    }
+    UnitOfMeasure unit =
+        scope
+            .own(timeName())
+            .filter(TimeMeaning.class::isInstance)
+            .map(m -> ((TimeMeaning) m).unit())
+            .orElse(UnitOfMeasure.ONE);
+    return resolver
+        .given(time, unit, "the independent variable", Place.NAMED_TIME)
+        .map(q -> q.constant().term());
+  }
+
+  private Optional<Quantity> function(CallExpression call, Place place) {
+    NameExpression callee = call.callee();
+    String word = callee.name().text();
+    Optional<Function> named = Function.named(word);
+    if (named.isEmpty() || callee.primes() > 0) {
+      reportNoFunction(call);
+      return Optional.empty();
+    }
+    Function function = named.get();
+    Optional<Argument> labelled =
+        call.arguments().stream().filter(a -> a.label().isPresent() || a.before()).findFirst();
+    if (call.arguments().size() != function.arity() || labelled.isPresent()) {
+      problems.report(
+          ProblemKind.ARGUMENT_COUNT,
+          call.span(),
+          "\""
+              + word
+              + "\" takes "
+              + (function.arity() == 1 ? "one argument" : function.arity() + " arguments")
+              + (labelled.isPresent() ? " without a name" : ", not " + call.arguments().size())
+              + ".");
+      return Optional.empty();
+    }
+    List<Term> terms = new ArrayList<>();
+    List<Dimension> dimensions = new ArrayList<>();
+    int depth = 0;
+    boolean sound = true;
+    for (Argument argument : call.arguments()) {
+      Optional<Quantity> value = resolver.quantity(argument.value(), place);
+      if (value.isPresent() && value.get().holdsStates()) {
+        sound =
+            resolver.notLinear(
+                call.span(),
+                "the argument of " + word + " holds " + resolver.stateIn(argument.value()));
+      } else if (value.isPresent()) {
+        terms.add(value.get().constant().term());
+        dimensions.add(value.get().dimension());
+        depth = Math.max(depth, value.get().depth());
+      }
+    }
+    if (!sound || terms.size() != function.arity()) {
+      return Optional.empty();
+    }
+    Optional<Dimension> dimension = function.dimension(dimensions);
+    if (dimension.isEmpty()) {
+      reportDimensions(call, function, dimensions);
+      return Optional.empty();
+    }
+    return Optional.of(
+        Quantity.constant(Simplifier.call(function, terms), dimension.get(), depth + 1));
+  }
+
+  private void reportDimensions(CallExpression call, Function function, List<Dimension> found) {
+    Span span = call.arguments().getFirst().span();
+    String reason =
+        switch (function.dimensionRule()) {
+          case PURE -> "needs a pure number: divide by a value of the same dimension";
+          case HALVED -> "needs a value whose unit is a square: check the factors";
+          case KEPT, DROPPED ->
+              "needs values of one dimension, and \""
+                  + resolver.shown(call.arguments().getLast().span())
+                  + "\" is "
+                  + Resolver.in(found.getLast())
+                  + ": check the factors";
+        };
+    problems.report(
+        ProblemKind.UNIT_MISMATCH,
+        span,
+        "\""
+            + resolver.shown(span)
+            + "\" is "
+            + Resolver.in(found.getFirst())
+            + ", but "
+            + function.code()
+            + " "
+            + reason
+            + ".");
+  }
+
+  private void reportNoFunction(CallExpression call) {
+    NameExpression callee = call.callee();
+    String word = callee.name().text();
+    if (word.equals("pulse")) {
+      problems.report(
+          ProblemKind.STATEMENT_NOT_SUPPORTED,
+          call.span(),
+          "\"pulse\" is not read by this version yet: write a smooth function of time.");
+    } else if (NamedConstant.named(word).isPresent() || Function.named(word).isPresent()) {
+      problems.report(
+          ProblemKind.NAME_MISUSED,
+          callee.span(),
+          "\""
+              + callee.label()
+              + "\" cannot be called: write * for a product, and no primes on functions.");
+    } else {
+      unknown(callee);
+    }
+  }
+
+  private Optional<Quantity> notCallable(CallExpression call, Meaning meaning) {
+    String name = call.callee().name().text();
+    if (call.arguments().size() == 1 && isRunningTime(call)) {
+      problems.report(
+          ProblemKind.NAME_MISUSED,
+          call.span(),
+          "\""
+              + name
+              + "\" is "
+              + meaning.kind()
+              + " that does not depend on time: write "
+              + name
+              + ".",
+          Fix.replace("Write " + name, call.span(), name));
+    } else {
+      problems.report(
+          ProblemKind.NAME_MISUSED,
+          call.span(),
+          "\"" + name + "\" is " + meaning.kind() + ", not a function: write * for a product.",
+          Fix.insert("Insert *", call.callee().span().end(), "*"));
+    }
+    return Optional.empty();
+  }
+
+  private boolean isRunningTime(CallExpression call) {
+    return call.arguments().size() == 1
+        && !call.arguments().getFirst().before()
+        && call.arguments().getFirst().label().isEmpty()
+        && call.arguments().getFirst().value() instanceof NameExpression argument
+        && argument.primes() == 0
+        && argument.name().text().equals(timeName());
+  }
+
+  private String timeName() {
+    return scope.timeName();
+  }
+}

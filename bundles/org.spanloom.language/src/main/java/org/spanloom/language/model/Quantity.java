@@ -1,0 +1,90 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.model;
+
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.function.UnaryOperator;
+import org.spanloom.language.text.Span;
+import org.spanloom.language.units.Dimension;
+
+/**
+ * The value of an expression: affine in the states, in coherent SI units.
+ *
+ * @param coefficients factors of the states in it, in the order of their appearance
+ * @param constant the part without states
+ * @param dimension its dimension
+ * @param zero whether it is the number 0 as written, which fits every dimension
+ * @param depth bound on the depth of the terms in it, named expressions followed
+ */
+record Quantity(
+    Map<StateKey, Part> coefficients, Part constant, Dimension dimension, boolean zero, int depth) {
+
+  /**
+   * A term with the places in the text it comes from.
+   *
+   * @param term the term
+   * @param sources the places, the outermost first
+   * @param placed whether the place in the statement at hand is among them already
+   */
+  record Part(Term term, List<Span> sources, boolean placed) {
+
+    static final Part ZERO = new Part(Term.ZERO, List.of(), false);
+
+    Part map(UnaryOperator<Term> change) {
+      return new Part(change.apply(term), sources, placed);
+    }
+
+    Part placedAt(Span span) {
+      if (placed) {
+        return this;
+      }
+      List<Span> all = new ArrayList<>();
+      all.add(span);
+      all.addAll(sources);
+      return new Part(term, all, true);
+    }
+
+    /** Returns the same part as a statement sees it that uses it by name. */
+    Part inherited() {
+      return new Part(term, sources, false);
+    }
+  }
+
+  static Quantity constant(Term term, Dimension dimension, int depth) {
+    return new Quantity(Map.of(), new Part(term, List.of(), false), dimension, false, depth);
+  }
+
+  static Quantity state(StateKey key, Dimension dimension) {
+    Map<StateKey, Part> one = Map.of(key, new Part(Term.ONE, List.of(), false));
+    return new Quantity(one, Part.ZERO, dimension, false, 1);
+  }
+
+  boolean holdsStates() {
+    return !coefficients.isEmpty();
+  }
+
+  /** Returns the quantity with every part changed; parts that become 0 are left out. */
+  Quantity map(UnaryOperator<Term> change, Dimension newDimension, int newDepth) {
+    Map<StateKey, Part> changed = new LinkedHashMap<>();
+    coefficients.forEach((key, part) -> {
+      Part mapped = part.map(change);
+      if (!Simplifier.isZero(mapped.term())) {
+        changed.put(key, mapped);
+      }
+    });
+    return new Quantity(changed, constant.map(change), newDimension, false, newDepth);
+  }
+
+  /** Returns the quantity as a statement sees it that uses it by name. */
+  Quantity inherited() {
+    Map<StateKey, Part> changed = new LinkedHashMap<>();
+    coefficients.forEach((key, part) -> changed.put(key, part.inherited()));
+    return new Quantity(changed, constant.inherited(), dimension, zero, depth);
+  }
+}

@@ -1,0 +1,87 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.model;
+
+import java.util.ArrayList;
+import java.util.HashSet;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.Set;
+import org.spanloom.language.problem.Nearest;
+
+/**
+ * The names that can be used at some place: those of a system, and around them those of the file.
+ */
+final class Scope {
+
+  private final Optional<Scope> outer;
+  private final Map<String, Meaning> meanings = new LinkedHashMap<>();
+  private final Set<String> used = new HashSet<>();
+  private String timeName = "";
+
+  Scope(Optional<Scope> outer) {
+    this.outer = outer;
+  }
+
+  void define(String name, Meaning meaning) {
+    meanings.put(name, meaning);
+    if (meaning instanceof Meaning.TimeMeaning) {
+      timeName = name;
+    }
+  }
+
+  /** Returns the name of the independent variable; empty outside of systems. */
+  String timeName() {
+    return timeName;
+  }
+
+  /** Returns what a name stands for and notes that it is used. */
+  Optional<Meaning> use(String name) {
+    Meaning meaning = meanings.get(name);
+    if (meaning != null) {
+      used.add(name);
+      return Optional.of(meaning);
+    }
+    return outer.flatMap(o -> o.use(name));
+  }
+
+  /** Returns what a name of this very scope stands for, without using it. */
+  Optional<Meaning> own(String name) {
+    return Optional.ofNullable(meanings.get(name));
+  }
+
+  /** Tells whether a name is declared further out. */
+  boolean isDeclaredOutside(String name) {
+    return outer.isPresent() && (outer.get().meanings.containsKey(name));
+  }
+
+  void markUsed(String name) {
+    if (meanings.containsKey(name)) {
+      used.add(name);
+    } else {
+      outer.ifPresent(o -> o.markUsed(name));
+    }
+  }
+
+  boolean isUsed(String name) {
+    return used.contains(name);
+  }
+
+  /** Returns the declared name, function or constant nearest to a word. */
+  Optional<String> nearest(String word) {
+    List<String> names = new ArrayList<>(meanings.keySet());
+    outer.ifPresent(o -> names.addAll(o.meanings.keySet()));
+    for (Function function : Function.values()) {
+      names.add(function.code());
+    }
+    for (NamedConstant constant : NamedConstant.values()) {
+      names.add(constant.code());
+    }
+    return Nearest.of(word, names);
+  }
+}

@@ -1,0 +1,267 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.model;
+
+import java.util.ArrayList;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Optional;
+import java.util.Set;
+import java.util.function.BooleanSupplier;
+import org.spanloom.language.model.Meaning.BrokenMeaning;
+import org.spanloom.language.model.Meaning.TimeMeaning;
+import org.spanloom.language.problem.ProblemKind;
+import org.spanloom.language.syntax.Lexer;
+import org.spanloom.language.syntax.Name;
+import org.spanloom.language.syntax.OverClause;
+import org.spanloom.language.syntax.Statement;
+import org.spanloom.language.syntax.Statement.AccuracyStatement;
+import org.spanloom.language.syntax.Statement.BasisStatement;
+import org.spanloom.language.syntax.Statement.EquationStatement;
+import org.spanloom.language.syntax.Statement.InitialValuesStatement;
+import org.spanloom.language.syntax.Statement.LaterStatement;
+import org.spanloom.language.syntax.Statement.LetStatement;
+import org.spanloom.language.syntax.Statement.OutputStatement;
+import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.RequireStatement;
+import org.spanloom.language.syntax.Statement.StateStatement;
+import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Statement.UnreadStatement;
+import org.spanloom.language.syntax.Token;
+import org.spanloom.language.syntax.TokenKind;
+import org.spanloom.language.text.SourceText;
+import org.spanloom.language.text.Span;
+import org.spanloom.language.units.UnitOfMeasure;
+
+/** Gives one system its meaning. */
+final class SystemReader {
+
+  private static final double SMALLEST_ACCURACY = 1e-14;
+  private static final double LARGEST_ACCURACY = 1;
+
+  private final SystemStatement statement;
+  private final Declarations globals;
+  private final Problems problems;
+  private final BooleanSupplier cancelled;
+  private final SystemScope system;
+  private final Declarations declarations;
+  private final Set<String> unreadPrimes = new HashSet<>();
+  private final Set<String> unreadNames = new HashSet<>();
+  private boolean hasUnread;
+  private double accuracy = SystemModel.DEFAULT_ACCURACY;
+  private Span accuracySpan;
+
+  SystemReader(
+      SourceText source,
+      SystemStatement statement,
+      Declarations globals,
+      Scope outer,
+      Problems problems,
+      BooleanSupplier cancelled) {
+    this.statement = statement;
+    this.globals = globals;
+    this.problems = problems;
+    this.cancelled = cancelled;
+    Scope scope = new Scope(Optional.of(outer));
+    UnitOfMeasure timeUnit = timeUnit(statement, new UnitResolver(problems), problems);
+    this.system = new SystemScope(source, statement, problems, scope, timeUnit);
+    this.declarations = new Declarations(scope, problems, system.units(), system.resolver());
+    this.accuracySpan = statement.name().span();
+  }
+
+  private static UnitOfMeasure timeUnit(
+      SystemStatement statement, UnitResolver units, Problems problems) {
+    Optional<UnitOfMeasure> unit = statement.over().flatMap(OverClause::unit).flatMap(units::read);
+    if (unit.isPresent() && unit.get().offset() != 0) {
+      problems.report(
+          ProblemKind.UNIT_OFFSET,
+          statement.over().flatMap(OverClause::unit).get().span(),
+          "The independent variable cannot be in a unit with a zero point of its own: write [K].");
+      return UnitOfMeasure.ONE;
+    }
+    return unit.orElse(UnitOfMeasure.ONE);
+  }
+
+  SystemModel read() {
+    collect();
+    declarations.read();
+    Times times = new Times(system, statement.over());
+    EquationReader equations = new EquationReader(system);
+    for (Statement s : statement.body()) {
+      ModelReader.check(cancelled);
+      if (s instanceof EquationStatement equation) {
+        equations.read(equation);
+      }
+    }
+    if (hasUnread) {
+      equations.noteUnread(unreadPrimes);
+    }
+    StateVector vector = equations.stateVector();
+    LinearFormBuilder builder = new LinearFormBuilder(system, equations, vector);
+    Optional<LinearForm> form = builder.build();
+    reportNoStates();
+    Components components = new Components(system, vector, builder);
+    List<Output> outputs = outputs(components);
+    InitialValuesReader initialValues = new InitialValuesReader(system, components, times);
+    BasisReader bases = new BasisReader(system, components, times);
+    initialValues.readDeclarations(statement.header());
+    for (Statement s : statement.body()) {
+      switch (s) {
+        case InitialValuesStatement values -> initialValues.read(values);
+        case BasisStatement basis -> bases.read(basis);
+        case AccuracyStatement stated -> accuracy(stated);
+        default -> {}
+      }
+    }
+    RequirementReader requirements =
+        new RequirementReader(system, components, times, initialValues, bases);
+    for (Statement s : statement.body()) {
+      if (s instanceof RequireStatement require) {
+        requirements.read(require.clause());
+      }
+    }
+    unreadNames.forEach(system.scope()::markUsed);
+    declarations.reportUnused();
+    List<Parameter> parameters = new ArrayList<>(globals.parameters());
+    parameters.addAll(declarations.parameters());
+    List<Let> lets = new ArrayList<>(globals.lets());
+    lets.addAll(declarations.lets());
+    return new SystemModel(
+        statement.name().text(),
+        system.scope().timeName(),
+        system.timeUnit(),
+        times.interval(),
+        parameters,
+        lets,
+        components.list(),
+        outputs,
+        form,
+        initialValues.complete(),
+        bases.bases(),
+        requirements.requirements(),
+        accuracy,
+        accuracySpan,
+        statement.documentation(),
+        statement.span(),
+        statement.name().span());
+  }
+
+  /** Takes all names, so that the order of declarations does not matter. */
+  private void collect() {
+    Scope scope = system.scope();
+    if (statement.over().isPresent() && !statement.over().get().name().text().isEmpty()) {
+      Name time = statement.over().get().name();
+      if (declarations.takesName(time)) {
+        scope.define(time.text(), new TimeMeaning(system.timeUnit(), time.span()));
+      }
+    } else {
+      scope.define("t", new BrokenMeaning(statement.header()));
+    }
+    List<StateStatement> derivatives = new ArrayList<>();
+    for (Statement s : statement.body()) {
+      switch (s) {
+        case ParameterStatement parameter -> declarations.collect(parameter);
+        case LetStatement let -> declarations.collect(let);
+        case OutputStatement output -> declarations.collect(output);
+        case StateStatement state when state.primes() > 0 -> derivatives.add(state);
+        case StateStatement state -> {
+          if (declarations.takesName(state.name())) {
+            system.declareState(state);
+          }
+        }
+        case UnreadStatement unread -> unread(unread.span(), unread.declares());
+        case LaterStatement later -> unread(later.span(), later.declares());
+        case SystemStatement inner -> {}
+        case EquationStatement equation -> {}
+        case InitialValuesStatement values -> {}
+        case BasisStatement basis -> {}
+        case RequireStatement require -> {}
+        case AccuracyStatement stated -> {}
+      }
+    }
+    derivatives.forEach(system::declareDerivative);
+  }
+
+  /** Notes what a statement that could not be read may declare, use or govern. */
+  private void unread(Span span, Optional<Name> declares) {
+    hasUnread = true;
+    declares.ifPresent(name -> {
+      if (system.scope().own(name.text()).isEmpty()) {
+        system.scope().define(name.text(), new BrokenMeaning(name.span()));
+      }
+    });
+    String text = system.slice(span);
+    Token previous = new Token(TokenKind.NEWLINE, 0, 0);
+    for (Token token : Lexer.lex(text)) {
+      if (token.kind().isName()) {
+        unreadNames.add(text.substring(token.start(), token.end()));
+      } else if (token.kind() == TokenKind.PRIMES && previous.kind().isName()) {
+        unreadPrimes.add(text.substring(previous.start(), previous.end()));
+      }
+      previous = token;
+    }
+  }
+
+  private void reportNoStates() {
+    boolean broken = hasUnread || !system.states().isEmpty();
+    boolean declared = statement.body().stream().anyMatch(StateStatement.class::isInstance);
+    if (!broken && !declared) {
+      problems.report(
+          ProblemKind.SYSTEM_WITHOUT_STATES,
+          statement.name().span(),
+          "The system "
+              + statement.name().text()
+              + " has no state: declare one, as in state x = 1, and its equation, as in x' = -x.");
+    }
+  }
+
+  private List<Output> outputs(Components components) {
+    List<Output> outputs = new ArrayList<>();
+    for (Declarations.ReadOutput output : declarations.outputs()) {
+      OutputStatement text = output.statement();
+      components
+          .affine(output.value(), output.unit(), text.value().span())
+          .map(value ->
+              new Output(
+                  text.name().text(),
+                  output.unit(),
+                  value,
+                  text.documentation(),
+                  text.span(),
+                  text.name().span()))
+          .ifPresent(outputs::add);
+    }
+    return outputs;
+  }
+
+  private void accuracy(AccuracyStatement stated) {
+    if (!accuracySpan.equals(statement.name().span())) {
+      problems.report(
+          ProblemKind.STATEMENT_MISPLACED,
+          stated.span(),
+          "The accuracy of the system is stated twice: remove one of the two lines.");
+      return;
+    }
+    accuracySpan = stated.span();
+    Optional<Quantity> value =
+        system.resolver().given(stated.value(), UnitOfMeasure.ONE, "an accuracy", Place.ACCURACY);
+    if (value.isEmpty()) {
+      return;
+    }
+    double asked =
+        value.get().constant().term() instanceof Term.Constant(double number) ? number : Double.NaN;
+    if (asked >= SMALLEST_ACCURACY && asked <= LARGEST_ACCURACY) {
+      accuracy = asked;
+    } else {
+      problems.report(
+          ProblemKind.ACCURACY_OUT_OF_RANGE,
+          stated.value().span(),
+          "An accuracy is a plain number from 1e-14 to 1, relative to the values: \""
+              + system.resolver().shown(stated.value().span())
+              + "\" is not.");
+    }
+  }
+}
