@@ -123,6 +123,7 @@ final class SystemReader {
         requirements.read(require.clause());
       }
     }
+    checkDefinedness(times, form, outputs, initialValues.complete(), bases.bases());
     unreadNames.forEach(system.scope()::markUsed);
     declarations.reportUnused();
     List<Parameter> parameters = new ArrayList<>(globals.parameters());
@@ -235,6 +236,22 @@ final class SystemReader {
           .ifPresent(outputs::add);
     }
     return outputs;
+  }
+
+  private void checkDefinedness(
+      Times times,
+      Optional<LinearForm> form,
+      List<Output> outputs,
+      List<InitialValues> values,
+      List<Basis> bases) {
+    if (times.isKnown()) {
+      double start = DefinednessCheck.start(times, values, bases);
+      DefinednessCheck check = new DefinednessCheck(system, times, start, cancelled);
+      check.lets(declarations.lets());
+      form.ifPresent(check::equations);
+      check.outputs(outputs);
+      check.closedForms(bases);
+    }
   }
 
   private void accuracy(AccuracyStatement stated) {
