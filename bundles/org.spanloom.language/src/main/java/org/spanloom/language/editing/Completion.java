@@ -1,0 +1,290 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.editing;
+
+import java.util.ArrayList;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.Set;
+import org.spanloom.language.model.Function;
+import org.spanloom.language.model.Model;
+import org.spanloom.language.model.NamedConstant;
+import org.spanloom.language.syntax.Lexer;
+import org.spanloom.language.syntax.Statement;
+import org.spanloom.language.syntax.Statement.BasisStatement;
+import org.spanloom.language.syntax.Statement.Declaration;
+import org.spanloom.language.syntax.Statement.InitialValuesStatement;
+import org.spanloom.language.syntax.Statement.LetStatement;
+import org.spanloom.language.syntax.Statement.OutputStatement;
+import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.StateStatement;
+import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Token;
+import org.spanloom.language.syntax.TokenKind;
+import org.spanloom.language.syntax.Words;
+import org.spanloom.language.text.Span;
+import org.spanloom.language.units.UnitNames;
+import org.spanloom.language.units.UnitReader;
+
+/** Proposes what can stand at a caret. */
+public final class Completion {
+
+  private static final List<String> OUTSIDE = List.of("system", "parameter", "let");
+  private static final List<String> INSIDE =
+      List.of(
+          "parameter", "let", "state", "output", "initial values", "basis", "require", "accuracy");
+  private static final String PREFIXES = "kMGmunp";
+
+  private final Model model;
+  private final int offset;
+  private final List<Token> before = new ArrayList<>();
+  private final Span replaced;
+  private final String prefix;
+  private final List<Proposal> proposals = new ArrayList<>();
+  private final Set<String> offered = new HashSet<>();
+
+  /**
+   * A text that can stand at the caret.
+   *
+   * @param text the text to insert
+   * @param detail what it is, in a few words
+   * @param replaced the place it takes: the beginning of the word before the caret
+   */
+  public record Proposal(String text, String detail, Span replaced) {}
+
+  private Completion(Model model, int offset) {
+    this.model = model;
+    this.offset = offset;
+    String content = model.source().content();
+    int lineStart = model.source().lineSpan(model.source().line(offset)).start();
+    int wordStart = offset;
+    for (Token token : Lexer.lexLine(content, lineStart)) {
+      if (token.start() >= offset) {
+        break;
+      }
+      boolean unit = token.kind() == TokenKind.UNIT || token.kind() == TokenKind.OPEN_UNIT;
+      if (unit && (offset < token.end() || token.kind() == TokenKind.OPEN_UNIT)) {
+        wordStart = unitStart(content, token.start() + 1);
+        before.add(token);
+      } else if (token.kind().isWord() && offset <= token.end()) {
+        wordStart = token.start();
+      } else {
+        before.add(token);
+      }
+    }
+    this.replaced = new Span(wordStart, offset);
+    this.prefix = content.substring(wordStart, offset);
+  }
+
+  /** Returns the offset at which the last symbol of a unit begins. */
+  private int unitStart(String content, int from) {
+    int start = offset;
+    while (start > from && "./()".indexOf(content.charAt(start - 1)) < 0) {
+      start--;
+    }
+    return start;
+  }
+
+  /**
+   * Returns what can stand at an offset, what fits best first; of words, those that begin as the
+   * text there does.
+   */
+  public static List<Proposal> at(Model model, int offset) {
+    if (offset < 0 || offset > model.source().content().length()) {
+      return List.of();
+    }
+    return new Completion(model, offset).propose();
+  }
+
+  private List<Proposal> propose() {
+    Token last = before.isEmpty() ? new Token(TokenKind.NEWLINE, 0, 0) : before.getLast();
+    switch (last.kind()) {
+      case COMMENT, DOCUMENTATION, STRING, OPEN_STRING -> {
+        return List.of();
+      }
+      case UNIT, OPEN_UNIT -> {
+        boolean inside =
+            offset > last.start() && (offset < last.end() || last.kind() == TokenKind.OPEN_UNIT);
+        if (inside) {
+          units();
+          return proposals;
+        }
+      }
+      default -> {}
+    }
+    String first = firstWord();
+    if (first.isEmpty()) {
+      beginning();
+    } else {
+      insideStatement(first, text(last));
+    }
+    return proposals;
+  }
+
+  /** Returns the first word of the statement before the caret. */
+  private String firstWord() {
+    String first = "";
+    for (Token token : before) {
+      switch (token.kind()) {
+        case SEMICOLON, OPEN_BRACE, CLOSE_BRACE -> first = "";
+        default -> first = first.isEmpty() ? text(token) : first;
+      }
+    }
+    return first;
+  }
+
+  private String text(Token token) {
+    return model.source().slice(token.span());
+  }
+
+  private Optional<SystemStatement> system() {
+    return Word.systemAt(model.syntax(), offset);
+  }
+
+  private void beginning() {
+    boolean inside = system().filter(s -> offset > s.header().end()).isPresent();
+    (inside ? INSIDE : OUTSIDE).forEach(w -> offer(w, "statement"));
+    if (inside) {
+      offer("row", "row of a basis");
+      states();
+    }
+  }
+
+  private void insideStatement(String first, String last) {
+    switch (last) {
+      case "under" -> initialValues();
+      case "initial" -> offer("values", "initial values NAME { ... }");
+      case "require" -> {
+        Words.REQUIREMENT.forEach(w -> offer(w, "requirement"));
+        values(true);
+      }
+      case "scaled" -> offer("condition", "2-norm condition number of a basis");
+      case "state", "parameter", "let", "output", "system", "values" -> {}
+      case "basis" -> {}
+      default -> {
+        if (isCondition()) {
+          bases();
+        } else if (first.equals("row") && before.size() == 1) {
+          states();
+        } else {
+          values(true);
+          clauses(first);
+        }
+      }
+    }
+  }
+
+  /** Tells whether the caret stands in the parentheses behind {@code condition}. */
+  private boolean isCondition() {
+    int n = before.size();
+    return n > 1
+        && before.get(n - 1).kind() == TokenKind.OPEN_PARENTHESIS
+        && text(before.get(n - 2)).equals("condition");
+  }
+
+  private void clauses(String first) {
+    switch (first) {
+      case "system" ->
+          List.of("over", "from", "to", "after", "before").forEach(w -> offer(w, "interval"));
+      case "state" -> offer("scale", "size below which only absolute errors count");
+      case "initial", "basis" -> offer("at", "time");
+      case "require" ->
+          List.of("throughout", "until", "under").forEach(w -> offer(w, "requirement"));
+      default -> {}
+    }
+  }
+
+  private void values(boolean functions) {
+    List<Statement> statements = new ArrayList<>();
+    system().ifPresent(s -> statements.addAll(s.body()));
+    statements.addAll(model.syntax().statements());
+    for (Statement statement : statements) {
+      if (statement instanceof Declaration declaration) {
+        name(declaration);
+      }
+    }
+    system()
+        .flatMap(SystemStatement::over)
+        .ifPresent(o -> offer(o.name().text(), "independent variable"));
+    if (functions) {
+      for (Function function : Function.values()) {
+        offer(function.code(), function.meaning());
+      }
+      for (NamedConstant constant : NamedConstant.values()) {
+        offer(constant.code(), constant.meaning());
+      }
+    }
+  }
+
+  private void name(Declaration declaration) {
+    String name = declaration.name().text();
+    switch (declaration) {
+      case ParameterStatement p -> offer(name, "parameter" + unit(p.unit().map(u -> u.code())));
+      case LetStatement let ->
+          offer(
+              name + let.argument().map(a -> "(" + a.text() + ")").orElse(""),
+              "named expression" + unit(let.unit().map(u -> u.code())));
+      case StateStatement state ->
+          offer(state.label(), "state" + unit(state.unit().map(u -> u.code())));
+      case OutputStatement output -> offer(name, "output" + unit(output.unit().map(u -> u.code())));
+      case SystemStatement system -> {}
+      case InitialValuesStatement values -> {}
+      case BasisStatement basis -> {}
+    }
+  }
+
+  private static String unit(Optional<String> code) {
+    return code.map(c -> " [" + c + "]").orElse("");
+  }
+
+  private void states() {
+    for (Statement statement : system().map(SystemStatement::body).orElse(List.of())) {
+      if (statement instanceof StateStatement state) {
+        offer(state.label(), "state" + unit(state.unit().map(u -> u.code())));
+      }
+    }
+  }
+
+  private void initialValues() {
+    for (Statement statement : system().map(SystemStatement::body).orElse(List.of())) {
+      if (statement instanceof InitialValuesStatement values) {
+        offer(values.name().text(), "initial values");
+      }
+    }
+  }
+
+  private void bases() {
+    for (Statement statement : system().map(SystemStatement::body).orElse(List.of())) {
+      if (statement instanceof BasisStatement basis) {
+        offer(basis.name().text(), "basis");
+      }
+    }
+  }
+
+  private void units() {
+    for (UnitReader.Symbol symbol : UnitReader.known()) {
+      String quantity = UnitNames.quantity(symbol.dimension()).map(q -> ", " + q).orElse("");
+      boolean metricPrefix =
+          symbol.takesPrefix()
+              && prefix.length() > 1
+              && PREFIXES.indexOf(prefix.charAt(0)) >= 0
+              && symbol.code().startsWith(prefix.substring(1));
+      offer(symbol.code(), symbol.name() + quantity);
+      if (metricPrefix) {
+        offer(prefix.charAt(0) + symbol.code(), symbol.name() + quantity);
+      }
+    }
+  }
+
+  private void offer(String text, String detail) {
+    boolean begins = text.toLowerCase(Locale.ROOT).startsWith(prefix.toLowerCase(Locale.ROOT));
+    if (begins && !text.isEmpty() && offered.add(text)) {
+      proposals.add(new Proposal(text, detail, replaced));
+    }
+  }
+}

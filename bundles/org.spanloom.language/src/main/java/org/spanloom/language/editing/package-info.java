@@ -1,0 +1,21 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+
+/**
+ * What an editor asks about a model, answered as plain data: offsets, labels, texts to insert.
+ *
+ * <table>
+ * <caption>Questions and answers</caption>
+ * <tr><td>What is in the file?</td><td>{@link org.spanloom.language.editing.Outline}</td></tr>
+ * <tr><td>What can be folded?</td><td>{@link org.spanloom.language.editing.Folding}</td></tr>
+ * <tr><td>What is this?</td><td>{@link org.spanloom.language.editing.Hover}</td></tr>
+ * <tr><td>Where is this declared?</td><td>{@link org.spanloom.language.editing.Definition}</td></tr>
+ * <tr><td>What can stand here?</td><td>{@link org.spanloom.language.editing.Completion}</td></tr>
+ * </table>
+ *
+ * <p>Nothing here knows an editor, and every answer works on texts with errors.
+ */
+package org.spanloom.language.editing;
