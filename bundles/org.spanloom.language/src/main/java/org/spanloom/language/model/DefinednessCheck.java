@@ -18,8 +18,9 @@ import org.spanloom.language.text.Span;
 import org.spanloom.language.units.UnitOfMeasure;
 
 /**
- * Reports coefficients that have no finite value somewhere inside the interval, each place in the text once. A named
- * expression at fault is reported where it is declared and not again where it is used.
+ * Reports coefficients that have no finite value somewhere inside the interval, each place in the
+ * text once. A named expression at fault is reported where it is declared and not again where it is
+ * used.
  */
 final class DefinednessCheck {
 
@@ -200,7 +201,8 @@ final class DefinednessCheck {
     String left =
         ownStart && Double.isInfinite(whole.start())
             ? ""
-            : (ownStart && !whole.startOpen() ? "from " : "after ") + Times.number(undefined.from());
+            : (ownStart && !whole.startOpen() ? "from " : "after ")
+                + Times.number(undefined.from());
     String right =
         ownEnd && Double.isInfinite(whole.end())
             ? ""
@@ -217,7 +219,10 @@ final class DefinednessCheck {
     return times.unit().equals(UnitOfMeasure.ONE) ? "" : " [" + times.unit().code() + "]";
   }
 
-  /** Returns a time of the interval at which something stands: its left end, else a time of initial values or of a basis. */
+  /**
+   * Returns a time of the interval at which something stands: its left end, else a time of initial
+   * values or of a basis.
+   */
   static double start(Times times, List<InitialValues> values, List<Basis> bases) {
     if (Double.isFinite(times.interval().start())) {
       return times.interval().start();
@@ -226,11 +231,7 @@ final class DefinednessCheck {
         values.stream()
             .map(InitialValues::time)
             .findFirst()
-            .or(
-                () ->
-                    bases.stream()
-                        .flatMap(b -> time(b).stream())
-                        .findFirst());
+            .or(() -> bases.stream().flatMap(b -> time(b).stream()).findFirst());
     return named.map(t -> times.unit().fromBase(TermEvaluator.constant(t))).orElse(0.0);
   }
 
