@@ -6,18 +6,20 @@
 package org.spanloom.workspace.tests;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertInstanceOf;
 
 import javax.measure.Unit;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import org.spanloom.language.units.UnitReader;
 import systems.uom.ucum.format.UCUMFormat;
 import tech.units.indriya.unit.Units;
 
 /**
- * The units libraries work as bundles. Their parser is driven by class names that one library loads
- * for another; without the fragment {@code org.spanloom.units.ucum} it fails in a workbench
- * although it works on a class path.
+ * The units libraries work as bundles and agree there with the language's own reader. Their parser
+ * is driven by class names that one library loads for another; without the fragment {@code
+ * org.spanloom.units.ucum} it fails in a workbench although it works on a class path.
  */
 class UnitsInBundlesTests {
 
@@ -38,11 +40,16 @@ class UnitsInBundlesTests {
     Unit<?> source = parse(from);
     Unit<?> target = parse(to);
     assertEquals(factor, source.getConverterToAny(target).convert(1.0), 1e-12 * factor);
+    assertEquals(factor, size(from) / size(to), 1e-12 * factor, "the language's own reader");
   }
 
   @Test
   void knowsTheDimensionOfACompoundUnit() {
     assertEquals(Units.WATT.getDimension(), parse("kg.m2/s3").getDimension());
+  }
+
+  private static double size(String code) {
+    return assertInstanceOf(UnitReader.Known.class, UnitReader.read(code)).unit().factor();
   }
 
   private static Unit<?> parse(String code) {
