@@ -23,6 +23,8 @@ final class IntervalFunctions {
 
   private static final int HYPERBOLIC_ULPS = 5;
 
+  private static final int LARGEST_PRODUCT = 64;
+
   private static final Interval UNIT = new Interval(-1, 1);
   private static final Interval POSITIVE = new Interval(0, Double.POSITIVE_INFINITY);
 
@@ -72,9 +74,25 @@ final class IntervalFunctions {
     }
     if (n % 2 == 0) {
       Interval size = x.absolute();
-      return new Interval(Math.max(0, pow(size.low(), n, -1)), pow(size.high(), n, 1));
+      return wholeAt(size.low(), n).hull(wholeAt(size.high(), n)).larger(Interval.at(0));
     }
-    return new Interval(pow(x.low(), n, -1), pow(x.high(), n, 1));
+    return wholeAt(x.low(), n).hull(wholeAt(x.high(), n));
+  }
+
+  /** Encloses one power; by products, which keep exact results exact, unless there are too many. */
+  private static Interval wholeAt(double x, double n) {
+    if (n > LARGEST_PRODUCT || Double.isInfinite(x)) {
+      return new Interval(pow(x, n, -1), pow(x, n, 1));
+    }
+    Interval power = Interval.at(1);
+    Interval square = Interval.at(x);
+    for (int rest = (int) n; rest > 0; rest /= 2) {
+      if (rest % 2 == 1) {
+        power = power.times(square);
+      }
+      square = square.squared();
+    }
+    return power;
   }
 
   /** Encloses powers of the parts of the base that are not negative. */
@@ -137,6 +155,9 @@ final class IntervalFunctions {
    */
   private static double outward(double value, int ulps, int side) {
     double end = value;
+    if (Double.isInfinite(value)) {
+      return Interval.next(value, side);
+    }
     for (int i = 0; i < ulps; i++) {
       end = Interval.next(end, side);
     }

@@ -21,6 +21,8 @@ public final class TermIntervals {
    */
   private final Map<Integer, Interval> exponents = new HashMap<>();
 
+  private final Map<Integer, Interval> narrowed = new HashMap<>();
+
   /** Prepares a term; nodes without time are enclosed once. */
   TermIntervals(TermTape tape) {
     this.tape = tape;
@@ -52,9 +54,22 @@ public final class TermIntervals {
 
   /** Encloses all nodes over a range of times. */
   void enclose(Interval times) {
+    narrowed.clear();
+    compute(times);
+  }
+
+  /** Uses what is known better about a node, for it and for all that rests on it. */
+  void narrow(int node, Interval range, Interval times) {
+    narrowed.put(node, range);
+    compute(times);
+  }
+
+  private void compute(Interval times) {
     for (int i = 0; i < ranges.length; i++) {
       if (tape.varies(i)) {
-        ranges[i] = range(i, times);
+        Interval range = range(i, times);
+        Interval better = narrowed.isEmpty() ? null : narrowed.get(i);
+        ranges[i] = better == null ? range : range.intersect(better);
       }
     }
   }

@@ -19,15 +19,26 @@ import java.util.Map;
  */
 final class TermTape {
 
-  private final List<Term> nodes = new ArrayList<>();
-  private final List<int[]> operands = new ArrayList<>();
-  private final List<Boolean> varying = new ArrayList<>();
+  private final Term[] nodes;
+  private final int[][] operands;
+  private final boolean[] varying;
 
-  private TermTape() {}
+  private TermTape(List<Term> nodes, List<int[]> operands) {
+    this.nodes = nodes.toArray(Term[]::new);
+    this.operands = operands.toArray(int[][]::new);
+    this.varying = new boolean[this.nodes.length];
+    for (int i = 0; i < varying.length; i++) {
+      varying[i] = this.nodes[i] instanceof Term.Time;
+      for (int operand : this.operands[i]) {
+        varying[i] |= varying[operand];
+      }
+    }
+  }
 
   /** Lays out a term; the values of its parameters and named expressions belong to it. */
   static TermTape of(Term root) {
-    TermTape tape = new TermTape();
+    List<Term> nodes = new ArrayList<>();
+    List<int[]> operands = new ArrayList<>();
     Map<Object, Integer> places = new IdentityHashMap<>();
     Deque<Term> open = new ArrayDeque<>();
     open.push(root);
@@ -48,10 +59,12 @@ final class TermTape {
       if (ready) {
         open.pop();
         int[] indices = below.stream().mapToInt(operand -> places.get(identity(operand))).toArray();
-        places.put(identity(term), tape.add(term, indices));
+        places.put(identity(term), nodes.size());
+        nodes.add(term);
+        operands.add(indices);
       }
     }
-    return tape;
+    return new TermTape(nodes, operands);
   }
 
   /**
@@ -74,17 +87,6 @@ final class TermTape {
     };
   }
 
-  private int add(Term term, int[] below) {
-    boolean varies = term instanceof Term.Time;
-    for (int operand : below) {
-      varies |= varying.get(operand);
-    }
-    nodes.add(term);
-    operands.add(below);
-    varying.add(varies);
-    return nodes.size() - 1;
-  }
-
   /** Returns the terms right below a term; for a parameter or a named expression, its value. */
   static List<Term> operands(Term term) {
     return switch (term) {
@@ -104,21 +106,21 @@ final class TermTape {
 
   /** Returns the number of nodes; the last one is the term itself. */
   int size() {
-    return nodes.size();
+    return nodes.length;
   }
 
   /** Returns a node. */
   Term node(int index) {
-    return nodes.get(index);
+    return nodes[index];
   }
 
   /** Returns the index of an operand of a node. */
   int operand(int index, int which) {
-    return operands.get(index)[which];
+    return operands[index][which];
   }
 
   /** Tells whether time occurs in a node. */
   boolean varies(int index) {
-    return varying.get(index);
+    return varying[index];
   }
 }
