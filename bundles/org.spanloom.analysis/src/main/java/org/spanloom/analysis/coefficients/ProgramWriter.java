@@ -13,7 +13,7 @@ import org.objectweb.asm.MethodVisitor;
 import org.objectweb.asm.Opcodes;
 
 /**
- * Writes a {@link Program} as a class of its own, in JVM byte code.
+ * Writes a {@link Program} as classes of its own, in JVM byte code.
  *
  * <p>Nodes that are used twice, and nodes on top of a high tree, get a variable, written once. The
  * code is cut into methods of a few kilobytes, because the just-in-time compiler leaves larger ones
@@ -33,6 +33,12 @@ final class ProgramWriter {
 
   /** Estimated bytes of code in a method, well below the limit of the just-in-time compiler. */
   private static final int METHOD_BYTES = 5_000;
+
+  /**
+   * Methods of a class; 20 of them hold at most 33,000 of the 65,535 constants that a class may
+   * have.
+   */
+  private static final int METHODS = 20;
 
   /** Largest number of local variables of the one-method form. */
   private static final int LOCALS = 200;
@@ -108,29 +114,36 @@ final class ProgramWriter {
         steps.add(new Step(targets[place], place));
       }
     }
-    return define(classOf(parts(steps), variables));
+    List<List<Step>> methods = methods(steps);
+    sharedVariables = methods.size() > 1 || variables > LOCALS;
+    List<LinkedProgram.Part> parts = new ArrayList<>();
+    for (int from = 0; from < methods.size(); from += METHODS) {
+      int to = Math.min(methods.size(), from + METHODS);
+      parts.add(define(classOf(methods.subList(from, to))));
+    }
+    return new LinkedProgram(parts, sharedVariables ? variables : 0);
   }
 
   private static int of(int[] measure, int node) {
     return node < 0 ? 0 : measure[node];
   }
 
-  private List<List<Step>> parts(List<Step> steps) {
-    List<List<Step>> parts = new ArrayList<>();
+  private List<List<Step>> methods(List<Step> steps) {
+    List<List<Step>> methods = new ArrayList<>();
     List<Step> part = new ArrayList<>();
     int bytes = 0;
     for (Step step : steps) {
       int size = 12 + bytes(step.node(), true);
       if (bytes + size > METHOD_BYTES && !part.isEmpty()) {
-        parts.add(part);
+        methods.add(part);
         part = new ArrayList<>();
         bytes = 0;
       }
       part.add(step);
       bytes += size;
     }
-    parts.add(part);
-    return parts;
+    methods.add(part);
+    return methods;
   }
 
   /** Estimates the code of a node from above. */
@@ -145,8 +158,7 @@ final class ProgramWriter {
         + (node.right() < 0 ? 0 : bytes(node.right(), false));
   }
 
-  private byte[] classOf(List<List<Step>> parts, int variables) {
-    sharedVariables = parts.size() > 1 || variables > LOCALS;
+  private byte[] classOf(List<List<Step>> methods) {
     ClassWriter out = new ClassWriter(ClassWriter.COMPUTE_MAXS);
     out.visit(
         Opcodes.V21,
@@ -154,23 +166,20 @@ final class ProgramWriter {
         NAME,
         null,
         "java/lang/Object",
-        new String[] {Program.class.getName().replace('.', '/')});
+        new String[] {LinkedProgram.Part.class.getName().replace('.', '/')});
     MethodVisitor init = out.visitMethod(0, "<init>", "()V", null, null);
     init.visitCode();
     init.visitVarInsn(Opcodes.ALOAD, 0);
     init.visitMethodInsn(Opcodes.INVOKESPECIAL, "java/lang/Object", "<init>", "()V", false);
     end(init);
-    MethodVisitor run = out.visitMethod(Opcodes.ACC_PUBLIC, "run", "(D[D)V", null, null);
+    MethodVisitor run = out.visitMethod(Opcodes.ACC_PUBLIC, "run", PART, null, null);
     run.visitCode();
-    push(run, sharedVariables ? variables : 0);
-    run.visitIntInsn(Opcodes.NEWARRAY, Opcodes.T_DOUBLE);
-    run.visitVarInsn(Opcodes.ASTORE, 4);
-    for (int k = 0; k < parts.size(); k++) {
+    for (int k = 0; k < methods.size(); k++) {
       run.visitVarInsn(Opcodes.DLOAD, 1);
-      run.visitVarInsn(Opcodes.ALOAD, 4);
       run.visitVarInsn(Opcodes.ALOAD, 3);
+      run.visitVarInsn(Opcodes.ALOAD, 4);
       run.visitMethodInsn(Opcodes.INVOKESTATIC, NAME, "part" + k, PART, false);
-      part(out, "part" + k, parts.get(k));
+      part(out, "part" + k, methods.get(k));
     }
     end(run);
     out.visitEnd();
@@ -294,10 +303,10 @@ final class ProgramWriter {
     code.visitMethodInsn(Opcodes.INVOKESTATIC, STRICT_MATH, method, two ? "(DD)D" : "(D)D", false);
   }
 
-  private static Program define(byte[] bytes) {
+  private static LinkedProgram.Part define(byte[] bytes) {
     try {
       MethodHandles.Lookup lookup = MethodHandles.lookup().defineHiddenClass(bytes, true);
-      return (Program) lookup.lookupClass().getDeclaredConstructor().newInstance();
+      return (LinkedProgram.Part) lookup.lookupClass().getDeclaredConstructor().newInstance();
     } catch (ReflectiveOperationException e) {
       throw new IllegalStateException("the program just written cannot be loaded", e);
     }

@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.stream.Collectors;
 import org.spanloom.analysis.CheckReport;
+import org.spanloom.analysis.Figures;
 import org.spanloom.analysis.Finding;
 import org.spanloom.analysis.SystemReport;
 import org.spanloom.analysis.basis.BasisReport;
@@ -86,37 +87,26 @@ public final class TextReport {
   }
 
   private static String basis(SystemModel system, BasisReport basis) {
-    String unit = system.timeUnit().code().equals("1") ? "" : " " + system.timeUnit().code();
     return String.format(
         Locale.ROOT,
-        "basis     %s%s: condition %s at %s%s, scaled %s at %s%s; %.1f digits left; %s",
+        "basis     %s%s: condition %s at %s, scaled %s at %s; %.1f digits left; %s",
         basis.name(),
         basis.declared() ? "" : " (not declared)",
-        condition(basis.worstRaw()),
-        time(basis.worstRawTime()),
-        unit,
-        condition(basis.worstScaled()),
-        time(basis.worstScaledTime()),
-        unit,
+        Figures.condition(basis.worstRaw()),
+        Figures.at(system, basis.worstRawTime()),
+        Figures.condition(basis.worstScaled()),
+        Figures.at(system, basis.worstScaledTime()),
         basis.digitsLeft(),
         windows(basis));
   }
 
   private static String windows(BasisReport basis) {
-    String limit = String.format(Locale.ROOT, "%.0e", basis.windowLimit());
+    String limit = Figures.text(basis.windowLimit(), 2);
     if (basis.windows().isEmpty()) {
       return "windows below " + limit + " not counted";
     }
     int count = basis.windows().getAsInt();
     return count == 1 ? "one window below " + limit : count + " windows keep it below " + limit;
-  }
-
-  private static String condition(double value) {
-    return Double.isInfinite(value) ? "beyond 1e16" : String.format(Locale.ROOT, "%.3g", value);
-  }
-
-  private static String time(double value) {
-    return String.format(Locale.ROOT, "%.6g", value).replaceFirst("\\.?0+$", "");
   }
 
   /** Returns the closing line over all files. */

@@ -5,8 +5,8 @@
  */
 package org.spanloom.analysis.requirement;
 
-import java.util.Locale;
 import java.util.OptionalDouble;
+import org.spanloom.analysis.Figures;
 import org.spanloom.analysis.coefficients.AffineEvaluator.Estimate;
 import org.spanloom.analysis.requirement.RequirementResult.Status;
 import org.spanloom.language.model.Relation;
@@ -55,27 +55,14 @@ final class Margins {
     Status status = status(relation, margin, error);
     double value = unit.fromBase(left.value());
     double limit = unit.fromBase(right.value());
-    String code = unit.code().equals("1") ? "" : " " + unit.code();
-    String at =
-        time.isPresent()
-            ? String.format(
-                Locale.ROOT,
-                " at %s = %.6g %s",
-                system.timeName(),
-                time.getAsDouble(),
-                system.timeUnit().code().equals("1") ? "" : system.timeUnit().code())
-            : "";
+    String at = time.isPresent() ? " at " + Figures.at(system, time.getAsDouble()) : "";
     String detail =
-        String.format(
-            Locale.ROOT,
-            "%.7g%s%s, margin %.3g%s with an estimated error of %.1g%s",
-            value,
-            code,
-            at.stripTrailing(),
-            margin,
-            code,
-            error,
-            code);
+        "%s%s, margin %s with an estimated error of %s"
+            .formatted(
+                Figures.text(value, 7, unit.code()),
+                at,
+                Figures.text(margin, 3, unit.code()),
+                Figures.text(error, 1));
     return new RequirementResult(
         system.name(),
         requirement.text(),

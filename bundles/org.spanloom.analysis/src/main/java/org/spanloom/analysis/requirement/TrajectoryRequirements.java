@@ -6,10 +6,10 @@
 package org.spanloom.analysis.requirement;
 
 import java.util.List;
-import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.DoubleUnaryOperator;
+import org.spanloom.analysis.Figures;
 import org.spanloom.analysis.SystemSolutions;
 import org.spanloom.analysis.coefficients.AffineEvaluator;
 import org.spanloom.analysis.coefficients.AffineEvaluator.Estimate;
@@ -156,15 +156,12 @@ final class TrajectoryRequirements {
     double value = along.state(worstTime)[worst];
     double error = along.error(worstTime)[worst];
     String detail =
-        String.format(
-            Locale.ROOT,
-            "least is %s = %.4g %s at %s = %.6g, with an estimated error of %.1g",
-            state.label(),
-            value,
-            state.unit().code(),
-            system.model().timeName(),
-            worstTime,
-            error);
+        "least is %s = %s at %s, with an estimated error of %s"
+            .formatted(
+                state.label(),
+                Figures.text(value, 4, state.unit().code()),
+                Figures.at(system.model(), worstTime),
+                Figures.text(error, 1));
     return new RequirementResult(
         system.model().name(),
         requirement.text(),

@@ -98,7 +98,7 @@ public final class Choice {
    * @param wanted the name wanted; empty takes the only one
    * @param owner whose things they are
    */
-  static <T> T pick(
+  public static <T> T pick(
       String kind, List<T> all, Function<T, String> nameOf, Optional<String> wanted, String owner)
       throws RefusedException {
     if (wanted.isEmpty() && all.size() == 1) {

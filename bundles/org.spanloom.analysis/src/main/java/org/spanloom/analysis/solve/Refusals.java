@@ -5,7 +5,7 @@
  */
 package org.spanloom.analysis.solve;
 
-import java.util.Locale;
+import org.spanloom.analysis.Figures;
 import org.spanloom.analysis.coefficients.CompiledSystem;
 import org.spanloom.numerics.Outcome;
 
@@ -17,13 +17,7 @@ public final class Refusals {
   /** Returns one sentence or two: what happened, where, and what to do. */
   public static String text(CompiledSystem system, Outcome.Unsolved<?> unsolved) {
     String place =
-        String.format(
-            Locale.ROOT,
-            "%s: at %s = %.10g [%s] ",
-            system.model().name(),
-            system.model().timeName(),
-            unsolved.time(),
-            system.model().timeUnit().code());
+        "%s: at %s ".formatted(system.model().name(), Figures.at(system.model(), unsolved.time()));
     String what =
         switch (unsolved.reason()) {
           case COEFFICIENT_NOT_FINITE ->

@@ -1,0 +1,41 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.analysis;
+
+import org.spanloom.analysis.coefficients.CompiledSystem;
+import org.spanloom.numerics.Side;
+import org.spanloom.numerics.solution.Solution;
+
+/**
+ * The largest estimated error of a trajectory, relative to the larger of the value and the scale of
+ * its state.
+ *
+ * @param relative the error
+ * @param component in which component
+ * @param time when
+ */
+record Reached(double relative, int component, double time) {
+
+  /** Returns the worst one at the steps of the method. */
+  static Reached worst(CompiledSystem system, Solution solution) {
+    int n = system.dimension();
+    double[] x = new double[n];
+    double[] e = new double[n];
+    Reached worst = new Reached(0, 0, solution.startTime());
+    for (double t : solution.nodes()) {
+      solution.value(t, Side.AFTER, x);
+      solution.errorEstimate(t, e);
+      for (int i = 0; i < n; i++) {
+        double scale = system.model().states().get(i).scale();
+        double relative = e[i] / Math.max(Math.abs(x[i]), scale);
+        if (relative > worst.relative()) {
+          worst = new Reached(relative, i, t);
+        }
+      }
+    }
+    return worst;
+  }
+}

@@ -1,0 +1,42 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.analysis.coefficients;
+
+import java.util.List;
+
+/**
+ * A program of several classes that share variables.
+ *
+ * @param parts the classes, in the order to run
+ * @param variables number of shared variables
+ */
+record LinkedProgram(List<Part> parts, int variables) implements Program {
+
+  /** Copies the list. */
+  LinkedProgram {
+    parts = List.copyOf(parts);
+  }
+
+  /** The interface of a written class. */
+  interface Part {
+    /**
+     * Computes variables and values.
+     *
+     * @param t time, in the declared unit of the system
+     * @param variables shared with the other parts
+     * @param out receives values at their places
+     */
+    void run(double t, double[] variables, double[] out);
+  }
+
+  @Override
+  public void run(double t, double[] out) {
+    double[] shared = new double[variables];
+    for (Part part : parts) {
+      part.run(t, shared, out);
+    }
+  }
+}

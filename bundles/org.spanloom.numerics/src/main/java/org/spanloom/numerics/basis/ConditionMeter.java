@@ -1,0 +1,136 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.numerics.basis;
+
+import java.util.Arrays;
+import org.ejml.data.DMatrixRMaj;
+import org.ejml.dense.row.factory.DecompositionFactory_DDRM;
+import org.ejml.interfaces.decomposition.SingularValueDecomposition_F64;
+import org.spanloom.numerics.LinearSystem;
+import org.spanloom.numerics.Side;
+import org.spanloom.numerics.internal.algebra.LuFactors;
+import org.spanloom.numerics.internal.algebra.Rows;
+import org.spanloom.numerics.internal.work.Watch;
+import org.spanloom.numerics.solution.Solution;
+
+/** Takes condition samples of one solution. For one thread. */
+final class ConditionMeter {
+
+  /**
+   * Up to this number of columns singular values are computed by Jacobi rotations, above it by
+   * EJML.
+   */
+  private static final int JACOBI = 40;
+
+  private static final double ROUNDING = 0x1p-53;
+
+  private final Solution solution;
+  private final TraceIntegral trace;
+  private final Watch watch;
+  private final int n;
+  private final int m;
+  private final double startLog;
+
+  ConditionMeter(LinearSystem system, Solution solution, Watch watch) {
+    this.solution = solution;
+    this.watch = watch;
+    this.n = solution.dimension();
+    this.m = solution.columns();
+    this.trace = new TraceIntegral(system, solution.nodes(), solution.startTime(), watch);
+    Scaled start = new Scaled(solution.startTime());
+    this.startLog = start.determinant().log();
+  }
+
+  /** A determinant by the logarithm of its size and its sign. */
+  private record Determinant(double log, int sign) {}
+
+  /** The columns at a time, as they are and scaled to length 1. */
+  private final class Scaled {
+    final double[] x = new double[n * m];
+    final double[] unit = new double[n * m];
+    double logNorms;
+    double error;
+    boolean vanishes;
+
+    Scaled(double t) {
+      double[] e = new double[n * m];
+      solution.value(t, Side.AFTER, x);
+      solution.errorEstimate(t, e);
+      for (int j = 0; j < m; j++) {
+        double norm = norm(x, j);
+        double size = norm(e, j);
+        vanishes |= !(norm > 0);
+        logNorms += Math.log(norm);
+        error = Math.max(error, norm > 0 ? size / norm : Double.POSITIVE_INFINITY);
+        for (int i = 0; i < n; i++) {
+          unit[i * m + j] = norm > 0 ? x[i * m + j] / norm : 0;
+        }
+      }
+    }
+
+    private double norm(double[] values, int j) {
+      double[] column = new double[n];
+      for (int i = 0; i < n; i++) {
+        column[i] = values[i * m + j];
+      }
+      return JacobiSingularValues.norm(column);
+    }
+
+    Determinant determinant() {
+      if (n != m || vanishes) {
+        return new Determinant(Double.NEGATIVE_INFINITY, 0);
+      }
+      LuFactors lu = LuFactors.of(Rows.of(unit, n, n), watch);
+      return lu.isSingular()
+          ? new Determinant(Double.NEGATIVE_INFINITY, 0)
+          : new Determinant(lu.logDeterminant() + logNorms, lu.determinantSign());
+    }
+  }
+
+  /**
+   * Takes a sample.
+   *
+   * <p>The scaled columns are known to the relative error e of the worst one, which may move a
+   * singular value by sqrt(m) e. Where the smallest is no larger, nobody can tell it from 0, and
+   * the condition is reported as infinite.
+   */
+  ConditionSample at(double t) {
+    Scaled columns = new Scaled(t);
+    double[] raw = singularValues(columns.x);
+    double[] scaled = singularValues(columns.unit);
+    double noise = Math.sqrt(m) * Math.max(columns.error, ROUNDING);
+    boolean resolved = !columns.vanishes && scaled[m - 1] > noise;
+    Determinant determinant = columns.determinant();
+    return new ConditionSample(
+        t,
+        raw,
+        resolved ? raw[0] / raw[m - 1] : Double.POSITIVE_INFINITY,
+        resolved ? scaled[0] / scaled[m - 1] : Double.POSITIVE_INFINITY,
+        determinant.log(),
+        determinant.sign(),
+        startLog + trace.at(t),
+        columns.error);
+  }
+
+  private double[] singularValues(double[] values) {
+    if (m <= JACOBI) {
+      return JacobiSingularValues.of(values, n, m, watch);
+    }
+    watch.ask();
+    SingularValueDecomposition_F64<DMatrixRMaj> svd =
+        DecompositionFactory_DDRM.svd(n, m, false, false, true);
+    DMatrixRMaj matrix = new DMatrixRMaj(n, m);
+    System.arraycopy(values, 0, matrix.data, 0, n * m);
+    svd.decompose(matrix);
+    double[] sorted = svd.getSingularValues().clone();
+    Arrays.sort(sorted);
+    double[] largestFirst = new double[m];
+    for (int k = 0; k < m; k++) {
+      largestFirst[k] = sorted[sorted.length - 1 - k];
+    }
+    return largestFirst;
+  }
+}

@@ -1,0 +1,213 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.numerics.basis;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.Comparator;
+import java.util.List;
+import java.util.OptionalDouble;
+import java.util.function.DoublePredicate;
+import java.util.function.Predicate;
+import java.util.function.ToDoubleFunction;
+import java.util.stream.DoubleStream;
+import java.util.stream.IntStream;
+import org.spanloom.numerics.LinearSystem;
+import org.spanloom.numerics.Outcome;
+import org.spanloom.numerics.Progress;
+import org.spanloom.numerics.TimeRange;
+import org.spanloom.numerics.internal.work.Cancelled;
+import org.spanloom.numerics.internal.work.Hopeless;
+import org.spanloom.numerics.internal.work.Watch;
+import org.spanloom.numerics.solution.Solution;
+
+/**
+ * How sound a basis is along a range: condition samples at the steps of the method and between
+ * them, with the worst ones refined.
+ *
+ * <p>The raw condition number mixes size and direction of the columns; scaling each to length 1 is
+ * within sqrt(n) of the best column scaling (van der Sluis, Numer. Math. 14 (1969) 14; from
+ * memory), so the scaled one tells about the directions alone.
+ */
+public final class ConditionProfile {
+
+  private static final int EVEN = 64;
+  private static final int MOST_SAMPLES = 300;
+  private static final double MOST_WORK = 4e9;
+  private static final int REFINEMENTS = 24;
+  private static final double GOLDEN = (Math.sqrt(5) - 1) / 2;
+
+  private final ConditionMeter meter;
+  private final List<ConditionSample> samples;
+  private final ConditionSample worstRaw;
+  private final ConditionSample worstScaled;
+  private final double startTime;
+
+  private ConditionProfile(ConditionMeter meter, List<ConditionSample> samples, double startTime) {
+    this.meter = meter;
+    this.samples = List.copyOf(samples);
+    this.startTime = startTime;
+    this.worstRaw = worst(ConditionSample::raw);
+    this.worstScaled = worst(ConditionSample::scaled);
+  }
+
+  /**
+   * Follows the conditioning of a basis.
+   *
+   * @param system the system
+   * @param basis columns that solve the homogeneous system; as many as states, or fewer
+   * @param over where to look; bounded and inside the range of the basis
+   * @param progress watched and asked while working
+   * @return the profile
+   */
+  public static Outcome<ConditionProfile> of(
+      LinearSystem system, Solution basis, TimeRange over, Progress progress) {
+    try {
+      ConditionMeter meter = new ConditionMeter(system, basis, new Watch(progress));
+      List<ConditionSample> samples = new ArrayList<>();
+      double[] times = times(basis, over);
+      for (int k = 0; k < times.length; k++) {
+        samples.add(meter.at(times[k]));
+        progress.worked((k + 1.0) / times.length);
+      }
+      return new Outcome.Solved<>(new ConditionProfile(meter, samples, basis.startTime()));
+    } catch (Cancelled cancelled) {
+      return new Outcome.Cancelled<>();
+    } catch (Hopeless hopeless) {
+      return hopeless.outcome();
+    }
+  }
+
+  /**
+   * Takes samples at given times only.
+   *
+   * @param system the system
+   * @param basis columns that solve the homogeneous system
+   * @param times times inside the range of the basis, in any order
+   * @param progress asked while working
+   * @return one sample for each time, in the order given
+   */
+  public static Outcome<List<ConditionSample>> at(
+      LinearSystem system, Solution basis, List<Double> times, Progress progress) {
+    try {
+      ConditionMeter meter = new ConditionMeter(system, basis, new Watch(progress));
+      return new Outcome.Solved<>(times.stream().map(meter::at).toList());
+    } catch (Cancelled cancelled) {
+      return new Outcome.Cancelled<>();
+    } catch (Hopeless hopeless) {
+      return hopeless.outcome();
+    }
+  }
+
+  /** Even steps, the steps of the method thinned out to what the work allows, and both ends. */
+  private static double[] times(Solution basis, TimeRange over) {
+    if (over.length() == 0) {
+      return new double[] {over.start()};
+    }
+    double cost = 40.0 * Math.pow(Math.max(1, basis.dimension()), 3);
+    int most = (int) Math.clamp(MOST_WORK / cost, 24, MOST_SAMPLES);
+    int even = Math.min(EVEN, most / 2);
+    double[] nodes = Arrays.stream(basis.nodes()).filter(over::contains).toArray();
+    int stride = 1 + nodes.length / (most - even);
+    DoubleStream some =
+        IntStream.range(0, nodes.length).filter(k -> k % stride == 0).mapToDouble(k -> nodes[k]);
+    DoubleStream steps =
+        IntStream.rangeClosed(0, even)
+            .mapToDouble(k -> k == even ? over.end() : over.start() + over.length() * k / even);
+    return DoubleStream.concat(some, steps).sorted().distinct().toArray();
+  }
+
+  /** Returns the samples by time. */
+  public List<ConditionSample> samples() {
+    return samples;
+  }
+
+  /**
+   * Returns the sample of the largest raw condition number; where it is infinite, the one nearest
+   * to the start.
+   */
+  public ConditionSample worstRaw() {
+    return worstRaw;
+  }
+
+  /**
+   * Returns the sample of the largest scaled condition number; where it is infinite, the one
+   * nearest to the start.
+   */
+  public ConditionSample worstScaled() {
+    return worstScaled;
+  }
+
+  private ConditionSample worst(ToDoubleFunction<ConditionSample> measure) {
+    Comparator<ConditionSample> bySize = Comparator.comparingDouble(measure);
+    Comparator<ConditionSample> byDistance =
+        Comparator.comparingDouble(s -> -Math.abs(s.time() - startTime));
+    ConditionSample largest = samples.stream().max(bySize.thenComparing(byDistance)).orElseThrow();
+    if (Double.isInfinite(measure.applyAsDouble(largest))) {
+      return largest;
+    }
+    int k = samples.indexOf(largest);
+    double a = samples.get(Math.max(0, k - 1)).time();
+    double b = samples.get(Math.min(samples.size() - 1, k + 1)).time();
+    ConditionSample c = meter.at(b - GOLDEN * (b - a));
+    ConditionSample d = meter.at(a + GOLDEN * (b - a));
+    for (int step = 0; step < REFINEMENTS; step++) {
+      if (measure.applyAsDouble(c) > measure.applyAsDouble(d)) {
+        b = d.time();
+        d = c;
+        c = meter.at(b - GOLDEN * (b - a));
+      } else {
+        a = c.time();
+        c = d;
+        d = meter.at(a + GOLDEN * (b - a));
+      }
+    }
+    return List.of(largest, c, d).stream().max(bySize).orElseThrow();
+  }
+
+  /** Returns the time nearest to the start at which the scaled condition number exceeds a limit. */
+  public OptionalDouble firstScaledAbove(double limit) {
+    return first(t -> meter.at(t).scaled() > limit, s -> s.scaled() > limit);
+  }
+
+  /** Returns the time nearest to the start at which fewer decimal digits than wanted are left. */
+  public OptionalDouble firstDigitsBelow(double wanted) {
+    return first(t -> meter.at(t).digitsLeft() < wanted, s -> s.digitsLeft() < wanted);
+  }
+
+  private OptionalDouble first(DoublePredicate crossedAt, Predicate<ConditionSample> crossed) {
+    OptionalDouble nearest =
+        samples.stream()
+            .filter(crossed)
+            .mapToDouble(ConditionSample::time)
+            .boxed()
+            .min(Comparator.comparingDouble(t -> Math.abs(t - startTime)))
+            .map(OptionalDouble::of)
+            .orElse(OptionalDouble.empty());
+    if (nearest.isEmpty()) {
+      return nearest;
+    }
+    double beyond = nearest.getAsDouble();
+    boolean later = beyond >= startTime;
+    double before =
+        samples.stream()
+            .mapToDouble(ConditionSample::time)
+            .filter(t -> later ? t < beyond && t >= startTime : t > beyond && t <= startTime)
+            .boxed()
+            .min(Comparator.comparingDouble(t -> Math.abs(t - beyond)))
+            .orElse(beyond);
+    double after = beyond;
+    for (int step = 0; step < REFINEMENTS; step++) {
+      double middle = before + (after - before) / 2;
+      if (crossedAt.test(middle)) {
+        after = middle;
+      } else {
+        before = middle;
+      }
+    }
+    return OptionalDouble.of(after);
+  }
+}
