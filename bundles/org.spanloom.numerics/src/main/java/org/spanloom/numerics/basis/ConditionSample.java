@@ -43,7 +43,9 @@ public record ConditionSample(
    * values.
    */
   public double liouvilleMismatch() {
-    return Math.abs(logDeterminant - liouvilleLogDeterminant);
+    return logDeterminant == liouvilleLogDeterminant
+        ? 0
+        : Math.abs(logDeterminant - liouvilleLogDeterminant);
   }
 
   /**
@@ -52,5 +54,13 @@ public record ConditionSample(
    */
   public double digitsLeft() {
     return Math.max(0, -Math.log10(scaled * Math.max(error, 0x1p-53)));
+  }
+
+  /**
+   * Tells whether the scaled condition number is only a lower bound: the columns differ in their
+   * last direction by no more than their own error, so that the smallest singular values are noise.
+   */
+  public boolean beyondResolution() {
+    return !(scaled * Math.max(error, singularValues.length * 0x1p-53) < 1);
   }
 }

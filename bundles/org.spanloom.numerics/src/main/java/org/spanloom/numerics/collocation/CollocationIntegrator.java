@@ -24,7 +24,7 @@ import org.spanloom.numerics.internal.work.Watch;
  * each value is an estimate of its <i>global</i> error:
  *
  * <pre>
- * E(t + H) = R(t + H, t) E(t) + k (x_H - x_(H/2)) + rounding.
+ * E(t + H) = R(t + H, t) E(t) +- k (x_H - x_(H/2)) + rounding.
  * </pre>
  *
  * For smooth, well resolved steps the factor k would be 2^-2s. Where fast directions are not
@@ -94,8 +94,10 @@ final class CollocationIntegrator {
    *
    * @param fraction of the range that was done
    * @param ratio error estimate over error asked
+   * @param ratioBefore that ratio where the run before had given up; infinite when this one came
+   *     less far
    */
-  record TooLoose(double fraction, double ratio) {}
+  record TooLoose(double fraction, double ratio, double ratioBefore) {}
 
   /**
    * Runs from one end to the other.
@@ -105,10 +107,16 @@ final class CollocationIntegrator {
    * @param stops times to stop at, in the order in which they are reached; the last is the end
    * @param nodes receives what is found
    * @param giveUp whether to stop when the error exceeds what was asked
+   * @param before fraction of the range where the run before had given up, or 0
    * @return why it gave up, or empty when the end was reached
    */
   Optional<TooLoose> run(
-      double t0, double[][] x0, double[] stops, CollocationNodes nodes, boolean giveUp) {
+      double t0,
+      double[][] x0,
+      double[] stops,
+      CollocationNodes nodes,
+      boolean giveUp,
+      double before) {
     double t = t0;
     double[][] x = Rows.copy(x0);
     double[][] error = new double[n][m];
@@ -116,6 +124,7 @@ final class CollocationIntegrator {
     StepControl control = new StepControl(tableau.stages());
     double step = 0;
     int count = 0;
+    double ratioBefore = Double.POSITIVE_INFINITY;
     for (double stop : stops) {
       double direction = Math.signum(stop - t);
       step = Math.min(step == 0 ? firstStep(t, stop) : step, range / 8);
@@ -137,8 +146,12 @@ final class CollocationIntegrator {
           nodes.add(done.middle(), done.first().values(), done.first().errors());
           nodes.add(t, x, error);
           double ratio = worstRatio(x, error);
+          double fraction = Math.abs(t - t0) / range;
+          if (ratioBefore == Double.POSITIVE_INFINITY && fraction >= before) {
+            ratioBefore = ratio;
+          }
           if (giveUp && ratio > 1) {
-            return Optional.of(new TooLoose(Math.abs(t - t0) / range, ratio));
+            return Optional.of(new TooLoose(fraction, ratio, ratioBefore));
           }
           step = Math.min(nextStep(control, h, wanted, done.error()), range / 8);
         } else {
@@ -236,9 +249,18 @@ final class CollocationIntegrator {
     copyInto(middle, step.first().errors());
     double[][] end =
         passOn(step.second().stages(), step.first().values(), middle, step.second().values());
-    for (int i = 0; i < n; i++) {
-      for (int j = 0; j < m; j++) {
-        double local = step.share() * (step.whole()[i][j] - step.second().values()[i][j]);
+    weights.write(x, step.second().values(), weight, m);
+    for (int j = 0; j < m; j++) {
+      double alignment = 0;
+      for (int i = 0; i < n; i++) {
+        double local = step.whole()[i][j] - step.second().values()[i][j];
+        alignment += end[i][j] / weight[i][j] * (local / weight[i][j]);
+      }
+      // Local errors are known to a factor only, so they are never allowed to cancel what came
+      // before.
+      double share = alignment < 0 ? -step.share() : step.share();
+      for (int i = 0; i < n; i++) {
+        double local = share * (step.whole()[i][j] - step.second().values()[i][j]);
         end[i][j] += local;
         step.first().errors()[i][j] += local / 2;
       }
@@ -249,12 +271,18 @@ final class CollocationIntegrator {
   private double[][] passOn(StageSystem stages, double[][] x, double[][] error, double[][] values) {
     double[] shares = new double[n];
     for (int i = 0; i < n; i++) {
-      shares[i] = nextSign() * ROUNDOFF;
+      shares[i] = 2 * nextSign() * ROUNDOFF;
     }
-    double[][] end = stages.end(error, stages.solveErrors(error, x, shares, m), m);
+    double[][] off = new double[n][m];
     for (int i = 0; i < n; i++) {
       for (int j = 0; j < m; j++) {
-        end[i][j] += nextSign() * ROUNDOFF * Math.abs(values[i][j]);
+        off[i][j] = error[i][j] + 2 * tableau.rounding() * x[i][j];
+      }
+    }
+    double[][] end = stages.end(error, stages.solveErrors(off, x, shares, m), m);
+    for (int i = 0; i < n; i++) {
+      for (int j = 0; j < m; j++) {
+        end[i][j] += 2 * nextSign() * ROUNDOFF * Math.abs(values[i][j]);
       }
     }
     return end;

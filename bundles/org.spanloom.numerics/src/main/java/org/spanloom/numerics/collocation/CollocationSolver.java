@@ -100,27 +100,28 @@ public final class CollocationSolver {
     }
     double[] stops = CollocationIntegrator.stops(system, t0, end);
     double local = Math.max(0.1 * weights.relative(), SMALLEST_LOCAL);
-    double reached = 0;
+    TooLoose before = new TooLoose(0, Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY);
+    boolean hopeless = false;
     for (int run = 1; ; run++) {
-      boolean last = run == MOST_RUNS || local <= SMALLEST_LOCAL;
+      boolean last = run == MOST_RUNS || hopeless || local <= SMALLEST_LOCAL;
       CollocationNodes nodes = new CollocationNodes(m);
       CollocationIntegrator integrator =
           new CollocationIntegrator(
               system, tableau, m, forced, weights, local, span, balance, watch);
-      Optional<TooLoose> gaveUp = integrator.run(t0, x0, stops, nodes, !last);
+      Optional<TooLoose> gaveUp = integrator.run(t0, x0, stops, nodes, !last, before.fraction());
       if (gaveUp.isEmpty()) {
         return nodes;
       }
       TooLoose where = gaveUp.get();
-      if (where.fraction() < 1.2 * reached) {
-        // Ten times less per step and hardly further: what is left is rounding, which smaller steps
-        // do not cure.
-        local = SMALLEST_LOCAL;
+      if (run > 1 && where.ratioBefore() > 0.5 * before.ratio()) {
+        // Ten times less per step did not halve the error: what is left is rounding, which smaller
+        // steps do not cure.
+        hopeless = true;
       } else {
-        reached = where.fraction();
         double factor = Math.clamp(0.5 * where.fraction() / where.ratio(), 1e-5, 0.1);
         local = Math.max(local * factor, SMALLEST_LOCAL);
       }
+      before = where;
     }
   }
 }

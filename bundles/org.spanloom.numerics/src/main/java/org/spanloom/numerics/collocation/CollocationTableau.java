@@ -5,6 +5,8 @@
  */
 package org.spanloom.numerics.collocation;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.Map;
 import java.util.concurrent.ConcurrentHashMap;
 
@@ -44,6 +46,8 @@ public final class CollocationTableau {
     }
   }
 
+  private static final MathContext EXACT = MathContext.DECIMAL128;
+
   private record Key(Family family, int stages) {}
 
   private static final Map<Key, CollocationTableau> KNOWN = new ConcurrentHashMap<>();
@@ -52,6 +56,7 @@ public final class CollocationTableau {
   private final double[] points;
   private final double[][] derivative;
   private final double[] end;
+  private final double rounding;
   private final double[] barycentric;
   private final double[] leading;
   private final double[] nextToLeading;
@@ -59,8 +64,13 @@ public final class CollocationTableau {
   private CollocationTableau(Family family, int stages) {
     this.family = family;
     points = family == Family.GAUSS ? gaussPoints(stages) : radauPoints(stages);
-    barycentric = barycentricWeights(points);
-    derivative = derivativeMatrix(points, barycentric);
+    BigDecimal[] weights = barycentricWeights(points);
+    barycentric = new double[stages + 1];
+    for (int i = 0; i <= stages; i++) {
+      barycentric[i] = weights[i].doubleValue();
+    }
+    derivative = derivativeMatrix(points, weights);
+    rounding = roundingOf(points, derivative);
     end = new double[stages];
     weightsAt(1, end);
     leading = legendreCoefficient(stages);
@@ -106,6 +116,11 @@ public final class CollocationTableau {
   /** Returns e_i, the weight of Z_i in the value at the end. */
   double end(int i) {
     return end[i];
+  }
+
+  /** Returns the relative error that the rounding of D makes in every step. */
+  double rounding() {
+    return rounding;
   }
 
   /** Tells whether the last point is the end of the step. */
@@ -157,42 +172,86 @@ public final class CollocationTableau {
    * Weights of the barycentric formula on {0, c_1, ..., c_s} (Berrut &amp; Trefethen 2004, SIAM
    * Review 46, 501).
    */
-  private static double[] barycentricWeights(double[] points) {
+  private static BigDecimal[] barycentricWeights(double[] points) {
     int s = points.length;
-    double[] w = new double[s + 1];
+    BigDecimal[] w = new BigDecimal[s + 1];
     for (int i = 0; i <= s; i++) {
-      double product = 1;
+      BigDecimal product = BigDecimal.ONE;
       for (int j = 0; j <= s; j++) {
         if (j != i) {
-          product *= 2 * (node(points, i) - node(points, j));
+          product = product.multiply(node(points, i).subtract(node(points, j)), EXACT);
         }
       }
-      w[i] = 1 / product;
+      w[i] = BigDecimal.ONE.divide(product, EXACT);
     }
     return w;
   }
 
-  private static double node(double[] points, int i) {
-    return i == 0 ? 0 : points[i - 1];
+  private static BigDecimal node(double[] points, int i) {
+    return i == 0 ? BigDecimal.ZERO : new BigDecimal(points[i - 1]);
   }
 
-  private static double[][] derivativeMatrix(double[] points, double[] w) {
+  /**
+   * Entries are rounded once only: their errors are the same in every step and add up over many.
+   */
+  private static double[][] derivativeMatrix(double[] points, BigDecimal[] w) {
     int s = points.length;
     double[][] d = new double[s][s];
     for (int i = 1; i <= s; i++) {
-      double sum = 0;
+      BigDecimal sum = BigDecimal.ZERO;
       for (int j = 0; j <= s; j++) {
         if (j != i) {
-          double entry = w[j] / w[i] / (node(points, i) - node(points, j));
-          sum += entry;
+          BigDecimal distance = node(points, i).subtract(node(points, j));
+          BigDecimal entry = w[j].divide(w[i], EXACT).divide(distance, EXACT);
+          sum = sum.add(entry);
           if (j > 0) {
-            d[i - 1][j - 1] = entry;
+            d[i - 1][j - 1] = entry.doubleValue();
           }
         }
       }
-      d[i - 1][i - 1] = -sum;
+      d[i - 1][i - 1] = -sum.doubleValue();
+      keepStraightLines(d[i - 1], points);
     }
     return d;
+  }
+
+  /**
+   * Moves the smallest entry of a row, where rounding is finest, so that sum_j D_ij c_j = 1 holds
+   * as well as it can.
+   */
+  private static void keepStraightLines(double[] row, double[] points) {
+    int smallest = 0;
+    for (int j = 1; j < row.length; j++) {
+      if (Math.abs(row[j] * points[j]) < Math.abs(row[smallest] * points[smallest])) {
+        smallest = j;
+      }
+    }
+    BigDecimal off = momentError(row, points, 1, BigDecimal.ONE);
+    BigDecimal point = new BigDecimal(points[smallest]);
+    row[smallest] = new BigDecimal(row[smallest]).subtract(off.divide(point, EXACT)).doubleValue();
+  }
+
+  /** Returns sum_j D_ij c_j^power - wanted. */
+  private static BigDecimal momentError(
+      double[] row, double[] points, int power, BigDecimal wanted) {
+    BigDecimal sum = wanted.negate();
+    for (int j = 0; j < row.length; j++) {
+      BigDecimal moment = new BigDecimal(points[j]).pow(power, EXACT);
+      sum = sum.add(new BigDecimal(row[j]).multiply(moment));
+    }
+    return sum;
+  }
+
+  /** Returns how far D, as rounded, is from differentiating t and t^2. */
+  private static double roundingOf(double[] points, double[][] derivative) {
+    double largest = 0;
+    for (int i = 0; i < points.length; i++) {
+      BigDecimal slope = new BigDecimal(points[i]).multiply(BigDecimal.TWO);
+      double line = momentError(derivative[i], points, 1, BigDecimal.ONE).doubleValue();
+      double square = momentError(derivative[i], points, 2, slope).doubleValue();
+      largest = Math.max(largest, Math.abs(line) + Math.abs(square) / 2);
+    }
+    return largest;
   }
 
   /**
