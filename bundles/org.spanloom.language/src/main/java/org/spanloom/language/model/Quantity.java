@@ -78,7 +78,8 @@ record Quantity(
         changed.put(key, mapped);
       }
     });
-    // Beside states a constant part of 0 is no part at all: it has no place in the text, and 0/h would be one.
+    // Beside states a constant part of 0 is no part at all: it has no place in the text, and 0/h
+    // would be one.
     boolean absent = holdsStates() && Simplifier.isZero(constant.term());
     Part rest = absent ? Part.ZERO : constant.map(change);
     return new Quantity(changed, rest, newDimension, false, newDepth);
