@@ -229,7 +229,7 @@ final class UnitSuggestions {
     if (elsewhere != null) {
       near.add(elsewhere);
     }
-    List<String> candidates = candidates();
+    List<String> candidates = Candidates.ALL;
     candidates.stream().filter(c -> c.equalsIgnoreCase(symbol)).forEach(near::add);
     if (near.isEmpty()) {
       candidates.stream()
@@ -240,8 +240,13 @@ final class UnitSuggestions {
     return near;
   }
 
+  /** Listed when the first unit is misspelt, which most models never do. */
+  private static final class Candidates {
+    private static final List<String> ALL = likelySymbols();
+  }
+
   /** All symbols that are likely: atoms as they are, and with the usual prefixes. */
-  private static List<String> candidates() {
+  private static List<String> likelySymbols() {
     List<String> symbols = new ArrayList<>();
     for (String prefix : List.of("", "k", "m", "u", "c", "M", "G", "n", "p", "h", "d")) {
       for (UcumAtom atom : UcumAtoms.all()) {
