@@ -10,11 +10,13 @@ import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.OptionalDouble;
-import java.util.TreeSet;
+import java.util.function.DoublePredicate;
+import java.util.function.Predicate;
 import java.util.function.ToDoubleFunction;
+import java.util.stream.DoubleStream;
+import java.util.stream.IntStream;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome;
-import org.spanloom.numerics.Outcome.Reason;
 import org.spanloom.numerics.Progress;
 import org.spanloom.numerics.TimeRange;
 import org.spanloom.numerics.internal.work.Cancelled;
@@ -23,71 +25,55 @@ import org.spanloom.numerics.internal.work.Watch;
 import org.spanloom.numerics.solution.Solution;
 
 /**
- * How sound a basis is along a range: samples at the solver's nodes and in between.
+ * How sound a basis is along a range: condition samples at the steps of the method and between
+ * them, with the worst ones refined.
  *
- * <p>Immutable; the questions for single times look at the basis again.
+ * <p>The raw condition number mixes size and direction of the columns; scaling each to length 1 is
+ * within sqrt(n) of the best column scaling (van der Sluis, Numer. Math. 14 (1969) 14; from
+ * memory), so the scaled one tells about the directions alone.
  */
 public final class ConditionProfile {
 
-  /**
-   * Work for all samples, in floating point operations; it bounds their number where there are many
-   * states.
-   */
+  private static final int EVEN = 64;
+  private static final int MOST_SAMPLES = 300;
   private static final double MOST_WORK = 4e9;
+  private static final int REFINEMENTS = 24;
+  private static final double GOLDEN = (Math.sqrt(5) - 1) / 2;
 
-  private static final int MOST_SAMPLES = 400;
-  private static final int FEWEST_SAMPLES = 40;
-
-  /**
-   * The time of a maximum or a crossing is found to this share of the range, or of the time since
-   * its start if that is finer.
-   */
-  private static final double TIME_SHARE = 1e-3;
-
-  private final LinearSystem system;
-  private final Solution basis;
-  private final TimeRange over;
-  private final double startLog;
+  private final ConditionMeter meter;
   private final List<ConditionSample> samples;
+  private final ConditionSample worstRaw;
+  private final ConditionSample worstScaled;
+  private final double startTime;
 
-  private ConditionProfile(
-      LinearSystem system,
-      Solution basis,
-      TimeRange over,
-      double startLog,
-      List<ConditionSample> samples) {
-    this.system = system;
-    this.basis = basis;
-    this.over = over;
-    this.startLog = startLog;
+  private ConditionProfile(ConditionMeter meter, List<ConditionSample> samples, double startTime) {
+    this.meter = meter;
     this.samples = List.copyOf(samples);
+    this.startTime = startTime;
+    this.worstRaw = worst(ConditionSample::raw);
+    this.worstScaled = worst(ConditionSample::scaled);
   }
 
   /**
-   * Samples a basis.
+   * Follows the conditioning of a basis.
    *
-   * @param system the system that the columns solve
-   * @param basis the columns, at least one and at most as many as states
-   * @param over bounded part of the basis' range to look at
+   * @param system the system
+   * @param basis columns that solve the homogeneous system; as many as states, or fewer
+   * @param over where to look; bounded and inside the range of the basis
    * @param progress watched and asked while working
-   * @return the samples, at most 400, or why there are none
+   * @return the profile
    */
   public static Outcome<ConditionProfile> of(
       LinearSystem system, Solution basis, TimeRange over, Progress progress) {
-    if (!basis.range().contains(over.start()) || !basis.range().contains(over.end())) {
-      return new Outcome.Unsolved<>(
-          Reason.RANGE,
-          over.start(),
-          "the basis is known from " + basis.range().start() + " to " + basis.range().end());
-    }
-    if (basis.columns() < 1 || basis.columns() > basis.dimension()) {
-      return new Outcome.Unsolved<>(
-          Reason.RANGE,
-          over.start(),
-          basis.columns() + " columns cannot be a basis of " + basis.dimension() + " states");
-    }
     try {
-      return new Outcome.Solved<>(sampled(system, basis, over, new Watch(progress)));
+      ConditionMeter meter = new ConditionMeter(system, basis, new Watch(progress));
+      List<ConditionSample> samples = new ArrayList<>();
+      double[] times = times(basis, over);
+      for (int k = 0; k < times.length; k++) {
+        samples.add(meter.at(times[k]));
+        progress.worked((k + 1.0) / times.length);
+      }
+      return new Outcome.Solved<>(new ConditionProfile(meter, samples, basis.startTime()));
     } catch (Cancelled cancelled) {
       return new Outcome.Cancelled<>();
     } catch (Hopeless hopeless) {
@@ -95,173 +81,133 @@ public final class ConditionProfile {
     }
   }
 
-  private static ConditionProfile sampled(
-      LinearSystem system, Solution basis, TimeRange over, Watch watch) {
-    TraceIntegral trace = new TraceIntegral(system, watch);
-    double t0 = basis.startTime();
-    double startLog = new BasisAt(basis, t0).determinant().log();
-    double[] times = chooseTimes(basis, over);
-    List<ConditionSample> samples = new ArrayList<>();
-    double integral = trace.between(t0, times[0]);
-    for (int k = 0; k < times.length; k++) {
-      watch.ask();
-      integral += k == 0 ? 0 : trace.between(times[k - 1], times[k]);
-      samples.add(new BasisAt(basis, times[k]).sample(times[k], startLog + integral));
-      watch.worked((k + 1.0) / times.length);
+  /**
+   * Takes samples at given times only.
+   *
+   * @param system the system
+   * @param basis columns that solve the homogeneous system
+   * @param times times inside the range of the basis, in any order
+   * @param progress asked while working
+   * @return one sample for each time, in the order given
+   */
+  public static Outcome<List<ConditionSample>> at(
+      LinearSystem system, Solution basis, List<Double> times, Progress progress) {
+    try {
+      ConditionMeter meter = new ConditionMeter(system, basis, new Watch(progress));
+      return new Outcome.Solved<>(times.stream().map(meter::at).toList());
+    } catch (Cancelled cancelled) {
+      return new Outcome.Cancelled<>();
+    } catch (Hopeless hopeless) {
+      return hopeless.outcome();
     }
-    return new ConditionProfile(system, basis, over, startLog, samples);
   }
 
-  /** Nodes of the solver where it has them, an even grid where it has none, both ends. */
-  private static double[] chooseTimes(Solution basis, TimeRange over) {
+  /** Even steps, the steps of the method thinned out to what the work allows, and both ends. */
+  private static double[] times(Solution basis, TimeRange over) {
     if (over.length() == 0) {
       return new double[] {over.start()};
     }
-    double n = basis.dimension();
-    int count = (int) Math.clamp(MOST_WORK / (60 * n * n * n), FEWEST_SAMPLES, MOST_SAMPLES);
-    double[] nodes =
-        Arrays.stream(basis.nodes()).filter(t -> t > over.start() && t < over.end()).toArray();
-    TreeSet<Double> times = new TreeSet<>();
-    times.add(over.start());
-    times.add(over.end());
-    int stride = Math.max(1, (int) Math.ceil(nodes.length / (count / 2.0 - 1)));
-    for (int k = 0; k < nodes.length; k += stride) {
-      times.add(nodes[k]);
-    }
-    int cells = count / 2 - 1;
-    for (int cell = 0; cell < cells; cell++) {
-      double from = over.start() + over.length() * (cell / (double) cells);
-      double to = over.start() + over.length() * ((cell + 1.0) / cells);
-      if (times.subSet(from, true, to, true).isEmpty()) {
-        int next = Arrays.binarySearch(nodes, from);
-        int index = next >= 0 ? next : -next - 1;
-        times.add(
-            index < nodes.length && nodes[index] <= to ? nodes[index] : from + (to - from) / 2);
-      }
-    }
-    return times.stream().mapToDouble(Double::doubleValue).toArray();
+    double cost = 40.0 * Math.pow(Math.max(1, basis.dimension()), 3);
+    int most = (int) Math.clamp(MOST_WORK / cost, 24, MOST_SAMPLES);
+    int even = Math.min(EVEN, most / 2);
+    double[] nodes = Arrays.stream(basis.nodes()).filter(over::contains).toArray();
+    int stride = 1 + nodes.length / (most - even);
+    DoubleStream some =
+        IntStream.range(0, nodes.length).filter(k -> k % stride == 0).mapToDouble(k -> nodes[k]);
+    DoubleStream steps =
+        IntStream.rangeClosed(0, even)
+            .mapToDouble(k -> k == even ? over.end() : over.start() + over.length() * k / even);
+    return DoubleStream.concat(some, steps).sorted().distinct().toArray();
   }
 
-  /** Returns the samples in the order of time, at least one. */
+  /** Returns the samples by time. */
   public List<ConditionSample> samples() {
     return samples;
   }
 
-  /** Returns the part of the range that was looked at. */
-  public TimeRange over() {
-    return over;
-  }
-
   /**
-   * Looks at another time.
-   *
-   * @param t time inside {@link #over()}
+   * Returns the sample of the largest raw condition number; where it is infinite, the one nearest
+   * to the start.
    */
-  public ConditionSample at(double t) {
-    if (!over.contains(t)) {
-      throw new IllegalArgumentException("time " + t + " is outside " + over);
-    }
-    double integral = new TraceIntegral(system, Watch.NONE).between(basis.startTime(), t);
-    return new BasisAt(basis, t).sample(t, startLog + integral);
-  }
-
-  /** Returns where the raw condition number is largest; the first such time when it is infinite. */
   public ConditionSample worstRaw() {
-    return worst(ConditionSample::raw);
+    return worstRaw;
   }
 
   /**
-   * Returns where the scaled condition number is largest; the first such time when it is infinite.
+   * Returns the sample of the largest scaled condition number; where it is infinite, the one
+   * nearest to the start.
    */
   public ConditionSample worstScaled() {
-    return worst(ConditionSample::scaled);
-  }
-
-  /**
-   * Returns the first time at which the scaled condition number exceeds a limit; empty when it
-   * never does.
-   */
-  public OptionalDouble firstScaledAbove(double limit) {
-    return firstAbove(limit, ConditionSample::scaled);
-  }
-
-  /**
-   * Returns the first time at which the raw condition number exceeds a limit; empty when it never
-   * does.
-   */
-  public OptionalDouble firstRawAbove(double limit) {
-    return firstAbove(limit, ConditionSample::raw);
+    return worstScaled;
   }
 
   private ConditionSample worst(ToDoubleFunction<ConditionSample> measure) {
-    int k = 0;
-    for (int i = 1; i < samples.size(); i++) {
-      if (measure.applyAsDouble(samples.get(i)) > measure.applyAsDouble(samples.get(k))) {
-        k = i;
-      }
+    Comparator<ConditionSample> bySize = Comparator.comparingDouble(measure);
+    Comparator<ConditionSample> byDistance =
+        Comparator.comparingDouble(s -> -Math.abs(s.time() - startTime));
+    ConditionSample largest = samples.stream().max(bySize.thenComparing(byDistance)).orElseThrow();
+    if (Double.isInfinite(measure.applyAsDouble(largest))) {
+      return largest;
     }
-    ConditionSample best = samples.get(k);
-    double left = samples.get(Math.max(k - 1, 0)).time();
-    double right = samples.get(Math.min(k + 1, samples.size() - 1)).time();
-    // Where nothing but noise is left, a finer search would only find another piece of noise.
-    while (!best.beyondResolution() && right - left > resolution(best.time())) {
-      boolean probeLeft = best.time() - left > right - best.time();
-      double t =
-          probeLeft
-              ? best.time() - 0.4 * (best.time() - left)
-              : best.time() + 0.4 * (right - best.time());
-      if (t == best.time() || t <= left || t >= right) {
-        break;
-      }
-      ConditionSample other = at(t);
-      boolean better = measure.applyAsDouble(other) > measure.applyAsDouble(best);
-      double edge = better ? best.time() : t;
-      if (probeLeft == better) {
-        right = edge;
+    int k = samples.indexOf(largest);
+    double a = samples.get(Math.max(0, k - 1)).time();
+    double b = samples.get(Math.min(samples.size() - 1, k + 1)).time();
+    ConditionSample c = meter.at(b - GOLDEN * (b - a));
+    ConditionSample d = meter.at(a + GOLDEN * (b - a));
+    for (int step = 0; step < REFINEMENTS; step++) {
+      if (measure.applyAsDouble(c) > measure.applyAsDouble(d)) {
+        b = d.time();
+        d = c;
+        c = meter.at(b - GOLDEN * (b - a));
       } else {
-        left = edge;
+        a = c.time();
+        c = d;
+        d = meter.at(a + GOLDEN * (b - a));
       }
-      best = better ? other : best;
     }
-    return best;
+    return List.of(largest, c, d).stream().max(bySize).orElseThrow();
   }
 
-  private OptionalDouble firstAbove(double limit, ToDoubleFunction<ConditionSample> measure) {
-    for (int k = 0; k < samples.size(); k++) {
-      if (!(measure.applyAsDouble(samples.get(k)) > limit)) {
-        continue;
-      }
-      if (k == 0) {
-        return OptionalDouble.of(samples.get(0).time());
-      }
-      double below = samples.get(k - 1).time();
-      double above = samples.get(k).time();
-      while (above - below > resolution(below)) {
-        double middle = below + (above - below) / 2;
-        if (middle == below || middle == above) {
-          break;
-        }
-        if (measure.applyAsDouble(at(middle)) > limit) {
-          above = middle;
-        } else {
-          below = middle;
-        }
-      }
-      return OptionalDouble.of(above);
+  /** Returns the time nearest to the start at which the scaled condition number exceeds a limit. */
+  public OptionalDouble firstScaledAbove(double limit) {
+    return first(t -> meter.at(t).scaled() > limit, s -> s.scaled() > limit);
+  }
+
+  /** Returns the time nearest to the start at which fewer decimal digits than wanted are left. */
+  public OptionalDouble firstDigitsBelow(double wanted) {
+    return first(t -> meter.at(t).digitsLeft() < wanted, s -> s.digitsLeft() < wanted);
+  }
+
+  private OptionalDouble first(DoublePredicate crossedAt, Predicate<ConditionSample> crossed) {
+    OptionalDouble nearest =
+        samples.stream()
+            .filter(crossed)
+            .mapToDouble(ConditionSample::time)
+            .boxed()
+            .min(Comparator.comparingDouble(t -> Math.abs(t - startTime)))
+            .map(OptionalDouble::of)
+            .orElse(OptionalDouble.empty());
+    if (nearest.isEmpty()) {
+      return nearest;
     }
-    return OptionalDouble.empty();
-  }
-
-  private double resolution(double t) {
-    double sinceStart = Math.abs(t - basis.startTime());
-    double finest = 1e-9 * over.length();
-    return TIME_SHARE * Math.clamp(sinceStart, Math.min(finest, over.length()), over.length());
-  }
-
-  /** Returns the sample nearest to a time. */
-  public ConditionSample nearest(double t) {
-    return samples.stream()
-        .min(Comparator.comparingDouble(sample -> Math.abs(sample.time() - t)))
-        .orElseThrow();
+    double beyond = nearest.getAsDouble();
+    boolean later = beyond >= startTime;
+    double before =
+        samples.stream()
+            .mapToDouble(ConditionSample::time)
+            .filter(t -> later ? t < beyond && t >= startTime : t > beyond && t <= startTime)
+            .boxed()
+            .min(Comparator.comparingDouble(t -> Math.abs(t - beyond)))
+            .orElse(beyond);
+    double after = beyond;
+    for (int step = 0; step < REFINEMENTS; step++) {
+      double middle = before + (after - before) / 2;
+      if (crossedAt.test(middle)) {
+        after = middle;
+      } else {
+        before = middle;
+      }
+    }
+    return OptionalDouble.of(after);
   }
 }

@@ -57,10 +57,11 @@ public record ConditionSample(
   }
 
   /**
-   * Tells whether the scaled condition number is only a lower bound: the columns differ in their
-   * last direction by no more than their own error, so that the smallest singular values are noise.
+   * Tells whether the condition is beyond what double precision can tell: the smallest singular
+   * value is no larger than the errors of the columns, so that the condition numbers are given as
+   * infinite.
    */
   public boolean beyondResolution() {
-    return !(scaled * Math.max(error, singularValues.length * 0x1p-53) < 1);
+    return Double.isInfinite(scaled);
   }
 }

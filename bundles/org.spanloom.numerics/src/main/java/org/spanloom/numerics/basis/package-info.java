@@ -1,16 +1,19 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+
 /**
- * Bases of the solution space and how far each can be trusted.
+ * How far a basis of the solutions can be trusted.
  *
- * <table>
- * <caption>Questions and who answers them</caption>
- * <tr><td>How sound is a basis along the range?</td><td>{@link org.spanloom.numerics.basis.ConditionProfile}</td></tr>
- * <tr><td>Into how many windows must the range be cut so that it stays sound?</td><td>{@link org.spanloom.numerics.basis.Windows}</td></tr>
- * <tr><td>Are the columns independent, and if not, which combination vanishes?</td><td>{@link org.spanloom.numerics.basis.Independence}</td></tr>
- * <tr><td>Do closed forms solve the system?</td><td>{@link org.spanloom.numerics.basis.ClosedFormResidual}</td></tr>
- * </table>
- *
- * <p>For true solutions one time decides independence: the determinant at any other time follows
- * from it by Liouville's formula. The condition number, however, changes along the range: in a
- * dissipative system fast directions die first, and what is left of them drowns in rounding.
+ * <ul>
+ *   <li>Is it one at all? {@link org.spanloom.numerics.basis.Dependence} looks at the columns at
+ *       one time, {@link org.spanloom.numerics.basis.ClosedFormResidual} holds closed forms against
+ *       the equations.
+ *   <li>How well does it span? {@link org.spanloom.numerics.basis.ConditionProfile} follows
+ *       singular values, condition numbers and the determinant along a range.
+ *   <li>How often must it start anew? {@link org.spanloom.numerics.basis.Windows} counts.
+ * </ul>
  */
 package org.spanloom.numerics.basis;
