@@ -1,0 +1,19 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.ui.basis;
+
+import org.eclipse.ui.views.markers.MarkerSupportView;
+
+/** Lists the bases; plugin.xml names the columns. A double click goes to the source line. */
+public final class BasisFindingsView extends MarkerSupportView {
+
+  private static final String GENERATOR = "org.spanloom.ui.basisGenerator";
+
+  /** Called by the workbench. */
+  public BasisFindingsView() {
+    super(GENERATOR);
+  }
+}
