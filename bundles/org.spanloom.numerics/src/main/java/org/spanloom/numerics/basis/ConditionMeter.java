@@ -5,10 +5,6 @@
  */
 package org.spanloom.numerics.basis;
 
-import java.util.Arrays;
-import org.ejml.data.DMatrixRMaj;
-import org.ejml.dense.row.factory.DecompositionFactory_DDRM;
-import org.ejml.interfaces.decomposition.SingularValueDecomposition_F64;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Side;
 import org.spanloom.numerics.internal.algebra.LuFactors;
@@ -18,12 +14,6 @@ import org.spanloom.numerics.solution.Solution;
 
 /** Takes condition samples of one solution. For one thread. */
 final class ConditionMeter {
-
-  /**
-   * Up to this number of columns singular values are computed by Jacobi rotations, above it by
-   * EJML.
-   */
-  private static final int JACOBI = 40;
 
   private static final double ROUNDING = 0x1p-53;
 
@@ -99,8 +89,8 @@ final class ConditionMeter {
    */
   ConditionSample at(double t) {
     Scaled columns = new Scaled(t);
-    double[] raw = singularValues(columns.x);
-    double[] scaled = singularValues(columns.unit);
+    double[] raw = SingularValues.of(columns.x, n, m, watch);
+    double[] scaled = SingularValues.of(columns.unit, n, m, watch);
     double noise = Math.sqrt(m) * Math.max(columns.error, ROUNDING);
     boolean resolved = !columns.vanishes && scaled[m - 1] > noise;
     Determinant determinant = columns.determinant();
@@ -113,24 +103,5 @@ final class ConditionMeter {
         determinant.sign(),
         startLog + trace.at(t),
         columns.error);
-  }
-
-  private double[] singularValues(double[] values) {
-    if (m <= JACOBI) {
-      return JacobiSingularValues.of(values, n, m, watch);
-    }
-    watch.ask();
-    SingularValueDecomposition_F64<DMatrixRMaj> svd =
-        DecompositionFactory_DDRM.svd(n, m, false, false, true);
-    DMatrixRMaj matrix = new DMatrixRMaj(n, m);
-    System.arraycopy(values, 0, matrix.data, 0, n * m);
-    svd.decompose(matrix);
-    double[] sorted = svd.getSingularValues().clone();
-    Arrays.sort(sorted);
-    double[] largestFirst = new double[m];
-    for (int k = 0; k < m; k++) {
-      largestFirst[k] = sorted[sorted.length - 1 - k];
-    }
-    return largestFirst;
   }
 }

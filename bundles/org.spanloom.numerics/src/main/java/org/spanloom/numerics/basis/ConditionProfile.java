@@ -10,11 +10,10 @@ import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.OptionalDouble;
+import java.util.TreeSet;
 import java.util.function.DoublePredicate;
 import java.util.function.Predicate;
 import java.util.function.ToDoubleFunction;
-import java.util.stream.DoubleStream;
-import java.util.stream.IntStream;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Progress;
@@ -34,8 +33,9 @@ import org.spanloom.numerics.solution.Solution;
  */
 public final class ConditionProfile {
 
-  private static final int EVEN = 64;
-  private static final int MOST_SAMPLES = 300;
+  private static final int EVEN = 100;
+  private static final int FEWEST_SAMPLES = 40;
+  private static final int MOST_SAMPLES = 400;
   private static final double MOST_WORK = 4e9;
   private static final int REFINEMENTS = 24;
   private static final double GOLDEN = (Math.sqrt(5) - 1) / 2;
@@ -102,22 +102,38 @@ public final class ConditionProfile {
     }
   }
 
-  /** Even steps, the steps of the method thinned out to what the work allows, and both ends. */
+  /**
+   * Both ends, the steps of the method thinned out to what the work allows, and an even grid where
+   * there are none: a time between steps costs more than one at a step.
+   */
   private static double[] times(Solution basis, TimeRange over) {
     if (over.length() == 0) {
       return new double[] {over.start()};
     }
     double cost = 40.0 * Math.pow(Math.max(1, basis.dimension()), 3);
-    int most = (int) Math.clamp(MOST_WORK / cost, 24, MOST_SAMPLES);
+    int most = (int) Math.clamp(MOST_WORK / cost, FEWEST_SAMPLES, MOST_SAMPLES);
     int even = Math.min(EVEN, most / 2);
     double[] nodes = Arrays.stream(basis.nodes()).filter(over::contains).toArray();
+    TreeSet<Double> times = new TreeSet<>(List.of(over.start(), over.end()));
     int stride = 1 + nodes.length / (most - even);
-    DoubleStream some =
-        IntStream.range(0, nodes.length).filter(k -> k % stride == 0).mapToDouble(k -> nodes[k]);
-    DoubleStream steps =
-        IntStream.rangeClosed(0, even)
-            .mapToDouble(k -> k == even ? over.end() : over.start() + over.length() * k / even);
-    return DoubleStream.concat(some, steps).sorted().distinct().toArray();
+    for (int k = 0; k < nodes.length; k += stride) {
+      times.add(nodes[k]);
+    }
+    for (int cell = 0; cell < even; cell++) {
+      double from = over.start() + over.length() * (cell / (double) even);
+      double to = over.start() + over.length() * ((cell + 1.0) / even);
+      if (times.subSet(from, false, to, false).isEmpty()) {
+        times.add(nearestInside(nodes, from, to));
+      }
+    }
+    return times.stream().mapToDouble(Double::doubleValue).toArray();
+  }
+
+  /** Returns a node between two times, or their middle when there is none. */
+  private static double nearestInside(double[] nodes, double from, double to) {
+    int found = Arrays.binarySearch(nodes, from);
+    int next = found >= 0 ? found + 1 : -found - 1;
+    return next < nodes.length && nodes[next] < to ? nodes[next] : from + (to - from) / 2;
   }
 
   /** Returns the samples by time. */
@@ -152,9 +168,12 @@ public final class ConditionProfile {
     int k = samples.indexOf(largest);
     double a = samples.get(Math.max(0, k - 1)).time();
     double b = samples.get(Math.min(samples.size() - 1, k + 1)).time();
+    if (b - a <= resolution(largest.time())) {
+      return largest;
+    }
     ConditionSample c = meter.at(b - GOLDEN * (b - a));
     ConditionSample d = meter.at(a + GOLDEN * (b - a));
-    for (int step = 0; step < REFINEMENTS; step++) {
+    for (int step = 0; step < REFINEMENTS && b - a > resolution(largest.time()); step++) {
       if (measure.applyAsDouble(c) > measure.applyAsDouble(d)) {
         b = d.time();
         d = c;
@@ -168,9 +187,23 @@ public final class ConditionProfile {
     return List.of(largest, c, d).stream().max(bySize).orElseThrow();
   }
 
+  /**
+   * Times are found to a thousandth of the time since the start, where transients are short, or of
+   * a millionth of the range.
+   */
+  private double resolution(double t) {
+    double length = samples.getLast().time() - samples.getFirst().time();
+    return 1e-3 * Math.max(Math.abs(t - startTime), 1e-6 * length);
+  }
+
   /** Returns the time nearest to the start at which the scaled condition number exceeds a limit. */
   public OptionalDouble firstScaledAbove(double limit) {
     return first(t -> meter.at(t).scaled() > limit, s -> s.scaled() > limit);
+  }
+
+  /** Returns the time nearest to the start at which the raw condition number exceeds a limit. */
+  public OptionalDouble firstRawAbove(double limit) {
+    return first(t -> meter.at(t).raw() > limit, s -> s.raw() > limit);
   }
 
   /** Returns the time nearest to the start at which fewer decimal digits than wanted are left. */
@@ -200,7 +233,9 @@ public final class ConditionProfile {
             .min(Comparator.comparingDouble(t -> Math.abs(t - beyond)))
             .orElse(beyond);
     double after = beyond;
-    for (int step = 0; step < REFINEMENTS; step++) {
+    for (int step = 0;
+        step < REFINEMENTS && Math.abs(after - before) > resolution(before);
+        step++) {
       double middle = before + (after - before) / 2;
       if (crossedAt.test(middle)) {
         after = middle;
