@@ -90,7 +90,7 @@ class ExampleProjectsTests {
       }
     }
     assertTrue(requirements >= 20, "only " + requirements);
-    assertTrue(bases >= 9, "only " + bases);
+    assertTrue(bases >= 8, "only " + bases);
   }
 
   @Test

@@ -126,7 +126,7 @@ final class ModelSearch {
     @Override
     public FileVisitResult visitFile(Path file, BasicFileAttributes attributes) {
       if (file.getFileName().toString().endsWith(ModelFile.ENDING)
-          && (attributes.isRegularFile() || attributes.isSymbolicLink() && staysInside(file))) {
+          && (attributes.isRegularFile() || (attributes.isSymbolicLink() && staysInside(file)))) {
         models.add(file);
       }
       return FileVisitResult.CONTINUE;
