@@ -10,15 +10,19 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertInstanceOf;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.io.ByteArrayInputStream;
+import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
 import java.util.Iterator;
 import java.util.List;
 import org.eclipse.core.resources.IFile;
 import org.eclipse.core.resources.IMarker;
 import org.eclipse.core.resources.IProject;
+import org.eclipse.core.resources.ResourcesPlugin;
 import org.eclipse.core.runtime.CoreException;
 import org.eclipse.core.runtime.IPath;
 import org.eclipse.jface.text.BadLocationException;
+import org.eclipse.jface.text.IRegion;
 import org.eclipse.jface.text.source.Annotation;
 import org.eclipse.jface.text.source.projection.ProjectionAnnotation;
 import org.eclipse.jface.text.source.projection.ProjectionViewer;
@@ -78,8 +82,7 @@ class EditorTests {
   }
 
   private static IProject plainProject() throws CoreException {
-    IProject project =
-        org.eclipse.core.resources.ResourcesPlugin.getWorkspace().getRoot().getProject("plain");
+    IProject project = ResourcesPlugin.getWorkspace().getRoot().getProject("plain");
     project.create(null);
     project.open(null);
     return project;
@@ -137,7 +140,7 @@ class EditorTests {
     ModelEditor editor = Workbench.open(file);
     StyledText text = editor.viewer().getTextWidget();
     text.setSelection(text.getCharCount());
-    text.invokeAction(org.eclipse.swt.SWT.NONE);
+
     text.insert("\n");
     Workbench.drain();
     assertEquals("system A over t {\n  ", editor.document().get());
@@ -148,8 +151,7 @@ class EditorTests {
     IFile file = Workbench.file(Workbench.project("station"), "float.span", Models.DECAY);
     ModelEditor editor = Workbench.open(file);
     file.setContents(
-        new java.io.ByteArrayInputStream(
-            Models.DECAY_WITH_FAULT.getBytes(java.nio.charset.StandardCharsets.UTF_8)),
+        new ByteArrayInputStream(Models.DECAY_WITH_FAULT.getBytes(StandardCharsets.UTF_8)),
         true,
         false,
         null);
@@ -196,7 +198,7 @@ class EditorTests {
   }
 
   private static String line(ModelEditor editor, int number) throws BadLocationException {
-    var region = editor.document().getLineInformation(number);
+    IRegion region = editor.document().getLineInformation(number);
     return editor.document().get(region.getOffset(), region.getLength());
   }
 

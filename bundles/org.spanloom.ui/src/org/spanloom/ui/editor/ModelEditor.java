@@ -9,6 +9,7 @@ import org.eclipse.core.runtime.CoreException;
 import org.eclipse.jface.preference.IPreferenceStore;
 import org.eclipse.jface.text.IDocument;
 import org.eclipse.jface.text.IRegion;
+import org.eclipse.jface.text.ITextHover;
 import org.eclipse.jface.text.ITextViewerExtension5;
 import org.eclipse.jface.text.Region;
 import org.eclipse.jface.text.source.DefaultCharacterPairMatcher;
@@ -122,6 +123,11 @@ public final class ModelEditor extends TextEditor {
   /** Returns the viewer, for tests and for actions of this bundle. */
   public ISourceViewer viewer() {
     return getSourceViewer();
+  }
+
+  /** Returns what tells about the text under the pointer. */
+  public ITextHover hover() {
+    return new ModelHover(this, getSourceViewer());
   }
 
   /** Selects a span and shows it. */
