@@ -47,6 +47,11 @@ final class BasisReader {
     return names;
   }
 
+  /** Notes a basis whose statement could not be read, so that uses of it are not reported. */
+  void noteUnread(Name name) {
+    names.add(name.text());
+  }
+
   void read(BasisStatement statement) {
     String name = statement.name().text();
     if (!names.add(name)) {

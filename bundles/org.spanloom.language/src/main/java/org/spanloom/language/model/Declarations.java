@@ -43,6 +43,7 @@ final class Declarations {
   private final Resolver resolver;
   private final List<Declaration> collected = new ArrayList<>();
   private final Map<String, Name> taken = new HashMap<>();
+  private final Set<String> duplicates = new HashSet<>();
   private final List<Parameter> parameters = new ArrayList<>();
   private final List<Let> lets = new ArrayList<>();
   private final List<ReadOutput> outputs = new ArrayList<>();
@@ -94,6 +95,7 @@ final class Declarations {
           "\"" + text + "\" is built in and cannot be declared: choose another name.");
       scope.define(text, new BrokenMeaning(name.span()));
     } else if (earlier != null) {
+      duplicates.add(text);
       problems.report(
           ProblemKind.NAME_DUPLICATE,
           name.span(),
@@ -343,7 +345,7 @@ final class Declarations {
   }
 
   private void reportUnused(String name, String what, Span nameSpan) {
-    if (!scope.isUsed(name)) {
+    if (!scope.isUsed(name) && !duplicates.contains(name)) {
       problems.report(
           ProblemKind.NAME_UNUSED,
           nameSpan,

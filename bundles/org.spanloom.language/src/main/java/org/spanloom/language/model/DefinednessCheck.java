@@ -12,6 +12,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.Set;
 import java.util.function.BooleanSupplier;
+import java.util.function.Supplier;
 import org.spanloom.language.model.LinearForm.MatrixEntry;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.text.Span;
@@ -23,6 +24,11 @@ import org.spanloom.language.units.UnitOfMeasure;
  * used.
  */
 final class DefinednessCheck {
+
+  /**
+   * Deeper terms are not looked through for being plain; bounds the work on terms that share parts.
+   */
+  private static final int PLAIN_DEPTH = 8;
 
   private final SystemScope system;
   private final Times times;
@@ -45,7 +51,7 @@ final class DefinednessCheck {
 
   void lets(List<Let> lets) {
     for (Let let : lets) {
-      if (!isFine(let.value(), let.span(), let.nameSpan(), "\"" + let.name() + "\"")) {
+      if (!isFine(let.value(), let.span(), let.nameSpan(), () -> "\"" + let.name() + "\"")) {
         faulty.add(let);
       }
     }
@@ -75,9 +81,10 @@ final class DefinednessCheck {
         new Term.Quotient(Term.ONE, entry.term()),
         span,
         span,
-        "The equation divided by the factor of the derivative in \""
-            + system.resolver().shown(span)
-            + "\"");
+        () ->
+            "The equation divided by the factor of the derivative in \""
+                + system.resolver().shown(span)
+                + "\"");
   }
 
   void outputs(List<Output> outputs) {
@@ -101,16 +108,13 @@ final class DefinednessCheck {
 
   private void entry(Term term, List<Span> sources) {
     Span span = sources.getFirst();
-    isFine(term, span, span, "\"" + system.resolver().shown(span) + "\"");
+    isFine(term, span, span, () -> "\"" + system.resolver().shown(span) + "\"");
   }
 
-  private boolean isFine(Term term, Span place, Span shown, String what) {
+  private boolean isFine(Term term, Span place, Span shown, Supplier<String> what) {
     ModelReader.check(cancelled);
-    boolean trivial =
-        term instanceof Term.Constant
-            || term instanceof Term.ParameterTerm
-            || term instanceof Term.LetTerm
-            || !times.interval().isBounded() && Simplifier.surelyHasAValue(term);
+    boolean bounded = times.interval().isBounded();
+    boolean trivial = isPlain(term, 0) || !bounded && Simplifier.surelyHasAValue(term);
     if (trivial || system.problems().isFull() || usesFaulty(term)) {
       return true;
     }
@@ -120,7 +124,7 @@ final class DefinednessCheck {
         boolean beyondNumbers =
             undefined.cause() == Definedness.Cause.OVERFLOW && !times.interval().isBounded();
         if (!beyondNumbers && reported.add(place)) {
-          report(undefined, shown, what);
+          report(undefined, shown, what.get());
         }
         yield beyondNumbers;
       }
@@ -132,7 +136,7 @@ final class DefinednessCheck {
                   ProblemKind.COEFFICIENT_UNDECIDED,
                   shown,
                   "It could not be shown that "
-                      + what
+                      + what.get()
                       + " is finite from "
                       + at(undecided.time())
                       + " on: "
@@ -142,6 +146,27 @@ final class DefinednessCheck {
         yield true;
       }
     };
+  }
+
+  /**
+   * Tells whether a small term is made of sums and products only, which have a value everywhere.
+   */
+  private static boolean isPlain(Term term, int depth) {
+    return depth < PLAIN_DEPTH
+        && switch (term) {
+          case Term.Constant number -> Double.isFinite(number.value());
+          case Term.ParameterTerm parameter -> true;
+          case Term.LetTerm let -> true;
+          case Term.Time time -> true;
+          case Term.Negation(Term a) -> isPlain(a, depth + 1);
+          case Term.Sum(Term a, Term b) -> isPlain(a, depth + 1) && isPlain(b, depth + 1);
+          case Term.Difference(Term a, Term b) -> isPlain(a, depth + 1) && isPlain(b, depth + 1);
+          case Term.Product(Term a, Term b) -> isPlain(a, depth + 1) && isPlain(b, depth + 1);
+          case Term.Quotient(Term a, Term b) ->
+              b instanceof Term.Constant(double divisor) && divisor != 0 && isPlain(a, depth + 1);
+          case Term.Power power -> false;
+          case Term.FunctionTerm call -> false;
+        };
   }
 
   private boolean usesFaulty(Term term) {

@@ -11,10 +11,12 @@ import java.util.List;
 import java.util.Optional;
 import java.util.Set;
 import org.spanloom.language.model.Meaning.StateMeaning;
+import org.spanloom.language.problem.Fix;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.syntax.Expression;
 import org.spanloom.language.syntax.Expression.NameExpression;
 import org.spanloom.language.syntax.Statement.EquationStatement;
+import org.spanloom.language.syntax.Statement.StateStatement;
 
 /** Gives the equations of a system their meaning and finds the orders of its states. */
 final class EquationReader {
@@ -51,11 +53,11 @@ final class EquationReader {
   /**
    * Notes that an equation may be missing because a statement could not be read.
    *
-   * @param namesWithPrimes names in it that primes follow
+   * @param names states whose equation it may be
    */
-  void noteUnread(Set<String> namesWithPrimes) {
+  void noteUnread(Set<String> names) {
     allRead = false;
-    for (String name : namesWithPrimes) {
+    for (String name : names) {
       system.state(name).ifPresent(state -> mentioned[state.index()] = true);
     }
   }
@@ -111,13 +113,39 @@ final class EquationReader {
   }
 
   /**
-   * Returns the components of the state vector, known from the equations and the declarations of
-   * derivatives.
+   * Returns the components of the state vector, known from the equations; where a state has none,
+   * from its declarations. Reports derivatives that are declared but no component.
    */
   StateVector stateVector() {
-    int[] atLeastOne = new int[orders.length];
+    int[] known = new int[orders.length];
     Arrays.setAll(
-        atLeastOne, i -> Math.max(1, Math.max(orders[i], system.declaredDerivatives(i) + 1)));
-    return new StateVector(system.states(), atLeastOne);
+        known, i -> orders[i] > 0 ? orders[i] : Math.max(1, system.declaredDerivatives(i) + 1));
+    for (SystemScope.Derivative derivative : system.derivatives()) {
+      StateStatement statement = derivative.statement();
+      Optional<StateMeaning> state = system.state(statement.name().text());
+      if (state.isPresent() && statement.primes() >= known[state.get().index()]) {
+        reportDerivativeAlone(statement, known[state.get().index()]);
+        allRead = false;
+      }
+    }
+    return new StateVector(system.states(), known);
+  }
+
+  private void reportDerivativeAlone(StateStatement statement, int order) {
+    String name = statement.name().text();
+    problems.report(
+        ProblemKind.STATE_WITHOUT_EQUATION,
+        statement.span(),
+        "\""
+            + statement.label()
+            + "\" is declared, but no equation holds \""
+            + statement.label()
+            + "'\": the equations of \""
+            + name
+            + "\" go up to \""
+            + name
+            + "'".repeat(order)
+            + "\". Remove the declaration or write an equation of higher order.",
+        Fix.replace("Remove the declaration", statement.span(), ""));
   }
 }

@@ -16,6 +16,7 @@ import java.util.Set;
 import org.spanloom.language.problem.Fix;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.syntax.Expression;
+import org.spanloom.language.syntax.Name;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.Setting;
 import org.spanloom.language.syntax.Statement.StateStatement;
@@ -83,9 +84,9 @@ final class InitialValuesReader {
       problems.report(
           ProblemKind.INITIAL_TIME_MISSING,
           components.get(0).declaration(),
-          "The interval "
+          "The interval ("
               + times.shown()
-              + " does not hold a left end at which these values stand: write initial values NAME at TIME { ... }"
+              + ") holds no left end at which these values stand: write initial values NAME at TIME { ... }"
               + " instead.");
     }
     if (sound && time.isPresent()) {
@@ -126,6 +127,11 @@ final class InitialValuesReader {
                 ? "give one in the declaration."
                 : "write state " + first.label() + unit + " = 0 or another value."),
         fix);
+  }
+
+  /** Notes a set whose statement could not be read, so that uses of it are not reported. */
+  void noteUnread(Name name) {
+    declared.putIfAbsent(name.text(), name.span());
   }
 
   /** Reads a named set. */
@@ -182,9 +188,9 @@ final class InitialValuesReader {
       problems.report(
           ProblemKind.INITIAL_TIME_MISSING,
           statement.name().span(),
-          "The interval "
+          "The interval ("
               + times.shown()
-              + " does not hold a left end at which these values stand: write at and a time behind the name.",
+              + ") holds no left end at which these values stand: write at and a time behind the name.",
           Fix.insert("Insert at", end, " at 1"));
     }
     return time;

@@ -109,6 +109,7 @@ final class NameResolver {
   private void unknown(NameExpression name) {
     String word = name.name().text();
     Optional<String> nearest = problems.isFull() ? Optional.empty() : scope.nearest(word);
+    nearest.ifPresent(scope::markUsed);
     problems.report(
         ProblemKind.NAME_UNKNOWN,
         name.name().span(),
@@ -144,7 +145,7 @@ final class NameResolver {
     if (!place.time()) {
       String remedy =
           place == Place.LET
-              ? "name it as an argument, as in let f(" + name.name().text() + ") = ..."
+              ? "name it as an argument, as in let f(" + name.name().text() + ")"
               : "use numbers and parameters only";
       problems.report(
           ProblemKind.TIME_MISPLACED,
@@ -235,8 +236,15 @@ final class NameResolver {
               + (place.what().startsWith("a named") ? " Declare it as an output instead." : ""));
       return Optional.empty();
     }
-    return Optional.of(
-        Quantity.state(StateKey.running(state.index(), name.primes()), dimension(state, name)));
+    return hasKnownUnit(name)
+        ? Optional.of(
+            Quantity.state(StateKey.running(state.index(), name.primes()), dimension(state, name)))
+        : Optional.empty();
+  }
+
+  /** A derivative has no known unit where that of time could not be read. */
+  private boolean hasKnownUnit(NameExpression name) {
+    return name.primes() == 0 || !scope.timeName().isEmpty();
   }
 
   private Dimension dimension(StateMeaning state, NameExpression name) {
@@ -267,6 +275,7 @@ final class NameResolver {
 
   private Optional<Quantity> sampledState(StateMeaning state, CallExpression call, Place place) {
     return namedTime(call, place)
+        .filter(at -> hasKnownUnit(call.callee()))
         .map(at -> {
           StateKey key =
               new StateKey(
@@ -360,7 +369,7 @@ final class NameResolver {
         sound =
             resolver.notLinear(
                 call.span(),
-                "the argument of " + word + " holds " + resolver.stateIn(argument.value()));
+                "in the argument of " + word + ", " + resolver.holding(argument.value()));
       } else if (value.isPresent()) {
         terms.add(value.get().constant().term());
         dimensions.add(value.get().dimension());

@@ -7,6 +7,7 @@ package org.spanloom.language.model;
 
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import org.spanloom.language.model.Quantity.Part;
@@ -41,7 +42,9 @@ final class QuantitySum {
     }
 
     Part total() {
-      return new Part(total(0, terms.size()), sources.stream().distinct().toList(), true);
+      List<Span> places =
+          sources.size() < 2 ? List.copyOf(sources) : List.copyOf(new LinkedHashSet<>(sources));
+      return new Part(total(0, terms.size()), places, true);
     }
 
     private Term total(int from, int to) {

@@ -264,10 +264,7 @@ final class Resolver {
       }
       Quantity right = value.orElseThrow();
       if (right.holdsStates() && factor.divides()) {
-        sound =
-            notLinear(
-                product.span(),
-                "the divisor \"" + shown(expression.span()) + "\" holds " + stateIn(expression));
+        sound = notLinear(product.span(), "the divisor " + holding(expression));
       } else if (right.holdsStates() && result.isPresent() && result.get().holdsStates()) {
         sound =
             notLinear(
@@ -326,7 +323,7 @@ final class Resolver {
     }
     if (base.get().holdsStates() || exponent.get().holdsStates()) {
       Expression guilty = base.get().holdsStates() ? power.base() : power.exponent();
-      notLinear(power.span(), "\"" + shown(guilty.span()) + "\" holds " + stateIn(guilty));
+      notLinear(power.span(), holding(guilty));
       return Optional.empty();
     }
     if (!fits(exponent.get(), Dimension.NONE, "1", power.exponent().span(), "an exponent")) {
@@ -416,11 +413,16 @@ final class Resolver {
     return false;
   }
 
-  /** Returns the first state named in an expression, for messages. */
-  String stateIn(Expression expression) {
+  /** Says in a few words which state an expression holds. */
+  String holding(Expression expression) {
+    String text = "\"" + shown(expression.span()) + "\"";
     List<NameExpression> states =
         ExpressionNames.of(expression).stream().filter(names::isStateOrOutput).toList();
-    return states.isEmpty() ? "a state" : "\"" + states.getFirst().label() + "\"";
+    if (states.isEmpty()) {
+      return text + " holds a state";
+    }
+    String first = "\"" + states.getFirst().label() + "\"";
+    return first.equals(text) ? text + " is a state" : text + " holds the state " + first;
   }
 
   /** Returns the text of a span, shortened to be quoted in a message. */

@@ -31,7 +31,6 @@ import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.syntax.Token;
-import org.spanloom.language.syntax.TokenKind;
 import org.spanloom.language.text.SourceText;
 import org.spanloom.language.text.Span;
 import org.spanloom.language.units.UnitOfMeasure;
@@ -48,8 +47,9 @@ final class SystemReader {
   private final BooleanSupplier cancelled;
   private final SystemScope system;
   private final Declarations declarations;
-  private final Set<String> unreadPrimes = new HashSet<>();
+  private final Set<String> unreadGoverned = new HashSet<>();
   private final Set<String> unreadNames = new HashSet<>();
+  private final boolean timeKnown;
   private boolean hasUnread;
   private double accuracy = SystemModel.DEFAULT_ACCURACY;
   private Span accuracySpan;
@@ -66,29 +66,35 @@ final class SystemReader {
     this.problems = problems;
     this.cancelled = cancelled;
     Scope scope = new Scope(Optional.of(outer));
-    UnitOfMeasure timeUnit = timeUnit(statement, new UnitResolver(problems), problems);
-    this.system = new SystemScope(source, statement, problems, scope, timeUnit);
+    Optional<UnitOfMeasure> timeUnit = timeUnit(statement, new UnitResolver(problems), problems);
+    this.timeKnown = timeUnit.isPresent();
+    this.system =
+        new SystemScope(source, statement, problems, scope, timeUnit.orElse(UnitOfMeasure.ONE));
     this.declarations = new Declarations(scope, problems, system.units(), system.resolver());
     this.accuracySpan = statement.name().span();
   }
 
-  private static UnitOfMeasure timeUnit(
+  /** Returns the unit of time, or empty where there is no sound one. */
+  private static Optional<UnitOfMeasure> timeUnit(
       SystemStatement statement, UnitResolver units, Problems problems) {
-    Optional<UnitOfMeasure> unit = statement.over().flatMap(OverClause::unit).flatMap(units::read);
+    if (statement.over().isEmpty() || statement.over().get().name().text().isEmpty()) {
+      return Optional.empty();
+    }
+    Optional<UnitOfMeasure> unit = units.declared(statement.over().get().unit());
     if (unit.isPresent() && unit.get().offset() != 0) {
       problems.report(
           ProblemKind.UNIT_OFFSET,
           statement.over().flatMap(OverClause::unit).get().span(),
           "The independent variable cannot be in a unit with a zero point of its own: write [K].");
-      return UnitOfMeasure.ONE;
+      return Optional.empty();
     }
-    return unit.orElse(UnitOfMeasure.ONE);
+    return unit;
   }
 
   SystemModel read() {
     collect();
     declarations.read();
-    Times times = new Times(system, statement.over());
+    Times times = new Times(system, statement.over(), timeKnown);
     EquationReader equations = new EquationReader(system);
     for (Statement s : statement.body()) {
       ModelReader.check(cancelled);
@@ -97,7 +103,7 @@ final class SystemReader {
       }
     }
     if (hasUnread) {
-      equations.noteUnread(unreadPrimes);
+      equations.noteUnread(unreadGoverned);
     }
     StateVector vector = equations.stateVector();
     LinearFormBuilder builder = new LinearFormBuilder(system, equations, vector);
@@ -113,6 +119,10 @@ final class SystemReader {
         case InitialValuesStatement values -> initialValues.read(values);
         case BasisStatement basis -> bases.read(basis);
         case AccuracyStatement stated -> accuracy(stated);
+        case UnreadStatement unread when unread.word().equals("initial") ->
+            unread.declares().ifPresent(initialValues::noteUnread);
+        case UnreadStatement unread when unread.word().equals("basis") ->
+            unread.declares().ifPresent(bases::noteUnread);
         default -> {}
       }
     }
@@ -153,13 +163,11 @@ final class SystemReader {
   /** Takes all names, so that the order of declarations does not matter. */
   private void collect() {
     Scope scope = system.scope();
-    if (statement.over().isPresent() && !statement.over().get().name().text().isEmpty()) {
-      Name time = statement.over().get().name();
-      if (declarations.takesName(time)) {
-        scope.define(time.text(), new TimeMeaning(system.timeUnit(), time.span()));
-      }
-    } else {
-      scope.define("t", new BrokenMeaning(statement.header()));
+    Name time = statement.over().map(OverClause::name).orElse(new Name("t", statement.header()));
+    if (!timeKnown) {
+      scope.define(time.text(), new BrokenMeaning(time.span()));
+    } else if (declarations.takesName(time)) {
+      scope.define(time.text(), new TimeMeaning(system.timeUnit(), time.span()));
     }
     List<StateStatement> derivatives = new ArrayList<>();
     for (Statement s : statement.body()) {
@@ -173,8 +181,9 @@ final class SystemReader {
             system.declareState(state);
           }
         }
-        case UnreadStatement unread -> unread(unread.span(), unread.declares());
-        case LaterStatement later -> unread(later.span(), later.declares());
+        case UnreadStatement unread ->
+            unread(unread.span(), unread.declares(), unread.word().isEmpty());
+        case LaterStatement later -> unread(later.span(), later.declares(), true);
         case SystemStatement inner -> {}
         case EquationStatement equation -> {}
         case InitialValuesStatement values -> {}
@@ -186,8 +195,12 @@ final class SystemReader {
     derivatives.forEach(system::declareDerivative);
   }
 
-  /** Notes what a statement that could not be read may declare, use or govern. */
-  private void unread(Span span, Optional<Name> declares) {
+  /**
+   * Notes what a statement that could not be read may declare, use or govern.
+   *
+   * @param mayGovern whether it may be the equation of a state named in it
+   */
+  private void unread(Span span, Optional<Name> declares, boolean mayGovern) {
     hasUnread = true;
     declares.ifPresent(name -> {
       if (system.scope().own(name.text()).isEmpty()) {
@@ -195,14 +208,14 @@ final class SystemReader {
       }
     });
     String text = system.slice(span);
-    Token previous = new Token(TokenKind.NEWLINE, 0, 0);
     for (Token token : Lexer.lex(text)) {
       if (token.kind().isName()) {
-        unreadNames.add(text.substring(token.start(), token.end()));
-      } else if (token.kind() == TokenKind.PRIMES && previous.kind().isName()) {
-        unreadPrimes.add(text.substring(previous.start(), previous.end()));
+        String name = text.substring(token.start(), token.end());
+        unreadNames.add(name);
+        if (mayGovern) {
+          unreadGoverned.add(name);
+        }
       }
-      previous = token;
     }
   }
 

@@ -6,7 +6,9 @@
 package org.spanloom.language.model;
 
 import java.util.ArrayList;
+import java.util.Collection;
 import java.util.HashMap;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -33,7 +35,7 @@ final class SystemScope {
   private final Resolver resolver;
   private final UnitOfMeasure timeUnit;
   private final List<StateMeaning> states = new ArrayList<>();
-  private final Map<String, Derivative> derivatives = new HashMap<>();
+  private final Map<String, Derivative> derivatives = new LinkedHashMap<>();
   private final Map<String, Integer> declaredOrders = new HashMap<>();
 
   /** A derivative of a state with a declaration of its own. */
@@ -70,6 +72,7 @@ final class SystemScope {
     return resolver;
   }
 
+  /** Returns the unit of time; the number 1 where it could not be read. */
   UnitOfMeasure timeUnit() {
     return timeUnit;
   }
@@ -104,7 +107,8 @@ final class SystemScope {
   void declareDerivative(StateStatement derivative) {
     String name = derivative.name().text();
     Optional<Meaning> meaning = scope.own(name);
-    if (meaning.isPresent() && meaning.get() instanceof BrokenMeaning) {
+    boolean timeUnknown = scope.timeName().isEmpty();
+    if (timeUnknown || meaning.isPresent() && meaning.get() instanceof BrokenMeaning) {
       return;
     }
     Optional<StateMeaning> state = state(name);
@@ -126,11 +130,13 @@ final class SystemScope {
       return;
     }
     Optional<UnitOfMeasure> declared = units.declared(derivative.unit());
-    if (declared.isEmpty() || !fits(derivative, state.get(), declared.get())) {
-      return;
-    }
+    // A derivative whose unit is wrong still counts as declared, so that nothing else is reported
+    // for want of it.
+    UnitOfMeasure unit = derivativeUnit(state.get(), derivative.primes());
+    boolean sound = declared.isPresent() && fits(derivative, state.get(), declared.get());
     boolean twice =
-        derivatives.putIfAbsent(derivative.label(), new Derivative(derivative, declared.get()))
+        derivatives.putIfAbsent(
+                derivative.label(), new Derivative(derivative, sound ? declared.get() : unit))
             != null;
     if (twice) {
       problems.report(
@@ -186,6 +192,11 @@ final class SystemScope {
       return false;
     }
     return true;
+  }
+
+  /** Returns the declared derivatives, in the order of the text. */
+  Collection<Derivative> derivatives() {
+    return derivatives.values();
   }
 
   /** Returns the highest number of primes a state is declared with, 0 if only it itself is. */

@@ -23,11 +23,14 @@ final class Times {
   private final UnitOfMeasure unit;
   private final TimeInterval interval;
   private final boolean known;
+  private final boolean unitKnown;
 
-  Times(SystemScope system, Optional<OverClause> over) {
+  Times(SystemScope system, Optional<OverClause> stated, boolean unitKnown) {
     this.system = system;
     this.problems = system.problems();
     this.unit = system.timeUnit();
+    this.unitKnown = unitKnown;
+    Optional<OverClause> over = unitKnown ? stated : Optional.empty();
     Optional<Double> start = over.flatMap(OverClause::start).flatMap(this::bound);
     Optional<Double> end = over.flatMap(OverClause::end).flatMap(this::bound);
     boolean startMissing = over.flatMap(OverClause::start).isEmpty();
@@ -101,6 +104,9 @@ final class Times {
 
   /** Returns a time inside the interval in coherent SI units. */
   Optional<Term> time(Expression expression) {
+    if (!unitKnown) {
+      return Optional.empty();
+    }
     Optional<Quantity> value =
         system.resolver().given(expression, unit, "the independent variable", Place.NAMED_TIME);
     return value.map(q -> q.constant().term()).filter(t -> isInside(t, expression.span()));
@@ -151,7 +157,7 @@ final class Times {
             ? ""
             : (interval.endOpen() ? "before " : "to ") + number(interval.end());
     String both = left.isEmpty() || right.isEmpty() ? left + right : left + " " + right;
-    return both + unitText();
+    return both.isEmpty() ? "without ends" : both + unitText();
   }
 
   /** Returns the time at which initial values stand that name none, if there is one. */

@@ -118,7 +118,9 @@ final class Cursor {
   void failHere(ProblemKind kind, String expected, Fix... fixes) {
     Token token = peek();
     if (!failBadToken()) {
-      String found = atEnd() ? "the statement ends" : "\"" + shortened(token) + "\" stands";
+      boolean quoted = token.kind() == TokenKind.STRING;
+      String quote = quoted ? "" : "\"";
+      String found = atEnd() ? "the statement ends" : quote + shortened(token) + quote + " stands";
       fail(kind, token.span(), expected + ", but here " + found + ".", fixes);
     }
   }

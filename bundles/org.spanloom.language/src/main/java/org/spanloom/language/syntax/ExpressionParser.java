@@ -277,7 +277,9 @@ final class ExpressionParser {
           cursor.fail(
               ProblemKind.OPERATOR_MISSING,
               token.span(),
-              "A sign is missing before \"" + cursor.text(token) + "\": write * for a product.",
+              "A sign is missing before \""
+                  + cursor.text(token)
+                  + "\", or the statement should end there: write * for a product.",
               Fix.insert("Insert *", cursor.lastEnd(), "*"));
       case UNIT, OPEN_BRACKET ->
           cursor.fail(

@@ -243,7 +243,8 @@ public final class Parser {
         new Span(line.span().start(), closed ? end : Math.min(end, lastEnd(settings, line)));
     if (!headerRead) {
       Optional<Name> declared = name.text().isEmpty() ? Optional.empty() : Optional.of(name);
-      return new UnreadStatement(text.substring(span.start(), span.end()), declared, span);
+      return new UnreadStatement(
+          "initial", text.substring(span.start(), span.end()), declared, span);
     }
     return new InitialValuesStatement(name, time, settings, allRead, line.documentation(), span);
   }

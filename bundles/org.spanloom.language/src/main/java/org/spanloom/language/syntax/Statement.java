@@ -151,10 +151,12 @@ public sealed interface Statement {
   /**
    * A statement that could not be read; the reason is among the problems of the file.
    *
+   * @param word its first word if that is a reserved one, else empty
    * @param text what stands there
    * @param declares the name it would declare, if that much is known
    */
-  record UnreadStatement(String text, Optional<Name> declares, Span span) implements Statement {}
+  record UnreadStatement(String word, String text, Optional<Name> declares, Span span)
+      implements Statement {}
 
   /** {@code ± 5 %}; half the width of the interval of uncertainty. */
   record Uncertainty(Expression halfWidth, boolean percent, Span span) {}

@@ -51,7 +51,7 @@ final class StatementParser {
    * for any other word see {@link Parser}.
    */
   Statement statement() {
-    String word = cursor.is(TokenKind.STATEMENT_WORD) ? cursor.text(cursor.peek()) : "";
+    String word = firstWord();
     Statement statement =
         switch (word) {
           case "parameter" -> parameter();
@@ -68,18 +68,22 @@ final class StatementParser {
 
   /** Returns the line as one that could not be read, with the name it declares if there is one. */
   UnreadStatement unread() {
-    return new UnreadStatement(cursor.text(line.span()), declaredName(), line.span());
+    String word = firstWord();
+    int place = word.equals("initial") ? 2 : 1;
+    boolean declares =
+        !word.isEmpty()
+            && !word.equals("row")
+            && !word.equals("require")
+            && line.tokens().size() > place
+            && line.tokens().get(place).kind().isName();
+    Optional<Name> name =
+        declares ? Optional.of(nameOf(line.tokens().get(place))) : Optional.empty();
+    return new UnreadStatement(word, cursor.text(line.span()), name, line.span());
   }
 
-  private Optional<Name> declaredName() {
-    List<Token> tokens = line.tokens();
-    boolean declares =
-        tokens.size() > 1
-            && tokens.get(0).kind() == TokenKind.STATEMENT_WORD
-            && tokens.get(1).kind().isName()
-            && !cursor.text(tokens.get(0)).equals("row")
-            && !cursor.text(tokens.get(0)).equals("require");
-    return declares ? Optional.of(nameOf(tokens.get(1))) : Optional.empty();
+  private String firstWord() {
+    Token first = line.tokens().getFirst();
+    return first.kind() == TokenKind.STATEMENT_WORD ? cursor.text(first) : "";
   }
 
   /** {@code parameter = "parameter", name, [ unit ], "=", expression, [ uncertainty ] ;} */
@@ -191,7 +195,8 @@ final class StatementParser {
             + meant
                 .map(m -> ": did you mean " + m + "?")
                 .orElse(
-                    ": write one of " + String.join(", ", Words.STATEMENT) + ", or an equation."),
+                    ": write an equation, or one of system, parameter, let, state, output, initial values,"
+                        + " basis, require and accuracy."),
         meant.stream().map(m -> Fix.replace("Write " + m, first.span(), m)).toArray(Fix[]::new));
     return true;
   }
