@@ -28,12 +28,12 @@ import org.xml.sax.SAXException;
  * @param file the file
  * @param document its tree
  */
-record HelpPage(Path file, Document document) {
+public record HelpPage(Path file, Document document) {
 
   /** The folder of the help bundle; tests run in their own module's folder. */
   static final Path BUNDLE = Path.of("..", "org.spanloom.help").toAbsolutePath().normalize();
 
-  static HelpPage of(String name) throws IOException {
+  public static HelpPage of(String name) throws IOException {
     Path file = BUNDLE.resolve(name);
     try {
       DocumentBuilder builder = DocumentBuilderFactory.newInstance().newDocumentBuilder();
@@ -45,7 +45,7 @@ record HelpPage(Path file, Document document) {
   }
 
   /** Returns the names of all pages, such as {@code html/findings.html}. */
-  static List<String> names() throws IOException {
+  public static List<String> names() throws IOException {
     try (Stream<Path> files = Files.list(BUNDLE.resolve("html"))) {
       return files
           .map(f -> "html/" + f.getFileName())
@@ -59,7 +59,7 @@ record HelpPage(Path file, Document document) {
     return BUNDLE.relativize(file).toString().replace('\\', '/');
   }
 
-  List<Element> elements(String tag) {
+  public List<Element> elements(String tag) {
     NodeList nodes = document.getElementsByTagName(tag);
     List<Element> elements = new ArrayList<>();
     for (int i = 0; i < nodes.getLength(); i++) {

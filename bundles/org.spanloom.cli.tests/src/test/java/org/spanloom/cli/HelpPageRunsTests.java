@@ -1,0 +1,169 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.cli;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.Set;
+import java.util.TreeSet;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
+import java.util.stream.Collectors;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.EnumSource;
+import org.spanloom.help.HelpPage;
+import org.w3c.dom.Element;
+
+/** What the help shows as printed by the command line is what the command line prints. */
+class HelpPageRunsTests {
+
+  private static final Pattern NUMBER = Pattern.compile("-?[0-9]+(\\.[0-9]+)?([eE][-+]?[0-9]+)?");
+
+  /** Digits that other processors may round otherwise. */
+  private static final double SAME = 1e-9;
+
+  /** Estimated errors are made of rounding errors alone and may differ by a factor. */
+  private static final double ROUNDING = 1e-10;
+
+  @Test
+  void everyRunOfThePagesPrintsWhatThePagesShow(@TempDir Path folder) throws IOException {
+    Map<String, String> models = titledModels();
+    int runs = 0;
+    for (String name : HelpPage.names()) {
+      Map<String, String> texts = new HashMap<>(models);
+      Optional<String> command = Optional.empty();
+      for (Element block : HelpPage.of(name).elements("pre")) {
+        String content = block.getTextContent();
+        switch (block.getAttribute("class")) {
+          case "faulty" ->
+              texts.compute(
+                  block.getAttribute("title"),
+                  (title, text) -> changed(text, content.strip().indent(2)));
+          case "shown" -> command = Optional.of(content.strip());
+          case "printed" -> {
+            runs++;
+            assertPrints(folder, texts, command.orElseThrow(), content);
+          }
+          default -> command = Optional.empty();
+        }
+      }
+    }
+    assertTrue(runs >= 5, runs + " runs");
+  }
+
+  private static Map<String, String> titledModels() throws IOException {
+    Map<String, String> models = new HashMap<>();
+    for (String name : HelpPage.names()) {
+      for (Element block : HelpPage.of(name).elements("pre")) {
+        if (block.getAttribute("class").equals("model") && !block.getAttribute("title").isEmpty()) {
+          models.put(block.getAttribute("title"), block.getTextContent().stripLeading());
+        }
+      }
+    }
+    return models;
+  }
+
+  /** Replaces the line of a model that has the same left side as a line. */
+  private static String changed(String text, String line) {
+    String leftSide = leftSide(line);
+    List<String> lines =
+        text.lines().map(l -> leftSide(l).equals(leftSide) ? line.stripTrailing() : l).toList();
+    assertFalse(lines.equals(text.lines().toList()), line);
+    return String.join("\n", lines) + "\n";
+  }
+
+  private static String leftSide(String line) {
+    int sign = line.indexOf('=');
+    return (sign < 0 ? line : line.substring(0, sign)).strip();
+  }
+
+  private static void assertPrints(
+      Path folder, Map<String, String> models, String command, String shown) throws IOException {
+    List<String> words = new ArrayList<>(List.of(command.split(" +")));
+    assertEquals("spanloom", words.removeFirst());
+    String file = words.get(1);
+    Path model = Files.writeString(folder.resolve(file), models.get(file));
+    words.set(1, model.toString());
+    CommandRun run = CommandRun.of(words.toArray(String[]::new));
+    List<String> printed =
+        (run.out() + "\n" + run.err()).replace(model.toString(), file).lines().toList();
+    int from = 0;
+    for (String line : shown.strip().lines().toList()) {
+      int at = from;
+      while (at < printed.size() && !isSame(line, printed.get(at))) {
+        at++;
+      }
+      assertTrue(at < printed.size(), command + " does not print\n" + line + "\nbut\n" + printed);
+      from = at + 1;
+    }
+  }
+
+  private static boolean isSame(String shown, String printed) {
+    if (!withoutNumbers(shown).equals(withoutNumbers(printed))) {
+      return false;
+    }
+    Matcher a = NUMBER.matcher(shown);
+    Matcher b = NUMBER.matcher(printed);
+    while (a.find() && b.find()) {
+      double x = Double.parseDouble(a.group());
+      double y = Double.parseDouble(b.group());
+      double size = Math.max(Math.abs(x), Math.abs(y));
+      if (size > ROUNDING && Math.abs(x - y) > SAME * size) {
+        return false;
+      }
+    }
+    return true;
+  }
+
+  private static String withoutNumbers(String line) {
+    return NUMBER.matcher(line).replaceAll("0").replaceAll(" +", " ");
+  }
+
+  @ParameterizedTest
+  @EnumSource(Command.class)
+  void thePageOfTheCommandLineListsEveryOptionOfACommand(Command command) throws IOException {
+    Set<String> listed = new TreeSet<>();
+    HelpPage page = HelpPage.of("html/command-line.html");
+    boolean within = false;
+    for (Element element : page.elements("*")) {
+      if (element.getTagName().equals("h2")) {
+        within = element.getAttribute("id").equals(command.word());
+      } else if (within && element.getTagName().equals("td")) {
+        listed.addAll(options(element.getTextContent()));
+      }
+    }
+    String help = CommandRun.of(command.word(), "--help").out();
+    Set<String> known =
+        help.lines()
+            .filter(l -> l.matches("^ {2,6}(-\\w, )?--[a-z]+( .*|$)"))
+            .flatMap(l -> options(l.strip().replaceFirst(" {2,}.*", "")).stream())
+            .collect(Collectors.toCollection(TreeSet::new));
+    known.remove("--help");
+    assertFalse(known.isEmpty(), help);
+    assertEquals(known, listed);
+  }
+
+  private static Set<String> options(String text) {
+    Matcher option = Pattern.compile("--[a-z]+").matcher(text);
+    Set<String> options = new TreeSet<>();
+    while (option.find()) {
+      options.add(option.group());
+    }
+    return options;
+  }
+}
