@@ -66,6 +66,31 @@ class HelpPageRunsTests {
     assertTrue(runs >= 5, runs + " runs");
   }
 
+  /**
+   * The README quotes runs in code blocks whose first line is the command; "..." stands for lines
+   * left out.
+   */
+  @Test
+  void everyRunOfTheReadmePrintsWhatTheReadmeShows() throws IOException {
+    Path root = Path.of("..", "..");
+    Matcher blocks =
+        Pattern.compile("(?ms)^```\\n\\$ \\./releng/spanloom (.*?)\\n(.*?)^```$")
+            .matcher(Files.readString(root.resolve("README.md")));
+    int runs = 0;
+    while (blocks.find()) {
+      runs++;
+      String examples = root.resolve("examples") + "/";
+      String command = blocks.group(1).replace("examples/", examples);
+      assertPrinted(command, printed(command, examples, "examples/"), blocks.group(2));
+    }
+    assertEquals(3, runs);
+  }
+
+  private static List<String> printed(String command, String path, String shownPath) {
+    CommandRun run = CommandRun.of(command.split(" +"));
+    return (run.out() + "\n" + run.err()).replace(path, shownPath).lines().toList();
+  }
+
   private static Map<String, String> titledModels() throws IOException {
     Map<String, String> models = new HashMap<>();
     for (String name : HelpPage.names()) {
@@ -99,11 +124,13 @@ class HelpPageRunsTests {
     String file = words.get(1);
     Path model = Files.writeString(folder.resolve(file), models.get(file));
     words.set(1, model.toString());
-    CommandRun run = CommandRun.of(words.toArray(String[]::new));
-    List<String> printed =
-        (run.out() + "\n" + run.err()).replace(model.toString(), file).lines().toList();
+    String arguments = String.join(" ", words);
+    assertPrinted(command, printed(arguments, model.toString(), file), shown);
+  }
+
+  private static void assertPrinted(String command, List<String> printed, String shown) {
     int from = 0;
-    for (String line : shown.strip().lines().toList()) {
+    for (String line : shown.strip().lines().filter(l -> !l.equals("...")).toList()) {
       int at = from;
       while (at < printed.size() && !isSame(line, printed.get(at))) {
         at++;
