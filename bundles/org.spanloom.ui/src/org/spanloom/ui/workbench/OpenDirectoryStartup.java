@@ -7,30 +7,33 @@ package org.spanloom.ui.workbench;
 
 import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
+import java.util.List;
 import org.eclipse.core.runtime.CoreException;
 import org.eclipse.core.runtime.ICoreRunnable;
 import org.eclipse.core.runtime.IStatus;
+import org.eclipse.core.runtime.Platform;
 import org.eclipse.core.runtime.Status;
 import org.eclipse.core.runtime.jobs.Job;
 import org.eclipse.ui.IStartup;
 import org.spanloom.ui.UiIds;
 import org.spanloom.workspace.ProjectImport;
 
-/**
- * Opens the projects of the directory that the system property {@value #PROPERTY} names, if it
- * names one.
- */
+/** Opens the projects of the directory that the argument {@value #ARGUMENT} names, if it is given. */
 public final class OpenDirectoryStartup implements IStartup {
 
-  /** The property. */
-  public static final String PROPERTY = "spanloom.open";
+  /** The argument; the directory follows it. */
+  public static final String ARGUMENT = "-openProjects";
 
   @Override
   public void earlyStartup() {
-    String directory = System.getProperty(PROPERTY, "");
-    if (directory.isBlank()) {
-      return;
+    List<String> arguments = List.of(Platform.getApplicationArgs());
+    int at = arguments.indexOf(ARGUMENT);
+    if (at >= 0 && at + 1 < arguments.size()) {
+      open(arguments.get(at + 1));
     }
+  }
+
+  private static void open(String directory) {
     ICoreRunnable open =
         monitor -> {
           try {
