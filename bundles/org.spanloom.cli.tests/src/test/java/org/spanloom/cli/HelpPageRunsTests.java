@@ -34,11 +34,11 @@ class HelpPageRunsTests {
 
   private static final Pattern NUMBER = Pattern.compile("-?[0-9]+(\\.[0-9]+)?([eE][-+]?[0-9]+)?");
 
-  /** Digits that other processors may round otherwise. */
-  private static final double SAME = 1e-9;
+  /** A page stays true where a method takes other steps and so looks at other times. */
+  private static final double SAME = 0.02;
 
   /** Estimated errors are made of rounding errors alone and may differ by a factor. */
-  private static final double ROUNDING = 1e-10;
+  private static final double ROUNDING = 1e-8;
 
   @Test
   void everyRunOfThePagesPrintsWhatThePagesShow(@TempDir Path folder) throws IOException {

@@ -183,10 +183,9 @@ class HelpTruthTests {
     String names =
         rules.replaceAll("\"[^\"]*\"", " ").replaceAll("(?s)\\?.*?\\?", " ").replaceAll("'", " ");
     Set<String> used = new TreeSet<>();
-    for (String part : names.split("[=;,|(){}\\[\\]]")) {
-      if (!part.isBlank()) {
-        used.add(part.strip());
-      }
+    Matcher name = Pattern.compile("[a-z][a-z ]*").matcher(names);
+    while (name.find()) {
+      used.add(name.group().strip());
     }
     used.remove("file");
     defined.remove("file");
