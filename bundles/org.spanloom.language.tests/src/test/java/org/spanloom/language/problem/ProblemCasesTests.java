@@ -22,9 +22,10 @@ import org.spanloom.language.text.Position;
 import org.spanloom.language.text.SourceText;
 
 /**
- * Wrong inputs with the exact place, message and fixes. The files hold cases: a title behind {@code ==}, the input, a
- * line {@code --}, and what is found, as {@code line:column id message {fix}}. An input without a system, except in
- * system.cases, stands in the one of {@link #HEADER}, from line 2 on.
+ * Wrong inputs with the exact place, message and fixes. The files hold cases: a title behind {@code
+ * ==}, the input, a line {@code --}, and what is found, as {@code line:column id message {fix}}. An
+ * input without a system, except in system.cases, stands in the one of {@link #HEADER}, from line 2
+ * on.
  */
 class ProblemCasesTests {
 
@@ -44,11 +45,10 @@ class ProblemCasesTests {
   @TestFactory
   Stream<DynamicTest> eachCaseIsReportedExactly() {
     return cases().stream()
-        .map(
-            c ->
-                DynamicTest.dynamicTest(
-                    c.file() + ": " + c.title(),
-                    () -> assertEquals(c.expected(), problems(c.text()), c.text())));
+        .map(c ->
+            DynamicTest.dynamicTest(
+                c.file() + ": " + c.title(),
+                () -> assertEquals(c.expected(), problems(c.text()), c.text())));
   }
 
   @Test
@@ -65,11 +65,10 @@ class ProblemCasesTests {
           String fixed = apply(source.content(), fix);
           boolean still =
               ModelReader.read(new SourceText("fixed.span", fixed)).problems().stream()
-                  .anyMatch(
-                      p ->
-                          p.kind() == problem.kind()
-                              && p.span().start() == problem.span().start()
-                              && p.message().equals(problem.message()));
+                  .anyMatch(p ->
+                      p.kind() == problem.kind()
+                          && p.span().start() == problem.span().start()
+                          && p.message().equals(problem.message()));
           assertTrue(!still, c.title() + ": " + fix.label() + " leaves the problem in\n" + fixed);
         }
       }

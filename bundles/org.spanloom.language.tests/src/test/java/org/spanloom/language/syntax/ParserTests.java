@@ -40,15 +40,20 @@ class ParserTests {
   /** Writes an expression with all its parentheses. */
   private static String grouped(Expression expression) {
     return switch (expression) {
-      case Expression.NumberExpression n -> n.digits() + n.unit().map(u -> "[" + u.code() + "]").orElse("");
+      case Expression.NumberExpression n ->
+          n.digits() + n.unit().map(u -> "[" + u.code() + "]").orElse("");
       case Expression.NameExpression n -> n.label();
       case Expression.CallExpression c ->
           c.callee().label()
-              + c.arguments().stream().map(a -> (a.before() ? "before " : "") + grouped(a.value())).toList();
-      case Expression.SignedExpression s -> (s.negative() ? "(-" : "(+") + grouped(s.operand()) + ")";
+              + c.arguments().stream()
+                  .map(a -> (a.before() ? "before " : "") + grouped(a.value()))
+                  .toList();
+      case Expression.SignedExpression s ->
+          (s.negative() ? "(-" : "(+") + grouped(s.operand()) + ")";
       case SumExpression s -> {
         StringBuilder text = new StringBuilder("(");
-        s.addends().forEach(a -> text.append(a.subtracted() ? " - " : " + ").append(grouped(a.value())));
+        s.addends()
+            .forEach(a -> text.append(a.subtracted() ? " - " : " + ").append(grouped(a.value())));
         yield text.append(")").toString();
       }
       case Expression.ProductExpression p -> {
@@ -56,7 +61,8 @@ class ParserTests {
         p.factors().forEach(f -> text.append(f.divides() ? "/" : "*").append(grouped(f.value())));
         yield text.append(")").toString();
       }
-      case Expression.PowerExpression p -> "(" + grouped(p.base()) + "^" + grouped(p.exponent()) + ")";
+      case Expression.PowerExpression p ->
+          "(" + grouped(p.base()) + "^" + grouped(p.exponent()) + ")";
       case Expression.ParenthesisedExpression p -> grouped(p.inner());
       case Expression.MissingExpression m -> "?";
     };
@@ -85,7 +91,8 @@ class ParserTests {
 
   @Test
   void everyStatementIsReadBehindABrokenOne() {
-    List<Statement> body = body("let a = 2 +\nlet b = )\nstate x = 1\nx' = (\nparameter k = 3 [m\nlet c = 4");
+    List<Statement> body =
+        body("let a = 2 +\nlet b = )\nstate x = 1\nx' = (\nparameter k = 3 [m\nlet c = 4");
     assertEquals(
         List.of(
             UnreadStatement.class,
@@ -101,7 +108,8 @@ class ParserTests {
   @Test
   void aLineGoesOnWhereItMust() {
     List<Statement> body =
-        body("  x' = a +\n    b   # remark\n    *c\n  y' = max(a,\n\n    b)\n  let k = (1 +\n    2)");
+        body(
+            "  x' = a +\n    b   # remark\n    *c\n  y' = max(a,\n\n    b)\n  let k = (1 +\n    2)");
     assertEquals(4, body.size());
     assertInstanceOf(UnreadStatement.class, body.get(1));
     assertInstanceOf(EquationStatement.class, body.get(2));
@@ -137,7 +145,8 @@ class ParserTests {
   @Test
   void laterStatementsAreSkippedWithTheirBlocks() {
     List<Statement> body =
-        body("for i from 1 to 3 { c[i]' = 1\n jump at 3 { x becomes 2 }\n}\nmatrix K =\n row 1, 2\n row 3, 4\nlet a = 1");
+        body(
+            "for i from 1 to 3 { c[i]' = 1\n jump at 3 { x becomes 2 }\n}\nmatrix K =\n row 1, 2\n row 3, 4\nlet a = 1");
     assertEquals(3, body.size());
     assertEquals("matrix", ((LaterStatement) body.get(1)).word());
     assertInstanceOf(LetStatement.class, body.get(2));
@@ -146,7 +155,8 @@ class ParserTests {
   @Test
   void documentationBelongsToItsLineOrTheNextDeclaration() {
     List<Statement> body =
-        body("## first\n## second\nparameter a = 1 ## third\n\nparameter b = 2\nstate x = 1 ## fourth");
+        body(
+            "## first\n## second\nparameter a = 1 ## third\n\nparameter b = 2\nstate x = 1 ## fourth");
     assertEquals("first\nsecond\nthird", ((ParameterStatement) body.get(0)).documentation());
     assertEquals("", ((ParameterStatement) body.get(1)).documentation());
     assertEquals("fourth", ((StateStatement) body.get(2)).documentation());

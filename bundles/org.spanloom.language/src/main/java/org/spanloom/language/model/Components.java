@@ -116,6 +116,11 @@ final class Components {
         + (some.size() > 5 ? " and " + (some.size() - 5) + " more" : "");
   }
 
+  /** Returns the component of a name with primes, without reporting anything. */
+  Optional<StateComponent> labelled(String label) {
+    return Optional.ofNullable(indices.get(label)).map(list::get);
+  }
+
   /** Returns the component of a name with primes; reports it if there is none. */
   Optional<StateComponent> find(NameExpression name) {
     Integer index = indices.get(name.label());
@@ -128,9 +133,9 @@ final class Components {
             || system.derivative(name.label()).isPresent();
     if (!broken) {
       Optional<String> nearest =
-          system.problems().isFull()
-              ? Optional.empty()
-              : Nearest.of(name.label(), indices.keySet().stream().sorted().toList());
+          system.problems().maySuggest()
+              ? Nearest.of(name.label(), list.stream().map(StateComponent::label).toList())
+              : Optional.empty();
       system
           .problems()
           .report(

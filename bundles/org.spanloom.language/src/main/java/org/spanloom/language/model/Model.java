@@ -7,6 +7,7 @@ package org.spanloom.language.model;
 
 import java.util.List;
 import org.spanloom.language.problem.Problem;
+import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.problem.Severity;
 import org.spanloom.language.syntax.SyntaxFile;
 import org.spanloom.language.text.SourceText;
@@ -28,10 +29,17 @@ public record Model(
     problems = List.copyOf(problems);
   }
 
-  /** Tells whether no error lies inside a system, so that it can be solved. */
+  /**
+   * Tells whether no error lies inside a system, so that it can be solved; no where problems are
+   * left out.
+   */
   public boolean isSound(SystemModel system) {
     return system.equations().isPresent()
-        && problems.stream()
-            .noneMatch(p -> p.severity() == Severity.ERROR && system.span().contains(p.span()));
+        && problems.stream().noneMatch(p -> p.severity() == Severity.ERROR && concerns(p, system));
+  }
+
+  private static boolean concerns(Problem problem, SystemModel system) {
+    return problem.kind() == ProblemKind.TOO_MANY_PROBLEMS
+        || system.span().contains(problem.span());
   }
 }

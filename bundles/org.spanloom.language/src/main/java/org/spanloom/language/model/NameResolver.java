@@ -108,7 +108,7 @@ final class NameResolver {
 
   private void unknown(NameExpression name) {
     String word = name.name().text();
-    Optional<String> nearest = problems.isFull() ? Optional.empty() : scope.nearest(word);
+    Optional<String> nearest = problems.maySuggest() ? scope.nearest(word) : Optional.empty();
     nearest.ifPresent(scope::markUsed);
     problems.report(
         ProblemKind.NAME_UNKNOWN,

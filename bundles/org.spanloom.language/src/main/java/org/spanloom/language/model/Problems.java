@@ -19,8 +19,15 @@ final class Problems {
   /** Most problems listed for one text. */
   static final int LIMIT = 1000;
 
+  /**
+   * Most problems for which a similar name is looked for; bounds the work for files with many
+   * names.
+   */
+  private static final int SUGGESTIONS = 200;
+
   private final List<Problem> found = new ArrayList<>();
   private boolean cut;
+  private int suggestions;
 
   void report(ProblemKind kind, Span span, String message, Fix... fixes) {
     if (isFull()) {
@@ -33,6 +40,14 @@ final class Problems {
   /** Tells whether further problems are dropped, so that costly suggestions can be left out. */
   boolean isFull() {
     return found.size() >= LIMIT;
+  }
+
+  /**
+   * Tells whether a name may still be looked for that someone may have meant; each look goes
+   * through all names.
+   */
+  boolean maySuggest() {
+    return !isFull() && ++suggestions <= SUGGESTIONS;
   }
 
   /**

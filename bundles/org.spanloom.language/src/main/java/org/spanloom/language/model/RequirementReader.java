@@ -124,7 +124,10 @@ final class RequirementReader {
   }
 
   private boolean sidesAgree(Comparison comparison, Quantity left, Quantity right) {
-    if (left.zero() || right.zero() || left.dimension().equals(right.dimension())) {
+    if (left.zero() != right.zero()) {
+      return zeroIsClear(left.zero() ? comparison.left() : comparison.right(), comparison);
+    }
+    if (left.dimension().equals(right.dimension())) {
       return true;
     }
     problems.report(
@@ -136,6 +139,28 @@ final class RequirementReader {
             + Resolver.in(right.dimension())
             + ": only values of one dimension can be compared; give numbers their units.",
         Resolver.unitFix(comparison.right(), left.dimension()));
+    return false;
+  }
+
+  /** A bare 0 fits every dimension, but not a scale with a zero point of its own. */
+  private boolean zeroIsClear(Expression zero, Comparison comparison) {
+    Expression other = zero.equals(comparison.left()) ? comparison.right() : comparison.left();
+    Optional<UnitOfMeasure> unit = unitOfName(other).filter(u -> u.offset() != 0);
+    if (unit.isEmpty()) {
+      return true;
+    }
+    String code = unit.get().code();
+    problems.report(
+        ProblemKind.UNIT_OFFSET,
+        zero.span(),
+        "\""
+            + system.resolver().shown(other.span())
+            + "\" is on the scale "
+            + code
+            + ", and 0 without a unit does not say on which scale it is: write 0 ["
+            + code
+            + "] or 0 [K].",
+        Fix.insert("Add [" + code + "]", zero.span().end(), " [" + code + "]"));
     return false;
   }
 
@@ -195,10 +220,7 @@ final class RequirementReader {
       return Optional.empty();
     }
     if (reference.primes() > 0) {
-      return components.list().stream()
-          .filter(c -> c.label().equals(reference.label()))
-          .map(StateComponent::unit)
-          .findFirst();
+      return components.labelled(reference.label()).map(StateComponent::unit);
     }
     Optional<Meaning> meaning = system.scope().use(reference.name().text());
     return meaning.flatMap(m ->
@@ -292,7 +314,10 @@ final class RequirementReader {
   }
 
   private void unknown(Name name, String what, Collection<String> names) {
-    Optional<String> nearest = Nearest.of(name.text(), names.stream().sorted().toList());
+    Optional<String> nearest =
+        problems.maySuggest()
+            ? Nearest.of(name.text(), names.stream().sorted().toList())
+            : Optional.empty();
     problems.report(
         ProblemKind.NAME_UNKNOWN,
         name.span(),
