@@ -35,6 +35,21 @@ public final class UiIds {
   /** The wizard that makes a model file. */
   public static final String NEW_MODEL_WIZARD = "org.spanloom.ui.newModel";
 
+  /** What F1 tells about the editor; see contexts.xml of the help. */
+  public static final String EDITOR_HELP = "org.spanloom.help.editor";
+
+  /** What F1 tells about the Solution view. */
+  public static final String SOLUTION_HELP = "org.spanloom.help.solution";
+
+  /** What F1 tells about the Basis Findings view. */
+  public static final String BASIS_FINDINGS_HELP = "org.spanloom.help.basis_findings";
+
+  /** What F1 tells about the wizard that makes a project. */
+  public static final String NEW_PROJECT_HELP = "org.spanloom.help.new_project";
+
+  /** What F1 tells about the preferences. */
+  public static final String PREFERENCES_HELP = "org.spanloom.help.preferences";
+
   /** The family of our jobs, for {@code Job.belongsTo}. */
   public static final Object JOB_FAMILY = "org.spanloom";
 

@@ -5,7 +5,10 @@
  */
 package org.spanloom.ui.basis;
 
+import org.eclipse.swt.widgets.Composite;
+import org.eclipse.ui.PlatformUI;
 import org.eclipse.ui.views.markers.MarkerSupportView;
+import org.spanloom.ui.UiIds;
 
 /** Lists the bases; plugin.xml names the columns. A double click goes to the source line. */
 public final class BasisFindingsView extends MarkerSupportView {
@@ -15,5 +18,11 @@ public final class BasisFindingsView extends MarkerSupportView {
   /** Called by the workbench. */
   public BasisFindingsView() {
     super(GENERATOR);
+  }
+
+  @Override
+  public void createPartControl(Composite parent) {
+    super.createPartControl(parent);
+    PlatformUI.getWorkbench().getHelpSystem().setHelp(parent, UiIds.BASIS_FINDINGS_HELP);
   }
 }

@@ -40,14 +40,13 @@ public final class ModelEditor extends TextEditor {
   private final LiveProblems problems = new LiveProblems(this::getSourceViewer);
   private final DefaultCharacterPairMatcher brackets = new DefaultCharacterPairMatcher(BRACKETS);
   private final ModelFolding folding = new ModelFolding();
-  private ModelViewerConfiguration configuration;
+  private final ModelViewerConfiguration configuration;
   private ProjectionSupport projection;
   private ModelOutlinePage outline;
   private Runnable endColours = () -> {};
 
-  @Override
-  protected void initializeEditor() {
-    super.initializeEditor();
+  /** Called by the workbench. The platform's own hook for this runs before the fields are set. */
+  public ModelEditor() {
     IPreferenceStore store =
         new ChainedPreferenceStore(
             new IPreferenceStore[] {PreferenceDefaults.store(), EditorsUI.getPreferenceStore()});
@@ -56,6 +55,7 @@ public final class ModelEditor extends TextEditor {
     setSourceViewerConfiguration(configuration);
     setEditorContextMenuId(UiIds.EDITOR + ".menu");
     setRulerContextMenuId(UiIds.EDITOR + ".ruler");
+    setHelpContextId(UiIds.EDITOR_HELP);
     snapshots.listen(problems);
     snapshots.listen(folding);
   }

@@ -16,6 +16,7 @@ import org.eclipse.jface.action.IToolBarManager;
 import org.eclipse.jface.action.Separator;
 import org.eclipse.swt.widgets.Composite;
 import org.eclipse.swt.widgets.Display;
+import org.eclipse.ui.PlatformUI;
 import org.eclipse.ui.part.ViewPart;
 import org.eclipse.ui.progress.IWorkbenchSiteProgressService;
 import org.spanloom.analysis.solve.SolutionTable;
@@ -50,6 +51,7 @@ public final class SolutionView extends ViewPart {
   @Override
   public void createPartControl(Composite parent) {
     page = new SolutionPage(parent, this::choose, this::chooseAxes, this::chooseColumns);
+    PlatformUI.getWorkbench().getHelpSystem().setHelp(page.control(), UiIds.SOLUTION_HELP);
     makeActions();
     endColours = ThemeColours.onChange(page::readColours);
     follower = new EditorFollower(getSite().getPage(), this::editorChanged, this::modelChanged);

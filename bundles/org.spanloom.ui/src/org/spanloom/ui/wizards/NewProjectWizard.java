@@ -21,6 +21,7 @@ import org.eclipse.core.runtime.SubMonitor;
 import org.eclipse.jface.dialogs.ErrorDialog;
 import org.eclipse.jface.viewers.IStructuredSelection;
 import org.eclipse.jface.wizard.Wizard;
+import org.eclipse.swt.widgets.Composite;
 import org.eclipse.ui.INewWizard;
 import org.eclipse.ui.IWorkbench;
 import org.eclipse.ui.PartInitException;
@@ -30,6 +31,7 @@ import org.eclipse.ui.ide.IDE;
 import org.eclipse.ui.wizards.newresource.BasicNewProjectResourceWizard;
 import org.eclipse.ui.wizards.newresource.BasicNewResourceWizard;
 import org.spanloom.ui.Icon;
+import org.spanloom.ui.UiIds;
 import org.spanloom.workspace.Ids;
 
 /**
@@ -61,6 +63,12 @@ public final class NewProjectWizard extends Wizard implements INewWizard, IExecu
     page.setTitle("Spanloom Project");
     page.setDescription("A project whose models are checked, with settings and a first model.");
     addPage(page);
+  }
+
+  @Override
+  public void createPageControls(Composite pageContainer) {
+    super.createPageControls(pageContainer);
+    workbench.getHelpSystem().setHelp(page.getControl(), UiIds.NEW_PROJECT_HELP);
   }
 
   @Override

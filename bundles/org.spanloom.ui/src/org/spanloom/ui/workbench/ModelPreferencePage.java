@@ -12,7 +12,9 @@ import org.eclipse.swt.widgets.Composite;
 import org.eclipse.swt.widgets.Link;
 import org.eclipse.ui.IWorkbench;
 import org.eclipse.ui.IWorkbenchPreferencePage;
+import org.eclipse.ui.PlatformUI;
 import org.eclipse.ui.dialogs.PreferencesUtil;
+import org.spanloom.ui.UiIds;
 
 /** General preferences, with the way to the colours. */
 public final class ModelPreferencePage extends FieldEditorPreferencePage
@@ -32,6 +34,12 @@ public final class ModelPreferencePage extends FieldEditorPreferencePage
     setDescription(
         "Settings that change results belong to a project and stand in its file"
             + " spanloom.settings.");
+  }
+
+  @Override
+  public void createControl(Composite parent) {
+    super.createControl(parent);
+    PlatformUI.getWorkbench().getHelpSystem().setHelp(getControl(), UiIds.PREFERENCES_HELP);
   }
 
   @Override

@@ -18,6 +18,8 @@ import java.util.HashSet;
 import java.util.List;
 import java.util.Set;
 import java.util.TreeSet;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -127,6 +129,21 @@ class HelpPagesTests {
       }
     }
     assertEquals(List.of(), dead);
+  }
+
+  /** The workbench names contexts by their ids, and each context is there for a part of it. */
+  @Test
+  void contextsAreThoseThatTheWorkbenchNames() throws IOException {
+    Path ids = HelpPage.BUNDLE.resolveSibling("org.spanloom.ui/src/org/spanloom/ui/UiIds.java");
+    Matcher named =
+        Pattern.compile("\"org\\.spanloom\\.help\\.(\\w+)\"").matcher(Files.readString(ids));
+    Set<String> expected = new TreeSet<>();
+    while (named.find()) {
+      expected.add(named.group(1));
+    }
+    Set<String> known = new TreeSet<>();
+    HelpPage.of("contexts.xml").elements("context").forEach(e -> known.add(e.getAttribute("id")));
+    assertEquals(expected, known);
   }
 
   @Test
