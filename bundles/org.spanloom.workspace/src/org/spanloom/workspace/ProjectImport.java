@@ -122,8 +122,10 @@ public final class ProjectImport {
     }
     IProjectDescription description = workspace.newProjectDescription(project.getName());
     description.setLocation(outsideOnly(place, project.getName()));
-    description.setNatureIds(new String[] {Ids.NATURE});
-    return create(project, description, monitor);
+    create(project, description, monitor);
+    // A nature named at the creation would not be configured.
+    ModelNature.addTo(project, monitor);
+    return project;
   }
 
   private static IProject create(

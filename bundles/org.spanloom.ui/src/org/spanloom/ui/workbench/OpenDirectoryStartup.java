@@ -18,7 +18,9 @@ import org.eclipse.ui.IStartup;
 import org.spanloom.ui.UiIds;
 import org.spanloom.workspace.ProjectImport;
 
-/** Opens the projects of the directory that the argument {@value #ARGUMENT} names, if it is given. */
+/**
+ * Opens the projects of the directory that the argument {@value #ARGUMENT} names, if it is given.
+ */
 public final class OpenDirectoryStartup implements IStartup {
 
   /** The argument; the directory follows it. */
