@@ -196,8 +196,8 @@ class ModelCheckTests {
     String right =
         """
           basis C(t) =
-            row upper = exp(-k*t), 0
-            row lower = k/(2 [/h] - k)*exp(-k*t), exp(-2 [/h]*t)
+            row upper = 1 [m3]*exp(-k*t), 0
+            row lower = k/(2 [/h] - k)*1 [m3]*exp(-k*t), 1 [m3]*exp(-2 [/h]*t)
         """;
     assertEquals(List.of(), tanks(right).alarms());
     Checked wrong = tanks(right.replace("exp(-2 [/h]*t)", "exp(-3 [/h]*t)"));
@@ -290,6 +290,26 @@ class ModelCheckTests {
     assertEquals(List.of(), checked.alarms());
     assertEquals(List.of("1 range-unbounded"), checked.notes());
     assertEquals(List.of(), checked.report().systems().getFirst().bases());
+  }
+
+  @Test
+  void aLargeSystemHasNoBasisUnlessItDeclaresOne() {
+    StringBuilder text = new StringBuilder("system Chain over t [h] from 0 to 1 {\n");
+    for (int i = 0; i <= 200; i++) {
+      text.append("  state c").append(i).append(" = 1\n");
+      text.append("  c").append(i).append("' = -1 [/h]*c").append(i).append('\n');
+    }
+    Checked checked = Checked.of(text.append("}\n").toString());
+    assertEquals(List.of(), checked.alarms());
+    assertEquals(List.of("1 basis-not-followed"), checked.notes());
+  }
+
+  @Test
+  void theSameTextGivesTheSameReport() {
+    String text = String.format(STIFF, "  basis Phi at 0\n  require tube(1) < 2 [mg]");
+    assertEquals(
+        Checked.of(text).report().systems().toString(),
+        Checked.of(text).report().systems().toString());
   }
 
   @Test

@@ -32,6 +32,8 @@ public enum FindingKind {
   LIOUVILLE_MISMATCH("liouville-mismatch", Severity.WARNING),
   /** Nothing bounds the times at which to judge a basis. */
   RANGE_UNBOUNDED("range-unbounded", Severity.NOTE),
+  /** A system so large that no basis is computed unless one is declared. */
+  BASIS_NOT_FOLLOWED("basis-not-followed", Severity.NOTE),
   /** A stated requirement does not hold. */
   REQUIREMENT_FAILED("requirement-failed", Severity.ERROR),
   /** A stated requirement could not be decided. */

@@ -28,6 +28,11 @@ final class BasisMessages {
         + " a requirement";
   }
 
+  String notFollowed(int limit) {
+    return "the system has %d states; above %d no basis is followed unless one is declared ('basis NAME at TIME')"
+        .formatted(system.dimension(), limit);
+  }
+
   String dependent(String name, Dependence dependence, double time) {
     return "the columns of basis %s are linearly dependent: column %d is %s at %s, and so at all times; replace one of them"
         .formatted(name, dependence.column() + 1, combination(dependence.factors()), at(time));

@@ -42,6 +42,9 @@ import org.spanloom.numerics.solution.Solution;
  */
 public final class BasisProfiles {
 
+  /** Most states for which the principal basis is followed without being declared. */
+  private static final int LARGEST_UNASKED = 200;
+
   private final SystemSolutions solutions;
   private final CompiledSystem system;
   private final BasisMessages messages;
@@ -89,8 +92,7 @@ public final class BasisProfiles {
           });
     }
     if (system.model().bases().isEmpty() && solutions.range().isPresent()) {
-      double start = solutions.range().get().start();
-      columns(BasisColumns.principal(system, start), system.model().nameSpan());
+      principal(solutions.range().get().start());
     }
   }
 
@@ -116,6 +118,21 @@ public final class BasisProfiles {
   private void add(
       FindingKind kind, Span span, String message, SequencedMap<String, Double> numbers) {
     findings.add(kind.at(span, message, numbers));
+  }
+
+  /**
+   * The basis that nobody asked for: a property of the system, worth knowing as long as it costs
+   * little.
+   */
+  private void principal(double start) {
+    if (system.dimension() > LARGEST_UNASKED) {
+      add(
+          FindingKind.BASIS_NOT_FOLLOWED,
+          system.model().nameSpan(),
+          messages.notFollowed(LARGEST_UNASKED));
+    } else {
+      columns(BasisColumns.principal(system, start), system.model().nameSpan());
+    }
   }
 
   private Judged columns(BasisColumns basis, Span span) {
