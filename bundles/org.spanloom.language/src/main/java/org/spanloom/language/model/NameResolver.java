@@ -143,23 +143,22 @@ final class NameResolver {
 
   private Optional<Quantity> time(TimeMeaning time, NameExpression name, Place place) {
     if (!place.time()) {
-      String remedy =
-          place == Place.LET
-              ? "name it as an argument, as in let f(" + name.name().text() + ")"
-              : "use numbers and parameters only";
-      problems.report(
-          ProblemKind.TIME_MISPLACED,
-          name.span(),
-          "\""
-              + name.name().text()
-              + "\" changes all the time and cannot stand in "
-              + place.what()
-              + " that is constant: "
-              + remedy
-              + ".");
+      reportTime("\"" + name.name().text() + "\" is the independent variable", name.span(), place);
       return Optional.empty();
     }
     return Optional.of(Quantity.constant(new Term.Time(), time.unit().dimension(), 1));
+  }
+
+  private void reportTime(String found, Span span, Place place) {
+    problems.report(
+        ProblemKind.TIME_MISPLACED,
+        span,
+        found
+            + " and cannot stand in "
+            + place.what()
+            + (place == Place.LET
+                ? " without an argument: write let f(" + timeName() + ") for a function of it."
+                : ", which is constant: use numbers and parameters only."));
   }
 
   private static Quantity parameter(ParameterMeaning meaning) {
@@ -209,14 +208,8 @@ final class NameResolver {
     }
     scope.markUsed(timeName());
     if (!place.time()) {
-      problems.report(
-          ProblemKind.TIME_MISPLACED,
-          call.span(),
-          "\""
-              + resolver.shown(call.span())
-              + "\" changes all the time and cannot stand in "
-              + place.what()
-              + " that is constant: use numbers and parameters only.");
+      reportTime(
+          "\"" + resolver.shown(call.span()) + "\" depends on " + timeName(), call.span(), place);
       return Optional.empty();
     }
     return Optional.of(let(meaning));

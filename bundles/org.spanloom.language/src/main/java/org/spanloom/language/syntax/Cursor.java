@@ -66,6 +66,17 @@ final class Cursor {
     return token.kind().isWord() && text(token).equals(word);
   }
 
+  /** Tells whether a sign of comparison is among the tokens to come. */
+  boolean holdsComparison() {
+    return tokens.subList(at, tokens.size()).stream()
+        .map(Token::kind)
+        .anyMatch(k ->
+            k == TokenKind.LESS
+                || k == TokenKind.AT_MOST
+                || k == TokenKind.GREATER
+                || k == TokenKind.AT_LEAST);
+  }
+
   boolean accept(TokenKind kind) {
     boolean found = is(kind);
     if (found) {

@@ -28,30 +28,26 @@ final class RequireParser {
 
   /**
    * {@code clause = "stable" | "nonnegative", [ under ] | "period", expression | "invariant",
-   * expression | condition | comparison ;} These words are names where an operator or a comparison
-   * follows them.
+   * expression | condition | comparison ;} Where a sign of comparison follows, the first four words
+   * are names.
    */
   RequireClause clause() {
     int start = cursor.peek().start();
+    if (!cursor.holdsComparison()) {
+      if (cursor.acceptWord("stable")) {
+        return new IsStable(cursor.from(start));
+      }
+      if (cursor.acceptWord("nonnegative")) {
+        return new IsNonnegative(under(), cursor.from(start));
+      }
+      if (cursor.acceptWord("period")) {
+        return new HasPeriod(expressions.expression(), cursor.from(start));
+      }
+      if (cursor.acceptWord("invariant")) {
+        return new IsInvariant(expressions.expression(), cursor.from(start));
+      }
+    }
     TokenKind following = cursor.kindAfter();
-    boolean alone = following == TokenKind.NEWLINE;
-    boolean beforeOperand =
-        switch (following) {
-          case NUMBER, BAD_NUMBER, NAME, CONTEXT_WORD, OPEN_PARENTHESIS, MINUS -> true;
-          default -> false;
-        };
-    if (alone && cursor.acceptWord("stable")) {
-      return new IsStable(cursor.from(start));
-    }
-    if ((alone || following == TokenKind.CLAUSE_WORD) && cursor.acceptWord("nonnegative")) {
-      return new IsNonnegative(under(), cursor.from(start));
-    }
-    if (beforeOperand && cursor.acceptWord("period")) {
-      return new HasPeriod(expressions.expression(), cursor.from(start));
-    }
-    if (beforeOperand && cursor.acceptWord("invariant")) {
-      return new IsInvariant(expressions.expression(), cursor.from(start));
-    }
     boolean condition =
         cursor.isWord("condition") && following == TokenKind.OPEN_PARENTHESIS
             || cursor.isWord("scaled") && following == TokenKind.CONTEXT_WORD;
