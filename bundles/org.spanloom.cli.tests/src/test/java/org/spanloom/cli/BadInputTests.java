@@ -10,7 +10,6 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
 import java.io.OutputStream;
-import java.io.PrintStream;
 import java.io.RandomAccessFile;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
@@ -236,13 +235,32 @@ class BadInputTests {
             throw new IOException("Broken pipe");
           }
         };
-    java.io.ByteArrayOutputStream err = new java.io.ByteArrayOutputStream();
-    int code =
-        Main.run(
-            new String[] {"solve", Models.drain(folder).toString()},
-            new Streams(closed, new PrintStream(err, true, StandardCharsets.UTF_8), false));
-    new CommandRun(code, "", err.toString(StandardCharsets.UTF_8))
+    CommandRun.into(closed, "solve", Models.drain(folder).toString())
         .assertRefused("standard output", "Broken pipe");
+  }
+
+  @Test
+  void aMistakeOfTheProgramItselfIsOneLineWithThePlaceAndNoTraceUnlessAskedFor() {
+    OutputStream faulty =
+        new OutputStream() {
+          @Override
+          public void write(int b) {
+            throw new IllegalStateException("cannot happen");
+          }
+        };
+    CommandRun run = CommandRun.into(faulty, "--version");
+    assertEquals(2, run.code());
+    assertEquals(1, run.err().lines().count(), run.err());
+    assertTrue(
+        run.err().matches("(?s)spanloom: internal error \\S+\\.\\d+-IllegalStateException; .*"),
+        run.err());
+    System.setProperty("spanloom.trace", "true");
+    try {
+      CommandRun traced = CommandRun.into(faulty, "--version");
+      assertTrue(traced.err().contains("\tat org.spanloom.cli.Main"), traced.err());
+    } finally {
+      System.clearProperty("spanloom.trace");
+    }
   }
 
   private static CommandRun run(String command, Path file) {

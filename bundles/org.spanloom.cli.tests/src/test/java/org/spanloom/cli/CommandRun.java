@@ -11,6 +11,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
+import java.io.OutputStream;
 import java.io.PrintStream;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
@@ -29,12 +30,17 @@ record CommandRun(int code, String out, String err) {
   /** Runs the command line. */
   static CommandRun of(String... arguments) {
     ByteArrayOutputStream out = new ByteArrayOutputStream();
+    CommandRun run = into(out, arguments);
+    return new CommandRun(run.code(), out.toString(StandardCharsets.UTF_8), run.err());
+  }
+
+  /** Runs the command line with a standard output of the test's own. */
+  static CommandRun into(OutputStream out, String... arguments) {
     ByteArrayOutputStream err = new ByteArrayOutputStream();
     int code =
         Main.run(
             arguments, new Streams(out, new PrintStream(err, true, StandardCharsets.UTF_8), false));
-    return new CommandRun(
-        code, out.toString(StandardCharsets.UTF_8), err.toString(StandardCharsets.UTF_8));
+    return new CommandRun(code, "", err.toString(StandardCharsets.UTF_8));
   }
 
   /** Runs the command line with paths among the arguments. */

@@ -92,7 +92,7 @@ class WholeProcessTests {
             "solve",
             Models.drain(folder),
             "--points",
-            "1000000",
+            "300000",
             "--output",
             target);
     long deadline = System.nanoTime() + TimeUnit.SECONDS.toNanos(30);
