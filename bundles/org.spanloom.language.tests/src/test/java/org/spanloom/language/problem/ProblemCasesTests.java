@@ -12,7 +12,9 @@ import java.io.IOException;
 import java.io.InputStream;
 import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
+import java.util.EnumSet;
 import java.util.List;
+import java.util.Set;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.DynamicTest;
 import org.junit.jupiter.api.Test;
@@ -54,6 +56,23 @@ class ProblemCasesTests {
   @Test
   void thereAreEnoughCases() {
     assertTrue(cases().size() >= 150, "cases: " + cases().size());
+  }
+
+  @Test
+  void everyKindOfProblemHasACase() {
+    // These need long texts and have tests of their own.
+    Set<ProblemKind> missing =
+        EnumSet.complementOf(
+            EnumSet.of(
+                ProblemKind.TOO_MANY_PROBLEMS,
+                ProblemKind.NESTING_TOO_DEEP,
+                ProblemKind.COEFFICIENT_UNDECIDED));
+    for (Case c : cases()) {
+      ModelReader.read(new SourceText("case.span", c.text()))
+          .problems()
+          .forEach(p -> missing.remove(p.kind()));
+    }
+    assertEquals(Set.of(), missing);
   }
 
   @Test

@@ -7,6 +7,7 @@ package org.spanloom.language.model;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.function.Consumer;
 import org.spanloom.language.syntax.Expression;
 import org.spanloom.language.syntax.Expression.CallExpression;
 import org.spanloom.language.syntax.Expression.MissingExpression;
@@ -18,7 +19,7 @@ import org.spanloom.language.syntax.Expression.ProductExpression;
 import org.spanloom.language.syntax.Expression.SignedExpression;
 import org.spanloom.language.syntax.Expression.SumExpression;
 
-/** Lists the names in an expression. */
+/** Lists the names and calls in an expression. */
 final class ExpressionNames {
 
   private ExpressionNames() {}
@@ -26,48 +27,48 @@ final class ExpressionNames {
   /** Returns every use of a name, called functions included, in the order of the text. */
   static List<NameExpression> of(Expression expression) {
     List<NameExpression> names = new ArrayList<>();
-    collect(expression, names);
+    visit(
+        expression,
+        part -> {
+          if (part instanceof NameExpression name) {
+            names.add(name);
+          }
+        });
     return names;
   }
 
-  private static void collect(Expression expression, List<NameExpression> names) {
-    switch (expression) {
-      case NumberExpression number -> {}
-      case MissingExpression missing -> {}
-      case NameExpression name -> names.add(name);
-      case CallExpression call -> {
-        names.add(call.callee());
-        call.arguments().forEach(a -> collect(a.value(), names));
-      }
-      case SignedExpression signed -> collect(signed.operand(), names);
-      case SumExpression sum -> sum.addends().forEach(a -> collect(a.value(), names));
-      case ProductExpression product -> product.factors().forEach(f -> collect(f.value(), names));
-      case PowerExpression power -> {
-        collect(power.base(), names);
-        collect(power.exponent(), names);
-      }
-      case ParenthesisedExpression parenthesised -> collect(parenthesised.inner(), names);
-    }
+  /** Returns every call, in the order of the text. */
+  static List<CallExpression> calls(Expression expression) {
+    List<CallExpression> calls = new ArrayList<>();
+    visit(
+        expression,
+        part -> {
+          if (part instanceof CallExpression call) {
+            calls.add(call);
+          }
+        });
+    return calls;
   }
 
-  /** Adds every call in an expression, in the order of the text. */
-  static void calls(Expression expression, List<CallExpression> calls) {
+  /** Hands out an expression and all its parts, each before its own parts. */
+  private static void visit(Expression expression, Consumer<Expression> visitor) {
+    visitor.accept(expression);
     switch (expression) {
       case NumberExpression number -> {}
       case MissingExpression missing -> {}
       case NameExpression name -> {}
       case CallExpression call -> {
-        calls.add(call);
-        call.arguments().forEach(a -> calls(a.value(), calls));
+        visit(call.callee(), visitor);
+        call.arguments().forEach(a -> visit(a.value(), visitor));
       }
-      case SignedExpression signed -> calls(signed.operand(), calls);
-      case SumExpression sum -> sum.addends().forEach(a -> calls(a.value(), calls));
-      case ProductExpression product -> product.factors().forEach(f -> calls(f.value(), calls));
+      case SignedExpression signed -> visit(signed.operand(), visitor);
+      case SumExpression sum -> sum.addends().forEach(a -> visit(a.value(), visitor));
+      case ProductExpression product -> product.factors().forEach(f -> visit(f.value(), visitor));
       case PowerExpression power -> {
-        calls(power.base(), calls);
-        calls(power.exponent(), calls);
+        visit(power.base(), visitor);
+        visit(power.exponent(), visitor);
       }
-      case ParenthesisedExpression parenthesised -> calls(parenthesised.inner(), calls);
+      case ParenthesisedExpression parenthesised -> visit(parenthesised.inner(), visitor);
     }
   }
 }

@@ -175,9 +175,8 @@ final class RequirementReader {
 
   /** Checks the times named in a comparison. */
   private boolean timesInside(Comparison comparison) {
-    List<CallExpression> calls = new ArrayList<>();
-    ExpressionNames.calls(comparison.left(), calls);
-    ExpressionNames.calls(comparison.right(), calls);
+    List<CallExpression> calls = new ArrayList<>(ExpressionNames.calls(comparison.left()));
+    calls.addAll(ExpressionNames.calls(comparison.right()));
     boolean inside = true;
     for (CallExpression call : calls) {
       boolean sampled =

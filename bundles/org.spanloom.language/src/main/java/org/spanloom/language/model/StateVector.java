@@ -5,7 +5,6 @@
  */
 package org.spanloom.language.model;
 
-import java.util.ArrayList;
 import java.util.List;
 import org.spanloom.language.model.Meaning.StateMeaning;
 
@@ -74,17 +73,6 @@ final class StateVector {
 
   boolean isHighestDerivative(StateKey key) {
     return key.order() == orders[key.state()];
-  }
-
-  /** Returns the names of all components, with their primes. */
-  List<String> labels() {
-    List<String> labels = new ArrayList<>();
-    for (StateMeaning state : states) {
-      for (int k = 0; k < orders[state.index()]; k++) {
-        labels.add(label(state, k));
-      }
-    }
-    return labels;
   }
 
   static String label(StateMeaning state, int primes) {

@@ -28,6 +28,14 @@
  *   <tr><td>{@link org.spanloom.language.model.TermPrinter}</td><td>writes them for messages</td></tr>
  * </table>
  *
- * <p>All of them run along one {@code TermTape}, in which a shared sub-term occurs once.
+ * <p>{@code ModelReader} reads each system by a {@code SystemReader}: {@code Declarations} (names,
+ * in an order in which each comes after those it uses), {@code EquationReader} and {@code
+ * LinearFormBuilder} (which equation governs which state), {@code InitialValuesReader}, {@code
+ * BasisReader}, {@code RequirementReader}, {@code DefinednessCheck}. Expressions get their meaning
+ * from {@code Resolver} and {@code NameResolver} as a {@code Quantity}, affine in the states.
+ * Whatever returns an empty Optional has reported why, so that one mistake is reported once.
+ *
+ * <p>All classes of the table run along one {@code TermTape}, in which a shared sub-term occurs
+ * once.
  */
 package org.spanloom.language.model;
