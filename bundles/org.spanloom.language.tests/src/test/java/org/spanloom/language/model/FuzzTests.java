@@ -26,9 +26,9 @@ import org.spanloom.language.text.SourceText;
 import org.spanloom.language.text.Span;
 
 /**
- * Texts spoilt at random, the same in every run: reading them never throws, takes bounded time, and whatever
- * it says lies inside the text. Runs for some seconds; {@code -Dspanloom.fuzz.seconds=N} makes it
- * run longer.
+ * Texts spoilt at random, the same in every run: reading them never throws, takes bounded time, and
+ * whatever it says lies inside the text. Runs for some seconds; {@code -Dspanloom.fuzz.seconds=N}
+ * makes it run longer.
  */
 class FuzzTests {
 
