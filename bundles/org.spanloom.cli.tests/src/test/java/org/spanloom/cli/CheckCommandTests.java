@@ -132,6 +132,8 @@ class CheckCommandTests {
     try (TerminalProgress progress = new TerminalProgress(terminal, "checking 1 of 2  a.span")) {
       while (err.size() == 0 && System.nanoTime() - start < 5_000_000_000L) {
         progress.worked(0.5);
+        progress.worked(0.1);
+        assertFalse(progress.isCancelled());
         Thread.onSpinWait();
       }
     }

@@ -20,6 +20,7 @@ final class TerminalProgress implements Progress, AutoCloseable {
   private final Streams streams;
   private final String label;
   private long next = System.nanoTime() + QUIET_NANOS;
+  private double done;
   private boolean drawn;
 
   /**
@@ -35,6 +36,19 @@ final class TerminalProgress implements Progress, AutoCloseable {
 
   @Override
   public void worked(double fraction) {
+    // The parts of a check count from the start again; a line that runs backwards would be no help.
+    done = Math.max(done, Math.min(1, fraction));
+    draw();
+  }
+
+  @Override
+  public boolean isCancelled() {
+    // Asked often, also by work that cannot tell how far it is.
+    draw();
+    return false;
+  }
+
+  private void draw() {
     if (!streams.terminal()) {
       return;
     }
@@ -43,17 +57,11 @@ final class TerminalProgress implements Progress, AutoCloseable {
       return;
     }
     next = now + STEP_NANOS;
-    int percent = (int) Math.round(100 * Math.min(1, Math.max(0, fraction)));
-    String line = label + "  " + percent + " %";
+    String line = label + "  " + Math.round(100 * done) + " %";
     line = line.length() > WIDTH ? "..." + line.substring(line.length() - WIDTH + 3) : line;
     streams.err().print("\r" + line + " ".repeat(WIDTH - line.length()) + "\r" + line);
     streams.err().flush();
     drawn = true;
-  }
-
-  @Override
-  public boolean isCancelled() {
-    return false;
   }
 
   @Override
