@@ -288,8 +288,18 @@ class ModelCheckTests {
             }
             """);
     assertEquals(List.of(), checked.alarms());
-    assertEquals(List.of("1 range-unbounded"), checked.notes());
+    assertEquals(List.of(), checked.notes());
     assertEquals(List.of(), checked.report().systems().getFirst().bases());
+    Checked declared =
+        Checked.of(
+            """
+            system Leak over t [h] from 0 {
+              state x = 1
+              x' = -1 [/h]*x
+              basis Phi at 0
+            }
+            """);
+    assertEquals(List.of("1 range-unbounded"), declared.notes());
   }
 
   @Test

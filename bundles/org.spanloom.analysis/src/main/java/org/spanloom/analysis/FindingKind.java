@@ -22,8 +22,8 @@ public enum FindingKind {
   BASIS_DEPENDENT("basis-dependent", Severity.ERROR),
   /** A closed form that does not solve the system. */
   BASIS_NOT_A_SOLUTION("basis-not-a-solution", Severity.ERROR),
-  /** A declared basis with no digits left. */
-  BASIS_WITHOUT_DIGITS("basis-without-digits", Severity.ERROR),
+  /** A declared basis with no digits left; what is built on it fails on its own. */
+  BASIS_WITHOUT_DIGITS("basis-without-digits", Severity.WARNING),
   /** A declared basis that leaves fewer digits than the system asks for. */
   BASIS_ILL_CONDITIONED("basis-ill-conditioned", Severity.WARNING),
   /** A property of the system: its principal basis loses its fast directions. */

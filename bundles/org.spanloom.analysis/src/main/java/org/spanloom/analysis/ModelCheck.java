@@ -74,11 +74,20 @@ public final class ModelCheck {
     return new CheckReport(model, reports, ordered, progress.isCancelled());
   }
 
+  /**
+   * Each solution of a system reports from 0 to 1, so only what goes beyond the last report is
+   * passed on.
+   */
   private Progress part(int k, int count) {
     return new Progress() {
+      private double reported;
+
       @Override
       public void worked(double fraction) {
-        progress.worked((k + fraction) / count);
+        if (fraction > reported) {
+          reported = fraction;
+          progress.worked((k + fraction) / count);
+        }
       }
 
       @Override

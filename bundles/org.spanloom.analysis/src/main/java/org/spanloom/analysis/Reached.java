@@ -17,10 +17,10 @@ import org.spanloom.numerics.solution.Solution;
  * @param component in which component
  * @param time when
  */
-record Reached(double relative, int component, double time) {
+public record Reached(double relative, int component, double time) {
 
   /** Returns the worst one at the steps of the method. */
-  static Reached worst(CompiledSystem system, Solution solution) {
+  public static Reached worst(CompiledSystem system, Solution solution) {
     int n = system.dimension();
     double[] x = new double[n];
     double[] e = new double[n];

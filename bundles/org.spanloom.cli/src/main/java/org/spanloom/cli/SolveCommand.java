@@ -191,11 +191,18 @@ final class SolveCommand {
           NumberText.brief(error),
           largest > 0 ? NumberText.brief(error / largest) : "-");
     }
-    return "method: "
-        + table.method()
-        + "; relative error asked for: "
-        + NumberText.brief(table.accuracy())
-        + "\n"
-        + text;
+    String heading =
+        "method: "
+            + table.method()
+            + "; relative error asked for: "
+            + NumberText.brief(table.accuracy())
+            + "\n";
+    return table.reached() <= table.accuracy()
+        ? heading + text
+        : heading
+            + "warning: this was not reached; the estimated relative error is "
+            + NumberText.brief(table.reached())
+            + "\n"
+            + text;
   }
 }

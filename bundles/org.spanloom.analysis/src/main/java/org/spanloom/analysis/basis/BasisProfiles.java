@@ -79,7 +79,7 @@ public final class BasisProfiles {
     if (system.dimension() == 0) {
       return;
     }
-    if (solutions.range().isEmpty()) {
+    if (solutions.range().isEmpty() && !system.model().bases().isEmpty()) {
       add(FindingKind.RANGE_UNBOUNDED, system.model().nameSpan(), messages.unbounded());
     }
     for (Basis basis : system.model().bases()) {
@@ -267,7 +267,7 @@ public final class BasisProfiles {
     } else {
       Digits whole = Digits.of(profile, range, solution.startTime());
       if (whole.fewest() < wanted) {
-        double from = profile.firstDigitsBelow(wanted).orElse(whole.time());
+        double from = report.fewerFrom().orElse(whole.time());
         add(
             FindingKind.BASIS_DEGENERATES,
             span,
@@ -306,6 +306,7 @@ public final class BasisProfiles {
           case Outcome.Cancelled<Integer> c -> OptionalInt.empty();
           case Outcome.Unsolved<Integer> u -> OptionalInt.empty();
         };
+    double wanted = solutions.settings().digitsWanted(system.model().accuracy());
     ConditionSample raw = profile.worstRaw();
     ConditionSample scaled = profile.worstScaled();
     return new BasisReport(
@@ -318,6 +319,8 @@ public final class BasisProfiles {
         scaled.scaled(),
         scaled.time(),
         Digits.of(profile, range, range.start()).fewest(),
+        wanted,
+        profile.firstDigitsBelow(wanted),
         windows,
         limit,
         span);

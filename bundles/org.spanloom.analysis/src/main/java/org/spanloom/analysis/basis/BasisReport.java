@@ -5,6 +5,7 @@
  */
 package org.spanloom.analysis.basis;
 
+import java.util.OptionalDouble;
 import java.util.OptionalInt;
 import org.spanloom.language.text.Span;
 import org.spanloom.numerics.TimeRange;
@@ -21,6 +22,9 @@ import org.spanloom.numerics.TimeRange;
  * @param worstScaled largest condition number after scaling each column to length 1
  * @param worstScaledTime when
  * @param digitsLeft fewest decimal digits left for a result built on this basis, from 0 to about 16
+ * @param digitsWanted digits that the system asks of its results
+ * @param fewerFrom the time nearest to the start of the basis from which on it leaves fewer; empty
+ *     if it never does
  * @param windows least number of consecutive windows, each with a basis of its own, that keep the
  *     scaled condition below the limit of the settings; empty if that could not be counted
  * @param windowLimit that limit
@@ -36,6 +40,8 @@ public record BasisReport(
     double worstScaled,
     double worstScaledTime,
     double digitsLeft,
+    double digitsWanted,
+    OptionalDouble fewerFrom,
     OptionalInt windows,
     double windowLimit,
     Span span) {}

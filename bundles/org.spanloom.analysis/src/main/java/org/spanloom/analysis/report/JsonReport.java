@@ -137,6 +137,10 @@ public final class JsonReport {
     number(json, "scaledCondition", basis.worstScaled());
     number(json, "scaledConditionTime", basis.worstScaledTime());
     number(json, "digitsLeft", basis.digitsLeft());
+    number(json, "digitsWanted", basis.digitsWanted());
+    if (basis.fewerFrom().isPresent()) {
+      number(json, "fewerDigitsFrom", basis.fewerFrom().getAsDouble());
+    }
     if (basis.windows().isPresent()) {
       json.name("windows").value(basis.windows().getAsInt());
     }

@@ -74,6 +74,9 @@ public final class TextReport {
             system.states().size(),
             system.states().size() == 1 ? "state" : "states",
             Choice.describe(system)));
+    if (report.bases().isEmpty() && !system.states().isEmpty()) {
+      text.append("    basis     none was followed\n");
+    }
     for (BasisReport basis : report.bases()) {
       text.append("    ").append(basis(system, basis)).append('\n');
     }
@@ -87,17 +90,31 @@ public final class TextReport {
   }
 
   private static String basis(SystemModel system, BasisReport basis) {
-    return String.format(
-        Locale.ROOT,
-        "basis     %s%s: condition %s at %s, scaled %s at %s; %.1f digits left; %s",
-        basis.name(),
-        basis.declared() ? "" : " (not declared)",
-        Figures.condition(basis.worstRaw()),
-        Figures.at(system, basis.worstRawTime()),
-        Figures.condition(basis.worstScaled()),
-        Figures.at(system, basis.worstScaledTime()),
-        basis.digitsLeft(),
-        windows(basis));
+    String name = basis.name() + (basis.declared() ? "" : " (not declared)");
+    if (basis.fewerFrom().isPresent()) {
+      return "basis     %s: leaves the %s digits wanted up to %s, %s at its worst (scaled condition %s); %s"
+          .formatted(
+              name,
+              Figures.text(basis.digitsWanted(), 2),
+              Figures.at(system, basis.fewerFrom().getAsDouble()),
+              digits(basis),
+              Figures.condition(basis.worstScaled()),
+              windows(basis));
+    }
+    return "basis     %s: condition %s at %s, scaled %s at %s; %s left; %s"
+        .formatted(
+            name,
+            Figures.condition(basis.worstRaw()),
+            Figures.at(system, basis.worstRawTime()),
+            Figures.condition(basis.worstScaled()),
+            Figures.at(system, basis.worstScaledTime()),
+            digits(basis),
+            windows(basis));
+  }
+
+  private static String digits(BasisReport basis) {
+    String digits = String.format(Locale.ROOT, "%.1f", basis.digitsLeft());
+    return digits.equals("0.0") ? "none" : digits + " digits";
   }
 
   private static String windows(BasisReport basis) {

@@ -62,7 +62,7 @@ final class Margins {
                 Figures.text(value, 7, unit.code()),
                 at,
                 Figures.text(margin, 3, unit.code()),
-                Figures.text(error, 1));
+                Figures.text(error, 1, unit.code()));
     return new RequirementResult(
         system.name(),
         requirement.text(),

@@ -161,7 +161,7 @@ final class TrajectoryRequirements {
                 state.label(),
                 Figures.text(value, 4, state.unit().code()),
                 Figures.at(system.model(), worstTime),
-                Figures.text(error, 1));
+                Figures.text(error, 1, state.unit().code()));
     return new RequirementResult(
         system.model().name(),
         requirement.text(),

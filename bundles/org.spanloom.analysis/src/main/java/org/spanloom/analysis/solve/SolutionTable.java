@@ -16,6 +16,8 @@ import java.util.List;
  * @param columns states in the order of the state vector, then outputs
  * @param method name of the method, for people
  * @param accuracy relative error asked for
+ * @param reached largest estimated relative error of a state at the steps of the method, relative
+ *     to the larger of its value and its scale
  */
 public record SolutionTable(
     String system,
@@ -23,7 +25,8 @@ public record SolutionTable(
     Column time,
     List<Column> columns,
     String method,
-    double accuracy) {
+    double accuracy,
+    double reached) {
 
   /** Copies the list. */
   public SolutionTable {

@@ -11,6 +11,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.stream.DoubleStream;
 import java.util.stream.IntStream;
+import org.spanloom.analysis.Reached;
 import org.spanloom.analysis.coefficients.AffineEvaluator;
 import org.spanloom.analysis.coefficients.CompiledSystem;
 import org.spanloom.language.model.InitialValues;
@@ -219,6 +220,12 @@ public final class TrajectorySolve {
             times,
             new double[times.length]);
     return new SolutionTable(
-        system.model().name(), initial.name(), time, columns, solution.method(), accuracy);
+        system.model().name(),
+        initial.name(),
+        time,
+        columns,
+        solution.method(),
+        accuracy,
+        Reached.worst(system, solution).relative());
   }
 }
