@@ -114,6 +114,18 @@ class LanguageServicesTests {
     assertEquals(EditorTests.problem(editor, "name-unknown").problem().message(), text);
   }
 
+  @Test
+  void tellsWhatTheCheckSaidOfARequirement() throws Exception {
+    Workbench.type(
+        editor, Models.DECAY.replace("basis Phi at 0", "require depth < 3 [m] throughout"));
+    Workbench.save(editor);
+    int offset = editor.document().get().indexOf("throughout");
+    Workbench.waitUntil(
+        "the result of the requirement",
+        () -> hover(offset).contains("2 m at t = 0 s"),
+        () -> hover(offset));
+  }
+
   @SuppressWarnings("deprecation") // The text of a hover is asked for by this method.
   private String hover(int offset) {
     ITextHover hover = editor.hover();
@@ -167,11 +179,15 @@ class LanguageServicesTests {
   @Test
   void listsUnitsInBrackets() throws Exception {
     int unit = Models.DECAY.indexOf("[m] = 2") + 1;
-    editor.selectAndReveal(unit, 0);
+    editor.document().replace(unit, 1, "k");
+    Workbench.waitForModel(editor);
+    editor.selectAndReveal(unit + 1, 0);
     editor.setFocus();
     editor.getAction("ContentAssistProposal").run();
     Workbench.waitUntil(
-        "the list of units", () -> proposals().stream().anyMatch(p -> p.startsWith("kg")));
+        "the list of units",
+        () -> proposals().stream().anyMatch(p -> p.startsWith("kg")),
+        () -> proposals().toString());
     editor.getSite().getShell().forceFocus();
     editor.selectAndReveal(0, 0);
     editor.viewer().getTextWidget().notifyListeners(SWT.FocusOut, new Event());

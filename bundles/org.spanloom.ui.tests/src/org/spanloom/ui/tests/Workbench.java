@@ -68,6 +68,8 @@ final class Workbench implements BeforeEachCallback, AfterEachCallback {
   @Override
   public void afterEach(ExtensionContext context) throws Exception {
     page().closeAllEditors(false);
+    // A view remembers what was chosen for a file; the next test has a file of the same name.
+    page().hideView(page().findView(UiIds.SOLUTION_VIEW));
     waitForJobs();
     for (IProject project : ResourcesPlugin.getWorkspace().getRoot().getProjects()) {
       project.delete(true, true, null);

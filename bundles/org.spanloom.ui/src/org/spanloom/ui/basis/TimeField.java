@@ -5,17 +5,17 @@
  */
 package org.spanloom.ui.basis;
 
-import java.util.Locale;
 import org.eclipse.ui.views.markers.MarkerItem;
+import org.spanloom.ui.Labels;
 import org.spanloom.workspace.MarkerAttributes;
 
 /** A time with its unit. */
 public final class TimeField extends NumberField {
 
+  private static final int DIGITS = 5;
+
   @Override
   String show(double value, MarkerItem item) {
-    String unit = item.getAttributeValue(MarkerAttributes.TIME_UNIT, "");
-    return String.format(Locale.ROOT, "%.5g", value)
-        + (unit.isEmpty() || unit.equals("1") ? "" : " " + unit);
+    return Labels.amount(value, item.getAttributeValue(MarkerAttributes.TIME_UNIT, ""), DIGITS);
   }
 }

@@ -9,6 +9,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import org.spanloom.analysis.solve.SolutionTable;
+import org.spanloom.ui.Labels;
 
 /**
  * A column of a solution as a curve of finite values. A column that is not finite somewhere has

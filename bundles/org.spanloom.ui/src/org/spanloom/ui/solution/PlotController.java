@@ -15,6 +15,7 @@ import org.eclipse.swt.graphics.Rectangle;
 import org.eclipse.swt.widgets.Control;
 import org.eclipse.swt.widgets.Event;
 import org.eclipse.swtchart.IAxis;
+import org.spanloom.ui.Labels;
 
 /**
  * Zoom, pan and cursor of a plot.

@@ -22,6 +22,7 @@ import org.eclipse.swt.widgets.Text;
 import org.spanloom.language.model.InitialValues;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.SystemModel;
+import org.spanloom.ui.Labels;
 
 /** Chooses what to solve, and which units the value axes show where there are more than two. */
 final class SolutionControls {

@@ -21,6 +21,7 @@ import org.eclipse.swt.widgets.Composite;
 import org.eclipse.swt.widgets.Control;
 import org.eclipse.swt.widgets.Label;
 import org.spanloom.analysis.solve.SolutionTable;
+import org.spanloom.ui.Labels;
 
 /**
  * The widgets of the view: choices above, values and curves in the middle, what is known about them

@@ -28,6 +28,7 @@ import org.eclipse.swtchart.ISeries.SeriesType;
 import org.eclipse.swtchart.LineStyle;
 import org.eclipse.swtchart.Range;
 import org.eclipse.swtchart.model.DoubleArraySeriesModel;
+import org.spanloom.ui.Labels;
 
 /** Draws curves over one time axis and up to two value axes, each for one unit. */
 final class SolutionPlot {

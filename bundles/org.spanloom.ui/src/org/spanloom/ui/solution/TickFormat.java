@@ -9,6 +9,7 @@ import java.io.Serial;
 import java.text.FieldPosition;
 import java.text.NumberFormat;
 import java.text.ParsePosition;
+import org.spanloom.ui.Labels;
 
 /** Writes the numbers at an axis. */
 final class TickFormat extends NumberFormat {

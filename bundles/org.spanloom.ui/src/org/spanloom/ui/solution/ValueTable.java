@@ -15,6 +15,7 @@ import org.eclipse.swt.widgets.Table;
 import org.eclipse.swt.widgets.TableColumn;
 import org.eclipse.swt.widgets.TableItem;
 import org.spanloom.analysis.solve.SolutionTable;
+import org.spanloom.ui.Labels;
 
 /**
  * The values behind the curves, for reading and for screen readers; only the lines in sight are

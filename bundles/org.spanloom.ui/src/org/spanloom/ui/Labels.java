@@ -3,7 +3,7 @@
  *
  * SPDX-License-Identifier: EPL-2.0
  */
-package org.spanloom.ui.solution;
+package org.spanloom.ui;
 
 import java.math.BigDecimal;
 import java.math.MathContext;
@@ -13,7 +13,7 @@ import java.util.Locale;
  * Names with units and numbers for people; the decimal sign is a point in every locale, as in the
  * model.
  */
-final class Labels {
+public final class Labels {
 
   private static final double PLAIN_FROM = 1e-4;
   private static final double PLAIN_TO = 1e7;
@@ -21,12 +21,12 @@ final class Labels {
   private Labels() {}
 
   /** Returns {@code name [unit]}; a pure number has no brackets. */
-  static String withUnit(String name, String unit) {
+  public static String withUnit(String name, String unit) {
     return isPure(unit) ? name : name + " [" + unit + "]";
   }
 
   /** Returns {@code number unit}. */
-  static String amount(double value, String unit, int digits) {
+  public static String amount(double value, String unit, int digits) {
     return number(value, digits) + (isPure(unit) ? "" : " " + unit);
   }
 
@@ -35,7 +35,7 @@ final class Labels {
   }
 
   /** Returns a number with as many digits as it needs, at most those given. */
-  static String number(double value, int digits) {
+  public static String number(double value, int digits) {
     if (!Double.isFinite(value)) {
       return Double.isNaN(value) ? "none" : value > 0 ? "infinite" : "-infinite";
     }
@@ -52,7 +52,7 @@ final class Labels {
   }
 
   /** Returns an estimated error with the two digits that mean something. */
-  static String error(double value) {
+  public static String error(double value) {
     return value == 0 ? "0" : String.format(Locale.ROOT, "%.1e", value);
   }
 }
