@@ -36,15 +36,15 @@ public final class ConditionProfile {
   private static final int EVEN = 100;
   private static final int FEWEST_SAMPLES = 40;
   private static final int MOST_SAMPLES = 400;
-  private static final double MOST_WORK = 4e9;
+  private static final double MOST_WORK = 2e9;
   private static final int REFINEMENTS = 24;
   private static final double GOLDEN = (Math.sqrt(5) - 1) / 2;
 
   private final ConditionMeter meter;
   private final List<ConditionSample> samples;
+  private final double startTime;
   private final ConditionSample worstRaw;
   private final ConditionSample worstScaled;
-  private final double startTime;
 
   private ConditionProfile(ConditionMeter meter, List<ConditionSample> samples, double startTime) {
     this.meter = meter;
@@ -95,6 +95,38 @@ public final class ConditionProfile {
     try {
       ConditionMeter meter = new ConditionMeter(system, basis, new Watch(progress));
       return new Outcome.Solved<>(times.stream().map(meter::at).toList());
+    } catch (Cancelled cancelled) {
+      return new Outcome.Cancelled<>();
+    } catch (Hopeless hopeless) {
+      return hopeless.outcome();
+    }
+  }
+
+  /**
+   * Looks for the time nearest to the start of a basis at which its scaled condition number exceeds
+   * a limit; looks no further than that.
+   *
+   * @param system the system
+   * @param basis columns that solve the homogeneous system, given at the first time of the range
+   * @param over where to look; bounded and inside the range of the basis
+   * @param limit the limit
+   * @param progress asked while working
+   * @return the time, found to a thousandth of its distance from the start; empty if the limit
+   *     holds
+   */
+  static Outcome<OptionalDouble> firstScaledAbove(
+      LinearSystem system, Solution basis, TimeRange over, double limit, Progress progress) {
+    try {
+      ConditionMeter meter = new ConditionMeter(system, basis, new Watch(progress));
+      List<ConditionSample> samples = new ArrayList<>();
+      for (double t : times(basis, over)) {
+        samples.add(meter.at(t));
+        if (samples.getLast().scaled() > limit) {
+          break;
+        }
+      }
+      ConditionProfile profile = new ConditionProfile(meter, samples, basis.startTime());
+      return new Outcome.Solved<>(profile.firstScaledAbove(limit));
     } catch (Cancelled cancelled) {
       return new Outcome.Cancelled<>();
     } catch (Hopeless hopeless) {
@@ -232,17 +264,27 @@ public final class ConditionProfile {
             .boxed()
             .min(Comparator.comparingDouble(t -> Math.abs(t - beyond)))
             .orElse(beyond);
-    double after = beyond;
-    for (int step = 0;
-        step < REFINEMENTS && Math.abs(after - before) > resolution(before);
-        step++) {
-      double middle = before + (after - before) / 2;
-      if (crossedAt.test(middle)) {
-        after = middle;
-      } else {
-        before = middle;
+    return OptionalDouble.of(refined(crossedAt, before, beyond));
+  }
+
+  /** Halves until the crossing is found well enough, or until nobody waits for it any more. */
+  private double refined(DoublePredicate crossedAt, double uncrossed, double crossed) {
+    double before = uncrossed;
+    double after = crossed;
+    try {
+      for (int step = 0;
+          step < REFINEMENTS && Math.abs(after - before) > resolution(before);
+          step++) {
+        double middle = before + (after - before) / 2;
+        if (crossedAt.test(middle)) {
+          after = middle;
+        } else {
+          before = middle;
+        }
       }
+    } catch (Cancelled cancelled) {
+      return after;
     }
-    return OptionalDouble.of(after);
+    return after;
   }
 }

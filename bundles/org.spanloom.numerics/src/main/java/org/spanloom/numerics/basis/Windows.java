@@ -131,16 +131,15 @@ public final class Windows {
   }
 
   private End end(Solution basis, TimeRange window) {
-    return switch (ConditionProfile.of(system, basis, window, new Silent(progress))) {
-      case Outcome.Cancelled<ConditionProfile> c -> new End.Stopped(new Outcome.Cancelled<>());
-      case Outcome.Unsolved<ConditionProfile> u ->
+    return switch (ConditionProfile.firstScaledAbove(
+        system, basis, window, limit, new Silent(progress))) {
+      case Outcome.Cancelled<OptionalDouble> c -> new End.Stopped(new Outcome.Cancelled<>());
+      case Outcome.Unsolved<OptionalDouble> u ->
           new End.Stopped(new Outcome.Unsolved<>(u.reason(), u.time(), u.detail()));
-      case Outcome.Solved<ConditionProfile> s -> {
-        OptionalDouble crossing = s.value().firstScaledAbove(limit);
-        yield crossing.isPresent()
-            ? new End.At(crossing.getAsDouble(), true)
-            : new End.At(window.end(), false);
-      }
+      case Outcome.Solved<OptionalDouble> s ->
+          s.value().isPresent()
+              ? new End.At(s.value().getAsDouble(), true)
+              : new End.At(window.end(), false);
     };
   }
 
