@@ -85,14 +85,21 @@ final class ConditionMeter {
    *
    * <p>The scaled columns are known to the relative error e of the worst one, which may move a
    * singular value by sqrt(m) e. Where the smallest is no larger, nobody can tell it from 0, and
-   * the condition is reported as infinite.
+   * the condition is reported as infinite; then the slow methods that resolve it are not worth
+   * their time.
    */
   ConditionSample at(double t) {
     Scaled columns = new Scaled(t);
-    double[] raw = SingularValues.of(columns.x, n, m, watch);
-    double[] scaled = SingularValues.of(columns.unit, n, m, watch);
     double noise = Math.sqrt(m) * Math.max(columns.error, ROUNDING);
+    double[] scaled = SingularValues.general(columns.unit, n, m, watch);
+    if (scaled[m - 1] > noise / 4) {
+      scaled = SingularValues.of(columns.unit, n, m, watch);
+    }
     boolean resolved = !columns.vanishes && scaled[m - 1] > noise;
+    double[] raw =
+        resolved
+            ? SingularValues.of(columns.x, n, m, watch)
+            : SingularValues.general(columns.x, n, m, watch);
     Determinant determinant = columns.determinant();
     return new ConditionSample(
         t,

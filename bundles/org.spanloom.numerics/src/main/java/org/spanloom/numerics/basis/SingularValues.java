@@ -42,7 +42,13 @@ final class SingularValues {
         : values;
   }
 
-  private static double[] general(double[] x, int n, int m, Watch watch) {
+  /**
+   * Computes them to about n u times the largest, without looking closer at the smallest.
+   *
+   * @param x n by m matrix, row by row, finite, n at least m, m at least 1
+   * @param watch asked while working
+   */
+  static double[] general(double[] x, int n, int m, Watch watch) {
     watch.spend(4.0 * n * m * m);
     DMatrixRMaj matrix = new DMatrixRMaj(n, m);
     System.arraycopy(x, 0, matrix.data, 0, n * m);
