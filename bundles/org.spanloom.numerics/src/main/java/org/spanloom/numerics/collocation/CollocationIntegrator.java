@@ -17,24 +17,16 @@ import org.spanloom.numerics.internal.work.Watch;
 /**
  * Steps through a range in one direction.
  *
- * <p>Each step of length H is also done as two of H/2, whose result is kept; the difference gives
- * the local error of the kept one (step doubling; Hairer, N&oslash;rsett &amp; Wanner, Solving
- * Ordinary Differential Equations I (1993), section II.4; from memory). Local errors and rounding
- * errors are passed on by the same factored equations as the solution, so that what stands beside
- * each value is an estimate of its <i>global</i> error:
+ * <p>Local errors and rounding errors are passed on by the same factored equations as the solution,
+ * so that what stands beside each value is an estimate of its <i>global</i> error:
  *
  * <pre>
- * E(t + H) = R(t + H, t) E(t) +- k (x_H - x_(H/2)) + rounding.
+ * E(t + H) = R(t + H, t) E(t) +- local error +- rounding.
  * </pre>
- *
- * For smooth, well resolved steps the factor k would be 2^-2s. Where fast directions are not
- * resolved the order drops to about s (Prothero &amp; Robinson 1974), so k = 2^-s is used there,
- * and 2^-1.5s elsewhere.
  */
 final class CollocationIntegrator {
 
   private static final int MOST_STEPS = 1_000_000;
-  private static final double ROUNDOFF = 0x1p-53;
 
   private final LinearSystem system;
   private final StageCoefficients.Shape shape;
@@ -48,9 +40,10 @@ final class CollocationIntegrator {
   private final Watch watch;
   private final double[] balance;
   private final double[][] weight;
+  private final Seams seams;
+  private final RoundingSigns signs = new RoundingSigns();
   private StageSystem lastWhole;
   private StageSystem lastHalf;
-  private long signs = 0x9E3779B97F4A7C15L;
 
   /**
    * Prepares a run.
@@ -87,6 +80,7 @@ final class CollocationIntegrator {
     this.balance = balance.clone();
     this.watch = watch;
     this.weight = new double[n][m];
+    this.seams = new Seams(system, shape, tableau, forced);
   }
 
   /**
@@ -138,12 +132,12 @@ final class CollocationIntegrator {
         double wanted = step;
         double h = left <= 1.1 * step ? left : left < 2 * step ? left / 2 : step;
         double to = h == left ? stop : t + direction * h;
-        Step done = tryStep(t, to, direction * h, x);
-        if (done.error() <= 1) {
-          error = passOn(done, x, error);
+        DoubledStep done = step(t, to, direction * h, x);
+        double local = done.error(localRelative);
+        if (local <= 1) {
+          error = done.passOn(error, signs);
           t = to;
-          x = done.second().values();
-          nodes.add(done.middle(), done.first().values(), done.first().errors());
+          x = done.end();
           nodes.add(t, x, error);
           double ratio = worstRatio(x, error);
           double fraction = Math.abs(t - t0) / range;
@@ -153,9 +147,9 @@ final class CollocationIntegrator {
           if (giveUp && ratio > 1) {
             return Optional.of(new TooLoose(fraction, ratio, ratioBefore));
           }
-          step = Math.min(nextStep(control, h, wanted, done.error()), range / 8);
+          step = Math.min(nextStep(control, h, wanted, local), range / 8);
         } else {
-          step = control.afterFailure(h, done.error());
+          step = control.afterFailure(h, local);
           if (step < 32 * Math.ulp(Math.max(Math.abs(t), Math.abs(stop)))) {
             throw stuck(t, x);
           }
@@ -186,37 +180,15 @@ final class CollocationIntegrator {
             Reason.STEP_TOO_SMALL, t, "the step size fell below what the time axis resolves");
   }
 
-  /** One half of a step, with what is known at its end. */
-  private record Half(StageSystem stages, double[][] values, double[][] errors) {}
-
-  /** A step done both ways. */
-  private record Step(
-      double middle, Half first, Half second, double[][] whole, double share, double error) {}
-
-  private Step tryStep(double t, double to, double h, double[][] x) {
+  private DoubledStep step(double t, double to, double h, double[][] x) {
     double middle = t + (to - t) / 2;
     StageSystem whole = stages(t, to, h, lastWhole);
+    StageSystem first = stages(t, middle, h / 2, lastHalf);
+    StageSystem second = stages(middle, to, h / 2, first);
     lastWhole = whole;
-    double[][] far = whole.end(x, whole.solve(x, m), m);
-    StageSystem one = stages(t, middle, h / 2, lastHalf);
-    double[][] halfway = one.end(x, one.solve(x, m), m);
-    StageSystem two = stages(middle, to, h / 2, one);
-    lastHalf = two;
-    double[][] end = two.end(halfway, two.solve(halfway, m), m);
+    lastHalf = second;
     double speed = Math.abs(h) / 2 * whole.coefficients().norm(balance);
-    double power = speed <= 1.5 * tableau.stages() ? 1.5 : 1;
-    double share = Math.pow(2, -power * tableau.stages());
-    double error =
-        Rows.areFinite(far) && Rows.areFinite(end)
-            ? localError(x, far, end, share)
-            : Double.POSITIVE_INFINITY;
-    return new Step(
-        middle,
-        new Half(one, halfway, new double[n][m]),
-        new Half(two, end, new double[n][m]),
-        far,
-        share,
-        error);
+    return new DoubledStep(tableau, whole, first, second, x, m, speed, weights, seams, t, to);
   }
 
   private StageSystem stages(double from, double to, double h, StageSystem known) {
@@ -226,80 +198,6 @@ final class CollocationIntegrator {
       return known.with(coefficients);
     }
     return StageSystem.of(tableau, coefficients, h, watch);
-  }
-
-  private double localError(double[][] x, double[][] far, double[][] end, double share) {
-    weights.write(x, end, weight, m);
-    double largest = 0;
-    for (int i = 0; i < n; i++) {
-      for (int j = 0; j < m; j++) {
-        double allowed = localRelative * weight[i][j] + 2 * ROUNDOFF * Math.abs(end[i][j]);
-        largest = Math.max(largest, share * Math.abs(far[i][j] - end[i][j]) / allowed);
-      }
-    }
-    return Double.isNaN(largest) ? Double.POSITIVE_INFINITY : largest;
-  }
-
-  /**
-   * Passes the error estimates on through both halves; writes those at the middle into the first
-   * half.
-   */
-  private double[][] passOn(Step step, double[][] x, double[][] error) {
-    double[][] middle = passOn(step.first().stages(), x, error, step.first().values());
-    copyInto(middle, step.first().errors());
-    double[][] end =
-        passOn(step.second().stages(), step.first().values(), middle, step.second().values());
-    weights.write(x, step.second().values(), weight, m);
-    for (int j = 0; j < m; j++) {
-      double alignment = 0;
-      for (int i = 0; i < n; i++) {
-        double local = step.whole()[i][j] - step.second().values()[i][j];
-        alignment += end[i][j] / weight[i][j] * (local / weight[i][j]);
-      }
-      // Local errors are known to a factor only, so they are never allowed to cancel what came
-      // before.
-      double share = alignment < 0 ? -step.share() : step.share();
-      for (int i = 0; i < n; i++) {
-        double local = share * (step.whole()[i][j] - step.second().values()[i][j]);
-        end[i][j] += local;
-        step.first().errors()[i][j] += local / 2;
-      }
-    }
-    return end;
-  }
-
-  private double[][] passOn(StageSystem stages, double[][] x, double[][] error, double[][] values) {
-    double[] shares = new double[n];
-    for (int i = 0; i < n; i++) {
-      shares[i] = 2 * nextSign() * ROUNDOFF;
-    }
-    double[][] off = new double[n][m];
-    for (int i = 0; i < n; i++) {
-      for (int j = 0; j < m; j++) {
-        off[i][j] = error[i][j] + 2 * tableau.rounding() * x[i][j];
-      }
-    }
-    double[][] end = stages.end(error, stages.solveErrors(off, x, shares, m), m);
-    for (int i = 0; i < n; i++) {
-      for (int j = 0; j < m; j++) {
-        end[i][j] += 2 * nextSign() * ROUNDOFF * Math.abs(values[i][j]);
-      }
-    }
-    return end;
-  }
-
-  private static void copyInto(double[][] source, double[][] target) {
-    for (int i = 0; i < source.length; i++) {
-      System.arraycopy(source[i], 0, target[i], 0, source[i].length);
-    }
-  }
-
-  /** Signs of rounding errors: the same in every run (xorshift generator, Marsaglia 2003). */
-  private double nextSign() {
-    signs ^= signs << 13;
-    signs ^= signs >>> 7;
-    signs ^= signs << 17;
-    return (signs & 1) == 0 ? 1 : -1;
   }
 
   private double worstRatio(double[][] x, double[][] error) {

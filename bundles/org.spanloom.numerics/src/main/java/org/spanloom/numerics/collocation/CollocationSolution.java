@@ -21,7 +21,7 @@ import org.spanloom.numerics.solution.Solution;
 final class CollocationSolution implements Solution {
 
   /** How many times the estimated error counts. */
-  static final double SAFETY = 2;
+  static final double SAFETY = 3;
 
   /**
    * Share of the largest error of a column that every entry of it is given, so that no entry is
@@ -87,31 +87,30 @@ final class CollocationSolution implements Solution {
    */
   private void shareErrors() {
     double[][] size = new double[n][m];
-    double[][] own = new double[times.length][];
+    double[][] relative = new double[times.length][n * m];
+    double[][] sizes = new double[times.length][n * m];
     for (int k = 0; k < times.length; k++) {
-      own[k] = new double[n * m];
-      if (k == start) {
-        continue;
-      }
       double[][] x = Rows.of(values[k], n, m);
       weights.write(x, x, size, m);
       for (int j = 0; j < m; j++) {
         double largest = 0;
         for (int i = 0; i < n; i++) {
-          largest = Math.max(largest, Math.abs(errors[k][i * m + j]) / size[i][j]);
+          relative[k][i * m + j] = Math.abs(errors[k][i * m + j]) / size[i][j];
+          sizes[k][i * m + j] = size[i][j];
+          largest = Math.max(largest, relative[k][i * m + j]);
         }
         for (int i = 0; i < n; i++) {
-          double error = Math.max(Math.abs(errors[k][i * m + j]), SHARE * largest * size[i][j]);
-          own[k][i * m + j] = SAFETY * error + 4 * Math.ulp(x[i][j]);
+          relative[k][i * m + j] = Math.max(relative[k][i * m + j], SHARE * largest);
         }
       }
     }
     for (int k = 0; k < times.length; k++) {
       for (int e = 0; e < n * m; e++) {
-        double before = own[Math.max(k - 1, 0)][e];
-        double after = own[Math.min(k + 1, times.length - 1)][e];
-        double error = k == start ? 0 : Math.max(own[k][e], Math.max(before, after));
-        errors[k][e] = Math.min(error, Double.MAX_VALUE);
+        double before = relative[Math.max(k - 1, 0)][e];
+        double after = relative[Math.min(k + 1, times.length - 1)][e];
+        double worst = Math.max(relative[k][e], Math.max(before, after));
+        double error = SAFETY * worst * sizes[k][e] + 4 * Math.ulp(values[k][e]);
+        errors[k][e] = k == start ? 0 : Math.min(error, Double.MAX_VALUE);
       }
     }
   }

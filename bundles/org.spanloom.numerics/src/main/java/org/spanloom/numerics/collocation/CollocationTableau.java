@@ -58,6 +58,8 @@ public final class CollocationTableau {
   private final double[] end;
   private final double rounding;
   private final double[] barycentric;
+  private final double[] beforeFirst;
+  private final double[] afterLast;
   private final double[] leading;
   private final double[] nextToLeading;
 
@@ -73,6 +75,8 @@ public final class CollocationTableau {
     rounding = roundingOf(points, derivative);
     end = new double[stages];
     weightsAt(1, end);
+    beforeFirst = extrapolation(0);
+    afterLast = extrapolation(1);
     leading = legendreCoefficient(stages);
     nextToLeading = legendreCoefficient(stages - 1);
   }
@@ -136,6 +140,35 @@ public final class CollocationTableau {
   /** Returns the weight of Z_i in the coefficient of the Legendre polynomial of degree s - 1. */
   double nextToLeading(int i) {
     return nextToLeading[i];
+  }
+
+  /**
+   * Returns the weight of the value at point i in the polynomial through the points, at the start
+   * of the step.
+   */
+  double beforeFirst(int i) {
+    return beforeFirst[i];
+  }
+
+  /**
+   * Returns the weight of the value at point i in the polynomial through the points, at the end of
+   * the step.
+   */
+  double afterLast(int i) {
+    return afterLast[i];
+  }
+
+  private double[] extrapolation(double theta) {
+    double[] w = new double[points.length];
+    for (int i = 0; i < w.length; i++) {
+      w[i] = 1;
+      for (int j = 0; j < w.length; j++) {
+        if (j != i) {
+          w[i] *= (theta - points[j]) / (points[i] - points[j]);
+        }
+      }
+    }
+    return w;
   }
 
   /**

@@ -11,10 +11,11 @@ package org.spanloom.numerics.collocation;
  */
 final class StepControl {
 
-  private static final double MARGIN = 0.85;
+  /** Error, over the error allowed, that the next step is meant to have. */
+  private static final double AIM = 0.25;
 
   private final int stages;
-  private double lastError = 1;
+  private double lastRatio;
   private int failures;
 
   /** Controls a method of this many stages. */
@@ -29,14 +30,13 @@ final class StepControl {
    * @param error its error over the error allowed, at most 1
    */
   double afterSuccess(double h, double error) {
-    double bounded = Math.max(error, 1e-12);
+    double ratio = AIM / Math.max(error, 1e-12);
     double exponent = 2.0 * stages;
     double factor =
-        MARGIN * Math.pow(bounded, -0.7 / exponent) * Math.pow(lastError, 0.4 / exponent);
-    if (lastError == 1) {
-      factor = MARGIN * Math.pow(bounded, -1 / exponent);
-    }
-    lastError = Math.max(bounded, 1e-4);
+        lastRatio == 0
+            ? Math.pow(ratio, 1 / exponent)
+            : Math.pow(ratio, 0.7 / exponent) * Math.pow(lastRatio, -0.4 / exponent);
+    lastRatio = Math.min(ratio, 1e4);
     double most = failures > 0 ? 1 : 6;
     failures = 0;
     return h * Math.clamp(factor, 0.3, most);
@@ -54,6 +54,6 @@ final class StepControl {
       return h * 0.1;
     }
     double exponent = failures > 1 ? stages + 2.0 : 2.0 * stages;
-    return h * Math.clamp(MARGIN * Math.pow(error, -1 / exponent), 0.08, 0.8);
+    return h * Math.clamp(Math.pow(AIM / error, 1 / exponent), 0.08, 0.8);
   }
 }

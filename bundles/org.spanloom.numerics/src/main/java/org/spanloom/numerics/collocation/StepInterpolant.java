@@ -90,7 +90,7 @@ final class StepInterpolant {
           last += tableau.leading(i) * z[i * n + row][j];
           before += tableau.nextToLeading(i) * z[i * n + row][j];
         }
-        error[row][j] = Math.abs(last) + 0.1 * Math.abs(before);
+        error[row][j] = 2 * Math.abs(last) + 0.5 * Math.abs(before);
       }
     }
     return error;
