@@ -186,7 +186,7 @@ class LanguageServicesTests {
     editor.getAction("ContentAssistProposal").run();
     Workbench.waitUntil(
         "the list of units",
-        () -> proposals().stream().anyMatch(p -> p.startsWith("kg")),
+        () -> proposals().stream().anyMatch(p -> p.startsWith("kat")),
         () -> proposals().toString());
     editor.getSite().getShell().forceFocus();
     editor.selectAndReveal(0, 0);

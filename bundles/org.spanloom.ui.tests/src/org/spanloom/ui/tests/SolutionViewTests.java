@@ -14,6 +14,8 @@ import java.util.List;
 import org.eclipse.core.resources.IProject;
 import org.eclipse.swt.SWT;
 import org.eclipse.swt.custom.CTabFolder;
+import org.eclipse.swt.graphics.ImageData;
+import org.eclipse.swt.graphics.RGB;
 import org.eclipse.swt.graphics.Rectangle;
 import org.eclipse.swt.widgets.Combo;
 import org.eclipse.swt.widgets.Control;
@@ -30,6 +32,7 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.extension.RegisterExtension;
 import org.spanloom.ui.UiIds;
 import org.spanloom.ui.editor.ModelEditor;
+import org.spanloom.ui.solution.SolutionView;
 
 /** The curve of the active editor's model, and what can be done with it. */
 class SolutionViewTests {
@@ -101,7 +104,7 @@ class SolutionViewTests {
 
   @Test
   void saysTheEstimatedErrorAndTheMethod() {
-    waitForLabel("Estimated error: depth \u00b1 ");
+    waitForLabel("Largest estimated error: depth \u00b1 ");
     waitForLabel("Method: ");
   }
 
@@ -119,7 +122,7 @@ class SolutionViewTests {
     waitForLabel("Not up to date. Line " + Models.FAULT_LINE);
     assertEquals(2.0, chart().getSeriesSet().getSeries("depth").getYSeries()[0], 1e-9);
     Workbench.type(editor, Models.DECAY);
-    waitForLabel("Estimated error");
+    waitForLabel("Largest estimated error");
   }
 
   @Test
@@ -139,11 +142,7 @@ class SolutionViewTests {
 
   @Test
   void showsAPartOfTheInterval() {
-    Text until =
-        Workbench.find(Text.class, Workbench.shell()).stream()
-            .filter(t -> t.getMessage().equals("end"))
-            .findFirst()
-            .orElseThrow();
+    Text until = until();
     until.setText("1.5");
     Workbench.send(until, SWT.DefaultSelection, e -> {});
     Workbench.waitUntil("the shorter curve", () -> lastTime() == 1.5);
@@ -234,6 +233,7 @@ class SolutionViewTests {
     int y = chart().getAxisSet().getYAxis(0).getPixelCoordinate(2 * Math.exp(-1));
     Workbench.send(area, SWT.MouseMove, e -> at(e, x, y, 0));
     waitForLabel("depth = 0.7");
+    waitForLabel("t = ");
     waitForLabel(" m   \u00b1 ");
     Workbench.send(area, SWT.MouseExit, e -> {});
     assertFalse(labels().stream().anyMatch(l -> l.contains("depth = 0.7")));
@@ -284,6 +284,70 @@ class SolutionViewTests {
     assertEquals("depth [m]", table.getColumn(1).getText());
     Workbench.waitUntil("the first line", () -> table.getItem(0).getText(1).equals("2"));
     tabs.setSelection(0);
+  }
+
+  @Test
+  void refusesInsideTheViewAndAsksForWhatIsMissing() {
+    Workbench.type(editor, Models.DECAY.replace(" over t [s] from 0 to 4", " over t [s] from 0"));
+    Workbench.waitUntil(
+        "a reason",
+        () -> labels().stream().anyMatch(l -> l.contains("until") || l.contains("bounded")),
+        () -> labels().toString());
+    assertEquals(List.of(), Workbench.find(Chart.class, Workbench.shell()));
+    Text until = until();
+    until.setText("3");
+    Workbench.send(until, SWT.DefaultSelection, e -> {});
+    waitForCurve("depth");
+    Workbench.waitUntil("the curve up to 3 s", () -> lastTime() == 3);
+  }
+
+  @Test
+  void aWordInPlaceOfATimeIsNotTaken() {
+    Text until = until();
+    until.setText("soon");
+    Workbench.send(until, SWT.DefaultSelection, e -> {});
+    assertEquals("", until.getText());
+    assertEquals(4, lastTime());
+  }
+
+  @Test
+  void exportsWhatTheCommandLineWouldWrite() {
+    String text = view().tableText().orElseThrow();
+    List<String> lines = text.lines().toList();
+    assertEquals("t,depth,slope", lines.getFirst());
+    String[] first = lines.get(1).split(",");
+    assertEquals(0, Double.parseDouble(first[0]));
+    assertEquals(2, Double.parseDouble(first[1]), 1e-12);
+    // 17 significant digits give the double back.
+    double[] drawn = chart().getSeriesSet().getSeries("depth").getYSeries();
+    assertEquals(drawn[7], Double.parseDouble(lines.get(8).split(",")[1]));
+    assertEquals(drawn.length + 1, lines.size());
+  }
+
+  @Test
+  void exportsAPictureForWhitePaperInAnyTheme() {
+    ThemeTests.setTheme(ThemeTests.DARK);
+    try {
+      ImageData picture = view().picture().orElseThrow();
+      assertEquals(2 * chart().getSize().x, picture.width);
+      RGB corner = picture.palette.getRGB(picture.getPixel(2, 2));
+      assertEquals(new RGB(255, 255, 255), corner);
+      RGB onScreen = chart().getBackground().getRGB();
+      assertTrue(onScreen.red < 100, "the plot on the screen stays dark");
+    } finally {
+      ThemeTests.setTheme(ThemeTests.LIGHT);
+    }
+  }
+
+  private static SolutionView view() {
+    return (SolutionView) Workbench.page().findView(UiIds.SOLUTION_VIEW);
+  }
+
+  private static Text until() {
+    return Workbench.find(Text.class, Workbench.shell()).stream()
+        .filter(t -> t.getMessage().equals("end") || t.getMessage().equals("a number"))
+        .findFirst()
+        .orElseThrow();
   }
 
   @Test

@@ -16,7 +16,8 @@ public final class ConditionField extends NumberField {
   @Override
   String show(double value, MarkerItem item) {
     if (Double.isInfinite(value)) {
-      return "beyond double precision";
+      // What double precision cannot tell from singular.
+      return "> 1e16";
     }
     return String.format(Locale.ROOT, value < WRITTEN_OUT ? "%.4g" : "%.2e", value);
   }

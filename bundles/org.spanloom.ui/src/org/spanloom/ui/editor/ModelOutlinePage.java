@@ -28,6 +28,7 @@ final class ModelOutlinePage extends ContentOutlinePage {
 
   private final ModelEditor editor;
   private final Consumer<ModelSnapshot> listener = this::snapshotPublished;
+  private List<OutlineEntry> shown = List.of();
   private boolean showing;
 
   ModelOutlinePage(ModelEditor editor) {
@@ -62,6 +63,11 @@ final class ModelOutlinePage extends ContentOutlinePage {
 
   /** Entries are equal by their path of names, so what is open and selected stays so. */
   private void show(List<OutlineEntry> roots, boolean first) {
+    boolean looksSame = !first && OutlineEntry.lookSame(shown, roots);
+    shown = roots;
+    if (looksSame) {
+      return;
+    }
     TreeViewer tree = getTreeViewer();
     showing = true;
     try {
@@ -102,11 +108,21 @@ final class ModelOutlinePage extends ContentOutlinePage {
     super.selectionChanged(event);
     Optional<OutlineNode> node =
         event.getStructuredSelection().getFirstElement() instanceof OutlineEntry entry
-            ? Optional.of(entry.node())
+            ? current(entry)
             : Optional.empty();
     if (!showing) {
       node.ifPresent(n -> editor.reveal(n.nameSpan()));
     }
+  }
+
+  /** The tree may hold an entry of an older text that looks the same; its place may have moved. */
+  private Optional<OutlineNode> current(OutlineEntry entry) {
+    List<Object> found = new ArrayList<>();
+    collect(shown, Set.of(entry), found);
+    return found.stream()
+        .filter(OutlineEntry.class::isInstance)
+        .map(e -> ((OutlineEntry) e).node())
+        .findFirst();
   }
 
   @Override

@@ -14,17 +14,27 @@ import org.spanloom.language.editing.OutlineNode;
 /**
  * A node of the outline with a key that survives edits: the path of labels, numbered where they
  * repeat.
+ *
+ * <p>A level shows a bounded number of nodes, since each costs a widget; the last one tells how
+ * many more there are.
  */
 final class OutlineEntry {
 
+  private static final int MOST = 1000;
+
   private final String key;
+  private final String label;
+  private final String detail;
   private final OutlineNode node;
   private final List<OutlineEntry> children;
 
-  private OutlineEntry(String key, OutlineNode node) {
+  private OutlineEntry(
+      String key, String label, String detail, OutlineNode node, List<OutlineEntry> children) {
     this.key = key;
+    this.label = label;
+    this.detail = detail;
     this.node = node;
-    this.children = all(key, node.children());
+    this.children = children;
   }
 
   static List<OutlineEntry> all(List<OutlineNode> nodes) {
@@ -34,10 +44,20 @@ final class OutlineEntry {
   private static List<OutlineEntry> all(String parentKey, List<OutlineNode> nodes) {
     Map<String, Integer> seen = new HashMap<>();
     List<OutlineEntry> entries = new ArrayList<>();
-    for (OutlineNode node : nodes) {
-      String label = node.kind() + " " + node.label();
-      int number = seen.merge(label, 1, Integer::sum);
-      entries.add(new OutlineEntry(parentKey + "\n" + label + "\t" + number, node));
+    for (OutlineNode node : nodes.subList(0, Math.min(MOST, nodes.size()))) {
+      String name = node.kind() + " " + node.label();
+      String key = parentKey + "\n" + name + "\t" + seen.merge(name, 1, Integer::sum);
+      entries.add(
+          new OutlineEntry(key, node.label(), node.detail(), node, all(key, node.children())));
+    }
+    if (nodes.size() > MOST) {
+      entries.add(
+          new OutlineEntry(
+              parentKey + "\nmore",
+              "and " + (nodes.size() - MOST) + " more",
+              "",
+              nodes.get(MOST),
+              List.of()));
     }
     return List.copyOf(entries);
   }
@@ -46,8 +66,28 @@ final class OutlineEntry {
     return node;
   }
 
+  String detail() {
+    return detail;
+  }
+
   List<OutlineEntry> children() {
     return children;
+  }
+
+  /** Tells whether two lists look the same on the screen, down to the last level. */
+  static boolean lookSame(List<OutlineEntry> one, List<OutlineEntry> other) {
+    if (!one.equals(other)) {
+      return false;
+    }
+    for (int i = 0; i < one.size(); i++) {
+      boolean same =
+          one.get(i).detail.equals(other.get(i).detail)
+              && lookSame(one.get(i).children, other.get(i).children);
+      if (!same) {
+        return false;
+      }
+    }
+    return true;
   }
 
   @Override
@@ -62,6 +102,6 @@ final class OutlineEntry {
 
   @Override
   public String toString() {
-    return node.label();
+    return label;
   }
 }

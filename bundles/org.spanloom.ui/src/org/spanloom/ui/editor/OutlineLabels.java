@@ -24,8 +24,8 @@ final class OutlineLabels extends DelegatingStyledCellLabelProvider {
     @Override
     public StyledString getStyledText(Object element) {
       StyledString text = new StyledString(element.toString());
-      if (element instanceof OutlineEntry entry && !entry.node().detail().isEmpty()) {
-        text.append("  " + entry.node().detail(), StyledString.QUALIFIER_STYLER);
+      if (element instanceof OutlineEntry entry && !entry.detail().isEmpty()) {
+        text.append("  " + entry.detail(), StyledString.QUALIFIER_STYLER);
       }
       return text;
     }

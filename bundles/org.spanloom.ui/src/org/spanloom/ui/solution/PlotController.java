@@ -39,12 +39,14 @@ final class PlotController {
   private static final int LEAST_DRAG = 6;
   private static final int REMEMBERED = 50;
   private static final int DIGITS = 9;
+  private static final int TIME_DIGITS = 6;
   private static final int SECOND_BUTTON = 2;
   private static final int THIRD_BUTTON = 3;
 
   private final SolutionPlot plot;
   private final PlotCursor cursor;
   private final Consumer<String> readOut;
+  private String timeName = "";
   private String timeUnit = "";
   private final Deque<Zoom> past = new ArrayDeque<>();
   private Optional<Drag> drag = Optional.empty();
@@ -74,7 +76,8 @@ final class PlotController {
   }
 
   /** Forgets cursor and history, for new curves. */
-  void reset(String newTimeUnit) {
+  void reset(String newTimeName, String newTimeUnit) {
+    timeName = newTimeName;
     timeUnit = newTimeUnit;
     cursor.clear();
     readOut.accept("");
@@ -236,9 +239,10 @@ final class PlotController {
         cursor
             .reading()
             .map(r ->
-                "%s   %s = %s   \u00b1 %s"
+                "%s = %s   %s = %s   \u00b1 %s"
                     .formatted(
-                        Labels.amount(r.time(), timeUnit, DIGITS),
+                        timeName,
+                        Labels.amount(r.time(), timeUnit, TIME_DIGITS),
                         r.curve().name(),
                         Labels.amount(r.value(), r.curve().unit(), DIGITS),
                         Labels.error(r.error())))

@@ -46,6 +46,7 @@ final class SolutionPage {
   private final ValueTable values;
   private final Label readOut;
   private final Label status;
+  private final Label method;
 
   SolutionPage(
       Composite parent,
@@ -88,6 +89,7 @@ final class SolutionPage {
     sash.setWeights(LIST_TO_PLOT);
     readOut = line(resultPage);
     status = line(resultPage);
+    method = line(resultPage);
     controller = new PlotController(plot, readOut::setText);
     showPage(messagePage);
   }
@@ -146,8 +148,9 @@ final class SolutionPage {
     controls.showAxes(units, axes);
     list.show(table, columns);
     values.show(table, columns);
-    controller.reset(table.time().unit());
+    controller.reset(table.time().name(), table.time().unit());
     plot.show(Labels.withUnit(table.time().name(), table.time().unit()), curves, axes, keepZoom);
+    method.setText("Method: " + table.method());
     long notDrawn = units.stream().filter(u -> !axes.show(u)).count();
     setStatus(
         summary(table, columns)
@@ -164,7 +167,7 @@ final class SolutionPage {
             .map(c -> c.name() + " \u00b1 " + Labels.error(c.largestError()) + unit(c))
             .toList();
     String more = columns.size() > ERRORS_NAMED ? ", ..." : "";
-    return "Estimated error: " + String.join(", ", errors) + more + "   Method: " + table.method();
+    return "Largest estimated error: " + String.join(", ", errors) + more;
   }
 
   private static String unit(SolutionTable.Column column) {

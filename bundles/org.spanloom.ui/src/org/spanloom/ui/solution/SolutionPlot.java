@@ -9,6 +9,7 @@ import java.util.HashSet;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
+import org.eclipse.jface.resource.JFaceResources;
 import org.eclipse.swt.SWT;
 import org.eclipse.swt.accessibility.AccessibleAdapter;
 import org.eclipse.swt.accessibility.AccessibleEvent;
@@ -68,6 +69,7 @@ final class SolutionPlot {
     right.getGrid().setStyle(LineStyle.NONE);
     for (IAxis axis : List.of(time, left, right)) {
       axis.getTick().setFormat(new TickFormat());
+      axis.getTitle().setFont(JFaceResources.getDefaultFont());
     }
     ownColours(chart);
     describe();

@@ -14,6 +14,7 @@ import org.eclipse.jface.action.Action;
 import org.eclipse.jface.action.IAction;
 import org.eclipse.jface.action.IToolBarManager;
 import org.eclipse.jface.action.Separator;
+import org.eclipse.swt.graphics.ImageData;
 import org.eclipse.swt.widgets.Composite;
 import org.eclipse.swt.widgets.Display;
 import org.eclipse.ui.PlatformUI;
@@ -253,6 +254,16 @@ public final class SolutionView extends ViewPart {
       memory.remember(file(), table, axes);
       page.showSolution(table, memory.columns(file(), table), axes, false);
     });
+  }
+
+  /** Returns the solution shown as text, as the export writes it; empty while there is none. */
+  public Optional<String> tableText() {
+    return shown.map(SolutionCsv::of);
+  }
+
+  /** Returns the picture of the plot, as the export writes it; empty while there is none. */
+  public Optional<ImageData> picture() {
+    return shown.map(table -> page.picture());
   }
 
   private void cancel() {

@@ -34,7 +34,7 @@ public final class ModelPerspective implements IPerspectiveFactory {
     findings.addPlaceholder(PROGRESS);
     findings.addPlaceholder(SEARCH);
     findings.addPlaceholder(ERROR_LOG);
-    IFolderLayout solution = layout.createFolder("solution", IPageLayout.RIGHT, 0.46f, editors);
+    IFolderLayout solution = layout.createFolder("solution", IPageLayout.RIGHT, 0.5f, editors);
     solution.addView(UiIds.SOLUTION_VIEW);
 
     layout.addNewWizardShortcut(UiIds.NEW_PROJECT_WIZARD);
