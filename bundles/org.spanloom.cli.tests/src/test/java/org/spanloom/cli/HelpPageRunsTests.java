@@ -9,6 +9,8 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import com.google.gson.JsonElement;
+import com.google.gson.JsonParser;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -187,6 +189,42 @@ class HelpPageRunsTests {
     known.remove("--help");
     assertFalse(known.isEmpty(), help);
     assertEquals(known, listed);
+  }
+
+  /** A reader of the JSON may rely on every name that the page lists, and meets no other. */
+  @Test
+  void thePageOfTheCommandLineListsTheNamesInTheJson() throws IOException {
+    Set<String> written = new TreeSet<>();
+    for (String project : List.of("marrow-skerry", "marrow-skerry-faults")) {
+      Path folder = Path.of("..", "..", "examples", project);
+      String json = CommandRun.of("check", "--format", "json", folder.toString()).out();
+      names(JsonParser.parseString(json), written);
+    }
+    String block =
+        HelpPage.of("html/command-line.html").blocks("shown").stream()
+            .filter(b -> b.contains("\"format\""))
+            .findFirst()
+            .orElseThrow();
+    Set<String> listed = new TreeSet<>();
+    Matcher name = Pattern.compile("\"(\\w+)\"").matcher(block);
+    while (name.find()) {
+      listed.add(name.group(1));
+    }
+    assertEquals(listed, written);
+  }
+
+  private static void names(JsonElement element, Set<String> names) {
+    if (element.isJsonArray()) {
+      element.getAsJsonArray().forEach(e -> names(e, names));
+    } else if (element.isJsonObject()) {
+      for (Map.Entry<String, JsonElement> entry : element.getAsJsonObject().entrySet()) {
+        names.add(entry.getKey());
+        // The names of the numbers behind a finding are its own.
+        if (!entry.getKey().equals("numbers")) {
+          names(entry.getValue(), names);
+        }
+      }
+    }
   }
 
   private static Set<String> options(String text) {

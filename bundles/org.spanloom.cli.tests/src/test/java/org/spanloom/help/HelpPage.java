@@ -73,7 +73,7 @@ public record HelpPage(Path file, Document document) {
   }
 
   /** Returns the texts of all preformatted blocks of a class. */
-  List<String> blocks(String styleClass) {
+  public List<String> blocks(String styleClass) {
     return elements("pre").stream()
         .filter(e -> e.getAttribute("class").equals(styleClass))
         .map(Element::getTextContent)
