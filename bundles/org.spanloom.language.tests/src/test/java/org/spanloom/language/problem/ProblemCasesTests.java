@@ -34,7 +34,8 @@ class ProblemCasesTests {
   private static final String HEADER =
       "system S over t [s] from 0 to 10 { state x [m] = 1; x' = -x/2 [s]\n";
 
-  private static final List<String> FILES = List.of("text", "system", "names", "units", "linear");
+  private static final List<String> FILES =
+      List.of("text", "system", "names", "units", "linear", "transfers");
 
   private record Case(String file, String title, String input, String expected) {
 

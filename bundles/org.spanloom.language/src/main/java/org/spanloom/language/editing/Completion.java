@@ -37,7 +37,15 @@ public final class Completion {
   private static final List<String> OUTSIDE = List.of("system", "parameter", "let");
   private static final List<String> INSIDE =
       List.of(
-          "parameter", "let", "state", "output", "initial values", "basis", "require", "accuracy");
+          "parameter",
+          "let",
+          "state",
+          "output",
+          "transfer",
+          "initial values",
+          "basis",
+          "require",
+          "accuracy");
   private static final String PREFIXES = "kMGmunp";
 
   private final Model model;
@@ -193,6 +201,7 @@ public final class Completion {
           List.of("over", "from", "to", "after", "before").forEach(w -> offer(w, "interval"));
       case "state" -> offer("scale", "size below which only absolute errors count");
       case "initial", "basis" -> offer("at", "time");
+      case "transfer" -> offer("outside", "where amounts come from or go to");
       case "require" ->
           List.of("throughout", "until", "under").forEach(w -> offer(w, "requirement"));
       default -> {}

@@ -22,6 +22,7 @@ import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.RequireStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Statement.TransferStatement;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.syntax.SyntaxFile;
 import org.spanloom.language.syntax.UnitText;
@@ -78,6 +79,7 @@ public final class Outline {
       case OutputStatement output ->
           leaf(Kind.OUTPUT, output.name(), unit(output.unit()), output.span());
       case EquationStatement equation -> text(Kind.EQUATION, equation.span(), equation.span());
+      case TransferStatement transfer -> text(Kind.EQUATION, transfer.span(), transfer.span());
       case InitialValuesStatement values ->
           leaf(Kind.INITIAL_VALUES, values.name(), "initial values", values.span());
       case BasisStatement basis -> leaf(Kind.BASIS, basis.name(), "basis", basis.span());

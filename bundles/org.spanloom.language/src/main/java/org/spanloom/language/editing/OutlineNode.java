@@ -38,7 +38,7 @@ public record OutlineNode(
     STATE,
     /** An output. */
     OUTPUT,
-    /** An equation. */
+    /** An equation or a transfer. */
     EQUATION,
     /** A set of initial values. */
     INITIAL_VALUES,

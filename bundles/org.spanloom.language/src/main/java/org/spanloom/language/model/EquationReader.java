@@ -9,6 +9,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalInt;
 import java.util.Set;
 import org.spanloom.language.model.Meaning.StateMeaning;
 import org.spanloom.language.problem.Fix;
@@ -26,6 +27,7 @@ final class EquationReader {
   private final List<ResolvedEquation> equations = new ArrayList<>();
   private final boolean[] mentioned;
   private final int[] orders;
+  private final List<ResolvedEquation> balances = new ArrayList<>();
   private boolean allRead = true;
 
   EquationReader(SystemScope system) {
@@ -45,7 +47,14 @@ final class EquationReader {
       allRead = false;
       return;
     }
-    equations.add(new ResolvedEquation(statement, left.get(), right.get()));
+    equations.add(
+        new ResolvedEquation(
+            left.get(),
+            statement.left().span(),
+            right.get(),
+            statement.right().span(),
+            OptionalInt.empty(),
+            statement.span()));
     noteOrders(left.get());
     noteOrders(right.get());
   }
@@ -62,9 +71,23 @@ final class EquationReader {
     }
   }
 
-  /** Returns the equations that have a meaning. */
+  /** Takes the balance of a state that transfers govern. */
+  void addBalance(ResolvedEquation balance) {
+    balances.add(balance);
+    noteOrders(balance.left());
+    noteOrders(balance.right());
+  }
+
+  /** Notes that something which may be part of an equation has no meaning. */
+  void noteUnread() {
+    allRead = false;
+  }
+
+  /** Returns the balances and the equations that have a meaning, balances first. */
   List<ResolvedEquation> equations() {
-    return equations;
+    List<ResolvedEquation> all = new ArrayList<>(balances);
+    all.addAll(equations);
+    return all;
   }
 
   /** Tells whether every equation has a meaning. */
@@ -117,6 +140,7 @@ final class EquationReader {
    * from its declarations. Reports derivatives that are declared but no component.
    */
   StateVector stateVector() {
+    balances.forEach(b -> refuseHigherOrders(b.balanced().getAsInt()));
     int[] known = new int[orders.length];
     Arrays.setAll(
         known, i -> orders[i] > 0 ? orders[i] : Math.max(1, system.declaredDerivatives(i) + 1));
@@ -129,6 +153,34 @@ final class EquationReader {
       }
     }
     return new StateVector(system.states(), known);
+  }
+
+  /** Transfers give the first derivative of a state, so that no equation can give a higher one. */
+  private void refuseHigherOrders(int state) {
+    if (orders[state] < 2) {
+      return;
+    }
+    for (ResolvedEquation equation : List.copyOf(equations)) {
+      if (holdsHigher(equation.left(), state) || holdsHigher(equation.right(), state)) {
+        String name = system.states().get(state).statement().name().text();
+        problems.report(
+            ProblemKind.TOO_MANY_EQUATIONS,
+            equation.span(),
+            "\""
+                + name
+                + "\" is governed by transfers, which give \""
+                + name
+                + "'\", so no higher derivative of it can stand in an equation: remove the primes or the"
+                + " transfers.");
+        equations.remove(equation);
+      }
+    }
+    orders[state] = 1;
+    allRead = false;
+  }
+
+  private static boolean holdsHigher(Quantity side, int state) {
+    return side.coefficients().keySet().stream().anyMatch(k -> k.state() == state && k.order() > 1);
   }
 
   private void reportDerivativeAlone(StateStatement statement, int order) {

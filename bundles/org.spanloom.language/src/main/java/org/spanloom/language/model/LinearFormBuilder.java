@@ -9,6 +9,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.TreeMap;
+import java.util.stream.IntStream;
 import org.spanloom.language.model.LinearForm.MatrixEntry;
 import org.spanloom.language.model.LinearForm.VectorEntry;
 import org.spanloom.language.model.Meaning.StateMeaning;
@@ -39,12 +40,19 @@ final class LinearFormBuilder {
       massSides.add(side);
       int[] states =
           side.coefficients().keySet().stream().mapToInt(StateKey::state).distinct().toArray();
-      statesOf.add(states);
+      statesOf.add(candidates(equation, states));
       for (int state : states) {
         held[state] = true;
       }
     }
     this.matching = EquationMatching.of(statesOf, held.length);
+  }
+
+  /** Returns the states an equation may govern; a balance governs its own state and no other. */
+  private static int[] candidates(ResolvedEquation equation, int[] states) {
+    return equation.balanced().isEmpty()
+        ? states
+        : IntStream.of(states).filter(s -> s == equation.balanced().getAsInt()).toArray();
   }
 
   /** Returns the statement that governs a state; its declaration where there is none. */
@@ -85,6 +93,17 @@ final class LinearFormBuilder {
               ProblemKind.EQUATION_WITHOUT_STATE,
               equation.span(),
               "The equation gives no derivative: " + reasonForNoDerivative(equation));
+    } else if (IntStream.of(states).allMatch(this::isBalanced)) {
+      String name = vector.states().get(states[0]).statement().name().text();
+      system
+          .problems()
+          .report(
+              ProblemKind.TOO_MANY_EQUATIONS,
+              equation.span(),
+              "\""
+                  + name
+                  + "\" is governed by transfers, and a state is governed by transfers or by an equation,"
+                  + " never both: write this as transfers or remove the others.");
     } else if (reader.allRead()) {
       StateMeaning state = vector.states().get(states[0]);
       String highest = StateVector.label(state, vector.order(states[0]));
@@ -99,6 +118,11 @@ final class LinearFormBuilder {
                   + (states.length == 1 ? " is" : " and the other derivatives in this one are")
                   + " given by other equations already. Remove one of them or declare another state.");
     }
+  }
+
+  private boolean isBalanced(int state) {
+    int equation = matching.equationOf(state);
+    return equation >= 0 && equations.get(equation).balanced().isPresent();
   }
 
   private String reasonForNoDerivative(ResolvedEquation equation) {

@@ -29,6 +29,7 @@ import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.RequireStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Statement.TransferStatement;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.syntax.Token;
 import org.spanloom.language.text.SourceText;
@@ -102,6 +103,7 @@ final class SystemReader {
         equations.read(equation);
       }
     }
+    readTransfers(equations);
     if (hasUnread) {
       equations.noteUnread(unreadGoverned);
     }
@@ -160,6 +162,17 @@ final class SystemReader {
         statement.name().span());
   }
 
+  private void readTransfers(EquationReader equations) {
+    TransferReader transfers = new TransferReader(system, equations);
+    for (Statement s : statement.body()) {
+      ModelReader.check(cancelled);
+      if (s instanceof TransferStatement transfer) {
+        transfers.read(transfer);
+      }
+    }
+    transfers.finish();
+  }
+
   /** Takes all names, so that the order of declarations does not matter. */
   private void collect() {
     Scope scope = system.scope();
@@ -182,10 +195,14 @@ final class SystemReader {
           }
         }
         case UnreadStatement unread ->
-            unread(unread.span(), unread.declares(), unread.word().isEmpty());
+            unread(
+                unread.span(),
+                unread.declares(),
+                unread.word().isEmpty() || unread.word().equals("transfer"));
         case LaterStatement later -> unread(later.span(), later.declares(), true);
         case SystemStatement inner -> {}
         case EquationStatement equation -> {}
+        case TransferStatement transfer -> {}
         case InitialValuesStatement values -> {}
         case BasisStatement basis -> {}
         case RequireStatement require -> {}

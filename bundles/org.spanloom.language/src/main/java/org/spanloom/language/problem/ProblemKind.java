@@ -89,6 +89,8 @@ public enum ProblemKind {
   EQUATION_WITHOUT_STATE("An equation gives no derivative of a state."),
   /** More equations than states for the derivatives in them. */
   TOO_MANY_EQUATIONS("There are more equations than derivatives to be found."),
+  /** A transfer that leads from nowhere to nowhere or back to where it began. */
+  TRANSFER_INVALID("A transfer does not lead from one place to another."),
   /** Highest derivatives that the equations cannot give. */
   SINGULAR_MASS_MATRIX("The equations cannot be solved for the highest derivatives."),
   /** A system without a state. */

@@ -91,6 +91,15 @@ public sealed interface Statement {
       implements Statement {}
 
   /**
+   * {@code transfer gut -> blood = k_a*gut}: what leaves one amount enters the other.
+   *
+   * @param flow the amount over time
+   */
+  record TransferStatement(
+      TransferEnd from, TransferEnd to, Expression flow, String documentation, Span span)
+      implements Statement {}
+
+  /**
    * {@code initial values warm at 2 { T = 293 }}.
    *
    * @param allRead whether every line of the block could be read
@@ -160,6 +169,13 @@ public sealed interface Statement {
 
   /** {@code ± 5 %}; half the width of the interval of uncertainty. */
   record Uncertainty(Expression halfWidth, boolean percent, Span span) {}
+
+  /**
+   * One end of a transfer.
+   *
+   * @param state the state; empty for {@code outside}
+   */
+  record TransferEnd(Optional<NameExpression> state, Span span) {}
 
   /** {@code T_air = 293}. */
   record Setting(NameExpression target, Expression value, Span span) {}

@@ -22,6 +22,8 @@ import org.spanloom.language.syntax.Statement.RequireStatement;
 import org.spanloom.language.syntax.Statement.Row;
 import org.spanloom.language.syntax.Statement.Setting;
 import org.spanloom.language.syntax.Statement.StateStatement;
+import org.spanloom.language.syntax.Statement.TransferEnd;
+import org.spanloom.language.syntax.Statement.TransferStatement;
 import org.spanloom.language.syntax.Statement.Uncertainty;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.text.Span;
@@ -47,8 +49,8 @@ final class StatementParser {
   }
 
   /**
-   * {@code simple statement = parameter | let | state | output | require | accuracy | equation ;}
-   * for any other word see {@link Parser}.
+   * {@code simple statement = parameter | let | state | output | require | accuracy | transfer |
+   * equation ;} for any other word see {@link Parser}.
    */
   Statement statement() {
     String word = firstWord();
@@ -60,6 +62,7 @@ final class StatementParser {
           case "output" -> output();
           case "require" -> require();
           case "accuracy" -> accuracy();
+          case "transfer" -> transfer();
           default -> equation();
         };
     expectEnd();
@@ -74,6 +77,7 @@ final class StatementParser {
         !word.isEmpty()
             && !word.equals("row")
             && !word.equals("require")
+            && !word.equals("transfer")
             && line.tokens().size() > place
             && line.tokens().get(place).kind().isName();
     Optional<Name> name =
@@ -158,6 +162,28 @@ final class StatementParser {
     return new AccuracyStatement(expressions.expression(), line.span());
   }
 
+  /** {@code transfer = "transfer", end, "->", end, "=", expression ;} */
+  private Statement transfer() {
+    cursor.take();
+    TransferEnd from = transferEnd("The state it comes from belongs here, or \"outside\"");
+    if (!cursor.failed() && !cursor.accept(TokenKind.ARROW)) {
+      cursor.failHere(ProblemKind.WORD_UNEXPECTED, "\"->\" and the state it goes to belong here");
+    }
+    TransferEnd to = transferEnd("The state it goes to belongs here, or \"outside\"");
+    equalsSign();
+    Expression flow = expressions.expression();
+    return new TransferStatement(from, to, flow, line.documentation(), line.span());
+  }
+
+  /** {@code transfer end = name | "outside" ;} */
+  private TransferEnd transferEnd(String expected) {
+    if (cursor.isWord("outside")) {
+      return new TransferEnd(Optional.empty(), cursor.take().span());
+    }
+    NameExpression state = target(expected);
+    return new TransferEnd(Optional.of(state), state.span());
+  }
+
   /** {@code equation = expression, "=", expression ;} */
   private Statement equation() {
     if (failMisspeltWord()) {
@@ -195,7 +221,7 @@ final class StatementParser {
             + meant
                 .map(m -> ": did you mean " + m + "?")
                 .orElse(
-                    ": write an equation, or one of system, parameter, let, state, output, initial values,"
+                    ": write an equation, or one of system, parameter, let, state, output, transfer, initial values,"
                         + " basis, require and accuracy."),
         meant.stream().map(m -> Fix.replace("Write " + m, first.span(), m)).toArray(Fix[]::new));
     return true;

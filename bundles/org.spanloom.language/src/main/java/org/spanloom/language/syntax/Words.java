@@ -84,6 +84,7 @@ public final class Words {
     boolean inContext =
         switch (word) {
           case "values" -> previous.equals("initial");
+          case "outside" -> first.equals("transfer");
           case "scale" -> first.equals("state") && !previous.equals("state");
           case "condition" -> previous.equals("scaled") || previous.equals("require");
           default -> REQUIREMENT_SET.contains(word) && previous.equals("require");
