@@ -291,7 +291,7 @@ class SolutionViewTests {
     Workbench.type(editor, Models.DECAY.replace(" over t [s] from 0 to 4", " over t [s] from 0"));
     Workbench.waitUntil(
         "a reason",
-        () -> labels().stream().anyMatch(l -> l.contains("until") || l.contains("bounded")),
+        () -> labels().stream().anyMatch(l -> l.contains("does not include its stop")),
         () -> labels().toString());
     assertEquals(List.of(), Workbench.find(Chart.class, Workbench.shell()));
     Text until = until();
