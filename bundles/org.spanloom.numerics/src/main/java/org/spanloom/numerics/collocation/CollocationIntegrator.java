@@ -49,6 +49,7 @@ final class CollocationIntegrator {
    * Prepares a run.
    *
    * @param system the system
+   * @param shape its pattern
    * @param tableau the method
    * @param m number of columns
    * @param forced whether b counts
@@ -60,6 +61,7 @@ final class CollocationIntegrator {
    */
   CollocationIntegrator(
       LinearSystem system,
+      StageCoefficients.Shape shape,
       CollocationTableau tableau,
       int m,
       boolean forced,
@@ -69,7 +71,7 @@ final class CollocationIntegrator {
       double[] balance,
       Watch watch) {
     this.system = system;
-    this.shape = StageCoefficients.Shape.of(system);
+    this.shape = shape;
     this.tableau = tableau;
     this.n = system.dimension();
     this.m = m;
@@ -188,7 +190,8 @@ final class CollocationIntegrator {
     lastWhole = whole;
     lastHalf = second;
     double speed = Math.abs(h) / 2 * whole.coefficients().norm(balance);
-    return new DoubledStep(tableau, whole, first, second, x, m, speed, weights, seams, t, to);
+    return new DoubledStep(
+        tableau, whole, first, second, x, m, speed, weights, localRelative, seams, t, to);
   }
 
   private StageSystem stages(double from, double to, double h, StageSystem known) {
@@ -197,7 +200,7 @@ final class CollocationIntegrator {
     if (system.hasConstantMatrix() && known != null && known.length() == h) {
       return known.with(coefficients);
     }
-    return StageSystem.of(tableau, coefficients, h, watch);
+    return StageSystem.of(tableau, coefficients, h, 2 * m, watch);
   }
 
   private double worstRatio(double[][] x, double[][] error) {

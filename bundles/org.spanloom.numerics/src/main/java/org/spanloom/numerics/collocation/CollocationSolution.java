@@ -32,6 +32,7 @@ final class CollocationSolution implements Solution {
   private static final long MOST_NUMBERS_REMEMBERED = 4_000_000;
 
   private final LinearSystem system;
+  private final StageCoefficients.Shape shape;
   private final CollocationTableau method;
   private final CollocationTableau between;
   private final int n;
@@ -53,6 +54,7 @@ final class CollocationSolution implements Solution {
    */
   CollocationSolution(
       LinearSystem system,
+      StageCoefficients.Shape shape,
       CollocationTableau method,
       int m,
       boolean forced,
@@ -60,6 +62,7 @@ final class CollocationSolution implements Solution {
       CollocationNodes earlier,
       CollocationNodes later) {
     this.system = system;
+    this.shape = shape;
     this.method = method;
     this.between = CollocationTableau.of(CollocationTableau.Family.RADAU_IIA, method.stages() + 4);
     this.n = system.dimension();
@@ -179,6 +182,7 @@ final class CollocationSolution implements Solution {
     StepInterpolant found =
         new StepInterpolant(
             system,
+            shape,
             between,
             m,
             forced,

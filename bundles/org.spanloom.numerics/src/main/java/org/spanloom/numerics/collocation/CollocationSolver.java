@@ -26,6 +26,7 @@ public final class CollocationSolver {
   private static final double SMALLEST_LOCAL = 0x1p-48;
 
   private final LinearSystem system;
+  private final StageCoefficients.Shape shape;
   private final CollocationTableau tableau;
   private final int m;
   private final boolean forced;
@@ -49,7 +50,7 @@ public final class CollocationSolver {
     this.span = span;
     this.weights = weights;
     this.watch = watch;
-    StageCoefficients.Shape shape = StageCoefficients.Shape.of(system);
+    shape = StageCoefficients.Shape.of(system);
     CollocationTableau places = CollocationTableau.of(CollocationTableau.Family.GAUSS, 5);
     balance =
         Balance.of(
@@ -89,7 +90,7 @@ public final class CollocationSolver {
   private Solution solve(double t0, double[][] x0) {
     CollocationNodes earlier = direction(t0, x0, span.start());
     CollocationNodes later = direction(t0, x0, span.end());
-    return new CollocationSolution(system, tableau, m, forced, weights, earlier, later);
+    return new CollocationSolution(system, shape, tableau, m, forced, weights, earlier, later);
   }
 
   private CollocationNodes direction(double t0, double[][] x0, double end) {
@@ -109,7 +110,7 @@ public final class CollocationSolver {
       CollocationNodes nodes = new CollocationNodes(m);
       CollocationIntegrator integrator =
           new CollocationIntegrator(
-              system, tableau, m, forced, weights, local, span, balance, watch);
+              system, shape, tableau, m, forced, weights, local, span, balance, watch);
       Optional<TooLoose> gaveUp = integrator.run(t0, x0, stops, nodes, !last, before.fraction());
       if (gaveUp.isEmpty()) {
         return nodes;

@@ -58,6 +58,7 @@ public final class CollocationTableau {
   private final double[] end;
   private final double rounding;
   private final double[] barycentric;
+  private final StageEigenvectors eigenvectors;
   private final double[] beforeFirst;
   private final double[] afterLast;
   private final double[] leading;
@@ -73,6 +74,7 @@ public final class CollocationTableau {
     }
     derivative = derivativeMatrix(points, weights);
     rounding = roundingOf(points, derivative);
+    eigenvectors = new StageEigenvectors(derivative);
     end = new double[stages];
     weightsAt(1, end);
     beforeFirst = extrapolation(0);
@@ -125,6 +127,11 @@ public final class CollocationTableau {
   /** Returns the relative error that the rounding of D makes in every step. */
   double rounding() {
     return rounding;
+  }
+
+  /** Returns the eigenvectors of D. */
+  StageEigenvectors eigenvectors() {
+    return eigenvectors;
   }
 
   /** Tells whether the last point is the end of the step. */

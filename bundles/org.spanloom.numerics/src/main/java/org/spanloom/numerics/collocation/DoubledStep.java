@@ -48,6 +48,7 @@ final class DoubledStep {
    * @param x values at its start, n by m
    * @param speed length of a half times the norm of A
    * @param weights how errors are measured
+   * @param localRelative error allowed for one step
    * @param seams looks into the gaps beside the ends
    * @param from time at which it starts
    * @param to time at which it ends
@@ -61,6 +62,7 @@ final class DoubledStep {
       int m,
       double speed,
       ErrorWeights weights,
+      double localRelative,
       Seams seams,
       double from,
       double to) {
@@ -69,13 +71,17 @@ final class DoubledStep {
     this.second = second;
     this.start = x;
     this.m = m;
-    double[][] wholeStages = whole.solve(x, m);
-    double[][] firstStages = first.solve(x, m);
+    weight = new double[x.length][m];
+    weights.write(x, x, weight, m);
+    // Well below what the difference of whole and halves is divided by.
+    double exact = Math.max(1e-3 * localRelative, ROUNDOFF);
+    StageFactors.Precision precision = new StageFactors.Precision(Rows.copy(weight), exact);
+    double[][] wholeStages = whole.solve(x, m, precision);
+    double[][] firstStages = first.solve(x, m, precision);
     middle = first.end(x, firstStages, m);
-    double[][] secondStages = second.solve(middle, m);
+    double[][] secondStages = second.solve(middle, m, precision);
     end = second.end(middle, secondStages, m);
     double[][] far = whole.end(x, wholeStages, m);
-    weight = new double[x.length][m];
     weights.write(x, end, weight, m);
     localError = far;
     double power = speed <= 1.5 * tableau.stages() ? 1.5 : 0.5;

@@ -8,13 +8,16 @@ package org.spanloom.numerics.collocation;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome.Reason;
 import org.spanloom.numerics.Side;
+import org.spanloom.numerics.SparsityPattern;
 import org.spanloom.numerics.internal.algebra.Rows;
 import org.spanloom.numerics.internal.work.Hopeless;
+import org.spanloom.numerics.structure.BandOrder;
 
 /** A and b at the points of one step, taken from inside the step where they jump at its ends. */
 final class StageCoefficients {
 
   private final int n;
+  private final Shape shape;
   private final int[] rowStart;
   private final int[] columns;
   private final double[][] a;
@@ -39,6 +42,7 @@ final class StageCoefficients {
       double to,
       boolean forced) {
     n = system.dimension();
+    this.shape = shape;
     rowStart = shape.rowStart();
     columns = shape.columns();
     int s = tableau.stages();
@@ -69,6 +73,7 @@ final class StageCoefficients {
    */
   StageCoefficients(LinearSystem system, Shape shape, double t, Side side, boolean forced) {
     n = system.dimension();
+    this.shape = shape;
     rowStart = shape.rowStart();
     columns = shape.columns();
     a = new double[1][n * n];
@@ -81,10 +86,11 @@ final class StageCoefficients {
     }
   }
 
-  /** A sparsity pattern without its copies. */
-  record Shape(int[] rowStart, int[] columns) {
+  /** A sparsity pattern without its copies, and the order in which its band is narrow. */
+  record Shape(int[] rowStart, int[] columns, BandOrder band) {
     static Shape of(LinearSystem system) {
-      return new Shape(system.pattern().rowStart(), system.pattern().columns());
+      SparsityPattern pattern = system.pattern();
+      return new Shape(pattern.rowStart(), pattern.columns(), BandOrder.of(pattern));
     }
   }
 
@@ -97,6 +103,44 @@ final class StageCoefficients {
 
   int dimension() {
     return n;
+  }
+
+  Shape shape() {
+    return shape;
+  }
+
+  /** Returns the mean of A over the points, row by row. */
+  double[] mean() {
+    double[] mean = new double[n * n];
+    for (double[] ai : a) {
+      for (int e = 0; e < mean.length; e++) {
+        mean[e] += ai[e] / a.length;
+      }
+    }
+    return mean;
+  }
+
+  /**
+   * Returns how much A changes over the points: the sum of the changes of all entries over the sum
+   * of their sizes.
+   */
+  double spread() {
+    double sizes = 0;
+    double changes = 0;
+    for (int row = 0; row < n; row++) {
+      for (int p = rowStart[row]; p < rowStart[row + 1]; p++) {
+        int e = row * n + columns[p];
+        double low = Double.POSITIVE_INFINITY;
+        double high = Double.NEGATIVE_INFINITY;
+        for (double[] ai : a) {
+          low = Math.min(low, ai[e]);
+          high = Math.max(high, ai[e]);
+        }
+        changes += high - low;
+        sizes += Math.max(Math.abs(low), Math.abs(high));
+      }
+    }
+    return sizes == 0 ? 0 : changes / sizes;
   }
 
   int stages() {

@@ -5,7 +5,6 @@
  */
 package org.spanloom.numerics.collocation;
 
-import org.spanloom.numerics.internal.algebra.LuFactors;
 import org.spanloom.numerics.internal.work.Watch;
 
 /**
@@ -17,14 +16,14 @@ final class StageSystem {
   private final CollocationTableau tableau;
   private final StageCoefficients coefficients;
   private final double h;
-  private final LuFactors factors;
   private final Watch watch;
+  private StageFactors factors;
 
   private StageSystem(
       CollocationTableau tableau,
       StageCoefficients coefficients,
       double h,
-      LuFactors factors,
+      StageFactors factors,
       Watch watch) {
     this.tableau = tableau;
     this.coefficients = coefficients;
@@ -33,30 +32,25 @@ final class StageSystem {
     this.watch = watch;
   }
 
-  /** Assembles and factors the conditions of a step of signed length h. */
+  /**
+   * Assembles and factors the conditions of a step.
+   *
+   * @param h its signed length
+   * @param columns how many columns will be solved for
+   */
   static StageSystem of(
-      CollocationTableau tableau, StageCoefficients coefficients, double h, Watch watch) {
-    int n = coefficients.dimension();
-    int s = tableau.stages();
-    double[][] rows = new double[s * n][s * n];
-    for (int i = 0; i < s; i++) {
-      double[] a = coefficients.matrix(i);
-      for (int row = 0; row < n; row++) {
-        double[] out = rows[i * n + row];
-        for (int column = 0; column < n; column++) {
-          out[i * n + column] = -h * a[row * n + column];
-        }
-        for (int j = 0; j < s; j++) {
-          out[j * n + row] += tableau.derivative(i, j);
-        }
-      }
-    }
-    return new StageSystem(tableau, coefficients, h, LuFactors.of(rows, watch), watch);
+      CollocationTableau tableau,
+      StageCoefficients coefficients,
+      double h,
+      int columns,
+      Watch watch) {
+    StageFactors factors = StageFactors.of(tableau, coefficients, h, columns, watch);
+    return new StageSystem(tableau, coefficients, h, factors, watch);
   }
 
   /** Returns the same conditions for another step of the same length whose matrix is the same. */
   StageSystem with(StageCoefficients others) {
-    return new StageSystem(tableau, others, h, factors, watch);
+    return new StageSystem(tableau, others, h, factors.with(others), watch);
   }
 
   double length() {
@@ -71,13 +65,23 @@ final class StageSystem {
    * Returns Z for columns that start at x, s n by m.
    *
    * @param x values at the start, n by m
+   * @param precision how exactly
    */
-  double[][] solve(double[][] x, int m) {
+  double[][] solve(double[][] x, int m, StageFactors.Precision precision) {
     double[][] right = right(x, m);
     for (int i = 0; i < tableau.stages(); i++) {
       coefficients.addForcing(i, h, right, i * coefficients.dimension(), m);
     }
-    return factors.solve(right, m, watch);
+    return solved(right, m, precision);
+  }
+
+  private double[][] solved(double[][] right, int m, StageFactors.Precision precision) {
+    return factors
+        .solve(right, m, precision, watch)
+        .orElseGet(() -> {
+          factors = StageFactors.Dense.of(tableau, coefficients, h, watch);
+          return factors.solve(right, m, precision, watch).orElseThrow();
+        });
   }
 
   /**
@@ -93,7 +97,7 @@ final class StageSystem {
     for (int i = 0; i < tableau.stages(); i++) {
       coefficients.addSizes(i, h, x, shares, right, i * coefficients.dimension(), m);
     }
-    return factors.solve(right, m, watch);
+    return solved(right, m, StageFactors.Precision.ofErrors());
   }
 
   private double[][] right(double[][] x, int m) {

@@ -45,6 +45,7 @@ final class StepInterpolant {
    */
   StepInterpolant(
       LinearSystem system,
+      StageCoefficients.Shape shape,
       CollocationTableau tableau,
       int m,
       boolean forced,
@@ -53,7 +54,7 @@ final class StepInterpolant {
       double to,
       double[][] x) {
     this.system = system;
-    this.shape = StageCoefficients.Shape.of(system);
+    this.shape = shape;
     this.tableau = tableau;
     this.m = m;
     this.forced = forced;
@@ -65,8 +66,12 @@ final class StepInterpolant {
   private double[][] cover(double from, double to, double[][] x, int depth) {
     StageCoefficients coefficients =
         new StageCoefficients(system, shape, tableau, from, to, forced);
-    StageSystem system = StageSystem.of(tableau, coefficients, to - from, Watch.NONE);
-    double[][] z = system.solve(x, m);
+    StageSystem system = StageSystem.of(tableau, coefficients, to - from, m, Watch.NONE);
+    double[][] size = new double[x.length][m];
+    weights.write(x, x, size, m);
+    double[][] z =
+        system.solve(
+            x, m, new StageFactors.Precision(size, Math.max(1e-3 * weights.relative(), 0x1p-52)));
     double[][] end = system.end(x, z, m);
     double[][] error = tail(z);
     double middle = from + (to - from) / 2;
