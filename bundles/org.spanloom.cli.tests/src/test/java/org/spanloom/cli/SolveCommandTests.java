@@ -81,6 +81,32 @@ class SolveCommandTests {
     assertEquals(8 * Math.exp(-1), new PrintedResult(run).last("upper"), 1e-9);
   }
 
+  /** x' = u(t) with u = 3 e^-t from x(0) = 0 has the solution 3 (1 - e^-t). */
+  @Test
+  void takesTheDefaultOfAnInputAndRefusesToSetIt() {
+    Path file =
+        CommandRun.model(
+            folder,
+            "fill.span",
+            """
+            system Fill over t [min] from 0 to 5 {
+              parameter rate [/min] = 1
+              input inlet(t) [L/min] = 3 [L/min]*exp(-rate*t)
+              state held [mL] = 0
+              transfer outside -> held = inlet(t)
+              accuracy 1e-10
+            }
+            """);
+    CommandRun run = CommandRun.of("solve", file, "--at", "2");
+    assertEquals(0, run.code(), run.err());
+    assertEquals(3000 * (1 - Math.exp(-2)), new PrintedResult(run).last("held"), 1e-6);
+    CommandRun refused = CommandRun.of("solve", file, "--set", "inlet=4", "--at", "2");
+    assertEquals(2, refused.code());
+    assertTrue(
+        refused.err().contains("'inlet' is an input, a function of t, and cannot be set"),
+        refused.err());
+  }
+
   @Test
   void tellsTheErrorOfEachColumnAndItIsTrue() {
     CommandRun run = CommandRun.of("solve", Models.drain(folder), "--at", "2");

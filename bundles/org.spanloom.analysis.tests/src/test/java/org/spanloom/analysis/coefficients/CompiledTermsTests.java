@@ -161,6 +161,7 @@ class CompiledTermsTests {
             UnitOfMeasure.ONE,
             new Term.FunctionTerm(Function.SIN, List.of(TIME)),
             true,
+            false,
             "",
             NOWHERE,
             NOWHERE);

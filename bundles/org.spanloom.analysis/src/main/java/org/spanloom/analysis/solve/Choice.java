@@ -16,6 +16,7 @@ import java.util.function.Function;
 import java.util.stream.Collectors;
 import org.spanloom.analysis.coefficients.CompiledSystem;
 import org.spanloom.analysis.coefficients.SystemCompiler;
+import org.spanloom.language.model.Let;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.Parameter;
 import org.spanloom.language.model.SystemModel;
@@ -127,6 +128,7 @@ public final class Choice {
       SystemModel system, SequencedMap<String, Double> parameters) throws RefusedException {
     Map<String, Double> values = new TreeMap<>();
     for (Map.Entry<String, Double> entry : parameters.entrySet()) {
+      refuseNamedExpression(system, entry.getKey());
       if (system.parameters().isEmpty()) {
         throw new RefusedException(
             true,
@@ -150,6 +152,22 @@ public final class Choice {
       values.put(entry.getKey(), parameter.unit().toBase(entry.getValue()));
     }
     return values;
+  }
+
+  /** A name that is declared, but as no parameter, gets a message of its own. */
+  private static void refuseNamedExpression(SystemModel system, String name)
+      throws RefusedException {
+    Optional<Let> named = system.lets().stream().filter(l -> l.name().equals(name)).findFirst();
+    if (named.isPresent() && system.parameters().stream().noneMatch(p -> p.name().equals(name))) {
+      throw new RefusedException(
+          true,
+          String.format(
+              "'%s' is %s and cannot be set to a number; change its line in the model, or set a parameter in it.",
+              name,
+              named.get().isInput()
+                  ? "an input, a function of " + system.timeName() + ","
+                  : "a named expression"));
+    }
   }
 
   /**

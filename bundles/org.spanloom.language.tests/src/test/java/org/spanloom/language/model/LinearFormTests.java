@@ -187,6 +187,25 @@ class LinearFormTests {
   }
 
   @Test
+  void anInputIsAFunctionOfTimeInItsDeclaredUnit() {
+    SystemModel system =
+        system(
+            """
+            system Store over t [h] from 0 to 48 {
+              input cooling(t) [kW] = 1.2
+              input gain(t) = 1 + t/24 [h]
+              state heat [kJ] = 0
+              heat' = -gain(t)*cooling(t)
+            }
+            """);
+    assertEquals("M[heat, heat] = 1\nf[heat] = (-gain(t))*cooling(t)\n", equations(system));
+    Let cooling = system.lets().getFirst();
+    assertTrue(cooling.isInput() && cooling.dependsOnTime());
+    assertEquals(new Term.Constant(1200), cooling.value());
+    assertEquals("kW", cooling.unit().code());
+  }
+
+  @Test
   void structuralZerosAreLeftOut() {
     SystemModel system =
         system(

@@ -77,7 +77,8 @@ final class TestTerms {
 
   static Term let(String name, Term value, boolean ofTime) {
     Span nowhere = new Span(0, 0);
-    return new Term.LetTerm(new Let(name, UnitOfMeasure.ONE, value, ofTime, "", nowhere, nowhere));
+    return new Term.LetTerm(
+        new Let(name, UnitOfMeasure.ONE, value, ofTime, false, "", nowhere, nowhere));
   }
 
   /** A random term: smooth ones only, or with corners and places where it is undefined as well. */

@@ -19,6 +19,7 @@ import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
 import org.spanloom.language.syntax.Statement.Declaration;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
+import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
@@ -39,6 +40,7 @@ public final class Completion {
       List.of(
           "parameter",
           "let",
+          "input",
           "state",
           "output",
           "transfer",
@@ -172,7 +174,7 @@ public final class Completion {
         values(true);
       }
       case "scaled" -> offer("condition", "2-norm condition number of a basis");
-      case "state", "parameter", "let", "output", "system", "values" -> {}
+      case "state", "parameter", "let", "input", "output", "system", "values" -> {}
       case "basis" -> {}
       default -> {
         if (isCondition()) {
@@ -238,6 +240,10 @@ public final class Completion {
           offer(
               name + let.argument().map(a -> "(" + a.text() + ")").orElse(""),
               "named expression" + unit(let.unit().map(u -> u.code())));
+      case InputStatement input ->
+          offer(
+              name + "(" + input.argument().text() + ")",
+              "input" + unit(input.unit().map(u -> u.code())));
       case StateStatement state ->
           offer(state.label(), "state" + unit(state.unit().map(u -> u.code())));
       case OutputStatement output -> offer(name, "output" + unit(output.unit().map(u -> u.code())));

@@ -145,7 +145,7 @@ public final class Hover {
   private void let(Let let) {
     lines.add(
         let.dependsOnTime()
-            ? "function of time" + in(let.unit())
+            ? (let.isInput() ? "input, a function of time" : "function of time") + in(let.unit())
             : "value: "
                 + number(let.unit().fromBase(TermEvaluator.constant(let.value())))
                 + in(let.unit()));

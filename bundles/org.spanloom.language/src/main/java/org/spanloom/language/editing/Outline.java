@@ -15,6 +15,7 @@ import org.spanloom.language.syntax.Statement.AccuracyStatement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
 import org.spanloom.language.syntax.Statement.EquationStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
+import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
@@ -67,6 +68,14 @@ public final class Outline {
               unit(let.unit()),
               let.span(),
               let.name().span(),
+              List.of());
+      case InputStatement input ->
+          new OutlineNode(
+              Kind.LET,
+              input.name().text() + "(" + input.argument().text() + ")",
+              unit(input.unit()),
+              input.span(),
+              input.name().span(),
               List.of());
       case StateStatement state ->
           new OutlineNode(

@@ -32,7 +32,7 @@ public record OutlineNode(
     SYSTEM,
     /** A parameter. */
     PARAMETER,
-    /** A named expression. */
+    /** A named expression or an input. */
     LET,
     /** A state or a derivative with a declaration of its own. */
     STATE,

@@ -15,6 +15,7 @@ import java.util.function.Consumer;
 import org.spanloom.language.syntax.Expression;
 import org.spanloom.language.syntax.Expression.NameExpression;
 import org.spanloom.language.syntax.Statement.Declaration;
+import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
@@ -120,6 +121,7 @@ final class DeclarationOrder {
         parameter.uncertainty().ifPresent(u -> expressions.add(u.halfWidth()));
       }
       case LetStatement let -> expressions.add(let.value());
+      case InputStatement input -> expressions.add(input.value());
       case OutputStatement output -> expressions.add(output.value());
       default -> {}
     }

@@ -22,6 +22,7 @@ import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.syntax.Expression.NumberExpression;
 import org.spanloom.language.syntax.Name;
 import org.spanloom.language.syntax.Statement.Declaration;
+import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
@@ -126,6 +127,7 @@ final class Declarations {
               : switch (declaration) {
                 case ParameterStatement parameter -> parameter(parameter);
                 case LetStatement let -> let(let);
+                case InputStatement input -> input(input);
                 case OutputStatement output -> output(output);
                 default -> Optional.empty();
               };
@@ -244,7 +246,7 @@ final class Declarations {
 
   private Optional<LetMeaning> let(LetStatement statement) {
     boolean ofTime = statement.argument().isPresent();
-    if (ofTime && !isTime(statement.argument().get())) {
+    if (ofTime && !isTime(statement.argument().get(), "a let")) {
       return Optional.empty();
     }
     Place place = ofTime ? Place.LET_OF_TIME : Place.LET;
@@ -268,11 +270,36 @@ final class Declarations {
             shown,
             value.get().constant().term(),
             ofTime,
+            false,
             statement.documentation(),
             statement.span(),
             statement.name().span());
     lets.add(let);
     return Optional.of(new LetMeaning(let, value.get().depth() + 1));
+  }
+
+  private Optional<LetMeaning> input(InputStatement statement) {
+    Optional<UnitOfMeasure> unit = units.declared(statement.unit());
+    if (!isTime(statement.argument(), "an input") || unit.isEmpty()) {
+      return Optional.empty();
+    }
+    String what = "the input " + statement.name().text();
+    Optional<Quantity> value = resolver.given(statement.value(), unit.get(), what, Place.INPUT);
+    if (value.isEmpty()) {
+      return Optional.empty();
+    }
+    Let input =
+        new Let(
+            statement.name().text(),
+            unit.get(),
+            value.get().constant().term(),
+            true,
+            true,
+            statement.documentation(),
+            statement.span(),
+            statement.name().span());
+    lets.add(input);
+    return Optional.of(new LetMeaning(input, value.get().depth() + 1));
   }
 
   private static UnitOfMeasure inferred(LetStatement statement, Quantity value) {
@@ -286,7 +313,7 @@ final class Declarations {
     return dimension.isNone() ? UnitOfMeasure.ONE : UnitNames.coherent(dimension);
   }
 
-  private boolean isTime(Name argument) {
+  private boolean isTime(Name argument, String what) {
     String time = scope.timeName();
     if (argument.text().equals(time)) {
       scope.markUsed(time);
@@ -301,7 +328,7 @@ final class Declarations {
       problems.report(
           ProblemKind.NAME_MISUSED,
           argument.span(),
-          "The argument of a let is the independent variable: write " + time + ".",
+          "The argument of " + what + " is the independent variable: write " + time + ".",
           Fix.replace("Write " + time, argument.span(), time));
     }
     return false;
@@ -334,13 +361,13 @@ final class Declarations {
     return Optional.of(new OutputMeaning(output, shown, statement.name().span()));
   }
 
-  /** Reports parameters and named expressions that nothing uses. */
+  /** Reports parameters, inputs and named expressions that nothing uses. */
   void reportUnused() {
     for (Parameter parameter : parameters()) {
       reportUnused(parameter.name(), "parameter", parameter.nameSpan());
     }
     for (Let let : lets()) {
-      reportUnused(let.name(), "named expression", let.nameSpan());
+      reportUnused(let.name(), let.isInput() ? "input" : "named expression", let.nameSpan());
     }
   }
 

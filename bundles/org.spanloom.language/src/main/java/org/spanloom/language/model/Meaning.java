@@ -59,7 +59,7 @@ sealed interface Meaning {
     return switch (this) {
       case TimeMeaning m -> "the independent variable";
       case ParameterMeaning m -> "a parameter";
-      case LetMeaning m -> "a named expression";
+      case LetMeaning m -> m.let().isInput() ? "an input" : "a named expression";
       case StateMeaning m -> "a state";
       case OutputMeaning m -> "an output";
       case BrokenMeaning m -> "a broken declaration";

@@ -22,6 +22,7 @@ import org.spanloom.language.syntax.Statement.AccuracyStatement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
 import org.spanloom.language.syntax.Statement.EquationStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
+import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
@@ -187,6 +188,7 @@ final class SystemReader {
       switch (s) {
         case ParameterStatement parameter -> declarations.collect(parameter);
         case LetStatement let -> declarations.collect(let);
+        case InputStatement input -> declarations.collect(input);
         case OutputStatement output -> declarations.collect(output);
         case StateStatement state when state.primes() > 0 -> derivatives.add(state);
         case StateStatement state -> {

@@ -165,8 +165,7 @@ public final class Parser {
       case "initial" -> initialValues(line);
       case "basis" -> basis(line);
       case "row" -> strayRow(line);
-      case "import", "table", "input", "matrix", "for", "part", "jump", "boundary" ->
-          later(line, word);
+      case "import", "table", "matrix", "for", "part", "jump", "boundary" -> later(line, word);
       default -> simple(line);
     };
   }

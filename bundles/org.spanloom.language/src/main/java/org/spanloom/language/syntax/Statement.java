@@ -65,6 +65,21 @@ public sealed interface Statement {
       Span span)
       implements Declaration {}
 
+  /**
+   * {@code input cooling(t) [kW] = 1.2}: a function of the independent variable that comes from
+   * without.
+   *
+   * @param value what it is where nothing replaces it
+   */
+  record InputStatement(
+      Name name,
+      Name argument,
+      Optional<UnitText> unit,
+      Expression value,
+      String documentation,
+      Span span)
+      implements Declaration {}
+
   /** {@code state T [K] = 277 scale 10}, {@code state x' [m/s] = 0}. */
   record StateStatement(
       Name name,

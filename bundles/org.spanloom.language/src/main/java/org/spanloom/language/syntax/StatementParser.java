@@ -15,6 +15,7 @@ import org.spanloom.language.syntax.Expression.NameExpression;
 import org.spanloom.language.syntax.OverClause.Bound;
 import org.spanloom.language.syntax.Statement.AccuracyStatement;
 import org.spanloom.language.syntax.Statement.EquationStatement;
+import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
@@ -49,8 +50,8 @@ final class StatementParser {
   }
 
   /**
-   * {@code simple statement = parameter | let | state | output | require | accuracy | transfer |
-   * equation ;} for any other word see {@link Parser}.
+   * {@code simple statement = parameter | let | input | state | output | require | accuracy |
+   * transfer | equation ;} for any other word see {@link Parser}.
    */
   Statement statement() {
     String word = firstWord();
@@ -58,6 +59,7 @@ final class StatementParser {
         switch (word) {
           case "parameter" -> parameter();
           case "let" -> let();
+          case "input" -> input();
           case "state" -> state();
           case "output" -> output();
           case "require" -> require();
@@ -120,6 +122,23 @@ final class StatementParser {
     equalsSign();
     return new LetStatement(
         name, argument, unit, expressions.expression(), line.documentation(), line.span());
+  }
+
+  /** {@code input = "input", name, "(", name, ")", [ unit ], "=", expression ;} */
+  private Statement input() {
+    cursor.take();
+    Name name = name("input");
+    Optional<Name> argument = argument();
+    if (argument.isEmpty() && !cursor.failed()) {
+      cursor.failHere(
+          ProblemKind.WORD_UNEXPECTED,
+          "An input is a function of the independent variable: \"(t)\" or the like belongs here");
+    }
+    Optional<UnitText> unit = unit();
+    equalsSign();
+    Expression value = expressions.expression();
+    return new InputStatement(
+        name, argument.orElse(name), unit, value, line.documentation(), line.span());
   }
 
   /**
@@ -221,7 +240,7 @@ final class StatementParser {
             + meant
                 .map(m -> ": did you mean " + m + "?")
                 .orElse(
-                    ": write an equation, or one of system, parameter, let, state, output, transfer, initial values,"
+                    ": write an equation, or one of system, parameter, let, input, state, output, transfer, initial values,"
                         + " basis, require and accuracy."),
         meant.stream().map(m -> Fix.replace("Write " + m, first.span(), m)).toArray(Fix[]::new));
     return true;
