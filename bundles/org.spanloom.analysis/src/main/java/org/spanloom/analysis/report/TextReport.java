@@ -141,12 +141,13 @@ public final class TextReport {
             .map(s -> counted(reports.stream().mapToLong(r -> r.count(s)).sum(), noun(s)))
             .collect(Collectors.joining(", "));
     return String.format(
-        "%s, %s checked: %s; %d of %s hold\n",
+        "%s, %s checked: %s; %d of %s %s\n",
         counted(reports.size(), "file"),
         counted(systems, "system"),
         counts,
         held,
-        counted(requirements.size(), "requirement"));
+        counted(requirements.size(), "requirement"),
+        requirements.size() == 1 ? "holds" : "hold");
   }
 
   private static String noun(Severity severity) {
