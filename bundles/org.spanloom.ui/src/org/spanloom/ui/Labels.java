@@ -30,6 +30,12 @@ public final class Labels {
     return number(value, digits) + (isPure(unit) ? "" : " " + unit);
   }
 
+  /** Returns {@code number ± error unit}. */
+  public static String amount(double value, double error, String unit, int digits) {
+    String text = number(value, digits) + " \u00b1 " + error(error);
+    return isPure(unit) ? text : text + " " + unit;
+  }
+
   private static boolean isPure(String unit) {
     return unit.isEmpty() || unit.equals("1");
   }
@@ -53,6 +59,9 @@ public final class Labels {
 
   /** Returns an estimated error with the two digits that mean something. */
   public static String error(double value) {
+    if (Double.isNaN(value)) {
+      return "unknown";
+    }
     return value == 0 ? "0" : String.format(Locale.ROOT, "%.1e", value);
   }
 }

@@ -22,7 +22,7 @@ import org.spanloom.analysis.solve.SolutionTable;
 /** The states and outputs of a solution, each with a check mark that puts it on the plot. */
 final class ColumnList {
 
-  private static final int NAME_WIDTH = 95;
+  private static final int NAME_WIDTH = 85;
   private static final int UNIT_WIDTH = 55;
 
   private final Table table;

@@ -239,13 +239,12 @@ final class PlotController {
         cursor
             .reading()
             .map(r ->
-                "%s = %s   %s = %s   \u00b1 %s"
+                "%s = %s   %s = %s"
                     .formatted(
                         timeName,
                         Labels.amount(r.time(), timeUnit, TIME_DIGITS),
                         r.curve().name(),
-                        Labels.amount(r.value(), r.curve().unit(), DIGITS),
-                        Labels.error(r.error())))
+                        Labels.amount(r.value(), r.error(), r.curve().unit(), DIGITS)))
             .orElse(""));
   }
 

@@ -29,7 +29,7 @@ import org.spanloom.ui.Labels;
  */
 final class SolutionPage {
 
-  private static final int[] LIST_TO_PLOT = {22, 78};
+  private static final int[] LIST_TO_PLOT = {25, 75};
   private static final int MESSAGE_MARGIN = 12;
   private static final int ERRORS_NAMED = 3;
 
