@@ -140,6 +140,7 @@ class ArchitectureTests {
             "problem", Set.of("text"),
             "units", Set.of("text", "problem"),
             "syntax", Set.of("text", "problem"),
+            "formatting", Set.of("text", "problem", "syntax"),
             "model", Set.of("text", "problem", "units", "syntax"),
             "editing", Set.of("text", "problem", "units", "syntax", "model"));
     Map<String, Set<String>> wrong = new TreeMap<>();

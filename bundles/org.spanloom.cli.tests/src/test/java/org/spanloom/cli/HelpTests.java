@@ -31,7 +31,8 @@ class HelpTests {
                   "--set",
                   "--accuracy",
                   "--output"),
-          Command.BASIS, List.of("FILE", "--system", "--basis", "--at", "--output"));
+          Command.BASIS, List.of("FILE", "--system", "--basis", "--at", "--output"),
+          Command.FORMAT, List.of("PATH...", "--check"));
 
   @ParameterizedTest
   @EnumSource(Command.class)
@@ -50,7 +51,8 @@ class HelpTests {
   void theOverviewNamesCommandsExitCodesAndCautions() {
     CommandRun run = CommandRun.of("--help");
     assertEquals(0, run.code());
-    for (String part : List.of("check", "solve", "basis", "Exit codes", "approximations")) {
+    for (String part :
+        List.of("check", "solve", "basis", "format", "Exit codes", "approximations")) {
       assertTrue(run.out().contains(part), run.out());
     }
   }

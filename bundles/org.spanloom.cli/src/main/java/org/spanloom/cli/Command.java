@@ -46,6 +46,18 @@ enum Command {
     int run(Options.Values values, Streams streams) throws CommandFailure {
       return new BasisCommand(values, streams).run();
     }
+  },
+  /** Lays out model files. */
+  FORMAT("format", "give model files their canonical layout") {
+    @Override
+    void describe(CommandSpec spec) {
+      FormatCommand.describe(spec);
+    }
+
+    @Override
+    int run(Options.Values values, Streams streams) throws CommandFailure {
+      return new FormatCommand(values, streams).run();
+    }
   };
 
   private final String word;

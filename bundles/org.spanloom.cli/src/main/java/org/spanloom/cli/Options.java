@@ -58,6 +58,11 @@ final class Options {
         .build();
   }
 
+  /** Returns an option that takes nothing. */
+  static OptionSpec flag(String name, String... description) {
+    return OptionSpec.builder(name).description(description).build();
+  }
+
   /** Returns an option that takes one text and must be given. */
   static OptionSpec required(String name, String label, String... description) {
     return OptionSpec.builder(one(name, label, description)).required(true).build();
@@ -124,6 +129,10 @@ final class Options {
 
     boolean helpWanted() {
       return result.isUsageHelpRequested();
+    }
+
+    boolean isGiven(String option) {
+      return result.hasMatchedOption(option);
     }
 
     /** Returns the value of an option, if given. */

@@ -37,8 +37,9 @@ final class Overview {
 
         spanloom COMMAND --help tells more; spanloom --version names the version.
 
-        Exit codes: 0 nothing wrong (warnings allowed); 1 the model has errors or a requirement
-        does not hold; 2 wrong arguments, or a file that cannot be read or written.
+        Exit codes: 0 nothing wrong (warnings allowed); 1 the model has errors, a requirement does
+        not hold, or format --check found a file to change; 2 wrong arguments, or a file that
+        cannot be read or written.
 
         Numerical results are approximations with an estimated error, and a model that passes
         every check can still be the wrong model. Results that bear on people's health, on

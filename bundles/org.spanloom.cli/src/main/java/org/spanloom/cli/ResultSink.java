@@ -82,6 +82,22 @@ final class ResultSink implements AutoCloseable {
     }
   }
 
+  /**
+   * Returns the sink that gives a file new content.
+   *
+   * @throws CommandFailure if the file may not be written
+   */
+  static ResultSink replacing(Path file) throws CommandFailure {
+    try {
+      if (!Files.isWritable(file)) {
+        throw CommandFailure.refused(file + ": may not be written");
+      }
+      return pending(file.toRealPath(), file.toString());
+    } catch (IOException e) {
+      throw CommandFailure.refused(file + ": cannot be written: " + IoReason.of(e));
+    }
+  }
+
   private static ResultSink open(Path path, String name, Optional<Path> input)
       throws IOException, CommandFailure {
     if (name.isEmpty() || Files.isDirectory(path)) {

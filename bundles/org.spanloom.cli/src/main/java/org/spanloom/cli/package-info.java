@@ -4,10 +4,12 @@
  * SPDX-License-Identifier: EPL-2.0
  */
 /**
- * The command line: checks models, lists solutions and bases, for people and for build servers.
+ * The command line: checks and lays out models, lists solutions and bases, for people and for build
+ * servers.
  *
  * <pre>
  *   arguments -> Main -> CheckCommand | SolveCommand | BasisCommand -> analysis -> ResultSink
+ *                          |  FormatCommand -> language ---------------------> ResultSink
  *                          |                                                         |
  *                     ModelSearch, ModelFile                                  stdout or a file
  * </pre>

@@ -17,8 +17,10 @@ import org.spanloom.language.editing.Definition;
 import org.spanloom.language.editing.Folding;
 import org.spanloom.language.editing.Hover;
 import org.spanloom.language.editing.Outline;
+import org.spanloom.language.formatting.Formatter;
 import org.spanloom.language.problem.Fix;
 import org.spanloom.language.problem.Problem;
+import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.problem.TextEdit;
 import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
@@ -220,6 +222,7 @@ class FuzzTests {
         ModelListing.equations(system);
       }
     }
+    layout(model);
     Outline.of(model.syntax());
     Folding.of(model.syntax());
     for (int i = 0; i < 5; i++) {
@@ -228,6 +231,25 @@ class FuzzTests {
       Definition.at(model, offset).ifPresent(s -> assertTrue(whole.contains(s)));
       Hover.at(model, offset).ifPresent(h -> assertTrue(whole.contains(h.span())));
     }
+  }
+
+  /** A laid out text is read as the one before, and is laid out. */
+  private static void layout(Model model) {
+    String laid = Formatter.format(model.syntax().source().content());
+    assertEquals(laid, Formatter.format(laid));
+    Model other = ModelReader.read(new SourceText("fuzz.span", laid));
+    assertEquals(kinds(model), kinds(other), laid);
+    for (int i = 0; i < model.systems().size(); i++) {
+      SystemModel system = model.systems().get(i);
+      if (model.isSound(system)) {
+        assertEquals(
+            ModelListing.equations(system), ModelListing.equations(other.systems().get(i)), laid);
+      }
+    }
+  }
+
+  private static List<ProblemKind> kinds(Model model) {
+    return model.problems().stream().map(Problem::kind).toList();
   }
 
   private static void statements(List<Statement> statements, Span around) {

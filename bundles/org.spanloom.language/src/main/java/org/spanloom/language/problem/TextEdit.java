@@ -5,6 +5,7 @@
  */
 package org.spanloom.language.problem;
 
+import java.util.List;
 import org.spanloom.language.text.Span;
 
 /**
@@ -13,4 +14,20 @@ import org.spanloom.language.text.Span;
  * @param span what is replaced; empty for an insertion
  * @param replacement the new text
  */
-public record TextEdit(Span span, String replacement) {}
+public record TextEdit(Span span, String replacement) {
+
+  /**
+   * Returns a text with changes made.
+   *
+   * @param edits changes that do not overlap, in the order of the text
+   */
+  public static String apply(String text, List<TextEdit> edits) {
+    StringBuilder changed = new StringBuilder(text.length());
+    int at = 0;
+    for (TextEdit edit : edits) {
+      changed.append(text, at, edit.span().start()).append(edit.replacement());
+      at = edit.span().end();
+    }
+    return changed.append(text, at, text.length()).toString();
+  }
+}

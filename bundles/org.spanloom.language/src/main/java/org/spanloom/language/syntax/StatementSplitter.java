@@ -77,7 +77,7 @@ final class StatementSplitter {
       } else if (isComment(token)) {
         take(token);
       } else {
-        open += depth(token.kind());
+        open += token.kind().nesting();
         tokens.add(token);
       }
     }
@@ -95,14 +95,6 @@ final class StatementSplitter {
     return kind == TokenKind.SEMICOLON
         || kind == TokenKind.OPEN_BRACE
         || kind == TokenKind.CLOSE_BRACE;
-  }
-
-  private static int depth(TokenKind kind) {
-    return switch (kind) {
-      case OPEN_PARENTHESIS, OPEN_BRACKET -> 1;
-      case CLOSE_PARENTHESIS, CLOSE_BRACKET -> -1;
-      default -> 0;
-    };
   }
 
   private void skipBlankLines() {

@@ -119,4 +119,12 @@ public enum TokenKind {
       case OPEN_BRACKET, CLOSE_BRACKET, OPEN_BRACE, CLOSE_BRACE, BAD -> false;
     };
   }
+
+  /** Returns 1 for a bracket that keeps a line open, -1 for one that closes it, else 0. */
+  int nesting() {
+    if (this == OPEN_PARENTHESIS || this == OPEN_BRACKET) {
+      return 1;
+    }
+    return this == CLOSE_PARENTHESIS || this == CLOSE_BRACKET ? -1 : 0;
+  }
 }
