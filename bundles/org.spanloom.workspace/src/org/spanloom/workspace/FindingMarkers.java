@@ -24,6 +24,7 @@ import org.spanloom.analysis.Finding;
 import org.spanloom.analysis.SystemReport;
 import org.spanloom.analysis.basis.BasisReport;
 import org.spanloom.analysis.requirement.RequirementResult;
+import org.spanloom.language.model.SystemModel;
 import org.spanloom.language.problem.Severity;
 import org.spanloom.language.text.SourceText;
 import org.spanloom.language.text.Span;
@@ -132,10 +133,10 @@ public final class FindingMarkers {
     }
     for (Finding finding : report.findings()) {
       if (!told.contains(finding)) {
-        Entry entry = problem(finding, source);
-        // A basis that could not be computed has no numbers, but belongs to the same list.
         entries.add(
-            isAboutBasis(finding) ? new Entry(Ids.BASIS_FINDING, entry.attributes()) : entry);
+            isAboutBasis(finding)
+                ? basisWithoutNumbers(finding, report)
+                : problem(finding, source));
       }
     }
     return entries;
@@ -172,6 +173,21 @@ public final class FindingMarkers {
     return new Entry(Ids.PROBLEM, attributes);
   }
 
+  /** A basis that could not be computed has no numbers, but belongs to the same list. */
+  private static Entry basisWithoutNumbers(Finding finding, CheckReport report) {
+    Map<String, Object> attributes = problem(finding, report.model().source()).attributes();
+    for (SystemModel system : report.model().systems()) {
+      if (system.span().contains(finding.span())) {
+        attributes.put(MarkerAttributes.SYSTEM, system.name());
+        system.bases().stream()
+            .filter(b -> b.span().contains(finding.span()))
+            .findFirst()
+            .ifPresent(b -> attributes.put(MarkerAttributes.BASIS, b.name()));
+      }
+    }
+    return new Entry(Ids.BASIS_FINDING, attributes);
+  }
+
   private static Entry basis(
       BasisReport basis, SystemReport system, Optional<Finding> finding, SourceText source) {
     Map<String, Object> attributes =
@@ -198,10 +214,11 @@ public final class FindingMarkers {
   }
 
   private static String soundMessage(BasisReport basis) {
+    String name = basis.declared() ? "Basis " + basis.name() : "The principal basis";
     return String.format(
         Locale.ROOT,
-        "Basis %s of %s is sound: about %.0f digits are left.",
-        basis.name(),
+        "%s of %s is sound: about %.0f digits are left.",
+        name,
         basis.system(),
         basis.digitsLeft());
   }

@@ -101,6 +101,31 @@ class ModelBuilderTests {
   }
 
   @Test
+  void aBasisThatIsNoneIsListedByNameWithoutNumbers() throws CoreException {
+    IFile file =
+        project.write(
+            "tank.span",
+            """
+            system Tanks over t [h] from 0 to 4 {
+              state a = 1
+              state b = 1
+              a' = -0.3 [1/h]*a
+              b' = -0.2 [1/h]*b
+              basis pair at 0 =
+                row a = 1, 2
+                row b = 2, 4
+            }
+            """);
+    project.build();
+    assertEquals(List.of("basis-dependent"), TestProject.codes(file));
+    IMarker basis = TestProject.markers(file, Ids.BASIS_FINDING).getFirst();
+    assertEquals("Tanks", basis.getAttribute(MarkerAttributes.SYSTEM, ""));
+    assertEquals("pair", basis.getAttribute(MarkerAttributes.BASIS, ""));
+    assertEquals("", basis.getAttribute(MarkerAttributes.RAW, ""));
+    assertEquals(IMarker.SEVERITY_ERROR, basis.getAttribute(IMarker.SEVERITY, -1));
+  }
+
+  @Test
   void resultsOfRequirementsAreMarkersToo() throws CoreException {
     IFile file = project.write("tank.span", SOUND);
     project.build();
