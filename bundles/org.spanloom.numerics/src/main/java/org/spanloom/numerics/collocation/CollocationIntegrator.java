@@ -153,7 +153,7 @@ final class CollocationIntegrator {
         } else {
           step = control.afterFailure(h, local);
           if (step < 32 * Math.ulp(Math.max(Math.abs(t), Math.abs(stop)))) {
-            throw stuck(t, x);
+            throw stuck(t, x, local);
           }
         }
       }
@@ -173,9 +173,11 @@ final class CollocationIntegrator {
     return system.hasConstantMatrix() && next > h && next < 2 * h ? h : next;
   }
 
-  private Hopeless stuck(double t, double[][] x) {
+  private Hopeless stuck(double t, double[][] x, double error) {
     double size = Rows.oneNorm(x);
-    return size > 1e280
+    // Constant coefficients have no pole: what a constant matrix makes too fast to follow is
+    // growth.
+    return size > 1e280 || Double.isInfinite(error) || system.hasConstantMatrix()
         ? new Hopeless(
             Reason.OVERFLOW, t, "the solution grows beyond the largest floating point number")
         : new Hopeless(

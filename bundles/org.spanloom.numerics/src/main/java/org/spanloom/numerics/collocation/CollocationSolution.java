@@ -42,7 +42,10 @@ final class CollocationSolution implements Solution {
   private final int start;
   private final double[] times;
   private final double[][] values;
+
+  /** Estimates relative to the sizes of the weights. */
   private final double[][] errors;
+
   private final Map<Integer, StepInterpolant> remembered = new LinkedHashMap<>(16, 0.75f, true);
   private long numbersRemembered;
 
@@ -91,7 +94,6 @@ final class CollocationSolution implements Solution {
   private void shareErrors() {
     double[][] size = new double[n][m];
     double[][] relative = new double[times.length][n * m];
-    double[][] sizes = new double[times.length][n * m];
     for (int k = 0; k < times.length; k++) {
       double[][] x = Rows.of(values[k], n, m);
       weights.write(x, x, size, m);
@@ -99,7 +101,6 @@ final class CollocationSolution implements Solution {
         double largest = 0;
         for (int i = 0; i < n; i++) {
           relative[k][i * m + j] = Math.abs(errors[k][i * m + j]) / size[i][j];
-          sizes[k][i * m + j] = size[i][j];
           largest = Math.max(largest, relative[k][i * m + j]);
         }
         for (int i = 0; i < n; i++) {
@@ -112,8 +113,7 @@ final class CollocationSolution implements Solution {
         double before = relative[Math.max(k - 1, 0)][e];
         double after = relative[Math.min(k + 1, times.length - 1)][e];
         double worst = Math.max(relative[k][e], Math.max(before, after));
-        double error = SAFETY * worst * sizes[k][e] + 4 * Math.ulp(values[k][e]);
-        errors[k][e] = k == start ? 0 : Math.min(error, Double.MAX_VALUE);
+        errors[k][e] = SAFETY * worst;
       }
     }
   }
@@ -151,14 +151,22 @@ final class CollocationSolution implements Solution {
   @Override
   public void errorEstimate(double t, double[] error) {
     int k = find(t);
-    if (k >= 0) {
-      System.arraycopy(errors[k], 0, error, 0, n * m);
+    if (k == start) {
+      Arrays.fill(error, 0, n * m, 0);
       return;
     }
-    int left = -k - 2;
-    double[] own = interpolant(left).error(t);
+    int left = k >= 0 ? k : -k - 2;
+    int right = k >= 0 ? k : left + 1;
+    double[] values = new double[n * m];
+    value(t, Side.AFTER, values);
+    double[][] x = Rows.of(values, n, m);
+    double[][] size = new double[n][m];
+    weights.write(x, x, size, m);
+    double[] between = k >= 0 ? new double[n * m] : interpolant(left).error(t);
     for (int e = 0; e < n * m; e++) {
-      error[e] = Math.max(errors[left][e], errors[left + 1][e]) + own[e];
+      double relative = Math.max(errors[left][e], errors[right][e]);
+      double estimate = relative * size[e / m][e % m] + between[e] + 4 * Math.ulp(values[e]);
+      error[e] = Math.min(estimate, Double.MAX_VALUE);
     }
   }
 

@@ -22,11 +22,10 @@ final class DoubledStep {
 
   private static final double ROUNDOFF = 0x1p-53;
 
-  /**
-   * Kinks shrink the last coefficients by about a quarter, smooth solutions by 1/16 or more from
-   * five points on.
-   */
-  private static final double ROUGH = 0.12;
+  /** By how much a kink lets the last coefficients shrink. */
+  private static final double KINK = 0.25;
+
+  private static final double MOST_SHARE = 3;
 
   private final CollocationTableau tableau;
   private final StageSystem first;
@@ -120,17 +119,27 @@ final class DoubledStep {
     return largest;
   }
 
+  /**
+   * Returns which share of the difference counts: {@code 2^(-power s)} where the coefficients
+   * shrink as they do for smooth solutions, the same power of what is measured somewhat above that,
+   * and quickly more towards three times the difference where they shrink as for a kink.
+   */
   private double share(double shrinking, double power) {
     int s = tableau.stages();
     double best = Math.pow(2, -power * s);
-    if (!(shrinking > 0)) {
+    // The coefficient of degree s - 1 rules the measure.
+    double smooth = Math.pow(2, 1.0 - s);
+    if (!(shrinking > smooth)) {
       return best;
     }
-    if (shrinking > ROUGH && s >= 5) {
-      return 3;
+    double slow = power * s / (s - 1.0);
+    double bend = Math.sqrt(smooth * KINK);
+    if (shrinking <= bend || smooth >= KINK) {
+      return Math.min(best * Math.pow(shrinking / smooth, slow), MOST_SHARE);
     }
-    // The coefficient of degree s - 1 rules the measure; it shrinks by 2^-(s-1).
-    return Math.clamp(Math.pow(shrinking, power * s / (s - 1.0)), best, 1);
+    double atBend = best * Math.pow(bend / smooth, slow);
+    double steep = Math.log(MOST_SHARE / atBend) / Math.log(KINK / bend);
+    return Math.min(atBend * Math.pow(shrinking / bend, steep), MOST_SHARE);
   }
 
   /** Returns the values at the end, n by m. */

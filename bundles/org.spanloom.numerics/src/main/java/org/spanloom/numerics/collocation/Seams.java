@@ -80,8 +80,8 @@ final class Seams {
     for (int j = 0; j < m; j++) {
       double fineSize = size(fine, weight, j);
       double shrinking = fineSize == 0 ? 0 : Math.min(1, fineSize / size(coarse, weight, j));
-      // The third power, so that smooth coefficients cost nothing here.
-      double share = shrinking > 0.3 ? 2 : Math.pow(shrinking, 3);
+      // A high power, so that smooth coefficients cost nothing here.
+      double share = 2 * Math.min(1, Math.pow(shrinking / 0.3, 4));
       for (int i = 0; i < fine.length; i++) {
         double memory = 1 / Math.max(Math.abs(start.entry(0, i, i)), Math.abs(end.entry(0, i, i)));
         fine[i][j] *= share * Math.min(gap / 2, memory);

@@ -103,11 +103,13 @@ final class StepInterpolant {
 
   private boolean isSmall(double[][] error, double[][] x, double[][] end) {
     double[][] size = new double[x.length][m];
-    weights.write(x, end, size, m);
+    double[][] atEnd = new double[x.length][m];
+    weights.write(x, x, size, m);
+    weights.write(end, end, atEnd, m);
     for (int i = 0; i < x.length; i++) {
       for (int j = 0; j < m; j++) {
         double allowed = Math.max(0.2 * weights.relative(), 0x1p-49);
-        if (!(error[i][j] <= allowed * size[i][j])) {
+        if (!(error[i][j] <= allowed * Math.min(size[i][j], atEnd[i][j]))) {
           return false;
         }
       }

@@ -103,8 +103,8 @@ public final class ExponentialSolution implements Solution {
       }
     }
     boolean[] alone = structure.alone();
-    later = ladders(ordered, alone, range.end() - t0, t0, watch);
-    earlier = ladders(Rows.scaled(ordered, -1), alone, t0 - range.start(), t0, watch);
+    later = ladders(ordered, alone, range.end() - t0, watch);
+    earlier = ladders(Rows.scaled(ordered, -1), alone, t0 - range.start(), watch);
     nodes = chooseNodes();
   }
 
@@ -144,7 +144,7 @@ public final class ExponentialSolution implements Solution {
   public static boolean fits(double[] a, int n, double length) {
     double norm = Rows.oneNorm(Rows.of(a, n, n));
     double rungs = 6 + Math.max(0, Math.log(norm * length) / Math.log(2));
-    return 4 * rungs * n * n <= MOST_ENTRIES;
+    return norm * length < 1e300 && 4 * rungs * n * n <= MOST_ENTRIES;
   }
 
   private static double constantState(double[] a, double[] b, int n) {
@@ -177,14 +177,9 @@ public final class ExponentialSolution implements Solution {
     return new SparsityPattern(rowStart, Arrays.copyOf(columns, count));
   }
 
-  private static Ladders ladders(
-      double[][] a, boolean[] alone, double length, double t0, Watch watch) {
+  private static Ladders ladders(double[][] a, boolean[] alone, double length, Watch watch) {
     if (length == 0) {
       return new Ladders(PropagatorLadder.flat(a, alone), PropagatorLadder.flat(a, alone));
-    }
-    if (!(Rows.oneNorm(a) * length * SECOND < 1e300)) {
-      throw new Hopeless(
-          Reason.OVERFLOW, t0, "the largest rate times the length of the range is above 1e300");
     }
     PropagatorLadder first = PropagatorLadder.of(a, alone, length, watch);
     PropagatorLadder second = PropagatorLadder.of(a, alone, length * SECOND, watch);

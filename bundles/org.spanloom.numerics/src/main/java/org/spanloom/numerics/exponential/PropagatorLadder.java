@@ -28,11 +28,16 @@ final class PropagatorLadder {
   private static final int TAYLOR_TERMS = 200;
 
   private final double[][] a;
+  private final double[][] shiftedRate;
+  private final double shiftRate;
   private final boolean[] alone;
   private final double lowest;
   private final List<double[][]> rungs;
 
-  private PropagatorLadder(double[][] a, boolean[] alone, double lowest, List<double[][]> rungs) {
+  private PropagatorLadder(
+      double[][] a, boolean[] alone, double shiftRate, double lowest, List<double[][]> rungs) {
+    this.shiftRate = shiftRate;
+    this.shiftedRate = shifted(a, shiftRate);
     this.a = a;
     this.alone = alone;
     this.lowest = lowest;
@@ -57,7 +62,7 @@ final class PropagatorLadder {
       below++;
     }
     PropagatorLadder ladder =
-        new PropagatorLadder(a, alone, Math.scalb(base, -below), new ArrayList<>());
+        new PropagatorLadder(a, alone, shift / length, Math.scalb(base, -below), new ArrayList<>());
     for (int k = below; k >= 0; k--) {
       double h = Math.scalb(base, -k);
       double perLength = Math.scalb(1.0, -choice.halvings() - k);
@@ -77,7 +82,7 @@ final class PropagatorLadder {
 
   /** Returns the ladder for a length of zero. */
   static PropagatorLadder flat(double[][] a, boolean[] alone) {
-    return new PropagatorLadder(a, alone, 0, List.of());
+    return new PropagatorLadder(a, alone, 0, 0, List.of());
   }
 
   /** Returns trace/n when the matrix gets clearly smaller without it, else 0. */
@@ -197,7 +202,7 @@ final class PropagatorLadder {
     double[][] term = x;
     boolean lastWasSmall = false;
     for (int k = 1; k <= TAYLOR_TERMS; k++) {
-      term = Rows.product(a, term, m, watch);
+      term = Rows.product(shiftedRate, term, m, watch);
       boolean small = true;
       for (int i = 0; i < n; i++) {
         for (int j = 0; j < m; j++) {
@@ -211,6 +216,6 @@ final class PropagatorLadder {
       }
       lastWasSmall = small;
     }
-    return sum;
+    return shiftRate == 0 ? sum : Rows.scaled(sum, Math.exp(shiftRate * tau));
   }
 }

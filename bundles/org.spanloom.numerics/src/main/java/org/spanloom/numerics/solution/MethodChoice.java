@@ -15,6 +15,7 @@ import org.spanloom.numerics.Side;
 import org.spanloom.numerics.TimeRange;
 import org.spanloom.numerics.exponential.ExponentialSolution;
 import org.spanloom.numerics.internal.algebra.Rows;
+import org.spanloom.numerics.internal.work.Watch;
 
 /**
  * The method for a system and how many points it takes on a step.
@@ -24,7 +25,7 @@ import org.spanloom.numerics.internal.algebra.Rows;
  */
 public record MethodChoice(Method method, int stages) {
 
-  private static final int MOST_STATES_FOR_EIGENVALUES = 150;
+  private static final int MOST_STATES_FOR_EIGENVALUES = 100;
 
   /**
    * Chooses for a system.
@@ -33,9 +34,10 @@ public record MethodChoice(Method method, int stages) {
    * @param forced whether b counts
    * @param span the bounded range to be solved on, longer than 0
    * @param accuracy error asked for
+   * @param watch asked while working
    */
   public static MethodChoice of(
-      LinearSystem system, boolean forced, TimeRange span, Accuracy accuracy) {
+      LinearSystem system, boolean forced, TimeRange span, Accuracy accuracy, Watch watch) {
     int n = system.dimension();
     if (system.hasConstantMatrix() && (!forced || system.hasConstantForcing())) {
       double[] a = new double[n * n];
@@ -46,7 +48,8 @@ public record MethodChoice(Method method, int stages) {
     }
     int stages = stages(n, accuracy.relative());
     return new MethodChoice(
-        decaysFast(system, span) ? Method.RADAU_COLLOCATION : Method.GAUSS_COLLOCATION, stages);
+        decaysFast(system, span, watch) ? Method.RADAU_COLLOCATION : Method.GAUSS_COLLOCATION,
+        stages);
   }
 
   /**
@@ -67,12 +70,13 @@ public record MethodChoice(Method method, int stages) {
    * Tells whether some direction decays much faster than it turns and than the range lasts, at any
    * of five times.
    */
-  private static boolean decaysFast(LinearSystem system, TimeRange span) {
+  private static boolean decaysFast(LinearSystem system, TimeRange span, Watch watch) {
     int n = system.dimension();
     if (n > MOST_STATES_FOR_EIGENVALUES) {
       return true;
     }
     for (int k = 0; k < 5; k++) {
+      watch.ask();
       DMatrixRMaj a = new DMatrixRMaj(n, n);
       system.matrix(span.start() + span.length() * (2 * k + 1) / 10, Side.AFTER, a.data);
       if (!Rows.isFinite(a.data)) {

@@ -133,7 +133,7 @@ public final class SolutionSolver {
       return new ConstantSolution(n, m, t0, span, x0);
     }
     watch.ask();
-    MethodChoice choice = MethodChoice.of(system, forced, span, accuracy);
+    MethodChoice choice = MethodChoice.of(system, forced, span, accuracy, watch);
     return switch (choice.method()) {
       case MATRIX_EXPONENTIAL -> exponential(system, t0, x0, m, forced, span, accuracy, watch);
       case RADAU_COLLOCATION ->
