@@ -23,6 +23,7 @@ import org.eclipse.core.runtime.CoreException;
 import org.eclipse.core.runtime.IPath;
 import org.eclipse.jface.text.BadLocationException;
 import org.eclipse.jface.text.IRegion;
+import org.eclipse.jface.text.ITextOperationTarget;
 import org.eclipse.jface.text.source.Annotation;
 import org.eclipse.jface.text.source.projection.ProjectionAnnotation;
 import org.eclipse.jface.text.source.projection.ProjectionViewer;
@@ -33,6 +34,7 @@ import org.eclipse.ui.ide.IDE;
 import org.eclipse.ui.texteditor.MarkerAnnotation;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.extension.RegisterExtension;
+import org.spanloom.language.formatting.Formatter;
 import org.spanloom.ui.editor.ModelEditor;
 import org.spanloom.ui.editor.ProblemAnnotation;
 import org.spanloom.workspace.Ids;
@@ -121,6 +123,18 @@ class EditorTests {
     assertEquals("  output", line(editor, 4).substring(0, 8));
     execute("org.spanloom.ui.toggleComment");
     assertEquals(Models.DECAY, editor.document().get());
+  }
+
+  @Test
+  void formatsAsOneStepToUndo() throws Exception {
+    String rough = Models.DECAY.replace("  parameter", "parameter").replace(" = ", "  =  ");
+    String laid = Formatter.format(rough);
+    IFile file = Workbench.file(Workbench.project("station"), "float.span", rough);
+    ModelEditor editor = Workbench.open(file);
+    execute("org.spanloom.ui.format");
+    Workbench.waitUntil("the text is laid out", () -> editor.document().get().equals(laid));
+    editor.viewer().doOperation(ITextOperationTarget.UNDO);
+    assertEquals(rough, editor.document().get());
   }
 
   @Test

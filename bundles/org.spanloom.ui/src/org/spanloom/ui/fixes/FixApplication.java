@@ -14,13 +14,13 @@ import org.eclipse.text.edits.ReplaceEdit;
 import org.spanloom.language.problem.TextEdit;
 import org.spanloom.workspace.FixText;
 
-/** Applies a fix to a document, all of it or nothing. */
-final class FixApplication {
+/** Applies edits to a document, all of them or none. */
+public final class FixApplication {
 
   private FixApplication() {}
 
   /** Whether a fix could be applied. */
-  enum Result {
+  public enum Result {
     /** The text is changed. */
     DONE,
     /** The text is no longer the one that the fix was made for. */
@@ -28,7 +28,7 @@ final class FixApplication {
   }
 
   /** Applies edits whose places are known to be right. */
-  static Result apply(IDocument document, List<TextEdit> edits) {
+  public static Result apply(IDocument document, List<TextEdit> edits) {
     MultiTextEdit all = new MultiTextEdit();
     try {
       for (TextEdit edit : edits) {

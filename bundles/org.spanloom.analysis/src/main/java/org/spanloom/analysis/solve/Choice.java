@@ -193,9 +193,23 @@ public final class Choice {
     return t;
   }
 
+  /** The ends of a range. */
+  enum End {
+    START("start", "first"),
+    STOP("end", "last");
+
+    private final String name;
+    private final String time;
+
+    End(String name, String time) {
+      this.name = name;
+      this.time = time;
+    }
+  }
+
   /** Returns an end of a range: the one wanted, else the one of the interval. */
   static double end(
-      CompiledSystem system, OptionalDouble wanted, double own, boolean open, String word)
+      CompiledSystem system, OptionalDouble wanted, double own, boolean open, End word)
       throws RefusedException {
     if (wanted.isPresent()) {
       return inside(system, wanted.getAsDouble());
@@ -204,8 +218,8 @@ public final class Choice {
       throw new RefusedException(
           true,
           String.format(
-              "the interval of system %s, %s, does not include its %s; say where to %s.",
-              system.model().name(), describe(system.model()), word, word));
+              "the interval of system %s, %s, does not include its %s; give the %s time wanted.",
+              system.model().name(), describe(system.model()), word.name, word.time));
     }
     return own;
   }

@@ -119,8 +119,9 @@ public final class TrajectorySolve {
     double from =
         request.from().isEmpty() && startsAtInitial
             ? t0
-            : Choice.end(system, request.from(), interval.start(), false, "start");
-    double until = Choice.end(system, request.until(), interval.end(), interval.endOpen(), "stop");
+            : Choice.end(system, request.from(), interval.start(), false, Choice.End.START);
+    double until =
+        Choice.end(system, request.until(), interval.end(), interval.endOpen(), Choice.End.STOP);
     if (from > until) {
       throw new Choice.RefusedException(
           true,
