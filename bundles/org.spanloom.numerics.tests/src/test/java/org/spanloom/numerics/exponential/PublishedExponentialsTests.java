@@ -267,6 +267,22 @@ final class PublishedExponentialsTests {
     }
   }
 
+  /**
+   * A matrix near a multiple of the identity is climbed without that multiple, at every time in
+   * between too.
+   */
+  @Test
+  void nearlyScalarMatrix() {
+    FormulaSystem system = FormulaSystem.constant(new double[] {-800, 2, 0, -802}, 0, 0.5);
+    Solution phi = principal(system, 1e-9);
+    for (double t : new double[] {1e-5, 0.0123, 0.11, 0.3333, 0.5}) {
+      double[] x = at(phi, t);
+      assertEquals(Math.exp(-800 * t), x[0], 1e-12 * Math.exp(-800 * t));
+      double coupled = Math.exp(-800 * t) - Math.exp(-802 * t);
+      assertEquals(coupled, x[1], 1e-12 * Math.exp(-800 * t));
+    }
+  }
+
   /** The series of the backward error in rational arithmetic, rounded to 60 digits. */
   private static final class BackwardErrorSeries {
     private static final int TERMS = 150;
