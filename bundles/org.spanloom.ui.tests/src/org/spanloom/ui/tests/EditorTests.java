@@ -133,7 +133,7 @@ class EditorTests {
     ModelEditor editor = Workbench.open(file);
     execute("org.spanloom.ui.format");
     Workbench.waitUntil("the text is laid out", () -> editor.document().get().equals(laid));
-    editor.viewer().doOperation(ITextOperationTarget.UNDO);
+    ((ITextOperationTarget) editor.viewer()).doOperation(ITextOperationTarget.UNDO);
     assertEquals(rough, editor.document().get());
   }
 

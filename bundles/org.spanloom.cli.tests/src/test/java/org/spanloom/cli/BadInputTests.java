@@ -140,7 +140,7 @@ class BadInputTests {
   @Test
   void anInfiniteIntervalNeedsAnEnd() {
     Path file = Models.twoSystems(folder);
-    CommandRun.of("solve", file, "--system", "Fall").assertRefused("Fall", "stop");
+    CommandRun.of("solve", file, "--system", "Fall").assertRefused("Fall", "end", "last time");
   }
 
   @Test

@@ -192,7 +192,7 @@ final class DefinednessSearch {
         if (!(settled instanceof Clear)) {
           return settled;
         }
-        if (!mustHalve(range, endsOpen, guard)) {
+        if (!mustHalve(range, endsOpen)) {
           continue;
         }
       }
@@ -362,7 +362,7 @@ final class DefinednessSearch {
   }
 
   /** Tells whether a short range whose ends show no fault is looked at more closely. */
-  private boolean mustHalve(Range range, boolean endOpen, Guard guard) {
+  private boolean mustHalve(Range range, boolean endOpen) {
     double size = Math.max(Math.abs(range.near()), Math.abs(range.far()));
     return !endOpen && range.length() > Math.max(4 * Math.ulp(size), FINEST * unitOfLength);
   }
