@@ -15,6 +15,7 @@ import org.spanloom.numerics.internal.work.Watch;
  * predicts: exact for constant A, else by adaptive Gauss-Kronrod quadrature with 7 and 15 points
  * between given nodes (Piessens et al., QUADPACK, 1983; from memory).
  */
+@SuppressWarnings("FloatingPointLiteralPrecision") // tabulated digits stay as tabulated
 final class TraceIntegral {
 
   private static final double[] POINTS = {

@@ -27,7 +27,7 @@ final class CollocationSolution implements Solution {
    * Share of the largest error of a column that every entry of it is given, so that no entry is
    * right by chance.
    */
-  private static final double SHARE = 0.2;
+  private static final double SHARE = 0.4;
 
   private static final long MOST_NUMBERS_REMEMBERED = 4_000_000;
 

@@ -8,9 +8,11 @@ package org.spanloom.numerics.collocation;
 import java.util.Optional;
 import org.spanloom.numerics.Accuracy;
 import org.spanloom.numerics.LinearSystem;
+import org.spanloom.numerics.Outcome.Reason;
 import org.spanloom.numerics.TimeRange;
 import org.spanloom.numerics.collocation.CollocationIntegrator.TooLoose;
 import org.spanloom.numerics.internal.algebra.Rows;
+import org.spanloom.numerics.internal.work.Hopeless;
 import org.spanloom.numerics.internal.work.Watch;
 import org.spanloom.numerics.solution.Solution;
 
@@ -23,7 +25,7 @@ public final class CollocationSolver {
   private static final int MOST_RUNS = 5;
 
   /** Below this a smaller error per step is not seen any more. */
-  private static final double SMALLEST_LOCAL = 0x1p-48;
+  private static final double SMALLEST_LOCAL = 0x1p-45;
 
   private final LinearSystem system;
   private final StageCoefficients.Shape shape;
@@ -104,22 +106,35 @@ public final class CollocationSolver {
     double first = tableau.endsAtPoint() ? 0.25 : 0.1;
     double local = Math.max(first * weights.relative(), SMALLEST_LOCAL);
     TooLoose before = new TooLoose(0, Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY);
-    boolean hopeless = false;
+    double affordable = local;
+    boolean last = false;
     for (int run = 1; ; run++) {
-      boolean last = run == MOST_RUNS || hopeless || local <= SMALLEST_LOCAL;
+      last |= run >= MOST_RUNS || local <= SMALLEST_LOCAL;
       CollocationNodes nodes = new CollocationNodes(m);
       CollocationIntegrator integrator =
           new CollocationIntegrator(
               system, shape, tableau, m, forced, weights, local, span, balance, watch);
-      Optional<TooLoose> gaveUp = integrator.run(t0, x0, stops, nodes, !last, before.fraction());
+      Optional<TooLoose> gaveUp;
+      try {
+        gaveUp = integrator.run(t0, x0, stops, nodes, !last, before.fraction());
+      } catch (Hopeless tooMuch) {
+        if (local == affordable || tooMuch.reason() != Reason.TOO_MUCH_WORK) {
+          throw tooMuch;
+        }
+        // Less accuracy, with its honest estimate, is better than nothing.
+        local = affordable;
+        last = true;
+        continue;
+      }
       if (gaveUp.isEmpty()) {
         return nodes;
       }
+      affordable = local;
       TooLoose where = gaveUp.get();
       if (run > 1 && where.ratioBefore() > 0.5 * before.ratio()) {
         // Ten times less per step did not halve the error: what is left is rounding, which smaller
         // steps do not cure.
-        hopeless = true;
+        last = true;
       } else {
         double factor = Math.clamp(0.5 * where.fraction() / where.ratio(), 1e-5, 0.1);
         local = Math.max(local * factor, SMALLEST_LOCAL);

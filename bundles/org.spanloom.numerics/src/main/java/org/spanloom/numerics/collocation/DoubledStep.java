@@ -27,6 +27,9 @@ final class DoubledStep {
 
   private static final double MOST_SHARE = 3;
 
+  /** Last coefficients below this are rounding, and do not shrink when the step is halved. */
+  private static final double ROUNDING_ONLY = 1e-12;
+
   private final CollocationTableau tableau;
   private final StageSystem first;
   private final StageSystem second;
@@ -87,7 +90,7 @@ final class DoubledStep {
     for (int j = 0; j < m; j++) {
       double coarse = roughness(wholeStages, j);
       double fine = Math.max(roughness(firstStages, j), roughness(secondStages, j));
-      double share = share(fine / coarse, power);
+      double share = share(fine < ROUNDING_ONLY ? 0 : fine / coarse, power);
       for (int i = 0; i < x.length; i++) {
         localError[i][j] = share * (far[i][j] - end[i][j]);
       }
@@ -152,7 +155,7 @@ final class DoubledStep {
     double largest = 0;
     for (int i = 0; i < end.length; i++) {
       for (int j = 0; j < m; j++) {
-        double allowed = localRelative * weight[i][j] + 2 * ROUNDOFF * Math.abs(end[i][j]);
+        double allowed = (localRelative + 8 * ROUNDOFF) * weight[i][j];
         largest = Math.max(largest, (Math.abs(localError[i][j]) + hidden[i][j]) / allowed);
       }
     }

@@ -7,6 +7,7 @@ package org.spanloom.numerics.exponential;
 
 import java.util.Arrays;
 import java.util.Optional;
+import java.util.Set;
 import java.util.TreeSet;
 import org.spanloom.numerics.Outcome.Reason;
 import org.spanloom.numerics.Side;
@@ -200,7 +201,7 @@ public final class ExponentialSolution implements Solution {
    * Nodes grow from the start like the rungs, since transients die out from there; an even grid
    * covers the rest.
    */
-  private void addNodes(TreeSet<Double> times, PropagatorLadder ladder, double length, int sign) {
+  private void addNodes(Set<Double> times, PropagatorLadder ladder, double length, int sign) {
     for (int k = 0; k < ladder.rungs(); k++) {
       addNode(times, startTime + sign * Math.scalb(ladder.lowest(), k));
     }
@@ -209,7 +210,7 @@ public final class ExponentialSolution implements Solution {
     }
   }
 
-  private void addNode(TreeSet<Double> times, double t) {
+  private void addNode(Set<Double> times, double t) {
     if (range.contains(t)) {
       times.add(t);
     }

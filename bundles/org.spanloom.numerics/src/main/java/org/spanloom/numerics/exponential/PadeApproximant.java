@@ -72,11 +72,8 @@ public final class PadeApproximant {
       return new Choice(3, 0, 0);
     }
     // Powers of the normalised matrix cannot overflow; sizes are scaled back by 2^shift.
-    int shift = Math.getExponent(norm);
-    double[][] b = norm > 1e10 || norm < 1e-10 ? Rows.scaled(a, powerOfTwo(-shift)) : a;
-    if (b == a) {
-      shift = 0;
-    }
+    int shift = norm > 1e10 || norm < 1e-10 ? Math.getExponent(norm) : 0;
+    double[][] b = Rows.scaled(a, powerOfTwo(-shift));
     int n = a.length;
     double back = powerOfTwo(shift);
     double[][] b2 = Rows.product(b, b, n, watch);

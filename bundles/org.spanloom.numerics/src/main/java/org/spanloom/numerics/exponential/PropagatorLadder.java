@@ -155,7 +155,7 @@ final class PropagatorLadder {
    */
   double[][] advance(double[][] x, int m, double tau, Watch watch) {
     double rest = tau;
-    double[][] result = x;
+    double[][] result = Rows.copy(x);
     int top = rungs.size() - 1;
     double[] used = new double[rungs.size()];
     for (int k = top; k >= 0; k--) {
@@ -184,7 +184,7 @@ final class PropagatorLadder {
         result = Rows.product(rungs.get(k), result, m, watch);
       }
     }
-    return result == x ? Rows.copy(x) : result;
+    return result;
   }
 
   private static double[][] notFinite(int n, int m) {

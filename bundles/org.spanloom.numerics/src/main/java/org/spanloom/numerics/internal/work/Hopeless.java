@@ -28,6 +28,11 @@ public final class Hopeless extends RuntimeException {
     this.time = time;
   }
 
+  /** Returns why. */
+  public Reason reason() {
+    return reason;
+  }
+
   /** Returns what the caller is told. */
   public <T> Outcome<T> outcome() {
     return new Outcome.Unsolved<>(reason, time, getMessage());
