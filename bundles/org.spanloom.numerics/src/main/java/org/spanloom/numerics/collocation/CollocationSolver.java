@@ -6,7 +6,6 @@
 package org.spanloom.numerics.collocation;
 
 import java.util.Optional;
-import org.spanloom.numerics.Accuracy;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome.Reason;
 import org.spanloom.numerics.TimeRange;
@@ -14,6 +13,7 @@ import org.spanloom.numerics.collocation.CollocationIntegrator.TooLoose;
 import org.spanloom.numerics.internal.algebra.Rows;
 import org.spanloom.numerics.internal.work.Hopeless;
 import org.spanloom.numerics.internal.work.Watch;
+import org.spanloom.numerics.solution.InitialValues;
 import org.spanloom.numerics.solution.Solution;
 
 /**
@@ -37,20 +37,13 @@ public final class CollocationSolver {
   private final double[] balance;
   private final Watch watch;
 
-  private CollocationSolver(
-      LinearSystem system,
-      CollocationTableau tableau,
-      int m,
-      boolean forced,
-      TimeRange span,
-      ErrorWeights weights,
-      Watch watch) {
-    this.system = system;
+  private CollocationSolver(InitialValues values, CollocationTableau tableau, Watch watch) {
+    this.system = values.system();
     this.tableau = tableau;
-    this.m = m;
-    this.forced = forced;
-    this.span = span;
-    this.weights = weights;
+    this.m = values.columns();
+    this.forced = values.forced();
+    this.span = values.span();
+    this.weights = new ErrorWeights(values.accuracy(), !forced);
     this.watch = watch;
     shape = StageCoefficients.Shape.of(system);
     CollocationTableau places = CollocationTableau.of(CollocationTableau.Family.GAUSS, 5);
@@ -64,29 +57,13 @@ public final class CollocationSolver {
   /**
    * Solves.
    *
-   * @param system the system
+   * @param values the system and where it starts; a bounded range longer than 0
    * @param tableau the method
-   * @param t0 time of the start values
-   * @param x0 start values, n by m, row by row
-   * @param m number of columns
-   * @param forced whether b counts
-   * @param span bounded range with t0 in it, longer than 0
-   * @param accuracy error asked for
    * @param watch asked while working
    */
-  public static Solution solve(
-      LinearSystem system,
-      CollocationTableau tableau,
-      double t0,
-      double[] x0,
-      int m,
-      boolean forced,
-      TimeRange span,
-      Accuracy accuracy,
-      Watch watch) {
-    ErrorWeights weights = new ErrorWeights(accuracy, !forced);
-    return new CollocationSolver(system, tableau, m, forced, span, weights, watch)
-        .solve(t0, Rows.of(x0, system.dimension(), m));
+  public static Solution solve(InitialValues values, CollocationTableau tableau, Watch watch) {
+    double[][] x0 = Rows.of(values.x0(), values.system().dimension(), values.columns());
+    return new CollocationSolver(values, tableau, watch).solve(values.t0(), x0);
   }
 
   private Solution solve(double t0, double[][] x0) {

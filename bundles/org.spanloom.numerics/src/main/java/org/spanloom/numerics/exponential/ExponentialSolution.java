@@ -16,6 +16,7 @@ import org.spanloom.numerics.TimeRange;
 import org.spanloom.numerics.internal.algebra.Rows;
 import org.spanloom.numerics.internal.work.Hopeless;
 import org.spanloom.numerics.internal.work.Watch;
+import org.spanloom.numerics.solution.InitialValues;
 import org.spanloom.numerics.solution.Solution;
 import org.spanloom.numerics.structure.TriangularOrder;
 
@@ -66,22 +67,14 @@ public final class ExponentialSolution implements Solution {
   /** What both ladders give at one time. */
   private record Pair(double[][] first, double[][] second) {}
 
-  private ExponentialSolution(
-      double[] a,
-      Optional<double[]> b,
-      int n,
-      double t0,
-      double[] x0,
-      int m,
-      TimeRange range,
-      double[] scale,
-      Watch watch) {
-    this.n = n;
-    this.m = m;
+  private ExponentialSolution(double[] a, Optional<double[]> b, InitialValues values, Watch watch) {
+    this.n = values.system().dimension();
+    this.m = values.columns();
     this.forced = b.isPresent();
-    this.startTime = t0;
-    this.range = range;
-    this.scale = scale.clone();
+    this.startTime = values.t0();
+    this.range = values.span();
+    this.scale = values.accuracy().scale();
+    double[] x0 = values.x0();
     double constant = b.map(f -> constantState(a, f, n)).orElse(1.0);
     int size = forced ? n + 1 : n;
     double[][] whole = new double[size][size];
@@ -104,8 +97,8 @@ public final class ExponentialSolution implements Solution {
       }
     }
     boolean[] alone = structure.alone();
-    later = ladders(ordered, alone, range.end() - t0, watch);
-    earlier = ladders(Rows.scaled(ordered, -1), alone, t0 - range.start(), watch);
+    later = ladders(ordered, alone, range.end() - startTime, watch);
+    earlier = ladders(Rows.scaled(ordered, -1), alone, startTime - range.start(), watch);
     nodes = chooseNodes();
   }
 
@@ -114,26 +107,13 @@ public final class ExponentialSolution implements Solution {
    *
    * @param a A, row by row, finite
    * @param b forcing, finite, or empty for none; one column only when there is one
-   * @param n number of states, at least 1
-   * @param t0 time of the start values
-   * @param x0 start values, n by m, row by row
-   * @param m number of columns
-   * @param range bounded range with t0 in it, longer than 0
-   * @param scale size of each state, positive
+   * @param values where the system starts; at least one state, a bounded range longer than 0
    * @param watch asked while working
    * @throws Hopeless when the solution overflows in the range
    */
   public static ExponentialSolution of(
-      double[] a,
-      Optional<double[]> b,
-      int n,
-      double t0,
-      double[] x0,
-      int m,
-      TimeRange range,
-      double[] scale,
-      Watch watch) {
-    ExponentialSolution solution = new ExponentialSolution(a, b, n, t0, x0, m, range, scale, watch);
+      double[] a, Optional<double[]> b, InitialValues values, Watch watch) {
+    ExponentialSolution solution = new ExponentialSolution(a, b, values, watch);
     solution.requireFinite(watch);
     return solution;
   }

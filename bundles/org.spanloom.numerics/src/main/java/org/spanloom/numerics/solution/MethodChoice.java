@@ -9,7 +9,6 @@ import org.ejml.data.Complex_F64;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.factory.DecompositionFactory_DDRM;
 import org.ejml.interfaces.decomposition.EigenDecomposition_F64;
-import org.spanloom.numerics.Accuracy;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Side;
 import org.spanloom.numerics.TimeRange;
@@ -30,23 +29,21 @@ public record MethodChoice(Method method, int stages) {
   /**
    * Chooses for a system.
    *
-   * @param system the system, n at least 1
-   * @param forced whether b counts
-   * @param span the bounded range to be solved on, longer than 0
-   * @param accuracy error asked for
+   * @param values the system, n at least 1, and a bounded range longer than 0
    * @param watch asked while working
    */
-  public static MethodChoice of(
-      LinearSystem system, boolean forced, TimeRange span, Accuracy accuracy, Watch watch) {
+  public static MethodChoice of(InitialValues values, Watch watch) {
+    LinearSystem system = values.system();
+    TimeRange span = values.span();
     int n = system.dimension();
-    if (system.hasConstantMatrix() && (!forced || system.hasConstantForcing())) {
+    if (system.hasConstantMatrix() && (!values.forced() || system.hasConstantForcing())) {
       double[] a = new double[n * n];
       system.matrix(span.start(), Side.AFTER, a);
       if (Rows.isFinite(a) && ExponentialSolution.fits(a, n, span.length())) {
         return new MethodChoice(Method.MATRIX_EXPONENTIAL, 0);
       }
     }
-    int stages = stages(n, accuracy.relative());
+    int stages = stages(n, values.accuracy().relative());
     return new MethodChoice(
         decaysFast(system, span, watch) ? Method.RADAU_COLLOCATION : Method.GAUSS_COLLOCATION,
         stages);

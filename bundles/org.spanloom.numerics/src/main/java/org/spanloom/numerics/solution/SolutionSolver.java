@@ -48,7 +48,7 @@ public final class SolutionSolver {
       Progress progress) {
     int n = system.dimension();
     int m = n == 0 ? 0 : x0.length / n;
-    return solve(system, t0, x0, m, false, span, accuracy, progress);
+    return solve(new InitialValues(system, false, t0, x0, m, span, accuracy), progress);
   }
 
   /**
@@ -70,21 +70,13 @@ public final class SolutionSolver {
       TimeRange span,
       Accuracy accuracy,
       Progress progress) {
-    return solve(system, t0, x0, 1, true, span, accuracy, progress);
+    return solve(new InitialValues(system, true, t0, x0, 1, span, accuracy), progress);
   }
 
-  private static Outcome<Solution> solve(
-      LinearSystem system,
-      double t0,
-      double[] x0,
-      int m,
-      boolean forced,
-      TimeRange span,
-      Accuracy accuracy,
-      Progress progress) {
+  private static Outcome<Solution> solve(InitialValues values, Progress progress) {
     try {
-      requireSolvable(system, t0, x0, span);
-      Solution solution = bySystem(system, t0, x0, m, forced, span, accuracy, new Watch(progress));
+      requireSolvable(values);
+      Solution solution = bySystem(values, new Watch(progress));
       progress.worked(1);
       return new Outcome.Solved<>(solution);
     } catch (Cancelled cancelled) {
@@ -94,8 +86,10 @@ public final class SolutionSolver {
     }
   }
 
-  private static void requireSolvable(LinearSystem system, double t0, double[] x0, TimeRange span) {
-    TimeRange whole = system.range();
+  private static void requireSolvable(InitialValues values) {
+    TimeRange whole = values.system().range();
+    TimeRange span = values.span();
+    double t0 = values.t0();
     if (!span.isBounded() || !(span.length() < Double.POSITIVE_INFINITY)) {
       throw new Hopeless(
           Reason.RANGE,
@@ -114,74 +108,45 @@ public final class SolutionSolver {
           t0,
           "the values are given at " + t0 + ", outside the range to be solved on");
     }
-    if (!Rows.isFinite(x0)) {
+    if (!Rows.isFinite(values.x0())) {
       throw new Hopeless(Reason.COEFFICIENT_NOT_FINITE, t0, "a start value is not a finite number");
     }
   }
 
-  private static Solution bySystem(
-      LinearSystem system,
-      double t0,
-      double[] x0,
-      int m,
-      boolean forced,
-      TimeRange span,
-      Accuracy accuracy,
-      Watch watch) {
-    int n = system.dimension();
-    if (n == 0 || m == 0 || span.length() == 0) {
-      return new ConstantSolution(n, m, t0, span, x0);
+  private static Solution bySystem(InitialValues values, Watch watch) {
+    int n = values.system().dimension();
+    int m = values.columns();
+    if (n == 0 || m == 0 || values.span().length() == 0) {
+      return new ConstantSolution(n, m, values.t0(), values.span(), values.x0());
     }
     watch.ask();
-    MethodChoice choice = MethodChoice.of(system, forced, span, accuracy, watch);
+    MethodChoice choice = MethodChoice.of(values, watch);
     return switch (choice.method()) {
-      case MATRIX_EXPONENTIAL -> exponential(system, t0, x0, m, forced, span, accuracy, watch);
+      case MATRIX_EXPONENTIAL -> exponential(values, watch);
       case RADAU_COLLOCATION ->
           CollocationSolver.solve(
-              system,
-              CollocationTableau.of(Family.RADAU_IIA, choice.stages()),
-              t0,
-              x0,
-              m,
-              forced,
-              span,
-              accuracy,
-              watch);
+              values, CollocationTableau.of(Family.RADAU_IIA, choice.stages()), watch);
       case GAUSS_COLLOCATION ->
           CollocationSolver.solve(
-              system,
-              CollocationTableau.of(Family.GAUSS, choice.stages()),
-              t0,
-              x0,
-              m,
-              forced,
-              span,
-              accuracy,
-              watch);
+              values, CollocationTableau.of(Family.GAUSS, choice.stages()), watch);
     };
   }
 
-  private static Solution exponential(
-      LinearSystem system,
-      double t0,
-      double[] x0,
-      int m,
-      boolean forced,
-      TimeRange span,
-      Accuracy accuracy,
-      Watch watch) {
+  private static Solution exponential(InitialValues values, Watch watch) {
+    LinearSystem system = values.system();
+    double t0 = values.t0();
     int n = system.dimension();
     double[] a = new double[n * n];
     system.matrix(t0, Side.AFTER, a);
     requireFinite(a, t0, "A");
-    Optional<double[]> b = Optional.empty();
-    if (forced) {
-      double[] values = new double[n];
-      system.forcing(t0, Side.AFTER, values);
-      requireFinite(values, t0, "b");
-      b = Rows.isZero(values) ? Optional.empty() : Optional.of(values);
+    Optional<double[]> forcing = Optional.empty();
+    if (values.forced()) {
+      double[] b = new double[n];
+      system.forcing(t0, Side.AFTER, b);
+      requireFinite(b, t0, "b");
+      forcing = Rows.isZero(b) ? Optional.empty() : Optional.of(b);
     }
-    return ExponentialSolution.of(a, b, n, t0, x0, m, span, accuracy.scale(), watch);
+    return ExponentialSolution.of(a, forcing, values, watch);
   }
 
   private static void requireFinite(double[] values, double t, String name) {
