@@ -177,6 +177,32 @@ class ModelCheckTests {
     assertEquals(Math.exp(-0.75), checked.requirement(0).value(), 1e-8);
   }
 
+  /**
+   * The integral of |sin(pi t / 1 h)| over 10 h is 20/pi h; of sign(t - 3.3 h) over 10 h it is 3.4
+   * h.
+   */
+  @Test
+  void cornersAndJumpsCostNoDigits() {
+    Checked checked =
+        Checked.of(
+            """
+            system Pump over t [h] from 0 to 10 {
+              state lifted [m3] = 0
+              state level [m3] = 0
+              lifted' = abs(sin(pi*t/(1 [h])))*1 [m3/h]
+              level' = sign(t - 3.3 [h])*1 [m3/h]
+              accuracy 1e-10
+              require lifted(10) > 1 [m3]
+              require level(10) > 1 [m3]
+            }
+            """);
+    for (int k = 0; k < 2; k++) {
+      RequirementResult result = checked.requirement(k);
+      double error = Math.abs(result.value() - (k == 0 ? 20 / Math.PI : 3.4));
+      assertTrue(error <= result.error() && result.error() < 1e-9, error + ", " + result.error());
+    }
+  }
+
   @Test
   void dependentColumnsAreNamedWithTheirCombination() {
     Checked checked =

@@ -123,6 +123,26 @@ class SystemCompilerTests {
   }
 
   @Test
+  void cornersAndJumpsOfCoefficientsAreBreakpointsWithTwoSides() {
+    CompiledSystem system =
+        compiled(
+            """
+            system Valve over t [h] from 0 to 10 {
+              state v [m3] = 1
+              v' = -abs(t/(3 [h]) - 1)*0.1 [/h]*v + sign(t - 7 [h])*1 [m3/h] + max(t - 5 [h], 0 [h])*0 [m3/h2]
+            }
+            """,
+            Map.of());
+    double[] breakpoints = system.linear().breakpoints();
+    assertArrayEquals(new double[] {3, 7}, breakpoints, 1e-14);
+    double[] b = new double[1];
+    system.linear().forcing(breakpoints[1], Side.BEFORE, b);
+    assertEquals(-1, b[0]);
+    system.linear().forcing(breakpoints[1], Side.AFTER, b);
+    assertEquals(1, b[0]);
+  }
+
+  @Test
   void aVaryingMassDividesItsRow() {
     CompiledSystem system =
         compiled(

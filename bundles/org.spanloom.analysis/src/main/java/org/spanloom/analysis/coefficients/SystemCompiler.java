@@ -86,7 +86,12 @@ public final class SystemCompiler {
     }
     LinearSystem right =
         new CoefficientSystem(
-            n, range(), new CompiledTerms(graph, a), new CompiledTerms(graph, b), pattern(a));
+            n,
+            range(),
+            new CompiledTerms(graph, a),
+            new CompiledTerms(graph, b),
+            pattern(a),
+            Kinks.of(graph, range()));
     return coupled.length == 0 ? right : coupled(right, coupled);
   }
 
