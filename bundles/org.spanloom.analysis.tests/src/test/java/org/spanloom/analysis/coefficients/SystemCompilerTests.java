@@ -143,6 +143,28 @@ class SystemCompilerTests {
   }
 
   @Test
+  void jumpsOfCoupledMassesAreBreakpointsToo() {
+    CompiledSystem system =
+        compiled(
+            """
+            system Barge over t [s] from 0 to 10 {
+              let load(t) = (3 + sign(t - 4 [s]))*1 [kg]
+              state u [m/s] = 1
+              state w [m/s] = 0
+              load(t)*u' + 1 [kg]*w' = -1 [N.s/m]*u
+              1 [kg]*w' = 0 [N]
+            }
+            """,
+            Map.of());
+    assertArrayEquals(new double[] {4}, system.linear().breakpoints(), 1e-14);
+    double[] a = new double[4];
+    system.linear().matrix(system.linear().breakpoints()[0], Side.BEFORE, a);
+    assertEquals(-1.0 / 2, a[0], 1e-15);
+    system.linear().matrix(system.linear().breakpoints()[0], Side.AFTER, a);
+    assertEquals(-1.0 / 4, a[0], 1e-15);
+  }
+
+  @Test
   void aVaryingMassDividesItsRow() {
     CompiledSystem system =
         compiled(

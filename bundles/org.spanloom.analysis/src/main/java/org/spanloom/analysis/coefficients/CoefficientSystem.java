@@ -5,7 +5,6 @@
  */
 package org.spanloom.analysis.coefficients;
 
-import java.util.Arrays;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Side;
 import org.spanloom.numerics.SparsityPattern;
@@ -19,7 +18,7 @@ import org.spanloom.numerics.TimeRange;
  * @param matrix A row by row, n*n values
  * @param forcing b, n values
  * @param pattern entries of A that are not zero by structure
- * @param breakpoints times inside the range where a coefficient has a corner or a jump, increasing
+ * @param corners times inside the range where a coefficient has a corner or a jump, increasing
  */
 record CoefficientSystem(
     int dimension,
@@ -27,17 +26,17 @@ record CoefficientSystem(
     CompiledTerms matrix,
     CompiledTerms forcing,
     SparsityPattern pattern,
-    double[] breakpoints)
+    Breakpoints corners)
     implements LinearSystem {
 
   @Override
   public void matrix(double t, Side side, double[] a) {
-    matrix.evaluate(beside(t, side), a);
+    matrix.evaluate(corners.beside(t, side), a);
   }
 
   @Override
   public void forcing(double t, Side side, double[] b) {
-    forcing.evaluate(beside(t, side), b);
+    forcing.evaluate(corners.beside(t, side), b);
   }
 
   @Override
@@ -52,15 +51,6 @@ record CoefficientSystem(
 
   @Override
   public double[] breakpoints() {
-    return breakpoints.clone();
-  }
-
-  /** A breakpoint is known to a rounding error, so its sides are taken a few of them away. */
-  private double beside(double t, Side side) {
-    if (Arrays.binarySearch(breakpoints, t) < 0) {
-      return t;
-    }
-    double step = 4 * Math.ulp(t);
-    return side == Side.BEFORE ? t - step : t + step;
+    return corners.times();
   }
 }

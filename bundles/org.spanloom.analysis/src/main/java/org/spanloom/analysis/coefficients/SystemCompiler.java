@@ -84,6 +84,8 @@ public final class SystemCompiler {
       int term = divided(graph.add(entry.term()), divisor[i]);
       b[i] = sum(b[i], graph.scaled(term, second / unit(i).factor()));
     }
+    int[] mass = mass(coupled);
+    Breakpoints corners = new Breakpoints(Kinks.of(graph, range()));
     LinearSystem right =
         new CoefficientSystem(
             n,
@@ -91,8 +93,8 @@ public final class SystemCompiler {
             new CompiledTerms(graph, a),
             new CompiledTerms(graph, b),
             pattern(a),
-            Kinks.of(graph, range()));
-    return coupled.length == 0 ? right : coupled(right, coupled);
+            corners);
+    return coupled.length == 0 ? right : coupled(right, coupled, mass, corners);
   }
 
   private UnitOfMeasure unit(int component) {
@@ -155,7 +157,11 @@ public final class SystemCompiler {
     return new SparsityPattern(start, columns.stream().mapToInt(Integer::intValue).toArray());
   }
 
-  private LinearSystem coupled(LinearSystem right, int[] rows) {
+  /**
+   * Puts the masses of the coupled rows into the graph: their nodes row by row, -1 where there is
+   * none.
+   */
+  private int[] mass(int[] rows) {
     int k = rows.length;
     int[] nodes = new int[k * k];
     Arrays.fill(nodes, -1);
@@ -167,7 +173,12 @@ public final class SystemCompiler {
         nodes[i * k + j] = graph.scaled(graph.add(entry.term()), scale);
       }
     }
+    return nodes;
+  }
+
+  private LinearSystem coupled(LinearSystem right, int[] rows, int[] nodes, Breakpoints corners) {
     CompiledTerms mass = new CompiledTerms(graph, nodes);
-    return new CoupledSystem(right, rows, (t, side, m) -> mass.evaluate(t, m), mass.isConstant());
+    return new CoupledSystem(
+        right, rows, (t, side, m) -> mass.evaluate(corners.beside(t, side), m), mass.isConstant());
   }
 }
