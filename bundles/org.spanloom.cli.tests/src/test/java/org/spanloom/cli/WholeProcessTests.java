@@ -96,8 +96,9 @@ class WholeProcessTests {
             "--output",
             target);
     long deadline = System.nanoTime() + TimeUnit.SECONDS.toNanos(30);
-    while (process.isAlive() && System.nanoTime() < deadline && parts() == 0) {
-      Thread.sleep(5);
+    boolean ended = false;
+    while (!ended && System.nanoTime() < deadline && parts() == 0) {
+      ended = process.waitFor(5, TimeUnit.MILLISECONDS);
     }
     assertTrue(parts() > 0, "the run should have begun to write");
     // On this kind of system destroy sends the signal that asks a process to end.

@@ -74,7 +74,8 @@ final class BasisCommand {
       table =
           switch (BasisSolve.solve(request, progress)) {
             case BasisAnswer.Solved solved -> solved.table();
-            case BasisAnswer.Refused refused -> throw refused(refused);
+            case BasisAnswer.Refused refused ->
+                throw CommandFailure.of(refused.usage(), refused.message());
             case BasisAnswer.Cancelled cancelled -> throw CommandFailure.refused("cancelled");
           };
     }
@@ -82,12 +83,6 @@ final class BasisCommand {
     streams.err().print(conditioning(table));
     streams.err().flush();
     return ExitCode.CLEAN;
-  }
-
-  private static CommandFailure refused(BasisAnswer.Refused refused) {
-    return refused.usage()
-        ? CommandFailure.refused(refused.message())
-        : CommandFailure.found(refused.message());
   }
 
   private void write(BasisTable table, Path model) throws CommandFailure {

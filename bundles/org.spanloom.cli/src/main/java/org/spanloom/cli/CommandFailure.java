@@ -27,6 +27,16 @@ final class CommandFailure extends Exception {
     return new CommandFailure(ExitCode.FOUND, message);
   }
 
+  /**
+   * What the analysis refuses.
+   *
+   * @param usage whether the arguments are at fault rather than the model
+   * @param message what it says
+   */
+  static CommandFailure of(boolean usage, String message) {
+    return usage ? refused(message) : found(message);
+  }
+
   /** Returns the exit code. */
   int exitCode() {
     return exitCode;

@@ -95,7 +95,8 @@ final class SolveCommand {
       table =
           switch (TrajectorySolve.solve(request, progress)) {
             case SolveAnswer.Solved solved -> solved.table();
-            case SolveAnswer.Refused refused -> throw refused(refused);
+            case SolveAnswer.Refused refused ->
+                throw CommandFailure.of(refused.usage(), refused.message());
             case SolveAnswer.Cancelled cancelled -> throw CommandFailure.refused("cancelled");
           };
     }
@@ -103,12 +104,6 @@ final class SolveCommand {
     streams.err().print(errors(table));
     streams.err().flush();
     return ExitCode.CLEAN;
-  }
-
-  private static CommandFailure refused(SolveAnswer.Refused refused) {
-    return refused.usage()
-        ? CommandFailure.refused(refused.message())
-        : CommandFailure.found(refused.message());
   }
 
   private Sampling sampling() throws CommandFailure {
