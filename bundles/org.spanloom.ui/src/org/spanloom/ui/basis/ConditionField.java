@@ -7,6 +7,7 @@ package org.spanloom.ui.basis;
 
 import java.util.Locale;
 import org.eclipse.ui.views.markers.MarkerItem;
+import org.spanloom.analysis.Figures;
 
 /** A condition number. */
 public final class ConditionField extends NumberField {
@@ -16,8 +17,8 @@ public final class ConditionField extends NumberField {
   @Override
   String show(double value, MarkerItem item) {
     if (Double.isInfinite(value)) {
-      // What double precision cannot tell from singular.
-      return "> 1e16";
+      // The same words as in the reports: the error of the columns hides how large it is.
+      return Figures.condition(value);
     }
     return String.format(Locale.ROOT, value < WRITTEN_OUT ? "%.4g" : "%.2e", value);
   }
