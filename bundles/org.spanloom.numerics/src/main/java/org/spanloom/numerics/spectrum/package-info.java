@@ -3,6 +3,11 @@
  *
  * SPDX-License-Identifier: EPL-2.0
  */
-
-/** Eigenvalues with the errors they may have: {@link org.spanloom.numerics.spectrum.Spectrum}. */
+/**
+ * What the coefficients tell without solving: eigenvalues with the errors they may have ({@link
+ * org.spanloom.numerics.spectrum.Spectrum}), modes with their conditions and the states in them
+ * ({@link org.spanloom.numerics.spectrum.Modes}), equilibria ({@link
+ * org.spanloom.numerics.spectrum.Equilibrium}), logarithmic norms, and for periodic coefficients
+ * the multipliers ({@link org.spanloom.numerics.spectrum.FloquetMultipliers}).
+ */
 package org.spanloom.numerics.spectrum;
