@@ -81,8 +81,8 @@ public enum Icon {
       case LET -> FUNCTION;
       case STATE -> STATE;
       case OUTPUT -> OUTPUT;
-      case EQUATION -> EQUATION;
-      case INITIAL_VALUES -> INITIAL;
+      case EQUATION, JUMP -> EQUATION;
+      case INITIAL_VALUES, BOUNDARY -> INITIAL;
       case BASIS -> BASIS;
       case REQUIREMENT -> REQUIREMENT;
       case ACCURACY, UNREAD -> OTHER;

@@ -168,7 +168,7 @@ class HelpTruthTests {
     expected.addAll(Words.CLAUSE);
     expected.removeAll(List.of("if", "then", "else"));
     expected.addAll(Words.REQUIREMENT);
-    expected.addAll(List.of("values", "scale", "outside"));
+    expected.addAll(List.of("values", "scale", "outside", "every"));
     assertEquals(expected, words);
   }
 

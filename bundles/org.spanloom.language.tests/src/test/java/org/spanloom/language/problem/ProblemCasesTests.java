@@ -35,7 +35,7 @@ class ProblemCasesTests {
       "system S over t [s] from 0 to 10 { state x [m] = 1; x' = -x/2 [s]\n";
 
   private static final List<String> FILES =
-      List.of("text", "system", "names", "units", "linear", "transfers", "inputs");
+      List.of("text", "system", "names", "units", "linear", "transfers", "inputs", "jumps");
 
   private record Case(String file, String title, String input, String expected) {
 

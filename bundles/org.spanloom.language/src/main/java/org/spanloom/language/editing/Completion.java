@@ -17,14 +17,17 @@ import org.spanloom.language.model.NamedConstant;
 import org.spanloom.language.syntax.Lexer;
 import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
+import org.spanloom.language.syntax.Statement.BoundaryStatement;
 import org.spanloom.language.syntax.Statement.Declaration;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
+import org.spanloom.language.syntax.Statement.JumpStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.syntax.Token;
 import org.spanloom.language.syntax.TokenKind;
 import org.spanloom.language.syntax.Words;
@@ -44,7 +47,9 @@ public final class Completion {
           "state",
           "output",
           "transfer",
+          "jump",
           "initial values",
+          "boundary",
           "basis",
           "require",
           "accuracy");
@@ -175,10 +180,12 @@ public final class Completion {
       }
       case "scaled" -> offer("condition", "2-norm condition number of a basis");
       case "state", "parameter", "let", "input", "output", "system", "values" -> {}
-      case "basis" -> {}
+      case "basis", "boundary" -> {}
       default -> {
         if (isCondition()) {
           bases();
+        } else if (isChange()) {
+          offer("becomes", "the state at once takes another value");
         } else if (first.equals("row") && before.size() == 1) {
           states();
         } else {
@@ -197,8 +204,32 @@ public final class Completion {
         && text(before.get(n - 2)).equals("condition");
   }
 
+  /** Tells whether the caret stands behind the name at the start of a line of a jump. */
+  private boolean isChange() {
+    Token last = before.getLast();
+    int i = before.size() - (last.kind() == TokenKind.PRIMES ? 2 : 1);
+    boolean alone =
+        i == 0
+            || i > 0
+                && switch (before.get(i - 1).kind()) {
+                  case SEMICOLON, OPEN_BRACE -> true;
+                  default -> false;
+                };
+    return alone
+        && before.get(i).kind().isName()
+        && system().map(SystemStatement::body).orElse(List.of()).stream()
+            .anyMatch(s -> s.span().touches(offset) && isJump(s));
+  }
+
+  /** A jump whose time is wrong is one nevertheless. */
+  private static boolean isJump(Statement statement) {
+    return statement instanceof JumpStatement
+        || statement instanceof UnreadStatement unread && unread.word().equals("jump");
+  }
+
   private void clauses(String first) {
     switch (first) {
+      case "jump" -> List.of("at", "every", "from", "to").forEach(w -> offer(w, "time of a jump"));
       case "system" ->
           List.of("over", "from", "to", "after", "before").forEach(w -> offer(w, "interval"));
       case "state" -> offer("scale", "size below which only absolute errors count");
@@ -249,6 +280,7 @@ public final class Completion {
       case OutputStatement output -> offer(name, "output" + unit(output.unit().map(u -> u.code())));
       case SystemStatement system -> {}
       case InitialValuesStatement values -> {}
+      case BoundaryStatement boundary -> {}
       case BasisStatement basis -> {}
     }
   }

@@ -13,9 +13,11 @@ import org.spanloom.language.syntax.Name;
 import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.AccuracyStatement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
+import org.spanloom.language.syntax.Statement.BoundaryStatement;
 import org.spanloom.language.syntax.Statement.EquationStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
+import org.spanloom.language.syntax.Statement.JumpStatement;
 import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
@@ -89,6 +91,9 @@ public final class Outline {
           leaf(Kind.OUTPUT, output.name(), unit(output.unit()), output.span());
       case EquationStatement equation -> text(Kind.EQUATION, equation.span(), equation.span());
       case TransferStatement transfer -> text(Kind.EQUATION, transfer.span(), transfer.span());
+      case JumpStatement jump -> text(Kind.JUMP, jump.header(), jump.span());
+      case BoundaryStatement boundary ->
+          leaf(Kind.BOUNDARY, boundary.name(), "boundary conditions", boundary.span());
       case InitialValuesStatement values ->
           leaf(Kind.INITIAL_VALUES, values.name(), "initial values", values.span());
       case BasisStatement basis -> leaf(Kind.BASIS, basis.name(), "basis", basis.span());

@@ -40,8 +40,12 @@ public record OutlineNode(
     OUTPUT,
     /** An equation or a transfer. */
     EQUATION,
+    /** A jump of the states. */
+    JUMP,
     /** A set of initial values. */
     INITIAL_VALUES,
+    /** A set of boundary conditions. */
+    BOUNDARY,
     /** A candidate basis. */
     BASIS,
     /** A requirement. */

@@ -12,6 +12,7 @@ import org.spanloom.language.syntax.Name;
 import org.spanloom.language.syntax.OverClause;
 import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
+import org.spanloom.language.syntax.Statement.BoundaryStatement;
 import org.spanloom.language.syntax.Statement.Declaration;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
@@ -103,17 +104,19 @@ record Word(Token token, String text, int primes, String previous, String twoBef
   }
 
   /**
-   * Basis and set of initial values have names of their own kind, which stand at certain places
-   * only.
+   * Bases, sets of initial values and boundary conditions have names of their own kind, which stand
+   * at certain places only.
    */
   private Optional<Declaration> declaration(List<Statement> statements) {
     boolean wantsBasis = previous.equals("basis") || twoBefore.equals("condition");
+    boolean wantsBoundary = previous.equals("boundary");
     boolean wantsValues = previous.equals("under") || previous.equals("values");
     Optional<Declaration> state = Optional.empty();
     for (Statement statement : statements) {
       if (!(statement instanceof Declaration declaration)
           || !declaration.name().text().equals(text)
           || wantsBasis != declaration instanceof BasisStatement
+          || wantsBoundary != declaration instanceof BoundaryStatement
           || wantsValues != declaration instanceof InitialValuesStatement) {
         continue;
       }

@@ -34,10 +34,10 @@ final class Alignment {
   /**
    * The parts of a statement that are aligned, by their first tokens; -1 where there is none.
    *
-   * @param kind the word the statement begins with, or {@code =} for an equation
+   * @param kind the word the statement begins with, or the sign of an equation or a change
    * @param first its first token
    * @param middle the unit, or the arrow of a transfer
-   * @param equals the equals sign
+   * @param equals the equals sign, or the word of a change
    * @param values values of a row
    * @param end behind the last token of its first line, comments left out
    */
@@ -124,7 +124,7 @@ final class Alignment {
       boolean arrow = word.equals("transfer") && kind == TokenKind.ARROW;
       if (equals < 0 && middle < 0 && (unit || arrow)) {
         middle = i;
-      } else if (kind == TokenKind.EQUALS && equals < 0 && open == 0) {
+      } else if (equals < 0 && open == 0 && parts(i)) {
         equals = i;
       }
       boolean begins = i > first && (i - 1 == equals || layout.kind(i - 1) == TokenKind.COMMA);
@@ -133,10 +133,17 @@ final class Alignment {
       }
       open += nesting(kind);
     }
-    String kind = word.isEmpty() ? "=" : word;
     return equals <= first
         ? Optional.empty()
-        : Optional.of(new Cells(kind, first, middle, equals, values, end));
+        : Optional.of(
+            new Cells(
+                word.isEmpty() ? layout.text(equals) : word, first, middle, equals, values, end));
+  }
+
+  /** Tells whether a token parts a line in two: an equals sign, or the word of a change. */
+  private boolean parts(int i) {
+    return layout.kind(i) == TokenKind.EQUALS
+        || layout.kind(i) == TokenKind.CLAUSE_WORD && layout.text(i).equals("becomes");
   }
 
   private static int nesting(TokenKind kind) {

@@ -59,8 +59,8 @@ final class Indentation {
     if (word.equals("system")) {
       // A system ends the one before it, closed or not.
       blocks.clear();
-    } else if (!word.isEmpty() && "initial".equals(blocks.peek())) {
-      // Initial values hold settings only; another statement ends them, closed or not.
+    } else if (!word.isEmpty() && holdsLinesOnly(blocks.peek())) {
+      // Such a block holds lines of its own only; another statement ends it, closed or not.
       blocks.pop();
     }
     if (!statement.tokens().isEmpty()) {
@@ -82,6 +82,10 @@ final class Indentation {
       blocks.push(lastWord);
     }
     rowsFollow &= !statement.opensBlock() && !statement.closesBlock();
+  }
+
+  private static boolean holdsLinesOnly(String block) {
+    return "initial".equals(block) || "jump".equals(block) || "boundary".equals(block);
   }
 
   private int depth() {

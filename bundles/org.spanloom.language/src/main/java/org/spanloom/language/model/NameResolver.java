@@ -226,7 +226,9 @@ final class NameResolver {
               + place.what()
               + ": only numbers and parameters can"
               + (place.time() ? ", and functions of time." : ".")
-              + (place.what().startsWith("a named") ? " Declare it as an output instead." : ""));
+              + (place.what().startsWith("a named expression")
+                  ? " Declare it as an output instead."
+                  : ""));
       return Optional.empty();
     }
     return hasKnownUnit(name)
@@ -305,8 +307,8 @@ final class NameResolver {
           delayed
               ? "\""
                   + resolver.shown(call.span())
-                  + "\" is a state at another time than the running one: that is a delay equation, not an ordinary"
-                  + " differential equation. Write "
+                  + "\" is a state at another time than the running one: that is a delay equation,"
+                  + " not an ordinary differential equation. Write "
                   + label
                   + ", or model the delay by states of its own."
               : "\""
@@ -315,7 +317,9 @@ final class NameResolver {
                   + place.what()
                   + ": write "
                   + label
-                  + " for the value at the running time.");
+                  + (place == Place.JUMP
+                      ? " for the value just before it."
+                      : " for the value at the running time."));
       return Optional.empty();
     }
     UnitOfMeasure unit =

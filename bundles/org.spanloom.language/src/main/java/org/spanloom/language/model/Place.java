@@ -22,6 +22,8 @@ record Place(String what, boolean time, boolean states, boolean samples) {
   static final Place OUTPUT = new Place("an output", true, true, false);
   static final Place EQUATION = new Place("an equation", true, true, false);
   static final Place TRANSFER = new Place("a transfer", true, true, false);
+  static final Place JUMP = new Place("a jump", true, true, false);
+  static final Place BOUNDARY = new Place("a boundary condition", false, true, true);
   static final Place INTERVAL = new Place("an end of the interval", false, false, false);
   static final Place NAMED_TIME = new Place("a named time", false, false, false);
   static final Place INITIAL = new Place("an initial value", false, false, false);

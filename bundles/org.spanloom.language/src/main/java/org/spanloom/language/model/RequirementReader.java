@@ -14,8 +14,6 @@ import org.spanloom.language.problem.Nearest;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.syntax.Comparison;
 import org.spanloom.language.syntax.Expression;
-import org.spanloom.language.syntax.Expression.CallExpression;
-import org.spanloom.language.syntax.Expression.NameExpression;
 import org.spanloom.language.syntax.Expression.NumberExpression;
 import org.spanloom.language.syntax.Name;
 import org.spanloom.language.syntax.RequireClause;
@@ -37,6 +35,7 @@ final class RequirementReader {
   private final Times times;
   private final InitialValuesReader initialValues;
   private final BasisReader bases;
+  private final NamedValues named;
   private final Problems problems;
   private final List<Requirement> requirements = new ArrayList<>();
 
@@ -51,6 +50,7 @@ final class RequirementReader {
     this.times = times;
     this.initialValues = initialValues;
     this.bases = bases;
+    this.named = new NamedValues(system, components, times);
     this.problems = system.problems();
   }
 
@@ -90,20 +90,23 @@ final class RequirementReader {
     if (clause.throughout() && samples) {
       return incomplete(
           comparison.span(),
-          "A requirement throughout the interval names no times: remove the times in parentheses, or \"throughout\".");
+          "A requirement throughout the interval names no times: remove the times in parentheses,"
+              + " or \"throughout\".");
     }
     if (!clause.throughout() && running) {
       return incomplete(
           comparison.span(),
           samples
-              ? "Some values in it stand at named times and some at the running time: name a time for all of them."
+              ? "Some values in it stand at named times and some at the running time: name a time"
+                  + " for all of them."
               : "It does not say when it must hold: name a time, as in x(2), or write throughout.",
           samples
               ? new Fix[0]
               : new Fix[] {Fix.insert("Add throughout", comparison.span().end(), " throughout")});
     }
     Optional<Term> until = clause.until().flatMap(times::time);
-    if (clause.until().isPresent() && until.isEmpty() || !timesInside(comparison)) {
+    if (clause.until().isPresent() && until.isEmpty()
+        || !named.timesInside(List.of(comparison.left(), comparison.right()))) {
       return Optional.empty();
     }
     boolean needsSolution = left.get().holdsStates() || right.get().holdsStates();
@@ -145,7 +148,7 @@ final class RequirementReader {
   /** A bare 0 fits every dimension, but not a scale with a zero point of its own. */
   private boolean zeroIsClear(Expression zero, Comparison comparison) {
     Expression other = zero.equals(comparison.left()) ? comparison.right() : comparison.left();
-    Optional<UnitOfMeasure> unit = unitOfName(other).filter(u -> u.offset() != 0);
+    Optional<UnitOfMeasure> unit = named.unitOfName(other).filter(u -> u.offset() != 0);
     if (unit.isEmpty()) {
       return true;
     }
@@ -173,28 +176,6 @@ final class RequirementReader {
         || TimeDependence.of(quantity.constant().term()) == TimeDependence.TIME;
   }
 
-  /** Checks the times named in a comparison. */
-  private boolean timesInside(Comparison comparison) {
-    List<CallExpression> calls = new ArrayList<>(ExpressionNames.calls(comparison.left()));
-    calls.addAll(ExpressionNames.calls(comparison.right()));
-    boolean inside = true;
-    for (CallExpression call : calls) {
-      boolean sampled =
-          system
-              .scope()
-              .own(call.callee().name().text())
-              .filter(m -> m instanceof Meaning.StateMeaning || m instanceof Meaning.OutputMeaning)
-              .isPresent();
-      boolean running =
-          call.arguments().getFirst().value() instanceof NameExpression name
-              && name.name().text().equals(system.scope().timeName());
-      if (sampled && !running) {
-        inside &= times.time(call.arguments().getFirst().value()).isPresent();
-      }
-    }
-    return inside;
-  }
-
   /**
    * Returns the unit to show a comparison in: that of a lone number, else that of a lone name, else
    * a coherent one.
@@ -205,32 +186,12 @@ final class RequirementReader {
           Literals.alone(side)
               .flatMap(NumberExpression::unit)
               .flatMap(UnitResolver::known)
-              .or(() -> unitOfName(side));
+              .or(() -> named.unitOfName(side));
       if (unit.isPresent()) {
         return unit.get();
       }
     }
     return Declarations.coherent(left.zero() ? right.dimension() : left.dimension());
-  }
-
-  private Optional<UnitOfMeasure> unitOfName(Expression side) {
-    Expression name = side instanceof CallExpression call ? call.callee() : side;
-    if (!(name instanceof NameExpression reference)) {
-      return Optional.empty();
-    }
-    if (reference.primes() > 0) {
-      return components.labelled(reference.label()).map(StateComponent::unit);
-    }
-    Optional<Meaning> meaning = system.scope().use(reference.name().text());
-    return meaning.flatMap(m ->
-        switch (m) {
-          case Meaning.StateMeaning state -> Optional.of(state.unit());
-          case Meaning.OutputMeaning output -> Optional.of(output.unit());
-          case Meaning.ParameterMeaning parameter -> Optional.of(parameter.parameter().unit());
-          case Meaning.LetMeaning let -> Optional.of(let.let().unit());
-          case Meaning.TimeMeaning time -> Optional.of(time.unit());
-          case Meaning.BrokenMeaning broken -> Optional.empty();
-        });
   }
 
   private Optional<Requirement> condition(LimitsCondition clause) {
@@ -266,7 +227,9 @@ final class RequirementReader {
         .flatMap(q ->
             components.affine(
                 q,
-                unitOfName(clause.value()).orElseGet(() -> Declarations.coherent(q.dimension())),
+                named
+                    .unitOfName(clause.value())
+                    .orElseGet(() -> Declarations.coherent(q.dimension())),
                 clause.value().span()))
         .map(v -> new Requirement.Invariant(v, clause.span(), text(clause)));
   }
@@ -301,7 +264,8 @@ final class RequirementReader {
     return incomplete(
             span,
             names.isEmpty()
-                ? "It needs a solution, and there are no initial values: give the states values, as in state x = 1."
+                ? "It needs a solution, and there are no initial values: give the states values, as"
+                    + " in state x = 1."
                 : "It does not say for which initial values: write under and one of "
                     + String.join(", ", names)
                     + ".",

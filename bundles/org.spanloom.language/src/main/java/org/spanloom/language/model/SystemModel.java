@@ -22,8 +22,10 @@ import org.spanloom.language.units.UnitOfMeasure;
  * @param states the state vector
  * @param outputs outputs, in order of declaration
  * @param equations the linear form; empty when errors leave it unknown
+ * @param jumps changes of the state vector at fixed times, in the order of the text
  * @param initialValues complete sets of initial values; the unnamed set of the declarations comes
  *     first if complete
+ * @param boundaries complete sets of boundary conditions
  * @param bases candidate bases
  * @param requirements requirements
  * @param accuracy relative error asked for
@@ -42,7 +44,9 @@ public record SystemModel(
     List<StateComponent> states,
     List<Output> outputs,
     Optional<LinearForm> equations,
+    List<Jump> jumps,
     List<InitialValues> initialValues,
+    List<Boundary> boundaries,
     List<Basis> bases,
     List<Requirement> requirements,
     double accuracy,
@@ -60,7 +64,9 @@ public record SystemModel(
     lets = List.copyOf(lets);
     states = List.copyOf(states);
     outputs = List.copyOf(outputs);
+    jumps = List.copyOf(jumps);
     initialValues = List.copyOf(initialValues);
+    boundaries = List.copyOf(boundaries);
     bases = List.copyOf(bases);
     requirements = List.copyOf(requirements);
   }

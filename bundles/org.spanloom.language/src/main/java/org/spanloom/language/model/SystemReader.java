@@ -20,9 +20,11 @@ import org.spanloom.language.syntax.OverClause;
 import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.AccuracyStatement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
+import org.spanloom.language.syntax.Statement.BoundaryStatement;
 import org.spanloom.language.syntax.Statement.EquationStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
+import org.spanloom.language.syntax.Statement.JumpStatement;
 import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
@@ -116,11 +118,13 @@ final class SystemReader {
     List<Output> outputs = outputs(components);
     InitialValuesReader initialValues = new InitialValuesReader(system, components, times);
     BasisReader bases = new BasisReader(system, components, times);
+    JumpReader jumps = new JumpReader(system, components, times);
     initialValues.readDeclarations(statement.header());
     for (Statement s : statement.body()) {
       switch (s) {
         case InitialValuesStatement values -> initialValues.read(values);
         case BasisStatement basis -> bases.read(basis);
+        case JumpStatement jump -> jumps.read(jump);
         case AccuracyStatement stated -> accuracy(stated);
         case UnreadStatement unread when unread.word().equals("initial") ->
             unread.declares().ifPresent(initialValues::noteUnread);
@@ -129,11 +133,15 @@ final class SystemReader {
         default -> {}
       }
     }
+    BoundaryReader boundaries =
+        new BoundaryReader(system, components, times, initialValues.names());
     RequirementReader requirements =
         new RequirementReader(system, components, times, initialValues, bases);
     for (Statement s : statement.body()) {
-      if (s instanceof RequireStatement require) {
-        requirements.read(require.clause());
+      switch (s) {
+        case RequireStatement require -> requirements.read(require.clause());
+        case BoundaryStatement boundary -> boundaries.read(boundary);
+        default -> {}
       }
     }
     checkDefinedness(times, form, outputs, initialValues.complete(), bases.bases());
@@ -153,7 +161,9 @@ final class SystemReader {
         components.list(),
         outputs,
         form,
+        jumps.jumps(),
         initialValues.complete(),
+        boundaries.boundaries(),
         bases.bases(),
         requirements.requirements(),
         accuracy,
@@ -205,7 +215,9 @@ final class SystemReader {
         case SystemStatement inner -> {}
         case EquationStatement equation -> {}
         case TransferStatement transfer -> {}
+        case JumpStatement jump -> {}
         case InitialValuesStatement values -> {}
+        case BoundaryStatement boundary -> {}
         case BasisStatement basis -> {}
         case RequireStatement require -> {}
         case AccuracyStatement stated -> {}

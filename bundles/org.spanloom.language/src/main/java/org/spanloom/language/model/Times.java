@@ -142,7 +142,8 @@ final class Times {
     return true;
   }
 
-  private String unitText() {
+  /** Returns the unit of time in brackets, a blank before it; nothing for a pure number. */
+  String unitText() {
     return unit.equals(UnitOfMeasure.ONE) ? "" : " [" + unit.code() + "]";
   }
 

@@ -91,6 +91,12 @@ public enum ProblemKind {
   TOO_MANY_EQUATIONS("There are more equations than derivatives to be found."),
   /** A transfer that leads from nowhere to nowhere or back to where it began. */
   TRANSFER_INVALID("A transfer does not lead from one place to another."),
+  /** A jump that cannot take place as written. */
+  JUMP_INVALID("A jump cannot take place as written."),
+  /** A boundary condition that says nothing about values at named times. */
+  BOUNDARY_INVALID("A boundary condition does not hold values of states at named times."),
+  /** Too few or too many boundary conditions. */
+  BOUNDARY_COUNT("There are too few or too many boundary conditions."),
   /** Highest derivatives that the equations cannot give. */
   SINGULAR_MASS_MATRIX("The equations cannot be solved for the highest derivatives."),
   /** A system without a state. */

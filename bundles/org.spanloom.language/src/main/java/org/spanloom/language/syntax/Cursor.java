@@ -46,6 +46,11 @@ final class Cursor {
     return at + 1 < tokens.size() ? tokens.get(at + 1).kind() : TokenKind.NEWLINE;
   }
 
+  /** Tells whether the token behind the coming one is a word with this text. */
+  boolean isWordAfter(String word) {
+    return kindAfter().isWord() && text(tokens.get(at + 1)).equals(word);
+  }
+
   Token take() {
     Token token = peek();
     at = Math.min(at + 1, tokens.size());
@@ -147,8 +152,8 @@ final class Cursor {
               token.span(),
               "\""
                   + shown
-                  + "\" is not a number: write digits on both sides of the point, as in 0.5, and digits"
-                  + " behind e, as in 1e-3.");
+                  + "\" is not a number: write digits on both sides of the point, as in 0.5, and"
+                  + " digits behind e, as in 1e-3.");
       case OPEN_UNIT ->
           fail(
               ProblemKind.UNIT_NOT_CLOSED,

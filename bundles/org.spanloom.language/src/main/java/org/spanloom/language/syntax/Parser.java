@@ -12,12 +12,9 @@ import org.spanloom.language.problem.Fix;
 import org.spanloom.language.problem.Problem;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.syntax.Statement.BasisStatement;
-import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.Row;
-import org.spanloom.language.syntax.Statement.Setting;
 import org.spanloom.language.syntax.Statement.SystemStatement;
-import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.text.SourceText;
 import org.spanloom.language.text.Span;
 
@@ -26,8 +23,8 @@ import org.spanloom.language.text.Span;
  * and what cannot be read stays in the tree as its text. The work is linear in the length of the
  * text.
  *
- * <p>{@code file = { statement } ; statement = simple statement | system | initial values | basis
- * ;} where a line end or {@code ;} stands between statements.
+ * <p>{@code file = { statement } ; statement = simple statement | system | basis | initial values |
+ * jump | boundary ;} where a line end or {@code ;} stands between statements.
  */
 public final class Parser {
 
@@ -35,6 +32,7 @@ public final class Parser {
   private final String text;
   private final StatementSplitter lines;
   private final List<Problem> problems = new ArrayList<>();
+  private final BlockParser blocks;
 
   /**
    * The last line of the statement read last, rows included; its end may close the block around the
@@ -46,6 +44,7 @@ public final class Parser {
     this.source = source;
     this.text = source.content();
     this.lines = new StatementSplitter(text);
+    this.blocks = new BlockParser(text, lines, problems);
     this.last = new StatementLine(List.of(), new Token(TokenKind.NEWLINE, 0, 0), "");
   }
 
@@ -64,7 +63,7 @@ public final class Parser {
         if (!line.tokens().isEmpty()) {
           statements.add(statement(line));
         } else if (line.opensBlock()) {
-          skipBlock();
+          blocks.skip();
         }
         if (last.closesBlock()) {
           closesNothing(last.end());
@@ -87,7 +86,7 @@ public final class Parser {
     parser.cursor().take();
     Name name = parser.name("system");
     Optional<OverClause> over = parser.systemHeader();
-    boolean open = line.opensBlock() || acceptOpeningBrace();
+    boolean open = line.opensBlock() || blocks.acceptOpeningBrace();
     if (!open && !parser.cursor().failed()) {
       int end = line.span().end();
       parser
@@ -109,14 +108,6 @@ public final class Parser {
             line.documentation(),
             line.span(),
             new Span(line.span().start(), end)));
-  }
-
-  private boolean acceptOpeningBrace() {
-    boolean found = lines.peek().kind() == TokenKind.OPEN_BRACE;
-    if (found) {
-      lines.next();
-    }
-    return found;
   }
 
   private StatementLine take() {
@@ -150,7 +141,7 @@ public final class Parser {
             ProblemKind.WORD_UNEXPECTED,
             line.end().span(),
             "A block belongs to the statement before it: remove the brace or write the statement.");
-        skipBlock();
+        blocks.skip();
       }
       if (last.closesBlock()) {
         return last.end().end();
@@ -162,10 +153,12 @@ public final class Parser {
     Token first = line.tokens().getFirst();
     String word = first.kind() == TokenKind.STATEMENT_WORD ? text(first) : "";
     return switch (word) {
-      case "initial" -> initialValues(line);
+      case "initial" -> blocks.initialValues(line);
+      case "jump" -> blocks.jump(line);
+      case "boundary" -> blocks.boundary(line);
       case "basis" -> basis(line);
       case "row" -> strayRow(line);
-      case "import", "table", "matrix", "for", "part", "jump", "boundary" -> later(line, word);
+      case "import", "table", "matrix", "for", "part" -> later(line, word);
       default -> simple(line);
     };
   }
@@ -176,88 +169,10 @@ public final class Parser {
     parser.expectNoBlock();
     note(parser.cursor());
     if (line.opensBlock()) {
-      skipBlock();
+      blocks.skip();
       return parser.unread();
     }
     return statement;
-  }
-
-  /**
-   * {@code initial values = "initial", "values", name, [ time ], "{", { setting, ( ";" | line end )
-   * }, "}" ;}
-   */
-  private Statement initialValues(StatementLine line) {
-    StatementParser parser = new StatementParser(text, line);
-    Cursor cursor = parser.cursor();
-    cursor.take();
-    if (!cursor.acceptWord("values")) {
-      cursor.failHere(
-          ProblemKind.WORD_UNEXPECTED,
-          "The word \"values\" belongs here, as in \"initial values warm { ... }\"");
-    }
-    Name name = cursor.failed() ? new Name("", line.span()) : parser.name("initial values");
-    Optional<Expression> time = parser.time();
-    parser.expectEnd();
-    boolean open = line.opensBlock() || !line.closesBlock() && acceptOpeningBrace();
-    if (!open && !cursor.failed()) {
-      cursor.fail(
-          ProblemKind.BRACE_MISSING,
-          cursor.peek().span(),
-          "The values stand in braces, as in \"{ T = 293; P = 0 }\": write them here.");
-    }
-    boolean headerRead = !cursor.failed();
-    note(cursor);
-    if (!open) {
-      return parser.unread();
-    }
-    List<Setting> settings = new ArrayList<>();
-    boolean allRead = true;
-    int end = line.end().end();
-    boolean closed = false;
-    while (!closed && !endsBlock(lines.peek())) {
-      StatementLine inner = lines.next();
-      end = inner.end().end();
-      closed = inner.closesBlock();
-      if (!inner.tokens().isEmpty()) {
-        StatementParser settingParser = new StatementParser(text, inner);
-        Optional<Setting> setting = settingParser.setting();
-        settingParser.expectNoBlock();
-        note(settingParser.cursor());
-        setting.ifPresent(settings::add);
-        allRead &= setting.isPresent();
-      }
-      if (inner.opensBlock()) {
-        end = skipBlock();
-        allRead = false;
-      }
-    }
-    if (!closed) {
-      allRead = false;
-      problem(
-          ProblemKind.BRACE_MISSING,
-          line.span(),
-          "The block of initial values is not closed: write \"}\" behind its last value.");
-    }
-    Span span =
-        new Span(line.span().start(), closed ? end : Math.min(end, lastEnd(settings, line)));
-    if (!headerRead) {
-      Optional<Name> declared = name.text().isEmpty() ? Optional.empty() : Optional.of(name);
-      return new UnreadStatement(
-          "initial", text.substring(span.start(), span.end()), declared, span);
-    }
-    return new InitialValuesStatement(name, time, settings, allRead, line.documentation(), span);
-  }
-
-  private static int lastEnd(List<Setting> settings, StatementLine line) {
-    return settings.isEmpty() ? line.end().end() : settings.getLast().span().end();
-  }
-
-  /**
-   * Tells whether a block cannot go on here: at the end of the text and before a word that begins a
-   * statement.
-   */
-  private boolean endsBlock(Token next) {
-    return next.span().equals(endOfText()) || next.kind() == TokenKind.STATEMENT_WORD;
   }
 
   /**
@@ -314,11 +229,12 @@ public final class Parser {
       cursor.fail(
           ProblemKind.WORD_UNEXPECTED,
           cursor.peek().span(),
-          "The rows of the basis are missing: write a line such as \"row x = 1, 0\" for each state below.");
+          "The rows of the basis are missing: write a line such as \"row x = 1, 0\" for each state"
+              + " below.");
     }
     note(cursor);
     if (last.opensBlock()) {
-      skipBlock();
+      blocks.skip();
     }
     return cursor.failed()
         ? parser.unread()
@@ -333,7 +249,7 @@ public final class Parser {
         line.span(),
         "A row belongs to the basis in the lines before it: end the line of the basis with \"=\".");
     if (line.opensBlock()) {
-      skipBlock();
+      blocks.skip();
     }
     return parser.unread();
   }
@@ -346,7 +262,7 @@ public final class Parser {
         line.tokens().getFirst().span(),
         "\"" + word + "\" is not read by this version yet: write the model without it.");
     if (line.opensBlock()) {
-      span = new Span(span.start(), skipBlock());
+      span = new Span(span.start(), blocks.skip());
     } else if (word.equals("matrix")) {
       while (!last.closesBlock() && isWord(lines.peek(), "row")) {
         span = span.join(take().span());
@@ -357,20 +273,6 @@ public final class Parser {
             ? Optional.of(new Name(text(line.tokens().get(1)), line.tokens().get(1).span()))
             : Optional.empty();
     return new LaterStatement(word, declares, span);
-  }
-
-  /**
-   * Passes over everything up to the brace that closes the block and returns the offset behind it.
-   */
-  private int skipBlock() {
-    int depth = 1;
-    int end = lines.peek().start();
-    while (depth > 0 && !lines.peek().span().equals(endOfText())) {
-      StatementLine line = lines.next();
-      depth += line.opensBlock() ? 1 : line.closesBlock() ? -1 : 0;
-      end = line.end().end();
-    }
-    return end;
   }
 
   private void closesNothing(Token brace) {

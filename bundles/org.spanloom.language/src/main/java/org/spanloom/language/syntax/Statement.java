@@ -157,6 +157,40 @@ public sealed interface Statement {
     }
   }
 
+  /**
+   * {@code jump at 6 { gut becomes gut + 250 [mg] }}, {@code jump every 8 from 0 to 40 { ... }}.
+   *
+   * @param header the first line
+   * @param allRead whether every line of the block could be read
+   */
+  record JumpStatement(
+      JumpTime time,
+      List<Change> changes,
+      boolean allRead,
+      String documentation,
+      Span header,
+      Span span)
+      implements Statement {
+    /** Copies the list. */
+    public JumpStatement {
+      changes = List.copyOf(changes);
+    }
+  }
+
+  /**
+   * {@code boundary soak { T_air(0) = 277; T_wall(48) = 280 }}.
+   *
+   * @param allRead whether every line of the block could be read
+   */
+  record BoundaryStatement(
+      Name name, List<Condition> conditions, boolean allRead, String documentation, Span span)
+      implements Declaration {
+    /** Copies the list. */
+    public BoundaryStatement {
+      conditions = List.copyOf(conditions);
+    }
+  }
+
   /** {@code require T < 300 [K] throughout}. */
   record RequireStatement(RequireClause clause, String documentation, Span span)
       implements Statement {}
@@ -202,4 +236,23 @@ public sealed interface Statement {
       values = List.copyOf(values);
     }
   }
+
+  /** When a jump takes place. */
+  sealed interface JumpTime {
+    /** Returns its place. */
+    Span span();
+
+    /** {@code at 6}. */
+    record Once(Expression time, Span span) implements JumpTime {}
+
+    /** {@code every 8 from 0 to 40}. */
+    record Repeated(Expression period, Expression first, Expression last, Span span)
+        implements JumpTime {}
+  }
+
+  /** {@code gut becomes gut + 250 [mg]}. */
+  record Change(NameExpression target, Expression value, Span span) {}
+
+  /** {@code T_wall(48) = 280}. */
+  record Condition(Expression left, Expression right, Span span) {}
 }

@@ -14,8 +14,11 @@ import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.syntax.Expression.NameExpression;
 import org.spanloom.language.syntax.OverClause.Bound;
 import org.spanloom.language.syntax.Statement.AccuracyStatement;
+import org.spanloom.language.syntax.Statement.Change;
+import org.spanloom.language.syntax.Statement.Condition;
 import org.spanloom.language.syntax.Statement.EquationStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
+import org.spanloom.language.syntax.Statement.JumpTime;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
@@ -80,6 +83,7 @@ final class StatementParser {
             && !word.equals("row")
             && !word.equals("require")
             && !word.equals("transfer")
+            && !word.equals("jump")
             && line.tokens().size() > place
             && line.tokens().get(place).kind().isName();
     Optional<Name> name =
@@ -213,8 +217,8 @@ final class StatementParser {
       cursor.fail(
           ProblemKind.STATEMENT_UNKNOWN,
           line.span(),
-          "This line is neither a statement nor an equation: an equation has one \"=\", and every other"
-              + " statement begins with its word, such as state or require.");
+          "This line is neither a statement nor an equation: an equation has one \"=\", and every"
+              + " other statement begins with its word, such as state or require.");
     }
     if (!cursor.failed() && !cursor.accept(TokenKind.EQUALS)) {
       expressions.failOperator("An operator or \"=\" belongs here");
@@ -229,6 +233,13 @@ final class StatementParser {
     if (!first.kind().isName() || !cursor.kindAfter().isWord()) {
       return false;
     }
+    if (cursor.isWordAfter("becomes")) {
+      cursor.fail(
+          ProblemKind.STATEMENT_MISPLACED,
+          line.span(),
+          "A state changes at once in a jump only: write jump at TIME { ... } around this line.");
+      return true;
+    }
     String word = cursor.text(first);
     Optional<String> meant = Nearest.of(word, Words.STATEMENT);
     cursor.fail(
@@ -240,8 +251,9 @@ final class StatementParser {
             + meant
                 .map(m -> ": did you mean " + m + "?")
                 .orElse(
-                    ": write an equation, or one of system, parameter, let, input, state, output, transfer, initial values,"
-                        + " basis, require and accuracy."),
+                    ": write an equation, or one of system, parameter, let, input, state, output,"
+                        + " transfer, jump, initial values, boundary, basis, require and"
+                        + " accuracy."),
         meant.stream().map(m -> Fix.replace("Write " + m, first.span(), m)).toArray(Fix[]::new));
     return true;
   }
@@ -251,7 +263,8 @@ final class StatementParser {
     if (!cursor.isWord("over")) {
       cursor.failHere(
           ProblemKind.WORD_UNEXPECTED,
-          "A system names its independent variable and its interval, as in \"over t [h] from 0 to 48\"");
+          "A system names its independent variable and its interval, as in \"over t [h] from 0 to"
+              + " 48\"");
       return Optional.empty();
     }
     OverClause over = over();
@@ -296,6 +309,66 @@ final class StatementParser {
     return cursor.failed()
         ? Optional.empty()
         : Optional.of(new Setting(target, value, line.span()));
+  }
+
+  /**
+   * {@code jump = "jump", ( time | repetition ), "{", { change, ( ";" | line end ) }, "}" ;} before
+   * the brace; {@code repetition = "every", expression, "from", expression, "to", expression ;}.
+   */
+  JumpTime jumpTime() {
+    cursor.take();
+    int start = cursor.peek().start();
+    if (cursor.acceptWord("at")) {
+      return new JumpTime.Once(expressions.expression(), cursor.from(start));
+    }
+    if (!cursor.acceptWord("every")) {
+      cursor.failHere(
+          ProblemKind.WORD_UNEXPECTED,
+          "A jump has a time, as in \"at 6\", or a period, as in \"every 8 from 0 to 40\"");
+    }
+    Expression period = expressions.expression();
+    Expression first = repetition("from", "time of the first jump");
+    Expression last = repetition("to", "time of the last jump");
+    return new JumpTime.Repeated(period, first, last, cursor.from(start));
+  }
+
+  private Expression repetition(String word, String what) {
+    if (!cursor.failed() && !cursor.acceptWord(word)) {
+      cursor.failHere(
+          ProblemKind.WORD_UNEXPECTED, "\"" + word + "\" and the " + what + " belong here");
+    }
+    return expressions.expression();
+  }
+
+  /** {@code change = name, [ primes ], "becomes", expression ;} */
+  Optional<Change> change() {
+    NameExpression target =
+        target("The name of a state belongs here, as in \"gut becomes gut + 250\"");
+    if (!cursor.failed() && !cursor.acceptWord("becomes")) {
+      boolean equals = cursor.is(TokenKind.EQUALS);
+      cursor.failHere(
+          ProblemKind.WORD_UNEXPECTED,
+          "\"becomes\" belongs here",
+          equals
+              ? new Fix[] {Fix.replace("Write becomes", cursor.peek().span(), "becomes")}
+              : new Fix[0]);
+    }
+    Expression value = expressions.expression();
+    expectEnd();
+    return cursor.failed() ? Optional.empty() : Optional.of(new Change(target, value, line.span()));
+  }
+
+  /** {@code condition = expression, "=", expression ;} in the block of a boundary. */
+  Optional<Condition> condition() {
+    Expression left = expressions.expression();
+    if (!cursor.failed() && !cursor.accept(TokenKind.EQUALS)) {
+      expressions.failOperator("An operator or \"=\" belongs here");
+    }
+    Expression right = expressions.expression();
+    expectEnd();
+    return cursor.failed()
+        ? Optional.empty()
+        : Optional.of(new Condition(left, right, line.span()));
   }
 
   /** {@code row = "row", name, [ primes ], "=", expression, { ",", expression } ;} */
@@ -374,7 +447,8 @@ final class StatementParser {
       cursor.fail(
           ProblemKind.STATEMENT_NOT_SUPPORTED,
           cursor.peek().span(),
-          "Index ranges are not read by this version yet: declare each state by a name of its own.");
+          "Index ranges are not read by this version yet: declare each state by a name of its"
+              + " own.");
     } else if (cursor.is(TokenKind.OPEN_UNIT)) {
       cursor.failBadToken();
     }

@@ -48,6 +48,7 @@ public final class Words {
           "throughout",
           "until",
           "under",
+          "becomes",
           "if",
           "then",
           "else");
@@ -84,6 +85,7 @@ public final class Words {
     boolean inContext =
         switch (word) {
           case "values" -> previous.equals("initial");
+          case "every" -> previous.equals("jump");
           case "outside" -> first.equals("transfer");
           case "scale" -> first.equals("state") && !previous.equals("state");
           case "condition" -> previous.equals("scaled") || previous.equals("require");

@@ -1,0 +1,202 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.syntax;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.Function;
+import org.spanloom.language.problem.Problem;
+import org.spanloom.language.problem.ProblemKind;
+import org.spanloom.language.syntax.Statement.BoundaryStatement;
+import org.spanloom.language.syntax.Statement.Change;
+import org.spanloom.language.syntax.Statement.Condition;
+import org.spanloom.language.syntax.Statement.InitialValuesStatement;
+import org.spanloom.language.syntax.Statement.JumpStatement;
+import org.spanloom.language.syntax.Statement.JumpTime;
+import org.spanloom.language.syntax.Statement.Setting;
+import org.spanloom.language.syntax.Statement.UnreadStatement;
+import org.spanloom.language.text.Span;
+
+/**
+ * Reads statements whose lines of one kind stand in braces: initial values, jumps and boundary
+ * conditions. Each line has a problem of its own, and a block that is not closed ends before the
+ * next statement.
+ */
+final class BlockParser {
+
+  private final String text;
+  private final StatementSplitter lines;
+  private final List<Problem> problems;
+
+  /** What stood in the braces. */
+  private record Block<T>(List<T> lines, boolean allRead, Span span) {}
+
+  BlockParser(String text, StatementSplitter lines, List<Problem> problems) {
+    this.text = text;
+    this.lines = lines;
+    this.problems = problems;
+  }
+
+  /**
+   * {@code initial values = "initial", "values", name, [ time ], "{", { setting, ( ";" | line end )
+   * }, "}" ;}
+   */
+  Statement initialValues(StatementLine line) {
+    StatementParser parser = new StatementParser(text, line);
+    Cursor cursor = parser.cursor();
+    cursor.take();
+    if (!cursor.acceptWord("values")) {
+      cursor.failHere(
+          ProblemKind.WORD_UNEXPECTED,
+          "The word \"values\" belongs here, as in \"initial values warm { ... }\"");
+    }
+    Name name = cursor.failed() ? new Name("", line.span()) : parser.name("initial values");
+    Optional<Expression> time = parser.time();
+    if (!opens(line, parser, "The values stand in braces, as in \"{ T = 293; P = 0 }\"")) {
+      return parser.unread();
+    }
+    Block<Setting> block =
+        block(
+            line,
+            StatementParser::setting,
+            Setting::span,
+            "The block of initial values is not closed: write \"}\" behind its last value.");
+    return cursor.failed()
+        ? unread("initial", named(name), block)
+        : new InitialValuesStatement(
+            name, time, block.lines(), block.allRead(), line.documentation(), block.span());
+  }
+
+  /** {@code jump = "jump", jump time, "{", { change, ( ";" | line end ) }, "}" ;} */
+  Statement jump(StatementLine line) {
+    StatementParser parser = new StatementParser(text, line);
+    JumpTime time = parser.jumpTime();
+    if (!opens(line, parser, "What changes stands in braces, as in \"{ x becomes x + 1 }\"")) {
+      return parser.unread();
+    }
+    Block<Change> block =
+        block(
+            line,
+            StatementParser::change,
+            Change::span,
+            "The jump is not closed: write \"}\" behind its last line.");
+    return parser.cursor().failed()
+        ? unread("jump", Optional.empty(), block)
+        : new JumpStatement(
+            time, block.lines(), block.allRead(), line.documentation(), line.span(), block.span());
+  }
+
+  /** {@code boundary = "boundary", name, "{", { condition, ( ";" | line end ) }, "}" ;} */
+  Statement boundary(StatementLine line) {
+    StatementParser parser = new StatementParser(text, line);
+    parser.cursor().take();
+    Name name = parser.name("boundary conditions");
+    if (!opens(
+        line, parser, "The conditions stand in braces, as in \"{ T(0) = 277; T(48) = 280 }\"")) {
+      return parser.unread();
+    }
+    Block<Condition> block =
+        block(
+            line,
+            StatementParser::condition,
+            Condition::span,
+            "The block of boundary conditions is not closed: write \"}\" behind its last"
+                + " condition.");
+    return parser.cursor().failed()
+        ? unread("boundary", named(name), block)
+        : new BoundaryStatement(
+            name, block.lines(), block.allRead(), line.documentation(), block.span());
+  }
+
+  private static Optional<Name> named(Name name) {
+    return name.text().isEmpty() ? Optional.empty() : Optional.of(name);
+  }
+
+  private UnreadStatement unread(String word, Optional<Name> declares, Block<?> block) {
+    Span span = block.span();
+    return new UnreadStatement(word, text.substring(span.start(), span.end()), declares, span);
+  }
+
+  /** Ends the first line of a block and tells whether its brace is there. */
+  private boolean opens(StatementLine line, StatementParser parser, String what) {
+    parser.expectEnd();
+    Cursor cursor = parser.cursor();
+    boolean open = line.opensBlock() || !line.closesBlock() && acceptOpeningBrace();
+    if (!open && !cursor.failed()) {
+      cursor.fail(ProblemKind.BRACE_MISSING, cursor.peek().span(), what + ": write them here.");
+    }
+    cursor.problem().ifPresent(problems::add);
+    return open;
+  }
+
+  /** Takes an opening brace on a line of its own. */
+  boolean acceptOpeningBrace() {
+    boolean found = lines.peek().kind() == TokenKind.OPEN_BRACE;
+    if (found) {
+      lines.next();
+    }
+    return found;
+  }
+
+  /** Reads the lines of a block up to its closing brace. */
+  private <T> Block<T> block(
+      StatementLine header,
+      Function<StatementParser, Optional<T>> reader,
+      Function<T, Span> place,
+      String notClosed) {
+    List<T> read = new ArrayList<>();
+    boolean allRead = true;
+    int end = header.end().end();
+    boolean closed = false;
+    while (!closed && !endsBlock(lines.peek())) {
+      StatementLine inner = lines.next();
+      end = inner.end().end();
+      closed = inner.closesBlock();
+      if (!inner.tokens().isEmpty()) {
+        StatementParser parser = new StatementParser(text, inner);
+        Optional<T> value = reader.apply(parser);
+        parser.expectNoBlock();
+        parser.cursor().problem().ifPresent(problems::add);
+        value.ifPresent(read::add);
+        allRead &= value.isPresent();
+      }
+      if (inner.opensBlock()) {
+        end = skip();
+        allRead = false;
+      }
+    }
+    if (!closed) {
+      allRead = false;
+      problems.add(new Problem(ProblemKind.BRACE_MISSING, header.span(), notClosed, List.of()));
+      int last = read.isEmpty() ? header.end().end() : place.apply(read.getLast()).end();
+      end = Math.min(end, last);
+    }
+    return new Block<>(read, allRead, new Span(header.span().start(), end));
+  }
+
+  /**
+   * Tells whether a block cannot go on here: at the end of the text and before a word that begins a
+   * statement.
+   */
+  private boolean endsBlock(Token next) {
+    return next.end() == next.start() || next.kind() == TokenKind.STATEMENT_WORD;
+  }
+
+  /**
+   * Passes over everything up to the brace that closes the block and returns the offset behind it.
+   */
+  int skip() {
+    int depth = 1;
+    int end = lines.peek().start();
+    while (depth > 0 && lines.peek().start() < text.length()) {
+      StatementLine line = lines.next();
+      depth += line.opensBlock() ? 1 : line.closesBlock() ? -1 : 0;
+      end = line.end().end();
+    }
+    return end;
+  }
+}
