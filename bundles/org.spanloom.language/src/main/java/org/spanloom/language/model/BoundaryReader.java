@@ -127,6 +127,7 @@ final class BoundaryReader {
     }
     return components
         .affine(
+            system.root(),
             difference,
             unit.orElseGet(() -> Declarations.coherent(difference.dimension())),
             line.span())

@@ -29,6 +29,7 @@ final class Components {
   private final StateVector vector;
   private final List<StateComponent> list = new ArrayList<>();
   private final List<Optional<StateStatement>> declarations = new ArrayList<>();
+  private final List<Frame> frames = new ArrayList<>();
   private final Map<String, Integer> indices = new HashMap<>();
 
   Components(SystemScope system, StateVector vector, LinearFormBuilder equations) {
@@ -44,47 +45,50 @@ final class Components {
   private void add(StateMeaning state, int primes, Span equation) {
     String label = StateVector.label(state, primes);
     Optional<SystemScope.Derivative> derivative = system.derivative(label);
+    Frame frame = state.frame();
     Optional<StateStatement> declaration =
         primes == 0
             ? Optional.of(state.statement())
             : derivative.map(SystemScope.Derivative::statement);
     UnitOfMeasure unit =
-        derivative
-            .map(SystemScope.Derivative::unit)
-            .orElseGet(() -> system.derivativeUnit(state, primes));
-    Span declared = declaration.orElse(state.statement()).span();
+        derivative.map(SystemScope.Derivative::unit).orElseGet(() -> state.derivativeUnit(primes));
+    Span declared = frame.placed(declaration.orElse(state.statement()).span());
     boolean highest = primes == vector.order(state.index()) - 1;
     indices.put(label, list.size());
     list.add(
         new StateComponent(
             list.size(),
             label,
-            state.statement().name().text(),
+            state.name(),
             primes,
             unit,
-            declaration.flatMap(StateStatement::scale).flatMap(s -> scale(s, unit)).orElse(1.0),
+            declaration
+                .flatMap(StateStatement::scale)
+                .flatMap(s -> scale(frame, s, unit))
+                .orElse(1.0),
             declaration.map(StateStatement::documentation).orElse(""),
             declared,
             highest ? equation : declared));
     declarations.add(declaration);
+    frames.add(frame);
   }
 
-  private Optional<Double> scale(Expression expression, UnitOfMeasure unit) {
+  private static Optional<Double> scale(Frame frame, Expression expression, UnitOfMeasure unit) {
     Optional<Quantity> value =
-        system.resolver().givenDifference(expression, unit, "the state", Place.SCALE);
+        frame.resolver().givenDifference(expression, unit, "the state", Place.SCALE);
     if (value.isEmpty()) {
       return Optional.empty();
     }
     boolean plain = value.get().constant().term() instanceof Term.Constant;
     double size = plain ? TermEvaluator.constant(value.get().constant().term()) / unit.factor() : 0;
     if (!(size > 0) || Double.isInfinite(size)) {
-      system
+      frame
           .problems()
           .report(
               ProblemKind.SCALE_NOT_POSITIVE,
               expression.span(),
               "A scale is a positive number in the unit of the state: \""
-                  + system.resolver().shown(expression.span())
+                  + frame.resolver().shown(expression.span())
                   + "\" is not.");
       return Optional.empty();
     }
@@ -106,6 +110,11 @@ final class Components {
   /** Returns the statement that declares a component itself; empty for a derivative without one. */
   Optional<StateStatement> declaration(int index) {
     return declarations.get(index);
+  }
+
+  /** Returns where the state of a component was declared. */
+  Frame frame(int index) {
+    return frames.get(index);
   }
 
   /** Returns the labels of some components for a message. */
@@ -157,15 +166,16 @@ final class Components {
   /**
    * Returns a quantity over the components; reports a derivative that is none of them.
    *
-   * @param span its text
+   * @param frame where it was read
+   * @param span its place in the frame's text
    * @param unit the unit to show it in
    */
-  Optional<AffineValue> affine(Quantity quantity, UnitOfMeasure unit, Span span) {
+  Optional<AffineValue> affine(Frame frame, Quantity quantity, UnitOfMeasure unit, Span span) {
     List<Sample> samples = new ArrayList<>();
     for (Map.Entry<StateKey, Quantity.Part> entry : quantity.coefficients().entrySet()) {
       StateKey key = entry.getKey();
       if (!vector.isComponent(key)) {
-        reportDerivative(key, span);
+        reportDerivative(frame, key, span);
         return Optional.empty();
       }
       samples.add(
@@ -173,20 +183,21 @@ final class Components {
     }
     samples.sort(Comparator.comparingInt(Sample::component));
     return Optional.of(
-        new AffineValue(samples, quantity.constant().term(), quantity.dimension(), unit, span));
+        new AffineValue(
+            samples, quantity.constant().term(), quantity.dimension(), unit, frame.placed(span)));
   }
 
-  private void reportDerivative(StateKey key, Span span) {
+  private void reportDerivative(Frame frame, StateKey key, Span span) {
     StateMeaning state = vector.states().get(key.state());
     String found = StateVector.label(state, key.order());
-    system
+    frame
         .problems()
         .report(
             ProblemKind.DERIVATIVE_MISPLACED,
             span,
             "\""
                 + found
-                + "\" is no component of the state vector, since the equations give it: write what they say it is"
-                + " instead.");
+                + "\" is no component of the state vector, since the equations give it: write what"
+                + " they say it is instead.");
   }
 }

@@ -6,13 +6,14 @@
 package org.spanloom.language.model;
 
 import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.HashMap;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import java.util.SortedMap;
+import java.util.TreeMap;
 import org.spanloom.language.model.Meaning.BrokenMeaning;
 import org.spanloom.language.model.Meaning.LetMeaning;
 import org.spanloom.language.model.Meaning.OutputMeaning;
@@ -38,6 +39,7 @@ import org.spanloom.language.units.UnitOfMeasure;
  */
 final class Declarations {
 
+  private final Frame frame;
   private final Scope scope;
   private final Problems problems;
   private final UnitResolver units;
@@ -45,36 +47,34 @@ final class Declarations {
   private final List<Declaration> collected = new ArrayList<>();
   private final Map<String, Name> taken = new HashMap<>();
   private final Set<String> duplicates = new HashSet<>();
-  private final List<Parameter> parameters = new ArrayList<>();
-  private final List<Let> lets = new ArrayList<>();
-  private final List<ReadOutput> outputs = new ArrayList<>();
+  private final SortedMap<Integer, Parameter> parameters = new TreeMap<>();
+  private final SortedMap<Integer, Let> lets = new TreeMap<>();
+  private final SortedMap<Integer, ReadOutput> outputs = new TreeMap<>();
 
   /** An output whose place in the state vector is not known yet. */
   record ReadOutput(OutputStatement statement, Quantity value, UnitOfMeasure unit) {}
 
-  Declarations(Scope scope, Problems problems, UnitResolver units, Resolver resolver) {
-    this.scope = scope;
-    this.problems = problems;
-    this.units = units;
-    this.resolver = resolver;
+  Declarations(Frame frame) {
+    this.frame = frame;
+    this.scope = frame.scope();
+    this.problems = frame.problems();
+    this.units = frame.units();
+    this.resolver = frame.resolver();
   }
 
   /** Returns the parameters read, in the order of the text. */
   List<Parameter> parameters() {
-    parameters.sort(Comparator.comparingInt(p -> p.span().start()));
-    return parameters;
+    return List.copyOf(parameters.values());
   }
 
   /** Returns the named expressions read, in the order of the text. */
   List<Let> lets() {
-    lets.sort(Comparator.comparingInt(l -> l.span().start()));
-    return lets;
+    return List.copyOf(lets.values());
   }
 
   /** Returns the outputs read, in the order of the text. */
   List<ReadOutput> outputs() {
-    outputs.sort(Comparator.comparingInt(o -> o.statement().span().start()));
-    return outputs;
+    return List.copyOf(outputs.values());
   }
 
   /** Takes a declaration to be read later; reports a name that is not free. */
@@ -107,7 +107,8 @@ final class Declarations {
           name.span(),
           "\""
               + text
-              + "\" hides the declaration of that name outside of the system: rename one of them if both are meant.");
+              + "\" hides the declaration of that name outside of the system: rename one of them if"
+              + " both are meant.");
     }
     if (earlier == null) {
       taken.put(text, name);
@@ -181,14 +182,14 @@ final class Declarations {
     }
     Parameter parameter =
         new Parameter(
-            name,
+            frame.label(name),
             unit.get(),
             term,
             halfWidth,
             statement.documentation(),
-            statement.span(),
-            statement.name().span());
-    parameters.add(parameter);
+            frame.placed(statement.span()),
+            frame.placed(statement.name().span()));
+    parameters.put(statement.span().start(), parameter);
     return Optional.of(new ParameterMeaning(parameter, value.get().depth() + 1));
   }
 
@@ -233,7 +234,8 @@ final class Declarations {
       problems.report(
           ProblemKind.UNCERTAINTY_INVALID,
           uncertainty.span(),
-          "An uncertainty is half the width of an interval and cannot be negative: remove the sign.");
+          "An uncertainty is half the width of an interval and cannot be negative: remove the"
+              + " sign.");
       return Optional.empty();
     }
     return Optional.of(
@@ -266,15 +268,15 @@ final class Declarations {
         statement.unit().isPresent() ? unit.get() : inferred(statement, value.get());
     Let let =
         new Let(
-            statement.name().text(),
+            frame.label(statement.name().text()),
             shown,
             value.get().constant().term(),
             ofTime,
             false,
             statement.documentation(),
-            statement.span(),
-            statement.name().span());
-    lets.add(let);
+            frame.placed(statement.span()),
+            frame.placed(statement.name().span()));
+    lets.put(statement.span().start(), let);
     return Optional.of(new LetMeaning(let, value.get().depth() + 1));
   }
 
@@ -290,15 +292,15 @@ final class Declarations {
     }
     Let input =
         new Let(
-            statement.name().text(),
+            frame.label(statement.name().text()),
             unit.get(),
             value.get().constant().term(),
             true,
             true,
             statement.documentation(),
-            statement.span(),
-            statement.name().span());
-    lets.add(input);
+            frame.placed(statement.span()),
+            frame.placed(statement.name().span()));
+    lets.put(statement.span().start(), input);
     return Optional.of(new LetMeaning(input, value.get().depth() + 1));
   }
 
@@ -354,11 +356,11 @@ final class Declarations {
     // A lone 0 given to a declared unit has its dimension, not that of a pure number.
     Dimension dimension = statement.unit().isPresent() ? unit.get().dimension() : found.dimension();
     QuantitySum placed = new QuantitySum();
-    placed.add(false, found, statement.value().span());
+    placed.add(false, found, frame.placed(statement.value().span()));
     Quantity output = placed.total(dimension);
     UnitOfMeasure shown = statement.unit().isPresent() ? unit.get() : coherent(dimension);
-    outputs.add(new ReadOutput(statement, output, shown));
-    return Optional.of(new OutputMeaning(output, shown, statement.name().span()));
+    outputs.put(statement.span().start(), new ReadOutput(statement, output, shown));
+    return Optional.of(new OutputMeaning(output, shown, frame.placed(statement.name().span())));
   }
 
   /** Reports parameters, inputs and named expressions that nothing uses. */

@@ -23,7 +23,6 @@ import org.spanloom.language.syntax.Statement.StateStatement;
 final class EquationReader {
 
   private final SystemScope system;
-  private final Problems problems;
   private final List<ResolvedEquation> equations = new ArrayList<>();
   private final boolean[] mentioned;
   private final int[] orders;
@@ -32,23 +31,25 @@ final class EquationReader {
 
   EquationReader(SystemScope system) {
     this.system = system;
-    this.problems = system.problems();
     this.orders = new int[system.states().size()];
     this.mentioned = new boolean[orders.length];
   }
 
-  /** Takes an equation. */
-  void read(EquationStatement statement) {
-    noteDerivatives(statement.left());
-    noteDerivatives(statement.right());
-    Optional<Quantity> left = system.resolver().quantity(statement.left(), Place.EQUATION);
-    Optional<Quantity> right = system.resolver().quantity(statement.right(), Place.EQUATION);
-    if (left.isEmpty() || right.isEmpty() || !sidesAgree(statement, left.get(), right.get())) {
+  /** Takes an equation of a frame. */
+  void read(Frame frame, EquationStatement statement) {
+    noteDerivatives(frame, statement.left());
+    noteDerivatives(frame, statement.right());
+    Optional<Quantity> left = frame.resolver().quantity(statement.left(), Place.EQUATION);
+    Optional<Quantity> right = frame.resolver().quantity(statement.right(), Place.EQUATION);
+    if (left.isEmpty()
+        || right.isEmpty()
+        || !sidesAgree(frame, statement, left.get(), right.get())) {
       allRead = false;
       return;
     }
     equations.add(
         new ResolvedEquation(
+            frame,
             left.get(),
             statement.left().span(),
             right.get(),
@@ -62,12 +63,13 @@ final class EquationReader {
   /**
    * Notes that an equation may be missing because a statement could not be read.
    *
+   * @param frame where the statement was read
    * @param names states whose equation it may be
    */
-  void noteUnread(Set<String> names) {
+  void noteUnread(Frame frame, Set<String> names) {
     allRead = false;
     for (String name : names) {
-      system.state(name).ifPresent(state -> mentioned[state.index()] = true);
+      frame.state(name).ifPresent(state -> mentioned[state.index()] = true);
     }
   }
 
@@ -100,10 +102,10 @@ final class EquationReader {
     return mentioned[state];
   }
 
-  private void noteDerivatives(Expression side) {
+  private void noteDerivatives(Frame frame, Expression side) {
     for (NameExpression name : ExpressionNames.of(side)) {
       if (name.primes() > 0) {
-        Optional<StateMeaning> state = system.state(name.name().text());
+        Optional<StateMeaning> state = frame.state(name.name().text());
         if (state.isPresent()) {
           mentioned[state.get().index()] = true;
           raise(state.get().index(), name.primes());
@@ -120,18 +122,22 @@ final class EquationReader {
     orders[state] = Math.max(orders[state], Math.min(order, StateVector.ORDER_LIMIT));
   }
 
-  private boolean sidesAgree(EquationStatement statement, Quantity left, Quantity right) {
+  private static boolean sidesAgree(
+      Frame frame, EquationStatement statement, Quantity left, Quantity right) {
     if (left.zero() || right.zero() || left.dimension().equals(right.dimension())) {
       return true;
     }
-    problems.report(
-        ProblemKind.UNIT_MISMATCH,
-        statement.span(),
-        "The left side is "
-            + Resolver.in(left.dimension())
-            + ", but the right side is "
-            + Resolver.in(right.dimension())
-            + ": both sides of an equation have one dimension; check the factors and their units.");
+    frame
+        .problems()
+        .report(
+            ProblemKind.UNIT_MISMATCH,
+            statement.span(),
+            "The left side is "
+                + Resolver.in(left.dimension())
+                + ", but the right side is "
+                + Resolver.in(right.dimension())
+                + ": both sides of an equation have one dimension; check the factors and their"
+                + " units.");
     return false;
   }
 
@@ -145,10 +151,9 @@ final class EquationReader {
     Arrays.setAll(
         known, i -> orders[i] > 0 ? orders[i] : Math.max(1, system.declaredDerivatives(i) + 1));
     for (SystemScope.Derivative derivative : system.derivatives()) {
-      StateStatement statement = derivative.statement();
-      Optional<StateMeaning> state = system.state(statement.name().text());
-      if (state.isPresent() && statement.primes() >= known[state.get().index()]) {
-        reportDerivativeAlone(statement, known[state.get().index()]);
+      StateMeaning state = derivative.state();
+      if (derivative.statement().primes() >= known[state.index()]) {
+        reportDerivativeAlone(derivative, known[state.index()]);
         allRead = false;
       }
     }
@@ -162,16 +167,19 @@ final class EquationReader {
     }
     for (ResolvedEquation equation : List.copyOf(equations)) {
       if (holdsHigher(equation.left(), state) || holdsHigher(equation.right(), state)) {
-        String name = system.states().get(state).statement().name().text();
-        problems.report(
-            ProblemKind.TOO_MANY_EQUATIONS,
-            equation.span(),
-            "\""
-                + name
-                + "\" is governed by transfers, which give \""
-                + name
-                + "'\", so no higher derivative of it can stand in an equation: remove the primes or the"
-                + " transfers.");
+        String name = system.states().get(state).name();
+        equation
+            .frame()
+            .problems()
+            .report(
+                ProblemKind.TOO_MANY_EQUATIONS,
+                equation.span(),
+                "\""
+                    + name
+                    + "\" is governed by transfers, which give \""
+                    + name
+                    + "'\", so no higher derivative of it can stand in an equation: remove the"
+                    + " primes or the transfers.");
         equations.remove(equation);
       }
     }
@@ -183,21 +191,26 @@ final class EquationReader {
     return side.coefficients().keySet().stream().anyMatch(k -> k.state() == state && k.order() > 1);
   }
 
-  private void reportDerivativeAlone(StateStatement statement, int order) {
+  private static void reportDerivativeAlone(SystemScope.Derivative derivative, int order) {
+    StateStatement statement = derivative.statement();
     String name = statement.name().text();
-    problems.report(
-        ProblemKind.STATE_WITHOUT_EQUATION,
-        statement.span(),
-        "\""
-            + statement.label()
-            + "\" is declared, but no equation holds \""
-            + statement.label()
-            + "'\": the equations of \""
-            + name
-            + "\" go up to \""
-            + name
-            + "'".repeat(order)
-            + "\". Remove the declaration or write an equation of higher order.",
-        Fix.replace("Remove the declaration", statement.span(), ""));
+    derivative
+        .state()
+        .frame()
+        .problems()
+        .report(
+            ProblemKind.STATE_WITHOUT_EQUATION,
+            statement.span(),
+            "\""
+                + statement.label()
+                + "\" is declared, but no equation holds \""
+                + statement.label()
+                + "'\": the equations of \""
+                + name
+                + "\" go up to \""
+                + name
+                + "'".repeat(order)
+                + "\". Remove the declaration or write an equation of higher order.",
+            Fix.replace("Remove the declaration", statement.span(), ""));
   }
 }

@@ -68,7 +68,7 @@ final class InitialValuesReader {
         continue;
       }
       declarationsHaveValues = true;
-      Optional<Term> value = value(component, initial.get());
+      Optional<Term> value = value(components.frame(component.index()), component, initial.get());
       value.ifPresent(v -> values[component.index()] = v);
       sound &= value.isPresent();
     }
@@ -86,8 +86,8 @@ final class InitialValuesReader {
           components.get(0).declaration(),
           "The interval ("
               + times.shown()
-              + ") holds no left end at which these values stand: write initial values NAME at TIME { ... }"
-              + " instead.");
+              + ") holds no left end at which these values stand: write initial values NAME at TIME"
+              + " { ... } instead.");
     }
     if (sound && time.isPresent()) {
       complete.add(new InitialValues("", time.get(), Arrays.asList(values), header));
@@ -111,7 +111,7 @@ final class InitialValuesReader {
                     "Declare " + first.label(),
                     first.declaration().end(),
                     "\n"
-                        + system.indent(first.declaration())
+                        + system.root().indent(first.declaration())
                         + "state "
                         + first.label()
                         + unit
@@ -158,7 +158,7 @@ final class InitialValuesReader {
             setting.target().span(),
             "\"" + component.get().label() + "\" has two values in this set: remove one.");
       } else {
-        Optional<Term> value = value(component.get(), setting.value());
+        Optional<Term> value = value(system.root(), component.get(), setting.value());
         value.ifPresent(v -> values[component.get().index()] = v);
         sound &= value.isPresent();
       }
@@ -190,7 +190,8 @@ final class InitialValuesReader {
           statement.name().span(),
           "The interval ("
               + times.shown()
-              + ") holds no left end at which these values stand: write at and a time behind the name.",
+              + ") holds no left end at which these values stand: write at and a time behind the"
+              + " name.",
           Fix.insert("Insert at", end, " at 1"));
     }
     return time;
@@ -217,19 +218,22 @@ final class InitialValuesReader {
         Fix.insert("Add the missing values", offset, text.toString()));
   }
 
-  private Optional<Term> value(StateComponent component, Expression expression) {
+  private static Optional<Term> value(
+      Frame frame, StateComponent component, Expression expression) {
     Optional<Term> value =
-        system
+        frame
             .resolver()
             .given(expression, component.unit(), "the state " + component.label(), Place.INITIAL)
             .map(q -> q.constant().term());
     if (value.isPresent() && !Double.isFinite(TermEvaluator.constant(value.get()))) {
-      problems.report(
-          ProblemKind.NUMBER_OUT_OF_RANGE,
-          expression.span(),
-          "The initial value \""
-              + system.resolver().shown(expression.span())
-              + "\" is not a finite number: check it.");
+      frame
+          .problems()
+          .report(
+              ProblemKind.NUMBER_OUT_OF_RANGE,
+              expression.span(),
+              "The initial value \""
+                  + frame.resolver().shown(expression.span())
+                  + "\" is not a finite number: check it.");
       return Optional.empty();
     }
     return value;

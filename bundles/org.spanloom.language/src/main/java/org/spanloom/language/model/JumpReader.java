@@ -143,7 +143,8 @@ final class JumpReader {
                         component.unit().code(),
                         line.value().span(),
                         what));
-    return value.flatMap(q -> components.affine(q, component.unit(), line.value().span()));
+    return value.flatMap(
+        q -> components.affine(system.root(), q, component.unit(), line.value().span()));
   }
 
   /** Tells whether every number in the lines is finite at every time of the jump. */

@@ -20,7 +20,6 @@ import org.spanloom.language.text.Span;
 /** Finds the equation that governs each state and builds the linear form. */
 final class LinearFormBuilder {
 
-  private final SystemScope system;
   private final EquationReader reader;
   private final StateVector vector;
   private final List<ResolvedEquation> equations;
@@ -28,8 +27,7 @@ final class LinearFormBuilder {
   private final boolean[] held;
   private final EquationMatching matching;
 
-  LinearFormBuilder(SystemScope system, EquationReader reader, StateVector vector) {
-    this.system = system;
+  LinearFormBuilder(EquationReader reader, StateVector vector) {
     this.reader = reader;
     this.vector = vector;
     this.equations = reader.equations();
@@ -58,7 +56,7 @@ final class LinearFormBuilder {
   /** Returns the statement that governs a state; its declaration where there is none. */
   Span governing(StateMeaning state) {
     int equation = matching.equationOf(state.index());
-    return equation < 0 ? state.statement().span() : equations.get(equation).span();
+    return equation < 0 ? state.declared() : equations.get(equation).placed();
   }
 
   /**
@@ -87,27 +85,30 @@ final class LinearFormBuilder {
     int[] states =
         massSides.get(index).coefficients().keySet().stream().mapToInt(StateKey::state).toArray();
     if (states.length == 0) {
-      system
+      equation
+          .frame()
           .problems()
           .report(
               ProblemKind.EQUATION_WITHOUT_STATE,
               equation.span(),
               "The equation gives no derivative: " + reasonForNoDerivative(equation));
     } else if (IntStream.of(states).allMatch(this::isBalanced)) {
-      String name = vector.states().get(states[0]).statement().name().text();
-      system
+      String name = vector.states().get(states[0]).name();
+      equation
+          .frame()
           .problems()
           .report(
               ProblemKind.TOO_MANY_EQUATIONS,
               equation.span(),
               "\""
                   + name
-                  + "\" is governed by transfers, and a state is governed by transfers or by an equation,"
-                  + " never both: write this as transfers or remove the others.");
+                  + "\" is governed by transfers, and a state is governed by transfers or by an"
+                  + " equation, never both: write this as transfers or remove the others.");
     } else if (reader.allRead()) {
       StateMeaning state = vector.states().get(states[0]);
       String highest = StateVector.label(state, vector.order(states[0]));
-      system
+      equation
+          .frame()
           .problems()
           .report(
               ProblemKind.TOO_MANY_EQUATIONS,
@@ -116,7 +117,8 @@ final class LinearFormBuilder {
                   + highest
                   + "\""
                   + (states.length == 1 ? " is" : " and the other derivatives in this one are")
-                  + " given by other equations already. Remove one of them or declare another state.");
+                  + " given by other equations already. Remove one of them or declare another"
+                  + " state.");
     }
   }
 
@@ -130,7 +132,8 @@ final class LinearFormBuilder {
     keys.addAll(equation.right().coefficients().keySet());
     Optional<StateKey> lower = keys.stream().filter(k -> k.order() > 0).findFirst();
     if (lower.isEmpty()) {
-      return "no state in it has a prime. Write a derivative such as x', or declare an output or a let.";
+      return "no state in it has a prime. Write a derivative such as x', or declare an output or a"
+          + " let.";
     }
     StateMeaning state = vector.states().get(lower.get().state());
     String highest = StateVector.label(state, vector.order(state.index()));
@@ -143,26 +146,29 @@ final class LinearFormBuilder {
             + "\" stands elsewhere, so that \""
             + found
             + "\" is a state of its own here. Use one order for \""
-            + state.statement().name().text()
+            + state.name()
             + "\".";
   }
 
   private void reportStateAlone(StateMeaning state) {
-    String name = state.statement().name().text();
+    String name = state.name();
     String highest = StateVector.label(state, vector.order(state.index()));
     if (held[state.index()]) {
       if (reader.allRead()) {
-        system
+        state
+            .frame()
             .problems()
             .report(
                 ProblemKind.SINGULAR_MASS_MATRIX,
                 state.statement().name().span(),
                 "The equations cannot be solved for \""
                     + highest
-                    + "\": every equation that holds it is needed for another derivative. Write one more.");
+                    + "\": every equation that holds it is needed for another derivative. Write one"
+                    + " more.");
       }
     } else if (!reader.isMentioned(state.index()) || reader.allRead()) {
-      system
+      state
+          .frame()
           .problems()
           .report(
               ProblemKind.STATE_WITHOUT_EQUATION,
@@ -174,8 +180,8 @@ final class LinearFormBuilder {
                   + "\" stands in none. Write one, or declare a parameter instead.",
               Fix.insert(
                   "Insert an equation",
-                  system.lastStatementEnd(),
-                  "\n" + system.indent(state.statement().span()) + highest + " = 0"));
+                  state.frame().lastStatementEnd(state.statement().span().end()),
+                  "\n" + state.frame().indent(state.statement().span()) + highest + " = 0"));
     }
   }
 
@@ -184,7 +190,7 @@ final class LinearFormBuilder {
     List<MatrixEntry> matrix = new ArrayList<>();
     List<VectorEntry> forcing = new ArrayList<>();
     for (StateMeaning state : vector.states()) {
-      List<Span> declaration = List.of(state.statement().span());
+      List<Span> declaration = List.of(state.declared());
       int row = vector.last(state.index());
       for (int i = vector.first(state.index()); i < row; i++) {
         mass.add(new MatrixEntry(i, i, Term.ONE, declaration));

@@ -38,13 +38,32 @@ sealed interface Meaning {
    * A state.
    *
    * @param index place among the states of the system
+   * @param name how the whole system names it
    * @param statement its declaration
+   * @param frame where that was read
    * @param unit its unit
    */
-  record StateMeaning(int index, StateStatement statement, UnitOfMeasure unit) implements Meaning {
+  record StateMeaning(
+      int index, String name, StateStatement statement, Frame frame, UnitOfMeasure unit)
+      implements Meaning {
     @Override
     public Span nameSpan() {
-      return statement.name().span();
+      return frame.placed(statement.name().span());
+    }
+
+    /** Returns the name with primes, as the whole system uses it. */
+    String label(int primes) {
+      return primes == 0 ? name : name + "'".repeat(primes);
+    }
+
+    /** Returns the place of the declaration. */
+    Span declared() {
+      return frame.placed(statement.span());
+    }
+
+    /** Returns the unit of a derivative that is not declared. */
+    UnitOfMeasure derivativeUnit(int primes) {
+      return frame.derivativeUnit(unit, primes);
     }
   }
 

@@ -34,16 +34,15 @@ public final class ModelReader {
   private final SyntaxFile file;
   private final BooleanSupplier cancelled;
   private final Problems problems = new Problems();
-  private final Scope scope = new Scope(Optional.empty());
+  private final Frame frame;
   private final Declarations globals;
 
   private ModelReader(SyntaxFile file, BooleanSupplier cancelled) {
     this.file = file;
     this.cancelled = cancelled;
-    UnitResolver units = new UnitResolver(problems);
-    this.globals =
-        new Declarations(
-            scope, problems, units, new Resolver(file.source(), scope, problems, units));
+    this.frame =
+        new Frame(file.source(), file.statements(), new Scope(Optional.empty()), problems, "");
+    this.globals = frame.declarations();
   }
 
   /** Returns the model of a text. */
@@ -97,8 +96,7 @@ public final class ModelReader {
     for (Statement statement : file.statements()) {
       if (statement instanceof SystemStatement system) {
         reportDuplicate(system.name(), names);
-        systems.add(
-            new SystemReader(file.source(), system, globals, scope, problems, cancelled).read());
+        systems.add(new SystemReader(file.source(), system, frame, problems, cancelled).read());
       }
     }
     boolean complete =
@@ -111,14 +109,15 @@ public final class ModelReader {
   }
 
   private void broken(Name name) {
-    scope.define(name.text(), new BrokenMeaning(name.span()));
+    frame.scope().define(name.text(), new BrokenMeaning(name.span()));
   }
 
   private void misplaced(Statement statement) {
     problems.report(
         ProblemKind.STATEMENT_MISPLACED,
         statement.span(),
-        "Only parameters and named expressions stand outside of systems: move this line into a system.");
+        "Only parameters and named expressions stand outside of systems: move this line into a"
+            + " system.");
   }
 
   private void reportDuplicate(Name name, Set<String> names) {

@@ -112,8 +112,10 @@ final class RequirementReader {
     boolean needsSolution = left.get().holdsStates() || right.get().holdsStates();
     Optional<String> under = under(clause.under(), needsSolution, clause.span());
     UnitOfMeasure unit = shownUnit(comparison, left.get(), right.get());
-    Optional<AffineValue> a = components.affine(left.get(), unit, comparison.left().span());
-    Optional<AffineValue> b = components.affine(right.get(), unit, comparison.right().span());
+    Optional<AffineValue> a =
+        components.affine(system.root(), left.get(), unit, comparison.left().span());
+    Optional<AffineValue> b =
+        components.affine(system.root(), right.get(), unit, comparison.right().span());
     if (under.isEmpty() || a.isEmpty() || b.isEmpty()) {
       return Optional.empty();
     }
@@ -226,6 +228,7 @@ final class RequirementReader {
         .quantity(clause.value(), Place.INVARIANT)
         .flatMap(q ->
             components.affine(
+                system.root(),
                 q,
                 named
                     .unitOfName(clause.value())

@@ -22,7 +22,6 @@ import org.spanloom.language.syntax.Expression.PowerExpression;
 import org.spanloom.language.syntax.Expression.ProductExpression;
 import org.spanloom.language.syntax.Expression.SignedExpression;
 import org.spanloom.language.syntax.Expression.SumExpression;
-import org.spanloom.language.text.SourceText;
 import org.spanloom.language.text.Span;
 import org.spanloom.language.units.Dimension;
 import org.spanloom.language.units.UnitNames;
@@ -40,16 +39,16 @@ final class Resolver {
   /** Largest size of an exponent of a base dimension. */
   private static final int DIMENSION_LIMIT = 99;
 
-  private final SourceText source;
+  private final Frame frame;
   private final Problems problems;
   private final Literals literals;
   private final NameResolver names;
 
-  Resolver(SourceText source, Scope scope, Problems problems, UnitResolver units) {
-    this.source = source;
-    this.problems = problems;
-    this.literals = new Literals(problems, units);
-    this.names = new NameResolver(this, scope, problems);
+  Resolver(Frame frame) {
+    this.frame = frame;
+    this.problems = frame.problems();
+    this.literals = new Literals(problems, frame.units());
+    this.names = new NameResolver(this, frame.scope(), problems);
   }
 
   Literals literals() {
@@ -205,7 +204,7 @@ final class Resolver {
       } else if (!value.get().zero()) {
         sound = fitsFirst(first.orElseThrow(), firstSpan, value.get(), expression);
       }
-      total.add(addend.subtracted(), value.get(), expression.span());
+      total.add(addend.subtracted(), value.get(), frame.placed(expression.span()));
     }
     if (Math.abs(zeroPoints) > 1) {
       problems.report(
@@ -349,7 +348,8 @@ final class Resolver {
               + shown(power.base().span())
               + "\" is "
               + in(base)
-              + ", so the exponent must be a number as written, such as 2: otherwise the unit is unknown.");
+              + ", so the exponent must be a number as written, such as 2: otherwise the unit is"
+              + " unknown.");
       return Optional.empty();
     }
     int[] exponents = base.exponents();
@@ -394,8 +394,8 @@ final class Resolver {
         span,
         "\""
             + shown(span)
-            + "\" is an absolute value on a scale with a zero point of its own and cannot be multiplied,"
-            + " divided, raised to a power or negated: write a difference with ["
+            + "\" is an absolute value on a scale with a zero point of its own and cannot be"
+            + " multiplied, divided, raised to a power or negated: write a difference with ["
             + UnitNames.describe(unit.dimension())
             + "].");
     return Optional.empty();
@@ -427,7 +427,7 @@ final class Resolver {
 
   /** Returns the text of a span, shortened to be quoted in a message. */
   String shown(Span span) {
-    return Quotes.shortened(source.slice(span));
+    return Quotes.shortened(frame.slice(span));
   }
 
   static String in(Dimension dimension) {

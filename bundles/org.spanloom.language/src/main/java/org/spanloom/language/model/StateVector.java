@@ -76,6 +76,6 @@ final class StateVector {
   }
 
   static String label(StateMeaning state, int primes) {
-    return state.statement().name().text() + "'".repeat(primes);
+    return state.label(primes);
   }
 }

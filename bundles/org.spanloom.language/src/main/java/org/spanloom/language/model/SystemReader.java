@@ -46,11 +46,11 @@ final class SystemReader {
   private static final double LARGEST_ACCURACY = 1;
 
   private final SystemStatement statement;
-  private final Declarations globals;
+  private final Frame file;
   private final Problems problems;
   private final BooleanSupplier cancelled;
   private final SystemScope system;
-  private final Declarations declarations;
+  private final List<Frame> frames = new ArrayList<>();
   private final Set<String> unreadGoverned = new HashSet<>();
   private final Set<String> unreadNames = new HashSet<>();
   private final boolean timeKnown;
@@ -61,20 +61,20 @@ final class SystemReader {
   SystemReader(
       SourceText source,
       SystemStatement statement,
-      Declarations globals,
-      Scope outer,
+      Frame file,
       Problems problems,
       BooleanSupplier cancelled) {
     this.statement = statement;
-    this.globals = globals;
+    this.file = file;
     this.problems = problems;
     this.cancelled = cancelled;
-    Scope scope = new Scope(Optional.of(outer));
-    Optional<UnitOfMeasure> timeUnit = timeUnit(statement, new UnitResolver(problems), problems);
+    Scope scope = new Scope(Optional.of(file.scope()));
+    Frame root = new Frame(source, statement.body(), scope, problems, "");
+    Optional<UnitOfMeasure> timeUnit = timeUnit(statement, root.units(), problems);
     this.timeKnown = timeUnit.isPresent();
-    this.system =
-        new SystemScope(source, statement, problems, scope, timeUnit.orElse(UnitOfMeasure.ONE));
-    this.declarations = new Declarations(scope, problems, system.units(), system.resolver());
+    timeUnit.ifPresent(root::setTimeUnit);
+    this.system = new SystemScope(root);
+    this.frames.add(root);
     this.accuracySpan = statement.name().span();
   }
 
@@ -96,22 +96,19 @@ final class SystemReader {
   }
 
   SystemModel read() {
-    collect();
-    declarations.read();
+    frames.forEach(this::collect);
+    frames.forEach(frame -> frame.declarations().read());
     Times times = new Times(system, statement.over(), timeKnown);
     EquationReader equations = new EquationReader(system);
-    for (Statement s : statement.body()) {
-      ModelReader.check(cancelled);
-      if (s instanceof EquationStatement equation) {
-        equations.read(equation);
-      }
+    for (Frame frame : frames) {
+      readEquations(frame, equations);
     }
     readTransfers(equations);
     if (hasUnread) {
-      equations.noteUnread(unreadGoverned);
+      equations.noteUnread(system.root(), unreadGoverned);
     }
     StateVector vector = equations.stateVector();
-    LinearFormBuilder builder = new LinearFormBuilder(system, equations, vector);
+    LinearFormBuilder builder = new LinearFormBuilder(equations, vector);
     Optional<LinearForm> form = builder.build();
     reportNoStates();
     Components components = new Components(system, vector, builder);
@@ -146,11 +143,13 @@ final class SystemReader {
     }
     checkDefinedness(times, form, outputs, initialValues.complete(), bases.bases());
     unreadNames.forEach(system.scope()::markUsed);
-    declarations.reportUnused();
-    List<Parameter> parameters = new ArrayList<>(globals.parameters());
-    parameters.addAll(declarations.parameters());
-    List<Let> lets = new ArrayList<>(globals.lets());
-    lets.addAll(declarations.lets());
+    system.root().declarations().reportUnused();
+    List<Parameter> parameters = new ArrayList<>(file.declarations().parameters());
+    List<Let> lets = new ArrayList<>(file.declarations().lets());
+    for (Frame frame : frames) {
+      parameters.addAll(frame.declarations().parameters());
+      lets.addAll(frame.declarations().lets());
+    }
     return new SystemModel(
         statement.name().text(),
         system.scope().timeName(),
@@ -173,28 +172,40 @@ final class SystemReader {
         statement.name().span());
   }
 
+  private void readEquations(Frame frame, EquationReader equations) {
+    for (Statement s : frame.body()) {
+      ModelReader.check(cancelled);
+      if (s instanceof EquationStatement equation) {
+        equations.read(frame, equation);
+      }
+    }
+  }
+
   private void readTransfers(EquationReader equations) {
     TransferReader transfers = new TransferReader(system, equations);
-    for (Statement s : statement.body()) {
-      ModelReader.check(cancelled);
-      if (s instanceof TransferStatement transfer) {
-        transfers.read(transfer);
+    for (Frame frame : frames) {
+      for (Statement s : frame.body()) {
+        ModelReader.check(cancelled);
+        if (s instanceof TransferStatement transfer) {
+          transfers.read(frame, transfer);
+        }
       }
     }
     transfers.finish();
   }
 
-  /** Takes all names, so that the order of declarations does not matter. */
-  private void collect() {
-    Scope scope = system.scope();
+  /** Takes all names of a frame, so that the order of declarations does not matter. */
+  private void collect(Frame frame) {
+    Scope scope = frame.scope();
+    Declarations declarations = frame.declarations();
     Name time = statement.over().map(OverClause::name).orElse(new Name("t", statement.header()));
     if (!timeKnown) {
       scope.define(time.text(), new BrokenMeaning(time.span()));
     } else if (declarations.takesName(time)) {
-      scope.define(time.text(), new TimeMeaning(system.timeUnit(), time.span()));
+      scope.define(time.text(), new TimeMeaning(frame.timeUnit(), time.span()));
     }
     List<StateStatement> derivatives = new ArrayList<>();
-    for (Statement s : statement.body()) {
+    for (Statement s : frame.body()) {
       switch (s) {
         case ParameterStatement parameter -> declarations.collect(parameter);
         case LetStatement let -> declarations.collect(let);
@@ -203,7 +214,7 @@ final class SystemReader {
         case StateStatement state when state.primes() > 0 -> derivatives.add(state);
         case StateStatement state -> {
           if (declarations.takesName(state.name())) {
-            system.declareState(state);
+            system.declareState(frame, state);
           }
         }
         case UnreadStatement unread ->
@@ -223,7 +234,7 @@ final class SystemReader {
         case AccuracyStatement stated -> {}
       }
     }
-    derivatives.forEach(system::declareDerivative);
+    derivatives.forEach(d -> system.declareDerivative(frame, d));
   }
 
   /**
@@ -265,19 +276,21 @@ final class SystemReader {
 
   private List<Output> outputs(Components components) {
     List<Output> outputs = new ArrayList<>();
-    for (Declarations.ReadOutput output : declarations.outputs()) {
-      OutputStatement text = output.statement();
-      components
-          .affine(output.value(), output.unit(), text.value().span())
-          .map(value ->
-              new Output(
-                  text.name().text(),
-                  output.unit(),
-                  value,
-                  text.documentation(),
-                  text.span(),
-                  text.name().span()))
-          .ifPresent(outputs::add);
+    for (Frame frame : frames) {
+      for (Declarations.ReadOutput output : frame.declarations().outputs()) {
+        OutputStatement text = output.statement();
+        components
+            .affine(frame, output.value(), output.unit(), text.value().span())
+            .map(value ->
+                new Output(
+                    frame.label(text.name().text()),
+                    output.unit(),
+                    value,
+                    text.documentation(),
+                    frame.placed(text.span()),
+                    frame.placed(text.name().span())))
+            .ifPresent(outputs::add);
+      }
     }
     return outputs;
   }
@@ -291,7 +304,7 @@ final class SystemReader {
     if (times.isKnown()) {
       double start = DefinednessCheck.start(times, values, bases);
       DefinednessCheck check = new DefinednessCheck(system, times, start, cancelled);
-      check.lets(declarations.lets());
+      frames.forEach(frame -> check.lets(frame.declarations().lets()));
       form.ifPresent(check::equations);
       check.outputs(outputs);
       check.closedForms(bases);

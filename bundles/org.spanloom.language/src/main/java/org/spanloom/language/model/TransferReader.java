@@ -35,53 +35,54 @@ final class TransferReader {
 
   private final SystemScope system;
   private final EquationReader equations;
-  private final Problems problems;
   private final Map<Integer, Balance> balances = new TreeMap<>();
   private final List<Flow> flows = new ArrayList<>();
 
   /** What enters and leaves one state. */
   private static final class Balance {
     private final QuantitySum sum = new QuantitySum();
+    private final Frame frame;
     private final Span first;
 
-    Balance(Span first) {
+    Balance(Frame frame, Span first) {
+      this.frame = frame;
       this.first = first;
     }
   }
 
-  private record Flow(Quantity value, Span span) {}
+  private record Flow(Frame frame, Quantity value, Span span) {}
 
   TransferReader(SystemScope system, EquationReader equations) {
     this.system = system;
     this.equations = equations;
-    this.problems = system.problems();
   }
 
-  /** Takes a transfer. */
-  void read(TransferStatement transfer) {
-    Optional<Quantity> flow = system.resolver().quantity(transfer.flow(), Place.TRANSFER);
-    Optional<StateMeaning> from = transfer.from().state().flatMap(this::state);
-    Optional<StateMeaning> to = transfer.to().state().flatMap(this::state);
+  /** Takes a transfer of a frame. */
+  void read(Frame frame, TransferStatement transfer) {
+    Optional<Quantity> flow = frame.resolver().quantity(transfer.flow(), Place.TRANSFER);
+    Optional<StateMeaning> from = transfer.from().state().flatMap(end -> state(frame, end));
+    Optional<StateMeaning> to = transfer.to().state().flatMap(end -> state(frame, end));
     boolean sound =
         from.isPresent() == transfer.from().state().isPresent()
             && to.isPresent() == transfer.to().state().isPresent();
     if (!sound
-        || !leadsSomewhere(transfer, from, to)
+        || !leadsSomewhere(frame, transfer, from, to)
         || flow.isEmpty()
-        || !fits(transfer, from.or(() -> to).orElseThrow(), flow.get())) {
-      equations.noteUnread(names(transfer));
+        || !fits(frame, transfer, from.or(() -> to).orElseThrow(), flow.get())) {
+      equations.noteUnread(frame, names(transfer));
       return;
     }
-    flows.add(new Flow(flow.get(), transfer.flow().span()));
-    from.ifPresent(state -> add(transfer, state, true, flow.get()));
-    to.ifPresent(state -> add(transfer, state, false, flow.get()));
+    flows.add(new Flow(frame, flow.get(), transfer.flow().span()));
+    from.ifPresent(state -> add(frame, transfer, state, true, flow.get()));
+    to.ifPresent(state -> add(frame, transfer, state, false, flow.get()));
   }
 
-  private void add(TransferStatement transfer, StateMeaning state, boolean leaves, Quantity flow) {
+  private void add(
+      Frame frame, TransferStatement transfer, StateMeaning state, boolean leaves, Quantity flow) {
     balances
-        .computeIfAbsent(state.index(), i -> new Balance(transfer.span()))
+        .computeIfAbsent(state.index(), i -> new Balance(frame, transfer.span()))
         .sum
-        .add(leaves, flow, transfer.flow().span());
+        .add(leaves, flow, frame.placed(transfer.flow().span()));
   }
 
   private static Set<String> names(TransferStatement transfer) {
@@ -103,9 +104,10 @@ final class TransferReader {
     }
     balances.forEach((index, balance) -> {
       StateMeaning state = system.states().get(index);
-      Dimension dimension = system.derivativeUnit(state, 1).dimension();
+      Dimension dimension = state.derivativeUnit(1).dimension();
       equations.addBalance(
           new ResolvedEquation(
+              balance.frame,
               Quantity.state(StateKey.running(index, 1), dimension),
               balance.first,
               balance.sum.total(dimension),
@@ -117,114 +119,134 @@ final class TransferReader {
 
   private void reportDerivative(Flow flow, StateKey key) {
     String label = StateVector.label(system.states().get(key.state()), key.order());
-    problems.report(
-        ProblemKind.DERIVATIVE_MISPLACED,
-        flow.span(),
-        "\""
-            + label
-            + "\" follows from the transfers and cannot stand in the flow of one: write the flow by states,"
-            + " parameters and functions of time.");
+    flow.frame()
+        .problems()
+        .report(
+            ProblemKind.DERIVATIVE_MISPLACED,
+            flow.span(),
+            "\""
+                + label
+                + "\" follows from the transfers and cannot stand in the flow of one: write the"
+                + " flow by states, parameters and functions of time.");
     equations.noteUnread();
   }
 
-  private Optional<StateMeaning> state(NameExpression end) {
+  private Optional<StateMeaning> state(Frame frame, NameExpression end) {
     Name name = end.name();
-    Optional<Meaning> meaning = system.scope().use(name.text());
+    Optional<Meaning> meaning = frame.scope().use(name.text());
     if (meaning.isEmpty()) {
-      reportUnknown(name);
+      reportUnknown(frame, name);
     } else if (meaning.get() instanceof StateMeaning state && end.primes() == 0) {
-      return amount(state, end);
+      return amount(frame, state, end);
     } else if (!(meaning.get() instanceof BrokenMeaning)) {
-      problems.report(
-          ProblemKind.NAME_MISUSED,
-          end.span(),
-          "\""
-              + end.label()
-              + "\" is "
-              + (end.primes() > 0 ? "a derivative" : meaning.get().kind())
-              + ": a transfer leads from a state to a state, or from or to outside.");
+      frame
+          .problems()
+          .report(
+              ProblemKind.NAME_MISUSED,
+              end.span(),
+              "\""
+                  + end.label()
+                  + "\" is "
+                  + (end.primes() > 0 ? "a derivative" : meaning.get().kind())
+                  + ": a transfer leads from a state to a state, or from or to outside.");
     }
     return Optional.empty();
   }
 
-  private Optional<StateMeaning> amount(StateMeaning state, NameExpression end) {
+  private static Optional<StateMeaning> amount(
+      Frame frame, StateMeaning state, NameExpression end) {
     if (state.unit().offset() == 0) {
       return Optional.of(state);
     }
-    problems.report(
-        ProblemKind.UNIT_OFFSET,
-        end.span(),
-        "\""
-            + end.label()
-            + "\" is in "
-            + state.unit().code()
-            + ", a unit with a zero point of its own, and so is no amount: write an equation instead of transfers.");
+    frame
+        .problems()
+        .report(
+            ProblemKind.UNIT_OFFSET,
+            end.span(),
+            "\""
+                + end.label()
+                + "\" is in "
+                + state.unit().code()
+                + ", a unit with a zero point of its own, and so is no amount: write an equation"
+                + " instead of transfers.");
     return Optional.empty();
   }
 
-  private void reportUnknown(Name name) {
+  private void reportUnknown(Frame frame, Name name) {
     Optional<String> nearest =
-        problems.maySuggest()
-            ? Nearest.of(
-                name.text(),
-                system.states().stream().map(s -> s.statement().name().text()).toList())
+        frame.problems().maySuggest()
+            ? Nearest.of(name.text(), system.states().stream().map(s -> s.name()).toList())
             : Optional.empty();
-    problems.report(
-        ProblemKind.NAME_UNKNOWN,
-        name.span(),
-        "\""
-            + Quotes.shortened(name.text())
-            + "\" is not declared: "
-            + nearest.map(n -> "did you mean " + n + "?").orElse("declare it as a state."),
-        nearest.stream().map(n -> Fix.replace("Write " + n, name.span(), n)).toArray(Fix[]::new));
+    frame
+        .problems()
+        .report(
+            ProblemKind.NAME_UNKNOWN,
+            name.span(),
+            "\""
+                + Quotes.shortened(name.text())
+                + "\" is not declared: "
+                + nearest.map(n -> "did you mean " + n + "?").orElse("declare it as a state."),
+            nearest.stream()
+                .map(n -> Fix.replace("Write " + n, name.span(), n))
+                .toArray(Fix[]::new));
   }
 
-  private boolean leadsSomewhere(
-      TransferStatement transfer, Optional<StateMeaning> from, Optional<StateMeaning> to) {
+  private static boolean leadsSomewhere(
+      Frame frame,
+      TransferStatement transfer,
+      Optional<StateMeaning> from,
+      Optional<StateMeaning> to) {
     Span ends = transfer.from().span().join(transfer.to().span());
     if (from.isEmpty() && to.isEmpty()) {
-      problems.report(
-          ProblemKind.TRANSFER_INVALID,
-          ends,
-          "Both ends of this transfer are outside: name the state that it fills or empties.");
+      frame
+          .problems()
+          .report(
+              ProblemKind.TRANSFER_INVALID,
+              ends,
+              "Both ends of this transfer are outside: name the state that it fills or empties.");
       return false;
     }
     if (from.isEmpty() || to.isEmpty()) {
       return true;
     }
     if (from.get().index() == to.get().index()) {
-      problems.report(
-          ProblemKind.TRANSFER_INVALID,
-          ends,
-          "This transfer leads from \""
-              + from.get().statement().name().text()
-              + "\" back to it and changes nothing: name another end.");
+      frame
+          .problems()
+          .report(
+              ProblemKind.TRANSFER_INVALID,
+              ends,
+              "This transfer leads from \""
+                  + from.get().name()
+                  + "\" back to it and changes nothing: name another end.");
       return false;
     }
     UnitOfMeasure left = from.get().unit();
     UnitOfMeasure right = to.get().unit();
     if (!left.dimension().equals(right.dimension())) {
-      problems.report(
-          ProblemKind.UNIT_MISMATCH,
-          ends,
-          "What leaves one amount enters the other, but \""
-              + from.get().statement().name().text()
-              + "\" is "
-              + Resolver.in(left.dimension())
-              + " and \""
-              + to.get().statement().name().text()
-              + "\" is "
-              + Resolver.in(right.dimension())
-              + ": give both one dimension.");
+      frame
+          .problems()
+          .report(
+              ProblemKind.UNIT_MISMATCH,
+              ends,
+              "What leaves one amount enters the other, but \""
+                  + from.get().name()
+                  + "\" is "
+                  + Resolver.in(left.dimension())
+                  + " and \""
+                  + to.get().name()
+                  + "\" is "
+                  + Resolver.in(right.dimension())
+                  + ": give both one dimension.");
       return false;
     }
     return true;
   }
 
-  private boolean fits(TransferStatement transfer, StateMeaning amount, Quantity flow) {
-    UnitOfMeasure expected = system.derivativeUnit(amount, 1);
+  private static boolean fits(
+      Frame frame, TransferStatement transfer, StateMeaning amount, Quantity flow) {
+    UnitOfMeasure expected = amount.derivativeUnit(1);
     if (flow.zero()
-        || system.scope().timeName().isEmpty()
+        || frame.scope().timeName().isEmpty()
         || flow.dimension().equals(expected.dimension())) {
       return true;
     }
@@ -238,17 +260,19 @@ final class TransferReader {
                   " [" + expected.code() + "]")
             }
             : new Fix[0];
-    problems.report(
-        ProblemKind.UNIT_MISMATCH,
-        expression.span(),
-        "\""
-            + system.resolver().shown(expression.span())
-            + "\" is "
-            + Resolver.in(flow.dimension())
-            + ", but this flow is an amount over time, in "
-            + expected.code()
-            + ": check the factors and their units.",
-        fixes);
+    frame
+        .problems()
+        .report(
+            ProblemKind.UNIT_MISMATCH,
+            expression.span(),
+            "\""
+                + frame.resolver().shown(expression.span())
+                + "\" is "
+                + Resolver.in(flow.dimension())
+                + ", but this flow is an amount over time, in "
+                + expected.code()
+                + ": check the factors and their units.",
+            fixes);
     return false;
   }
 }
