@@ -158,7 +158,7 @@ public final class Completion {
   }
 
   private Optional<SystemStatement> system() {
-    return Word.systemAt(model.syntax(), offset);
+    return Names.of(model.syntax()).systemAt(offset);
   }
 
   private void beginning() {

@@ -7,7 +7,6 @@ package org.spanloom.language.editing;
 
 import java.util.Optional;
 import org.spanloom.language.model.Model;
-import org.spanloom.language.syntax.SyntaxFile;
 import org.spanloom.language.text.Span;
 
 /** Finds declarations. */
@@ -17,11 +16,9 @@ public final class Definition {
 
   /** Returns the place of the name in the declaration of what stands at an offset. */
   public static Optional<Span> at(Model model, int offset) {
-    SyntaxFile file = model.syntax();
-    return Word.at(model.source(), offset)
-        .flatMap(word ->
-            word.declaration(file)
-                .map(Word::nameSpan)
-                .or(() -> word.time(file).map(over -> over.name().span())));
+    return Names.of(model.syntax())
+        .at(offset)
+        .flatMap(o -> o.symbol().declaration(o.primes()))
+        .map(Symbol.Declared::label);
   }
 }

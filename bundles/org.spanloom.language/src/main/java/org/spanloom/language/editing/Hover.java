@@ -9,6 +9,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import org.spanloom.language.editing.Symbol.Declared;
 import org.spanloom.language.model.Function;
 import org.spanloom.language.model.Let;
 import org.spanloom.language.model.Model;
@@ -17,9 +18,10 @@ import org.spanloom.language.model.Parameter;
 import org.spanloom.language.model.StateComponent;
 import org.spanloom.language.model.SystemModel;
 import org.spanloom.language.model.TermEvaluator;
-import org.spanloom.language.syntax.Statement.Declaration;
-import org.spanloom.language.syntax.Statement.StateStatement;
+import org.spanloom.language.syntax.Lexer;
+import org.spanloom.language.syntax.Token;
 import org.spanloom.language.syntax.TokenKind;
+import org.spanloom.language.text.SourceText;
 import org.spanloom.language.text.Span;
 import org.spanloom.language.units.UnitNames;
 import org.spanloom.language.units.UnitOfMeasure;
@@ -31,42 +33,50 @@ public final class Hover {
   private static final int LONGEST_LINE = 160;
 
   private final Model model;
-  private final Word word;
   private final List<String> lines = new ArrayList<>();
 
-  private Hover(Model model, Word word) {
+  private Hover(Model model) {
     this.model = model;
-    this.word = word;
   }
 
   /** Returns what to say about the name or unit at an offset. */
   public static Optional<HoverText> at(Model model, int offset) {
-    return Word.at(model.source(), offset).flatMap(word -> new Hover(model, word).text());
+    Optional<Occurrence> name = Names.of(model.syntax()).at(offset);
+    return name.isPresent()
+        ? new Hover(model).name(name.get())
+        : unitAt(model.source(), offset).flatMap(unit -> new Hover(model).unit(unit));
   }
 
-  private Optional<HoverText> text() {
-    if (word.token().kind() == TokenKind.UNIT) {
-      unit();
-      return result(word.token().span());
+  private static Optional<Span> unitAt(SourceText source, int offset) {
+    if (offset < 0 || offset > source.content().length()) {
+      return Optional.empty();
     }
-    Optional<Declaration> declaration = word.declaration(model.syntax());
-    if (declaration.isPresent()) {
-      declaration(declaration.get());
-    } else if (word.time(model.syntax()).isPresent()) {
-      Span over = word.time(model.syntax()).get().span();
-      lines.add("independent variable: " + line(over));
-    } else if (word.token().kind().isName()) {
-      builtIn();
+    int lineStart = source.lineSpan(source.line(offset)).start();
+    return Lexer.lexLine(source.content(), lineStart).stream()
+        .filter(t -> t.kind() == TokenKind.UNIT && t.span().touches(offset))
+        .map(Token::span)
+        .findFirst();
+  }
+
+  private Optional<HoverText> name(Occurrence name) {
+    Optional<Declared> declared = name.symbol().declaration(name.primes());
+    if (declared.isEmpty()) {
+      builtIn(name.symbol().name());
+    } else if (name.symbol().kind() == SymbolKind.TIME) {
+      lines.add("independent variable: " + line(declared.get().statement()));
+    } else {
+      declaration(name, declared.get());
     }
-    return result(word.span());
+    return result(name.label());
   }
 
   private Optional<HoverText> result(Span span) {
     return lines.isEmpty() ? Optional.empty() : Optional.of(new HoverText(span, lines));
   }
 
-  private void unit() {
-    String code = word.text().substring(1, word.text().length() - 1).strip();
+  private Optional<HoverText> unit(Span place) {
+    String text = model.source().slice(place);
+    String code = text.substring(1, text.length() - 1).strip();
     switch (UnitReader.read(code)) {
       case UnitReader.Unknown unknown -> lines.add(unknown.message());
       case UnitReader.Known known -> {
@@ -82,39 +92,32 @@ public final class Hover {
                 : "0 [" + code + "] = " + number(unit.offset()) + " [" + base + "]");
       }
     }
+    return result(place);
   }
 
-  private void declaration(Declaration declaration) {
-    lines.add(line(declaration.span()));
-    Optional<SystemModel> system =
-        model.systems().stream().filter(s -> s.span().touches(word.token().start())).findFirst();
-    system.ifPresent(s -> meaning(s, declaration));
-    if (!declaration.documentation().isEmpty()) {
-      lines.addAll(declaration.documentation().lines().toList());
-    }
-    lines.add("line " + model.source().line(declaration.span().start()));
+  private void declaration(Occurrence name, Declared declared) {
+    lines.add(line(declared.statement()));
+    model.systems().stream()
+        .filter(s -> s.span().touches(name.span().start()))
+        .findFirst()
+        .ifPresent(s -> meaning(s, name, declared));
+    lines.addAll(declared.documentation().lines().toList());
+    lines.add("line " + model.source().line(declared.statement().start()));
   }
 
-  private void meaning(SystemModel system, Declaration declaration) {
-    String name = declaration.name().text();
-    if (declaration instanceof StateStatement) {
+  private void meaning(SystemModel system, Occurrence name, Declared declared) {
+    if (name.symbol().kind() == SymbolKind.STATE) {
       system.states().stream()
-          .filter(c -> c.name().equals(name))
-          .forEach(c -> component(system, c));
+          .filter(c -> c.name().equals(name.symbol().name()))
+          .forEach(c -> component(system, c, name.primes()));
       return;
     }
-    for (Parameter parameter : system.parameters()) {
-      if (parameter.nameSpan().equals(declaration.name().span())) {
-        parameter(parameter);
-      }
-    }
-    for (Let let : system.lets()) {
-      if (let.nameSpan().equals(declaration.name().span())) {
-        let(let);
-      }
-    }
+    system.parameters().stream()
+        .filter(p -> p.nameSpan().equals(declared.name()))
+        .forEach(this::parameter);
+    system.lets().stream().filter(l -> l.nameSpan().equals(declared.name())).forEach(this::let);
     system.outputs().stream()
-        .filter(o -> o.nameSpan().equals(declaration.name().span()))
+        .filter(o -> o.nameSpan().equals(declared.name()))
         .forEach(o ->
             lines.add(
                 "output"
@@ -151,11 +154,11 @@ public final class Hover {
                 + in(let.unit()));
   }
 
-  private void component(SystemModel system, StateComponent component) {
-    if (component.order() != word.primes() && !isLast(system, component)) {
+  private void component(SystemModel system, StateComponent component, int primes) {
+    if (component.order() != primes && !isLast(system, component)) {
       return;
     }
-    if (component.order() == word.primes()) {
+    if (component.order() == primes) {
       lines.add(
           "component "
               + (component.index() + 1)
@@ -174,10 +177,10 @@ public final class Hover {
         || !system.states().get(next).name().equals(component.name());
   }
 
-  private void builtIn() {
-    Optional<Function> function = Function.named(word.text());
+  private void builtIn(String name) {
+    Optional<Function> function = Function.named(name);
     function.ifPresent(f -> lines.add(f.code() + ": " + f.meaning()));
-    NamedConstant.named(word.text())
+    NamedConstant.named(name)
         .ifPresent(c -> lines.add(c.code() + " = " + c.value() + ": " + c.meaning()));
   }
 

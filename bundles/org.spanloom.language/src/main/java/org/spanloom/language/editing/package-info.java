@@ -13,9 +13,14 @@
  * <tr><td>What can be folded?</td><td>{@link org.spanloom.language.editing.Folding}</td></tr>
  * <tr><td>What is this?</td><td>{@link org.spanloom.language.editing.Hover}</td></tr>
  * <tr><td>Where is this declared?</td><td>{@link org.spanloom.language.editing.Definition}</td></tr>
+ * <tr><td>Where is this used?</td><td>{@link org.spanloom.language.editing.References}</td></tr>
+ * <tr><td>May this be called otherwise?</td><td>{@link org.spanloom.language.editing.Rename}</td></tr>
  * <tr><td>What can stand here?</td><td>{@link org.spanloom.language.editing.Completion}</td></tr>
  * </table>
  *
- * <p>Nothing here knows an editor, and every answer works on texts with errors.
+ * <p>{@link org.spanloom.language.editing.Names} says what a name stands for, and every answer
+ * about one comes from there. A new form of statement or expression tells its names in {@code
+ * NameBinder}, and those it declares in {@code NameScopes}. Nothing here knows an editor, and every
+ * answer works on texts with errors.
  */
 package org.spanloom.language.editing;

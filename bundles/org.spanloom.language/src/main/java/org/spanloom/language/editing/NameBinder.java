@@ -1,0 +1,355 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.editing;
+
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.IdentityHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import org.spanloom.language.editing.Occurrence.Role;
+import org.spanloom.language.editing.SymbolKind.Room;
+import org.spanloom.language.syntax.Comparison;
+import org.spanloom.language.syntax.Expression;
+import org.spanloom.language.syntax.Expression.CallExpression;
+import org.spanloom.language.syntax.Expression.MissingExpression;
+import org.spanloom.language.syntax.Expression.NameExpression;
+import org.spanloom.language.syntax.Expression.NumberExpression;
+import org.spanloom.language.syntax.Expression.ParenthesisedExpression;
+import org.spanloom.language.syntax.Expression.PowerExpression;
+import org.spanloom.language.syntax.Expression.ProductExpression;
+import org.spanloom.language.syntax.Expression.SignedExpression;
+import org.spanloom.language.syntax.Expression.SumExpression;
+import org.spanloom.language.syntax.Lexer;
+import org.spanloom.language.syntax.Name;
+import org.spanloom.language.syntax.OverClause;
+import org.spanloom.language.syntax.RequireClause;
+import org.spanloom.language.syntax.RequireClause.Compares;
+import org.spanloom.language.syntax.RequireClause.HasPeriod;
+import org.spanloom.language.syntax.RequireClause.IsInvariant;
+import org.spanloom.language.syntax.RequireClause.IsNonnegative;
+import org.spanloom.language.syntax.RequireClause.IsStable;
+import org.spanloom.language.syntax.RequireClause.LimitsCondition;
+import org.spanloom.language.syntax.Statement;
+import org.spanloom.language.syntax.Statement.AccuracyStatement;
+import org.spanloom.language.syntax.Statement.BasisStatement;
+import org.spanloom.language.syntax.Statement.BoundaryStatement;
+import org.spanloom.language.syntax.Statement.Change;
+import org.spanloom.language.syntax.Statement.Condition;
+import org.spanloom.language.syntax.Statement.EquationStatement;
+import org.spanloom.language.syntax.Statement.InitialValuesStatement;
+import org.spanloom.language.syntax.Statement.InputStatement;
+import org.spanloom.language.syntax.Statement.JumpStatement;
+import org.spanloom.language.syntax.Statement.JumpTime.Once;
+import org.spanloom.language.syntax.Statement.JumpTime.Repeated;
+import org.spanloom.language.syntax.Statement.LaterStatement;
+import org.spanloom.language.syntax.Statement.LetStatement;
+import org.spanloom.language.syntax.Statement.OutputStatement;
+import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.RequireStatement;
+import org.spanloom.language.syntax.Statement.Row;
+import org.spanloom.language.syntax.Statement.Setting;
+import org.spanloom.language.syntax.Statement.StateStatement;
+import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Statement.TransferEnd;
+import org.spanloom.language.syntax.Statement.TransferStatement;
+import org.spanloom.language.syntax.Statement.UnreadStatement;
+import org.spanloom.language.syntax.Token;
+import org.spanloom.language.syntax.TokenKind;
+import org.spanloom.language.text.SourceText;
+import org.spanloom.language.text.Span;
+
+/**
+ * Finds what the names in statements stand for. In what could not be read, the words tell: each
+ * that is a name in scope is an occurrence of it.
+ */
+final class NameBinder {
+
+  private final SourceText source;
+  private final NameScopes scopes;
+  private final List<Occurrence> found = new ArrayList<>();
+  private final List<Occurrence> derivatives = new ArrayList<>();
+  private NameScope scope;
+  private boolean inEquation;
+
+  NameBinder(SourceText source, NameScopes scopes) {
+    this.source = source;
+    this.scopes = scopes;
+    this.scope = scopes.file();
+  }
+
+  /** Returns the names in statements of one body, in the order of the text. */
+  List<Occurrence> bind(NameScope body, List<Statement> statements) {
+    scope = body;
+    statements.forEach(this::statement);
+    return inTextOrder();
+  }
+
+  /** Returns the names in the first line of a system. */
+  List<Occurrence> bindHeader(SystemStatement system) {
+    header(system);
+    return inTextOrder();
+  }
+
+  private void statement(Statement statement) {
+    switch (statement) {
+      case SystemStatement system -> system(system);
+      case ParameterStatement parameter -> {
+        declared(Room.VALUES, parameter.name(), 0);
+        expression(parameter.value());
+        parameter.uncertainty().ifPresent(u -> expression(u.halfWidth()));
+      }
+      case LetStatement let -> {
+        declared(Room.VALUES, let.name(), 0);
+        let.argument().ifPresent(this::value);
+        expression(let.value());
+      }
+      case InputStatement input -> {
+        declared(Room.VALUES, input.name(), 0);
+        value(input.argument());
+        expression(input.value());
+      }
+      case StateStatement state -> {
+        declared(Room.VALUES, state.name(), state.primes());
+        state.initial().ifPresent(this::expression);
+        state.scale().ifPresent(this::expression);
+      }
+      case OutputStatement output -> {
+        declared(Room.VALUES, output.name(), 0);
+        expression(output.value());
+      }
+      case EquationStatement equation -> {
+        inEquation = true;
+        expression(equation.left());
+        expression(equation.right());
+        inEquation = false;
+      }
+      case TransferStatement transfer -> {
+        end(transfer.from());
+        end(transfer.to());
+        expression(transfer.flow());
+      }
+      case JumpStatement jump -> jump(jump);
+      case InitialValuesStatement values -> initialValues(values);
+      case BoundaryStatement boundary -> boundary(boundary);
+      case BasisStatement basis -> basis(basis);
+      case RequireStatement require -> clause(require.clause());
+      case AccuracyStatement accuracy -> expression(accuracy.value());
+      case LaterStatement later -> words(later.span());
+      case UnreadStatement unread -> words(unread.span());
+    }
+  }
+
+  private void system(SystemStatement system) {
+    NameScope around = scope;
+    header(system);
+    system.body().forEach(this::statement);
+    scope = around;
+  }
+
+  /** Takes the first line of a system; from there on its names are in scope. */
+  private void header(SystemStatement system) {
+    declared(Room.SYSTEMS, system.name(), 0);
+    scope = scopes.of(system);
+    if (system.over().isPresent()) {
+      over(system.over().get());
+    } else {
+      words(new Span(system.name().span().end(), system.header().end()));
+    }
+  }
+
+  private void over(OverClause over) {
+    declared(Room.VALUES, over.name(), 0);
+    over.start().ifPresent(b -> expression(b.value()));
+    over.end().ifPresent(b -> expression(b.value()));
+  }
+
+  private void end(TransferEnd end) {
+    end.state().ifPresent(state -> name(state, Role.WRITTEN));
+  }
+
+  private void jump(JumpStatement jump) {
+    if (!jump.allRead()) {
+      words(jump.span());
+      return;
+    }
+    switch (jump.time()) {
+      case Once once -> expression(once.time());
+      case Repeated repeated -> {
+        expression(repeated.period());
+        expression(repeated.first());
+        expression(repeated.last());
+      }
+    }
+    for (Change change : jump.changes()) {
+      name(change.target(), Role.WRITTEN);
+      expression(change.value());
+    }
+  }
+
+  private void boundary(BoundaryStatement boundary) {
+    if (!boundary.allRead()) {
+      words(boundary.span());
+      return;
+    }
+    declared(Room.CONDITIONS, boundary.name(), 0);
+    for (Condition condition : boundary.conditions()) {
+      expression(condition.left());
+      expression(condition.right());
+    }
+  }
+
+  private void initialValues(InitialValuesStatement values) {
+    if (!values.allRead()) {
+      words(values.span());
+      return;
+    }
+    declared(Room.CONDITIONS, values.name(), 0);
+    values.time().ifPresent(this::expression);
+    for (Setting setting : values.settings()) {
+      name(setting.target(), Role.WRITTEN);
+      expression(setting.value());
+    }
+  }
+
+  private void basis(BasisStatement basis) {
+    if (!basis.allRead()) {
+      words(basis.span());
+      return;
+    }
+    declared(Room.BASES, basis.name(), 0);
+    basis.argument().ifPresent(this::value);
+    basis.time().ifPresent(this::expression);
+    for (Row row : basis.rows()) {
+      name(row.target(), Role.WRITTEN);
+      row.values().forEach(this::expression);
+    }
+  }
+
+  private void clause(RequireClause clause) {
+    switch (clause) {
+      case Compares compares -> {
+        comparison(compares.comparison());
+        compares.until().ifPresent(this::expression);
+        compares.under().ifPresent(n -> used(Room.CONDITIONS, n));
+      }
+      case LimitsCondition limits -> {
+        used(Room.BASES, limits.basis());
+        expression(limits.limit());
+        limits.until().ifPresent(this::expression);
+      }
+      case IsStable stable -> {}
+      case IsNonnegative nonnegative ->
+          nonnegative.under().ifPresent(n -> used(Room.CONDITIONS, n));
+      case IsInvariant invariant -> expression(invariant.value());
+      case HasPeriod period -> expression(period.period());
+    }
+  }
+
+  private void comparison(Comparison comparison) {
+    expression(comparison.left());
+    expression(comparison.right());
+  }
+
+  private void expression(Expression expression) {
+    switch (expression) {
+      case NumberExpression number -> {}
+      case MissingExpression missing -> {}
+      case NameExpression name -> name(name, Role.READ);
+      case CallExpression call -> {
+        name(call.callee(), Role.READ);
+        call.arguments().forEach(a -> expression(a.value()));
+      }
+      case SignedExpression signed -> expression(signed.operand());
+      case SumExpression sum -> sum.addends().forEach(a -> expression(a.value()));
+      case ProductExpression product -> product.factors().forEach(f -> expression(f.value()));
+      case PowerExpression power -> {
+        expression(power.base());
+        expression(power.exponent());
+      }
+      case ParenthesisedExpression parenthesised -> expression(parenthesised.inner());
+    }
+  }
+
+  private void value(Name name) {
+    used(Room.VALUES, name);
+  }
+
+  private void name(NameExpression name, Role role) {
+    add(Room.VALUES, name.name().text(), role, name.name().span(), name.primes());
+  }
+
+  private void used(Room room, Name name) {
+    add(room, name.text(), Role.READ, name.span(), 0);
+  }
+
+  private void declared(Room room, Name name, int primes) {
+    add(room, name.text(), Role.DECLARED, name.span(), primes);
+  }
+
+  private void add(Room room, String name, Role role, Span span, int primes) {
+    boolean derivative = inEquation && primes > 0;
+    scope
+        .find(room, name)
+        .ifPresent(
+            s -> (derivative ? derivatives : found).add(new Occurrence(s, role, span, primes)));
+  }
+
+  /** Takes the words of a text that could not be read. */
+  private void words(Span span) {
+    String text = source.slice(span);
+    List<Token> tokens = Lexer.lex(text);
+    for (int i = 0; i < tokens.size(); i++) {
+      if (tokens.get(i).kind() != TokenKind.NAME) {
+        continue;
+      }
+      String word = word(text, tokens, i);
+      Span place =
+          new Span(span.start() + tokens.get(i).start(), span.start() + tokens.get(i).end());
+      boolean primed = i + 1 < tokens.size() && tokens.get(i + 1).kind() == TokenKind.PRIMES;
+      int primes = primed ? tokens.get(i + 1).span().length() : 0;
+      Optional<Symbol> symbol = scope.find(room(text, tokens, i), word);
+      boolean declares =
+          symbol.stream()
+              .flatMap(s -> s.declarations().stream())
+              .anyMatch(d -> d.name().equals(place));
+      symbol.ifPresent(
+          s -> found.add(new Occurrence(s, declares ? Role.DECLARED : Role.READ, place, primes)));
+    }
+  }
+
+  /** Names of initial values, boundary conditions and bases stand behind certain words only. */
+  private static Room room(String text, List<Token> tokens, int i) {
+    return switch (word(text, tokens, i - 1)) {
+      case "under", "values", "boundary" -> Room.CONDITIONS;
+      case "basis" -> Room.BASES;
+      case "system" -> Room.SYSTEMS;
+      case "(" -> word(text, tokens, i - 2).equals("condition") ? Room.BASES : Room.VALUES;
+      default -> Room.VALUES;
+    };
+  }
+
+  private static String word(String text, List<Token> tokens, int i) {
+    return i < 0 ? "" : text.substring(tokens.get(i).start(), tokens.get(i).end());
+  }
+
+  /**
+   * Returns what was found, in the order of the text. Of the derivatives in equations, the highest
+   * one of each state is written; all others are read.
+   */
+  private List<Occurrence> inTextOrder() {
+    Map<Symbol, Integer> highest = new IdentityHashMap<>();
+    for (Occurrence derivative : derivatives) {
+      highest.merge(derivative.symbol(), derivative.primes(), Math::max);
+    }
+    for (Occurrence derivative : derivatives) {
+      boolean governs = derivative.primes() == highest.get(derivative.symbol());
+      found.add(governs ? derivative.as(Role.WRITTEN) : derivative);
+    }
+    return found.stream().sorted(Comparator.comparingInt(o -> o.span().start())).toList();
+  }
+}

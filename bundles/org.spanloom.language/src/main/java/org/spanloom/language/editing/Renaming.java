@@ -1,0 +1,50 @@
+/*
+ * Copyright (c) 2026 Spanloom contributors
+ *
+ * SPDX-License-Identifier: EPL-2.0
+ */
+package org.spanloom.language.editing;
+
+import java.util.List;
+import java.util.Map;
+import org.spanloom.language.problem.TextEdit;
+import org.spanloom.language.text.Span;
+
+/** What comes of the wish to rename something. */
+public sealed interface Renaming {
+
+  /**
+   * The changes that rename it.
+   *
+   * @param edits changes by the name of the file, in the order of its text; they do not overlap
+   */
+  record Changes(Map<String, List<TextEdit>> edits) implements Renaming {
+    /** Copies the map. */
+    public Changes {
+      edits = Map.copyOf(edits);
+    }
+  }
+
+  /**
+   * Reasons not to do it.
+   *
+   * @param conflicts at least one
+   */
+  record Refused(List<Conflict> conflicts) implements Renaming {
+    /** Copies the list. */
+    public Refused {
+      conflicts = List.copyOf(conflicts);
+    }
+  }
+
+  /** There is no name of the author's at that place. */
+  record NothingToRename() implements Renaming {}
+
+  /**
+   * A reason not to use a name.
+   *
+   * @param span the place in the text that the reason is about
+   * @param message what stands in the way and what to do
+   */
+  record Conflict(Span span, String message) {}
+}
