@@ -57,7 +57,6 @@ final class BasisCommand {
     String file = values.operand();
     List<Double> times = NumberText.readList(values.one("--at").orElse(""), "--at");
     Path path = ModelDoor.path(file);
-    ProjectSettings settings = new ProjectSettings(Optional.empty());
     BasisRequest request =
         new BasisRequest(
             ModelDoor.open(path),
@@ -65,10 +64,7 @@ final class BasisCommand {
             values.one("--basis"),
             times,
             new LinkedHashMap<>(),
-            settings.of(path));
-    if (!settings.problems().isEmpty()) {
-      throw CommandFailure.refused(settings.problems().getFirst());
-    }
+            ProjectSettings.required(path));
     BasisTable table;
     try (TerminalProgress progress = new TerminalProgress(streams, "solving " + file)) {
       table =

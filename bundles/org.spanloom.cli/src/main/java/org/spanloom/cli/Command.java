@@ -47,6 +47,18 @@ enum Command {
       return new BasisCommand(values, streams).run();
     }
   },
+  /** Lists eigenvalues or multipliers. */
+  SPECTRUM("spectrum", "list eigenvalues with their modes, or multipliers of a periodic system") {
+    @Override
+    void describe(CommandSpec spec) {
+      SpectrumCommand.describe(spec);
+    }
+
+    @Override
+    int run(Options.Values values, Streams streams) throws CommandFailure {
+      return new SpectrumCommand(values, streams).run();
+    }
+  },
   /** Lays out model files. */
   FORMAT("format", "give model files their canonical layout") {
     @Override

@@ -40,6 +40,20 @@ final class ProjectSettings {
         .orElse(Settings.DEFAULTS);
   }
 
+  /**
+   * Returns the settings that hold for one model file.
+   *
+   * @throws CommandFailure if there is a mistake in them
+   */
+  static Settings required(Path model) throws CommandFailure {
+    ProjectSettings settings = new ProjectSettings(Optional.empty());
+    Settings found = settings.of(model);
+    if (!settings.problems().isEmpty()) {
+      throw CommandFailure.refused(settings.problems().getFirst());
+    }
+    return found;
+  }
+
   /** Returns a message for each mistake in the files read so far. */
   List<String> problems() {
     return List.copyOf(problems);
