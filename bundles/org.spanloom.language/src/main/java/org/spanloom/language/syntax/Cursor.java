@@ -23,6 +23,10 @@ final class Cursor {
   private final List<Token> tokens;
   private final Token end;
   private int at;
+
+  /** The coming token. */
+  private Token coming;
+
   private Optional<Problem> problem = Optional.empty();
 
   Cursor(String text, StatementLine line) {
@@ -30,15 +34,21 @@ final class Cursor {
     this.tokens = line.tokens();
     int last = line.span().end();
     this.end = new Token(TokenKind.NEWLINE, last, last);
+    moveTo(0);
+  }
+
+  private void moveTo(int index) {
+    at = index;
+    coming = index < tokens.size() ? tokens.get(index) : end;
   }
 
   /** Returns the coming token; at the end one of no length whose kind is a line end. */
   Token peek() {
-    return at < tokens.size() ? tokens.get(at) : end;
+    return coming;
   }
 
   TokenKind kind() {
-    return peek().kind();
+    return coming.kind();
   }
 
   /** Returns the kind of the token behind the coming one. */
@@ -52,8 +62,8 @@ final class Cursor {
   }
 
   Token take() {
-    Token token = peek();
-    at = Math.min(at + 1, tokens.size());
+    Token token = coming;
+    moveTo(Math.min(at + 1, tokens.size()));
     return token;
   }
 
@@ -68,7 +78,7 @@ final class Cursor {
   /** Tells whether the coming token is a word with this text. */
   boolean isWord(String word) {
     Token token = peek();
-    return token.kind().isWord() && text(token).equals(word);
+    return token.kind().isWord() && token.word().equals(word);
   }
 
   /** Tells whether a sign of comparison is among the tokens to come. */
@@ -108,7 +118,7 @@ final class Cursor {
   }
 
   String text(Token token) {
-    return text.substring(token.start(), token.end());
+    return token.word().isEmpty() ? text.substring(token.start(), token.end()) : token.word();
   }
 
   String text(Span span) {
@@ -127,7 +137,7 @@ final class Cursor {
     if (problem.isEmpty()) {
       problem = Optional.of(new Problem(kind, span, message, List.of(fixes)));
     }
-    at = tokens.size();
+    moveTo(tokens.size());
   }
 
   /** Reports that something else belongs here, unless the coming token is bad by itself. */

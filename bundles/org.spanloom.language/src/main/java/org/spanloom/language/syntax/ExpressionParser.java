@@ -157,13 +157,12 @@ final class ExpressionParser {
 
   /** {@code reference = name, { "." , name }, [ primes ] ;} */
   NameExpression reference() {
-    int start = cursor.peek().start();
     Name name = dottedName();
-    int primes = 0;
-    if (cursor.is(TokenKind.PRIMES)) {
-      primes = cursor.take().span().length();
+    if (!cursor.is(TokenKind.PRIMES)) {
+      return new NameExpression(name, 0, name.span());
     }
-    return new NameExpression(name, primes, cursor.from(start));
+    int primes = cursor.take().span().length();
+    return new NameExpression(name, primes, cursor.from(name.span().start()));
   }
 
   private Name dottedName() {
@@ -174,6 +173,9 @@ final class ExpressionParser {
         && cursor.kindAfter().isName()) {
       cursor.take();
       stop = cursor.take().end();
+    }
+    if (stop == first.end()) {
+      return new Name(first.word(), first.span());
     }
     Span span = new Span(first.start(), stop);
     return new Name(cursor.text(span), span);
@@ -245,7 +247,8 @@ final class ExpressionParser {
           token.span(),
           "\""
               + word
-              + "\" is a word of the language and cannot stand in an expression: use another name.");
+              + "\" is a word of the language and cannot stand in an expression: use another"
+              + " name.");
     }
     return missing();
   }

@@ -30,6 +30,8 @@ public final class Lexer {
   private final int end;
   private final boolean oneLine;
   private final List<Token> tokens = new ArrayList<>();
+  private final Spellings spellings;
+  private Token last = new Token(TokenKind.NEWLINE, 0, 0);
   private int at;
   private String first = "";
   private String previousWord = "";
@@ -40,6 +42,7 @@ public final class Lexer {
     this.at = from;
     this.end = text.length();
     this.oneLine = oneLine;
+    this.spellings = new Spellings(text);
   }
 
   /** Returns the tokens of a whole text, line ends included. */
@@ -90,7 +93,7 @@ public final class Lexer {
       comment();
     } else if (isDigit(c) || c == '.' && isDigit(next(1)) && !joinsNames()) {
       number();
-    } else if (isNameStart(text.codePointAt(at))) {
+    } else if (c < 128 ? isPlainLetter(c) : isNameStart(text.codePointAt(at))) {
       word();
     } else {
       if (c == '[') {
@@ -137,19 +140,33 @@ public final class Lexer {
         i = i + 1 + sign;
       }
     }
-    add(good ? TokenKind.NUMBER : TokenKind.BAD_NUMBER, i - start);
+    add(good ? TokenKind.NUMBER : TokenKind.BAD_NUMBER, text.substring(start, i));
     noteFirst("0");
     previousWord = "";
   }
 
+  /** Words of the language have lower-case letters only; most names are told apart by that. */
   private void word() {
     int i = at;
-    while (i < end && isNamePart(text.codePointAt(i))) {
-      i += Character.charCount(text.codePointAt(i));
+    int hash = 0;
+    boolean lowerCase = true;
+    while (i < end) {
+      char c = text.charAt(i);
+      if (c < 128 ? isPlainLetter(c) || isDigit(c) : isNamePart(text.codePointAt(i))) {
+        lowerCase &= c >= 'a' && c <= 'z';
+        hash = 31 * hash + c;
+        i++;
+        if (Character.isHighSurrogate(c)) {
+          hash = 31 * hash + text.charAt(i);
+          i++;
+        }
+      } else {
+        break;
+      }
     }
-    String word = text.substring(at, i);
-    TokenKind kind = joinsNames() ? TokenKind.NAME : Words.kind(word, first, previousWord);
-    add(kind, i - at);
+    String word = spellings.of(at, i, hash);
+    boolean name = !lowerCase || joinsNames();
+    add(name ? TokenKind.NAME : Words.kind(word, first, previousWord), word);
     noteFirst(word);
     previousWord = word;
   }
@@ -278,16 +295,12 @@ public final class Lexer {
    * Tells whether a point directly before joins the coming word to a name, as in {@code lower.T}.
    */
   private boolean joinsNames() {
-    if (tokens.isEmpty()) {
-      return false;
-    }
-    Token last = tokens.get(tokens.size() - 1);
     return last.end() == at
         && (last.kind() == TokenKind.DOT || text.charAt(at) == '.' && last.kind().isName());
   }
 
   private TokenKind previous() {
-    return tokens.isEmpty() ? TokenKind.NEWLINE : tokens.get(tokens.size() - 1).kind();
+    return last.kind();
   }
 
   private int lineStop() {
@@ -319,8 +332,15 @@ public final class Lexer {
   }
 
   private void add(TokenKind kind, int length) {
-    tokens.add(new Token(kind, at, at + length));
+    last = new Token(kind, at, at + length);
+    tokens.add(last);
     at += length;
+  }
+
+  private void add(TokenKind kind, String word) {
+    last = new Token(kind, at, at + word.length(), word);
+    tokens.add(last);
+    at += word.length();
   }
 
   /** A blank that is no line end; the no-break space and the byte order mark are blanks, too. */
@@ -332,9 +352,12 @@ public final class Lexer {
     return c >= '0' && c <= '9';
   }
 
+  private static boolean isPlainLetter(char c) {
+    return c >= 'a' && c <= 'z' || c >= 'A' && c <= 'Z' || c == '_';
+  }
+
   private static boolean isNameStart(int c) {
-    return c == '_'
-        || (c < 128 ? c >= 'a' && c <= 'z' || c >= 'A' && c <= 'Z' : Character.isLetter(c));
+    return c < 128 ? isPlainLetter((char) c) : Character.isLetter(c);
   }
 
   private static boolean isNamePart(int c) {

@@ -55,7 +55,7 @@ public final class Parser {
 
   private SyntaxFile file() {
     List<Statement> statements = new ArrayList<>();
-    while (!lines.peek().span().equals(endOfText())) {
+    while (!isEndOfText(lines.peek())) {
       StatementLine line = take();
       if (isWord(line, "system")) {
         system(line, statements);
@@ -73,8 +73,8 @@ public final class Parser {
     return new SyntaxFile(source, statements, lines.comments(), problems);
   }
 
-  private Span endOfText() {
-    return new Span(text.length(), text.length());
+  private boolean isEndOfText(Token token) {
+    return token.start() == text.length();
   }
 
   /**
@@ -120,7 +120,7 @@ public final class Parser {
     int end = system.span().end();
     while (true) {
       Token next = lines.peek();
-      boolean over = next.span().equals(endOfText());
+      boolean over = isEndOfText(next);
       if (over || isWord(next, "system")) {
         problem(
             ProblemKind.BRACE_MISSING,
@@ -292,7 +292,7 @@ public final class Parser {
   }
 
   private String text(Token token) {
-    return text.substring(token.start(), token.end());
+    return token.word();
   }
 
   private void note(Cursor cursor) {

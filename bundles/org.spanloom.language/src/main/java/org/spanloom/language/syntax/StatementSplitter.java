@@ -22,6 +22,7 @@ final class StatementSplitter {
   private final String text;
   private final List<Token> all;
   private final List<Token> comments = new ArrayList<>();
+  private final List<Token> tokens = new ArrayList<>();
   private final StringBuilder pending = new StringBuilder();
   private final Token endOfText;
   private int at;
@@ -57,9 +58,9 @@ final class StatementSplitter {
       indent = all.get(at).start() - lineStart;
       lineHasStatement = true;
     }
-    List<Token> tokens = new ArrayList<>();
     int open = 0;
     Token end = endOfText;
+    tokens.clear();
     while (at < all.size()) {
       Token token = all.get(at++);
       if (token.kind() == TokenKind.NEWLINE) {

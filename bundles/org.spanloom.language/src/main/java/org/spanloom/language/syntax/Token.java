@@ -13,8 +13,14 @@ import org.spanloom.language.text.Span;
  * @param kind its kind
  * @param start offset of its first character
  * @param end offset behind its last character
+ * @param word its characters if it is a word or a number, else empty
  */
-public record Token(TokenKind kind, int start, int end) {
+public record Token(TokenKind kind, int start, int end, String word) {
+
+  /** A token that is neither a word nor a number. */
+  public Token(TokenKind kind, int start, int end) {
+    this(kind, start, end, "");
+  }
 
   /** Returns its place. */
   public Span span() {

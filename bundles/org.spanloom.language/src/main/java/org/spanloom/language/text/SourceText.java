@@ -23,20 +23,29 @@ public final class SourceText {
   public SourceText(String name, String content) {
     this.name = name;
     this.content = content;
-    int[] starts = new int[64];
+    int[] starts = new int[64 + content.length() / 32];
     int count = 1;
-    for (int i = 0; i < content.length(); i++) {
-      char c = content.charAt(i);
-      boolean ends =
-          c == '\n' || c == '\r' && !(i + 1 < content.length() && content.charAt(i + 1) == '\n');
-      if (ends) {
-        if (count == starts.length) {
-          starts = Arrays.copyOf(starts, 2 * count);
-        }
-        starts[count++] = i + 1;
+    boolean returns = content.indexOf('\r') >= 0;
+    int end = returns ? lineEnd(content, 0) : content.indexOf('\n');
+    while (end >= 0) {
+      if (count == starts.length) {
+        starts = Arrays.copyOf(starts, 2 * count);
       }
+      starts[count++] = end + 1;
+      end = returns ? lineEnd(content, end + 1) : content.indexOf('\n', end + 1);
     }
     this.lineStarts = Arrays.copyOf(starts, count);
+  }
+
+  /** Returns the offset of the last character of the next line end from a place on, or -1. */
+  private static int lineEnd(String content, int from) {
+    for (int i = from; i < content.length(); i++) {
+      char c = content.charAt(i);
+      if (c == '\n' || c == '\r' && !(i + 1 < content.length() && content.charAt(i + 1) == '\n')) {
+        return i;
+      }
+    }
+    return -1;
   }
 
   /** Returns the name to show in messages. */
