@@ -22,6 +22,8 @@ public enum Icon {
   CONSTANT("constant"),
   /** A named expression. */
   FUNCTION("function"),
+  /** A matrix. */
+  MATRIX("matrix"),
   /** A state. */
   STATE("state"),
   /** An output. */
@@ -79,6 +81,7 @@ public enum Icon {
       case SYSTEM -> SYSTEM;
       case PARAMETER -> CONSTANT;
       case LET -> FUNCTION;
+      case MATRIX -> MATRIX;
       case STATE -> STATE;
       case OUTPUT -> OUTPUT;
       case EQUATION, JUMP -> EQUATION;

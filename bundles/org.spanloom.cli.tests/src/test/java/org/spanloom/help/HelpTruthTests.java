@@ -32,6 +32,7 @@ import org.spanloom.analysis.ModelCheck;
 import org.spanloom.analysis.settings.Settings;
 import org.spanloom.analysis.settings.SettingsReader;
 import org.spanloom.language.model.Function;
+import org.spanloom.language.model.MatrixFunction;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.ModelReader;
 import org.spanloom.language.model.NamedConstant;
@@ -168,7 +169,7 @@ class HelpTruthTests {
     expected.addAll(Words.CLAUSE);
     expected.removeAll(List.of("if", "then", "else"));
     expected.addAll(Words.REQUIREMENT);
-    expected.addAll(List.of("values", "scale", "outside", "every"));
+    expected.addAll(List.of("values", "scale", "outside", "every", "file"));
     assertEquals(expected, words);
   }
 
@@ -231,6 +232,10 @@ class HelpTruthTests {
             .map(Element::getTextContent)
             .collect(Collectors.toSet());
     for (Function function : Function.values()) {
+      assertTrue(codes.contains(function.code()), function.code());
+      assertTrue(codes.contains(function.meaning()), function.meaning());
+    }
+    for (MatrixFunction function : MatrixFunction.values()) {
       assertTrue(codes.contains(function.code()), function.code());
       assertTrue(codes.contains(function.meaning()), function.meaning());
     }

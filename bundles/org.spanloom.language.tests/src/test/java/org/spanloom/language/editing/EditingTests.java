@@ -163,7 +163,7 @@ class EditingTests {
     assertEquals(List.of("system"), complete("sy|"));
     assertEquals(List.of("require", "row"), complete(before + "  r|\n}"));
     assertEquals(
-        List.of("tide(t)", "tan", "tanh", "twice").stream().sorted().toList(),
+        List.of("tide(t)", "tan", "tanh", "transpose", "twice").stream().sorted().toList(),
         complete(before + "  output a = t|\n}").stream()
             .filter(s -> s.startsWith("t") && s.length() > 1)
             .sorted()

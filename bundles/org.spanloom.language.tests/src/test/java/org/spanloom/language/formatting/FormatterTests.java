@@ -40,7 +40,7 @@ class FormatterTests {
   }
 
   @ParameterizedTest
-  @ValueSource(strings = {"declarations", "rows", "lines", "blocks", "mistakes"})
+  @ValueSource(strings = {"declarations", "rows", "matrices", "lines", "blocks", "mistakes"})
   void aTextGetsItsLayoutAndKeepsIt(String name) {
     String expected = resource(name + ".output");
     assertEquals(expected, Formatter.format(resource(name + ".input")));

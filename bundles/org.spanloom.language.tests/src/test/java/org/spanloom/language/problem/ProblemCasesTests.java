@@ -35,7 +35,8 @@ class ProblemCasesTests {
       "system S over t [s] from 0 to 10 { state x [m] = 1; x' = -x/2 [s]\n";
 
   private static final List<String> FILES =
-      List.of("text", "system", "names", "units", "linear", "transfers", "inputs", "jumps");
+      List.of(
+          "text", "system", "names", "units", "linear", "transfers", "inputs", "jumps", "matrices");
 
   private record Case(String file, String title, String input, String expected) {
 
@@ -66,6 +67,7 @@ class ProblemCasesTests {
         EnumSet.complementOf(
             EnumSet.of(
                 ProblemKind.TOO_MANY_PROBLEMS,
+                ProblemKind.MATRIX_TOO_LARGE,
                 ProblemKind.NESTING_TOO_DEEP,
                 ProblemKind.COEFFICIENT_UNDECIDED));
     for (Case c : cases()) {

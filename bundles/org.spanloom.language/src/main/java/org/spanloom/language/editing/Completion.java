@@ -12,6 +12,7 @@ import java.util.Locale;
 import java.util.Optional;
 import java.util.Set;
 import org.spanloom.language.model.Function;
+import org.spanloom.language.model.MatrixFunction;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.NamedConstant;
 import org.spanloom.language.syntax.Lexer;
@@ -23,6 +24,7 @@ import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.JumpStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
+import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
@@ -38,7 +40,7 @@ import org.spanloom.language.units.UnitReader;
 /** Proposes what can stand at a caret. */
 public final class Completion {
 
-  private static final List<String> OUTSIDE = List.of("system", "parameter", "let");
+  private static final List<String> OUTSIDE = List.of("system", "parameter", "let", "matrix");
   private static final List<String> INSIDE =
       List.of(
           "parameter",
@@ -46,6 +48,7 @@ public final class Completion {
           "input",
           "state",
           "output",
+          "matrix",
           "transfer",
           "jump",
           "initial values",
@@ -165,7 +168,7 @@ public final class Completion {
     boolean inside = system().filter(s -> offset > s.header().end()).isPresent();
     (inside ? INSIDE : OUTSIDE).forEach(w -> offer(w, "statement"));
     if (inside) {
-      offer("row", "row of a basis");
+      offer("row", "row of a basis or matrix");
       states();
     }
   }
@@ -179,7 +182,7 @@ public final class Completion {
         values(true);
       }
       case "scaled" -> offer("condition", "2-norm condition number of a basis");
-      case "state", "parameter", "let", "input", "output", "system", "values" -> {}
+      case "state", "parameter", "let", "input", "output", "matrix", "system", "values" -> {}
       case "basis", "boundary" -> {}
       default -> {
         if (isCondition()) {
@@ -232,6 +235,7 @@ public final class Completion {
       case "jump" -> List.of("at", "every", "from", "to").forEach(w -> offer(w, "time of a jump"));
       case "system" ->
           List.of("over", "from", "to", "after", "before").forEach(w -> offer(w, "interval"));
+      case "matrix" -> offer("file", "file \"NAME.mtx\", in the Matrix Market format");
       case "state" -> offer("scale", "size below which only absolute errors count");
       case "initial", "basis" -> offer("at", "time");
       case "transfer" -> offer("outside", "where amounts come from or go to");
@@ -257,6 +261,9 @@ public final class Completion {
       for (Function function : Function.values()) {
         offer(function.code(), function.meaning());
       }
+      for (MatrixFunction function : MatrixFunction.values()) {
+        offer(function.code(), function.meaning());
+      }
       for (NamedConstant constant : NamedConstant.values()) {
         offer(constant.code(), constant.meaning());
       }
@@ -277,6 +284,10 @@ public final class Completion {
               "input" + unit(input.unit().map(u -> u.code())));
       case StateStatement state ->
           offer(state.label(), "state" + unit(state.unit().map(u -> u.code())));
+      case MatrixStatement matrix ->
+          offer(
+              name + matrix.argument().map(a -> "(" + a.text() + ")").orElse(""),
+              "matrix" + unit(matrix.unit().map(u -> u.code())));
       case OutputStatement output -> offer(name, "output" + unit(output.unit().map(u -> u.code())));
       case SystemStatement system -> {}
       case InitialValuesStatement values -> {}

@@ -12,8 +12,10 @@ import java.util.Optional;
 import org.spanloom.language.editing.Symbol.Declared;
 import org.spanloom.language.model.Function;
 import org.spanloom.language.model.Let;
+import org.spanloom.language.model.MatrixFunction;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.NamedConstant;
+import org.spanloom.language.model.NamedMatrix;
 import org.spanloom.language.model.Parameter;
 import org.spanloom.language.model.StateComponent;
 import org.spanloom.language.model.SystemModel;
@@ -116,6 +118,9 @@ public final class Hover {
         .filter(p -> p.nameSpan().equals(declared.name()))
         .forEach(this::parameter);
     system.lets().stream().filter(l -> l.nameSpan().equals(declared.name())).forEach(this::let);
+    system.matrices().stream()
+        .filter(m -> m.nameSpan().equals(declared.name()))
+        .forEach(this::matrix);
     system.outputs().stream()
         .filter(o -> o.nameSpan().equals(declared.name()))
         .forEach(o ->
@@ -154,6 +159,19 @@ public final class Hover {
                 + in(let.unit()));
   }
 
+  private void matrix(NamedMatrix matrix) {
+    long places = (long) matrix.rows() * matrix.columns();
+    lines.add(
+        (matrix.dependsOnTime() ? "matrix, a function of time: " : "matrix: ")
+            + matrix.rows()
+            + " x "
+            + matrix.columns()
+            + in(matrix.unit())
+            + (matrix.entries() < places
+                ? ", " + matrix.entries() + " entries that are not 0"
+                : ""));
+  }
+
   private void component(SystemModel system, StateComponent component, int primes) {
     if (component.order() != primes && !isLast(system, component)) {
       return;
@@ -180,6 +198,7 @@ public final class Hover {
   private void builtIn(String name) {
     Optional<Function> function = Function.named(name);
     function.ifPresent(f -> lines.add(f.code() + ": " + f.meaning()));
+    MatrixFunction.named(name).ifPresent(f -> lines.add(f.code() + ": " + f.meaning()));
     NamedConstant.named(name)
         .ifPresent(c -> lines.add(c.code() + " = " + c.value() + ": " + c.meaning()));
   }

@@ -25,6 +25,10 @@ import org.spanloom.language.syntax.Expression.ProductExpression;
 import org.spanloom.language.syntax.Expression.SignedExpression;
 import org.spanloom.language.syntax.Expression.SumExpression;
 import org.spanloom.language.syntax.Lexer;
+import org.spanloom.language.syntax.MatrixSource.MatrixExpression;
+import org.spanloom.language.syntax.MatrixSource.MatrixFile;
+import org.spanloom.language.syntax.MatrixSource.MatrixRow;
+import org.spanloom.language.syntax.MatrixSource.MatrixRows;
 import org.spanloom.language.syntax.Name;
 import org.spanloom.language.syntax.OverClause;
 import org.spanloom.language.syntax.RequireClause;
@@ -48,6 +52,7 @@ import org.spanloom.language.syntax.Statement.JumpTime.Once;
 import org.spanloom.language.syntax.Statement.JumpTime.Repeated;
 import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
+import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.RequireStatement;
@@ -118,6 +123,7 @@ final class NameBinder {
         state.initial().ifPresent(this::expression);
         state.scale().ifPresent(this::expression);
       }
+      case MatrixStatement matrix -> matrix(matrix);
       case OutputStatement output -> {
         declared(Room.VALUES, output.name(), 0);
         expression(output.value());
@@ -141,6 +147,24 @@ final class NameBinder {
       case AccuracyStatement accuracy -> expression(accuracy.value());
       case LaterStatement later -> words(later.span());
       case UnreadStatement unread -> words(unread.span());
+    }
+  }
+
+  private void matrix(MatrixStatement matrix) {
+    if (matrix.source() instanceof MatrixRows rows && !rows.allRead()) {
+      words(matrix.span());
+      return;
+    }
+    declared(Room.VALUES, matrix.name(), 0);
+    matrix.argument().ifPresent(this::value);
+    switch (matrix.source()) {
+      case MatrixFile file -> {}
+      case MatrixExpression expression -> expression(expression.value());
+      case MatrixRows rows -> {
+        for (MatrixRow row : rows.rows()) {
+          row.values().forEach(this::expression);
+        }
+      }
     }
   }
 

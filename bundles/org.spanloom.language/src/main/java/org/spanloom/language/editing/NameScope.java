@@ -12,6 +12,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import org.spanloom.language.model.Function;
+import org.spanloom.language.model.MatrixFunction;
 import org.spanloom.language.model.NamedConstant;
 
 /** The names of one body and, around them, those of the bodies that hold it. */
@@ -62,6 +63,9 @@ final class NameScope {
         .map(f -> new Symbol(SymbolKind.FUNCTION, f.code(), List.of()))
         .or(() ->
             NamedConstant.named(name)
-                .map(c -> new Symbol(SymbolKind.CONSTANT, c.code(), List.of())));
+                .map(c -> new Symbol(SymbolKind.CONSTANT, c.code(), List.of())))
+        .or(() ->
+            MatrixFunction.named(name)
+                .map(f -> new Symbol(SymbolKind.FUNCTION, f.code(), List.of())));
   }
 }

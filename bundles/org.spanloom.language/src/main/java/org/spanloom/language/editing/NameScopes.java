@@ -21,6 +21,7 @@ import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
+import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
@@ -124,6 +125,7 @@ final class NameScopes {
       case LetStatement s -> SymbolKind.LET;
       case InputStatement s -> SymbolKind.INPUT;
       case StateStatement s -> SymbolKind.STATE;
+      case MatrixStatement s -> SymbolKind.MATRIX;
       case OutputStatement s -> SymbolKind.OUTPUT;
       case InitialValuesStatement s -> SymbolKind.INITIAL_VALUES;
       case BoundaryStatement s -> SymbolKind.BOUNDARY;
@@ -139,6 +141,7 @@ final class NameScopes {
       case "let" -> SymbolKind.LET;
       case "input" -> SymbolKind.INPUT;
       case "state" -> SymbolKind.STATE;
+      case "matrix" -> SymbolKind.MATRIX;
       case "output" -> SymbolKind.OUTPUT;
       case "initial" -> SymbolKind.INITIAL_VALUES;
       case "boundary" -> SymbolKind.BOUNDARY;

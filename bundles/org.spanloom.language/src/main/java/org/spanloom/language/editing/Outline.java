@@ -20,6 +20,7 @@ import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.JumpStatement;
 import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
+import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.RequireStatement;
@@ -86,6 +87,14 @@ public final class Outline {
               unit(state.unit()),
               state.span(),
               state.name().span(),
+              List.of());
+      case MatrixStatement matrix ->
+          new OutlineNode(
+              Kind.MATRIX,
+              matrix.name().text() + matrix.argument().map(a -> "(" + a.text() + ")").orElse(""),
+              unit(matrix.unit()),
+              matrix.span(),
+              matrix.name().span(),
               List.of());
       case OutputStatement output ->
           leaf(Kind.OUTPUT, output.name(), unit(output.unit()), output.span());

@@ -36,6 +36,8 @@ public record OutlineNode(
     LET,
     /** A state or a derivative with a declaration of its own. */
     STATE,
+    /** A matrix. */
+    MATRIX,
     /** An output. */
     OUTPUT,
     /** An equation or a transfer. */

@@ -25,6 +25,8 @@ public enum SymbolKind {
   INITIAL_VALUES("set of initial values", Room.CONDITIONS),
   /** A set of boundary conditions. */
   BOUNDARY("set of boundary conditions", Room.CONDITIONS),
+  /** A matrix. */
+  MATRIX("matrix", Room.VALUES),
   /** A candidate basis. */
   BASIS("basis", Room.BASES),
   /** A declaration that could not be read. */

@@ -27,6 +27,12 @@ final class Alignment {
   /** How wide all values of a column of rows may be for it to be aligned. */
   private static final int VALUE_LIMIT = 8;
 
+  /** How wide all entries of a column of a matrix may be for it to be aligned. */
+  private static final int ENTRY_LIMIT = 16;
+
+  /** The kind of a row of a matrix, which names no state. */
+  private static final String MATRIX_ROW = "row of a matrix";
+
   private final Layout layout;
   private final boolean[] unread;
   private final List<Cells> run = new ArrayList<>();
@@ -38,7 +44,7 @@ final class Alignment {
    * @param first its first token
    * @param middle the unit, or the arrow of a transfer
    * @param equals the equals sign, or the word of a change
-   * @param values values of a row
+   * @param values values of a row; the equals sign of one of a matrix is -1
    * @param end behind the last token of its first line, comments left out
    */
   private record Cells(
@@ -110,7 +116,7 @@ final class Alignment {
     String word = layout.word(statement);
     boolean declares =
         switch (word) {
-          case "parameter", "let", "state", "output", "input", "table" -> true;
+          case "parameter", "let", "state", "output", "input", "table", "matrix" -> true;
           default -> false;
         };
     boolean aligned = declares || word.isEmpty() || word.equals("row") || word.equals("transfer");
@@ -128,10 +134,14 @@ final class Alignment {
         equals = i;
       }
       boolean begins = i > first && (i - 1 == equals || layout.kind(i - 1) == TokenKind.COMMA);
-      if (begins && word.equals("row") && equals >= 0 && open == 0) {
+      if (begins && word.equals("row") && open == 0) {
         values.add(i);
       }
       open += nesting(kind);
+    }
+    if (word.equals("row") && equals < 0 && first + 1 < end) {
+      values.addFirst(first + 1);
+      return Optional.of(new Cells(MATRIX_ROW, first, -1, -1, values, end));
     }
     return equals <= first
         ? Optional.empty()
@@ -156,7 +166,9 @@ final class Alignment {
 
   private void align() {
     if (run.size() > 1) {
-      alignSigns();
+      if (!run.getFirst().kind().equals(MATRIX_ROW)) {
+        alignSigns();
+      }
       alignValues();
     }
   }
@@ -197,13 +209,14 @@ final class Alignment {
 
   /** Aligns the ends of values, column by column, up to the first column with a wide value. */
   private void alignValues() {
+    int limit = run.getFirst().kind().equals(MATRIX_ROW) ? ENTRY_LIMIT : VALUE_LIMIT;
     int columns = run.stream().mapToInt(c -> c.values().size()).max().orElse(0);
     for (int column = 0; column < columns; column++) {
       int widest = 0;
       for (Cells cells : run) {
         widest = Math.max(widest, value(cells, column));
       }
-      if (widest > VALUE_LIMIT) {
+      if (widest > limit) {
         return;
       }
       for (Cells cells : run) {

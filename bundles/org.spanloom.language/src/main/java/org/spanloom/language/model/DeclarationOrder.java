@@ -14,9 +14,14 @@ import java.util.Map;
 import java.util.function.Consumer;
 import org.spanloom.language.syntax.Expression;
 import org.spanloom.language.syntax.Expression.NameExpression;
+import org.spanloom.language.syntax.MatrixSource;
+import org.spanloom.language.syntax.MatrixSource.MatrixExpression;
+import org.spanloom.language.syntax.MatrixSource.MatrixFile;
+import org.spanloom.language.syntax.MatrixSource.MatrixRows;
 import org.spanloom.language.syntax.Statement.Declaration;
 import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
+import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
 
@@ -113,6 +118,14 @@ final class DeclarationOrder {
     cycles.accept(cycle);
   }
 
+  private static List<Expression> expressions(MatrixSource source) {
+    return switch (source) {
+      case MatrixRows rows -> rows.rows().stream().flatMap(r -> r.values().stream()).toList();
+      case MatrixExpression expression -> List.of(expression.value());
+      case MatrixFile file -> List.of();
+    };
+  }
+
   private static List<NameExpression> uses(Declaration declaration) {
     List<Expression> expressions = new ArrayList<>();
     switch (declaration) {
@@ -122,6 +135,7 @@ final class DeclarationOrder {
       }
       case LetStatement let -> expressions.add(let.value());
       case InputStatement input -> expressions.add(input.value());
+      case MatrixStatement matrix -> expressions.addAll(expressions(matrix.source()));
       case OutputStatement output -> expressions.add(output.value());
       default -> {}
     }

@@ -16,6 +16,7 @@ import java.util.SortedMap;
 import java.util.TreeMap;
 import org.spanloom.language.model.Meaning.BrokenMeaning;
 import org.spanloom.language.model.Meaning.LetMeaning;
+import org.spanloom.language.model.Meaning.MatrixMeaning;
 import org.spanloom.language.model.Meaning.OutputMeaning;
 import org.spanloom.language.model.Meaning.ParameterMeaning;
 import org.spanloom.language.problem.Fix;
@@ -25,6 +26,7 @@ import org.spanloom.language.syntax.Name;
 import org.spanloom.language.syntax.Statement.Declaration;
 import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
+import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.Uncertainty;
@@ -44,12 +46,14 @@ final class Declarations {
   private final Problems problems;
   private final UnitResolver units;
   private final Resolver resolver;
+  private final MatrixReader matrixReader;
   private final List<Declaration> collected = new ArrayList<>();
   private final Map<String, Name> taken = new HashMap<>();
   private final Set<String> duplicates = new HashSet<>();
   private final SortedMap<Integer, Parameter> parameters = new TreeMap<>();
   private final SortedMap<Integer, Let> lets = new TreeMap<>();
   private final SortedMap<Integer, ReadOutput> outputs = new TreeMap<>();
+  private final SortedMap<Integer, NamedMatrix> matrices = new TreeMap<>();
 
   /** An output whose place in the state vector is not known yet. */
   record ReadOutput(OutputStatement statement, Quantity value, UnitOfMeasure unit) {}
@@ -60,6 +64,7 @@ final class Declarations {
     this.problems = frame.problems();
     this.units = frame.units();
     this.resolver = frame.resolver();
+    this.matrixReader = new MatrixReader(frame);
   }
 
   /** Returns the parameters read, in the order of the text. */
@@ -70,6 +75,11 @@ final class Declarations {
   /** Returns the named expressions read, in the order of the text. */
   List<Let> lets() {
     return List.copyOf(lets.values());
+  }
+
+  /** Returns the matrices read, in the order of the text. */
+  List<NamedMatrix> matrices() {
+    return List.copyOf(matrices.values());
   }
 
   /** Returns the outputs read, in the order of the text. */
@@ -88,7 +98,10 @@ final class Declarations {
   boolean takesName(Name name) {
     String text = name.text();
     Name earlier = taken.get(text);
-    boolean builtIn = Function.named(text).isPresent() || NamedConstant.named(text).isPresent();
+    boolean builtIn =
+        Function.named(text).isPresent()
+            || MatrixFunction.named(text).isPresent()
+            || NamedConstant.named(text).isPresent();
     if (builtIn) {
       problems.report(
           ProblemKind.NAME_RESERVED,
@@ -129,6 +142,7 @@ final class Declarations {
                 case ParameterStatement parameter -> parameter(parameter);
                 case LetStatement let -> let(let);
                 case InputStatement input -> input(input);
+                case MatrixStatement matrix -> matrix(matrix);
                 case OutputStatement output -> output(output);
                 default -> Optional.empty();
               };
@@ -304,6 +318,31 @@ final class Declarations {
     return Optional.of(new LetMeaning(input, value.get().depth() + 1));
   }
 
+  private Optional<MatrixMeaning> matrix(MatrixStatement statement) {
+    if (statement.argument().isPresent() && !isTime(statement.argument().get(), "a matrix")) {
+      return Optional.empty();
+    }
+    Optional<MatrixMeaning> meaning =
+        units
+            .declared(statement.unit())
+            .filter(unit -> hasNoOffset(statement, unit))
+            .flatMap(unit -> matrixReader.read(statement, unit));
+    meaning.ifPresent(m -> matrices.put(statement.span().start(), m.matrix()));
+    return meaning;
+  }
+
+  private boolean hasNoOffset(MatrixStatement statement, UnitOfMeasure unit) {
+    if (unit.offset() == 0) {
+      return true;
+    }
+    problems.report(
+        ProblemKind.UNIT_OFFSET,
+        statement.unit().orElseThrow().span(),
+        "The entries of a matrix are multiplied, and cannot be in a unit with a zero point of its"
+            + " own: write [K].");
+    return false;
+  }
+
   private static UnitOfMeasure inferred(LetStatement statement, Quantity value) {
     return Literals.alone(statement.value())
         .flatMap(NumberExpression::unit)
@@ -367,6 +406,9 @@ final class Declarations {
   void reportUnused() {
     for (Parameter parameter : parameters()) {
       reportUnused(parameter.name(), "parameter", parameter.nameSpan());
+    }
+    for (NamedMatrix matrix : matrices()) {
+      reportUnused(matrix.name(), "matrix", matrix.nameSpan());
     }
     for (Let let : lets()) {
       reportUnused(let.name(), let.isInput() ? "input" : "named expression", let.nameSpan());

@@ -39,25 +39,48 @@ final class EquationReader {
   void read(Frame frame, EquationStatement statement) {
     noteDerivatives(frame, statement.left());
     noteDerivatives(frame, statement.right());
-    Optional<Quantity> left = frame.resolver().quantity(statement.left(), Place.EQUATION);
-    Optional<Quantity> right = frame.resolver().quantity(statement.right(), Place.EQUATION);
+    Optional<? extends Value> left = frame.resolver().value(statement.left(), Place.EQUATION);
+    Optional<? extends Value> right = frame.resolver().value(statement.right(), Place.EQUATION);
     if (left.isEmpty()
         || right.isEmpty()
         || !sidesAgree(frame, statement, left.get(), right.get())) {
       allRead = false;
-      return;
+    } else if (left.get() instanceof Quantity l && right.get() instanceof Quantity r) {
+      add(frame, statement, l, r);
+    } else {
+      addRows(frame, statement, left.get(), right.get());
     }
+  }
+
+  private void add(Frame frame, EquationStatement statement, Quantity left, Quantity right) {
     equations.add(
         new ResolvedEquation(
             frame,
-            left.get(),
+            left,
             statement.left().span(),
-            right.get(),
+            right,
             statement.right().span(),
             OptionalInt.empty(),
             statement.span()));
-    noteOrders(left.get());
-    noteOrders(right.get());
+    noteOrders(left);
+    noteOrders(right);
+  }
+
+  /** An equation between matrices is one equation for each entry. */
+  private void addRows(Frame frame, EquationStatement statement, Value left, Value right) {
+    MatrixValue shape = (MatrixValue) (left instanceof MatrixValue ? left : right);
+    for (int row = 0; row < shape.rows(); row++) {
+      for (int column = 0; column < shape.columns(); column++) {
+        add(frame, statement, entry(left, row, column), entry(right, row, column));
+      }
+    }
+  }
+
+  private static Quantity entry(Value side, int row, int column) {
+    return switch (side) {
+      case Quantity zero -> zero;
+      case MatrixValue matrix -> matrix.at(row, column);
+    };
   }
 
   /**
@@ -123,8 +146,26 @@ final class EquationReader {
   }
 
   private static boolean sidesAgree(
-      Frame frame, EquationStatement statement, Quantity left, Quantity right) {
-    if (left.zero() || right.zero() || left.dimension().equals(right.dimension())) {
+      Frame frame, EquationStatement statement, Value left, Value right) {
+    if (left.zero() || right.zero()) {
+      return true;
+    }
+    String leftShape = MatrixAlgebra.shape(left);
+    String rightShape = MatrixAlgebra.shape(right);
+    if (!leftShape.equals(rightShape)) {
+      frame
+          .problems()
+          .report(
+              ProblemKind.SHAPE_MISMATCH,
+              statement.span(),
+              "The left side is "
+                  + leftShape
+                  + ", but the right side is "
+                  + rightShape
+                  + ": both sides of an equation have one shape.");
+      return false;
+    }
+    if (left.dimension().equals(right.dimension())) {
       return true;
     }
     frame

@@ -67,6 +67,19 @@ sealed interface Meaning {
     }
   }
 
+  /**
+   * A matrix.
+   *
+   * @param matrix its declaration
+   * @param value its entries
+   */
+  record MatrixMeaning(NamedMatrix matrix, MatrixValue value) implements Meaning {
+    @Override
+    public Span nameSpan() {
+      return matrix.nameSpan();
+    }
+  }
+
   /** An output. */
   record OutputMeaning(Quantity value, UnitOfMeasure unit, Span nameSpan) implements Meaning {}
 
@@ -80,6 +93,7 @@ sealed interface Meaning {
       case ParameterMeaning m -> "a parameter";
       case LetMeaning m -> m.let().isInput() ? "an input" : "a named expression";
       case StateMeaning m -> "a state";
+      case MatrixMeaning m -> "a matrix";
       case OutputMeaning m -> "an output";
       case BrokenMeaning m -> "a broken declaration";
     };

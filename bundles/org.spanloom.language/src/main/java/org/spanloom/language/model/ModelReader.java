@@ -19,6 +19,7 @@ import org.spanloom.language.syntax.Parser;
 import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
+import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
@@ -84,6 +85,7 @@ public final class ModelReader {
       switch (statement) {
         case ParameterStatement parameter -> globals.collect(parameter);
         case LetStatement let -> globals.collect(let);
+        case MatrixStatement matrix -> globals.collect(matrix);
         case SystemStatement system -> {}
         case UnreadStatement unread -> unread.declares().ifPresent(this::broken);
         case LaterStatement later -> later.declares().ifPresent(this::broken);
@@ -116,8 +118,8 @@ public final class ModelReader {
     problems.report(
         ProblemKind.STATEMENT_MISPLACED,
         statement.span(),
-        "Only parameters and named expressions stand outside of systems: move this line into a"
-            + " system.");
+        "Only parameters, named expressions and matrices stand outside of systems: move this line"
+            + " into a system.");
   }
 
   private void reportDuplicate(Name name, Set<String> names) {

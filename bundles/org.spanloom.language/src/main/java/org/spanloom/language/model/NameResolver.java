@@ -10,6 +10,7 @@ import java.util.List;
 import java.util.Optional;
 import org.spanloom.language.model.Meaning.BrokenMeaning;
 import org.spanloom.language.model.Meaning.LetMeaning;
+import org.spanloom.language.model.Meaning.MatrixMeaning;
 import org.spanloom.language.model.Meaning.OutputMeaning;
 import org.spanloom.language.model.Meaning.ParameterMeaning;
 import org.spanloom.language.model.Meaning.StateMeaning;
@@ -45,7 +46,7 @@ final class NameResolver {
   }
 
   /** Returns the value of a name without arguments. */
-  Optional<Quantity> name(NameExpression name, Place place) {
+  Optional<? extends Value> name(NameExpression name, Place place) {
     Optional<Meaning> meaning = scope.use(name.name().text());
     if (meaning.isEmpty()) {
       return builtIn(name);
@@ -56,16 +57,18 @@ final class NameResolver {
     return switch (meaning.get()) {
       case TimeMeaning time -> time(time, name, place);
       case ParameterMeaning m -> Optional.of(parameter(m));
-      case LetMeaning m when m.let().dependsOnTime() -> bareLet(name);
+      case LetMeaning m when m.let().dependsOnTime() -> bareFunctionOfTime(name);
       case LetMeaning m -> Optional.of(let(m));
       case StateMeaning m -> state(m, name, place);
+      case MatrixMeaning m when m.matrix().dependsOnTime() -> bareFunctionOfTime(name);
+      case MatrixMeaning m -> Optional.of(MatrixAlgebra.simplest(m.value()));
       case OutputMeaning m -> output(m, name, place);
       case BrokenMeaning m -> Optional.empty();
     };
   }
 
   /** Returns the value of a name with arguments. */
-  Optional<Quantity> call(CallExpression call, Place place) {
+  Optional<? extends Value> call(CallExpression call, Place place) {
     NameExpression callee = call.callee();
     Optional<Meaning> meaning = scope.use(callee.name().text());
     if (meaning.isEmpty()) {
@@ -77,8 +80,14 @@ final class NameResolver {
     return switch (meaning.get()) {
       case TimeMeaning m -> notCallable(call, m);
       case ParameterMeaning m -> notCallable(call, m);
-      case LetMeaning m when m.let().dependsOnTime() -> letOfTime(m, call, place);
+      case LetMeaning m when m.let().dependsOnTime() ->
+          isFunctionOfTime(call, place) ? Optional.of(let(m)) : Optional.empty();
       case LetMeaning m -> notCallable(call, m);
+      case MatrixMeaning m when m.matrix().dependsOnTime() ->
+          isFunctionOfTime(call, place)
+              ? Optional.of(MatrixAlgebra.simplest(m.value()))
+              : Optional.empty();
+      case MatrixMeaning m -> notCallable(call, m);
       case StateMeaning m ->
           isRunningTime(call) ? state(m, callee, place) : sampledState(m, call, place);
       case OutputMeaning m ->
@@ -94,8 +103,7 @@ final class NameResolver {
       return Optional.of(
           Quantity.constant(new Term.Constant(constant.get().value()), Dimension.NONE, 1));
     }
-    Optional<Function> function = Function.named(word);
-    if (function.isPresent()) {
+    if (Function.named(word).isPresent() || MatrixFunction.named(word).isPresent()) {
       problems.report(
           ProblemKind.NAME_MISUSED,
           name.span(),
@@ -173,7 +181,7 @@ final class NameResolver {
         new Term.LetTerm(meaning.let()), meaning.let().unit().dimension(), meaning.depth() + 1);
   }
 
-  private Optional<Quantity> bareLet(NameExpression name) {
+  private Optional<Quantity> bareFunctionOfTime(NameExpression name) {
     String time = timeName();
     problems.report(
         ProblemKind.NAME_MISUSED,
@@ -191,7 +199,8 @@ final class NameResolver {
     return Optional.empty();
   }
 
-  private Optional<Quantity> letOfTime(LetMeaning meaning, CallExpression call, Place place) {
+  /** Tells whether a function of time is called at the running time where that is known. */
+  private boolean isFunctionOfTime(CallExpression call, Place place) {
     if (!isRunningTime(call)) {
       String name = call.callee().name().text();
       problems.report(
@@ -204,15 +213,15 @@ final class NameResolver {
               + "("
               + timeName()
               + ").");
-      return Optional.empty();
+      return false;
     }
     scope.markUsed(timeName());
     if (!place.time()) {
       reportTime(
           "\"" + resolver.shown(call.span()) + "\" depends on " + timeName(), call.span(), place);
-      return Optional.empty();
+      return false;
     }
-    return Optional.of(let(meaning));
+    return true;
   }
 
   private Optional<Quantity> state(StateMeaning state, NameExpression name, Place place) {
@@ -333,27 +342,19 @@ final class NameResolver {
         .map(q -> q.constant().term());
   }
 
-  private Optional<Quantity> function(CallExpression call, Place place) {
+  private Optional<? extends Value> function(CallExpression call, Place place) {
     NameExpression callee = call.callee();
     String word = callee.name().text();
+    if (MatrixFunction.named(word).isPresent() && callee.primes() == 0) {
+      return transposed(call, place);
+    }
     Optional<Function> named = Function.named(word);
     if (named.isEmpty() || callee.primes() > 0) {
       reportNoFunction(call);
       return Optional.empty();
     }
     Function function = named.get();
-    Optional<Argument> labelled =
-        call.arguments().stream().filter(a -> a.label().isPresent() || a.before()).findFirst();
-    if (call.arguments().size() != function.arity() || labelled.isPresent()) {
-      problems.report(
-          ProblemKind.ARGUMENT_COUNT,
-          call.span(),
-          "\""
-              + word
-              + "\" takes "
-              + (function.arity() == 1 ? "one argument" : function.arity() + " arguments")
-              + (labelled.isPresent() ? " without a name" : ", not " + call.arguments().size())
-              + ".");
+    if (!takesArguments(call, function.arity())) {
       return Optional.empty();
     }
     List<Term> terms = new ArrayList<>();
@@ -385,6 +386,33 @@ final class NameResolver {
         Quantity.constant(Simplifier.call(function, terms), dimension.get(), depth + 1));
   }
 
+  /** Tells whether a call has as many plain arguments as its function; reports it if not. */
+  private boolean takesArguments(CallExpression call, int arity) {
+    boolean labelled = call.arguments().stream().anyMatch(a -> a.label().isPresent() || a.before());
+    if (call.arguments().size() == arity && !labelled) {
+      return true;
+    }
+    useAll(call);
+    problems.report(
+        ProblemKind.ARGUMENT_COUNT,
+        call.span(),
+        "\""
+            + call.callee().name().text()
+            + "\" takes "
+            + (arity == 1 ? "one argument" : arity + " arguments")
+            + (labelled ? " without a name" : ", not " + call.arguments().size())
+            + ".");
+    return false;
+  }
+
+  private Optional<Value> transposed(CallExpression call, Place place) {
+    if (!takesArguments(call, 1)) {
+      return Optional.empty();
+    }
+    Expression argument = call.arguments().getFirst().value();
+    return resolver.value(argument, place).map(resolver.matrices()::transposed);
+  }
+
   private void reportDimensions(CallExpression call, Function function, List<Dimension> found) {
     Span span = call.arguments().getFirst().span();
     String reason =
@@ -412,8 +440,14 @@ final class NameResolver {
             + ".");
   }
 
+  /** What stands in a call without a meaning is not unused for that. */
+  private void useAll(CallExpression call) {
+    ExpressionNames.of(call).forEach(name -> scope.markUsed(name.name().text()));
+  }
+
   private void reportNoFunction(CallExpression call) {
     NameExpression callee = call.callee();
+    useAll(call);
     String word = callee.name().text();
     if (word.equals("pulse")) {
       problems.report(

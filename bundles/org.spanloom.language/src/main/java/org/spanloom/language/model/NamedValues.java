@@ -70,6 +70,7 @@ final class NamedValues {
           case Meaning.ParameterMeaning parameter -> Optional.of(parameter.parameter().unit());
           case Meaning.LetMeaning let -> Optional.of(let.let().unit());
           case Meaning.TimeMeaning time -> Optional.of(time.unit());
+          case Meaning.MatrixMeaning matrix -> Optional.of(matrix.matrix().unit());
           case Meaning.BrokenMeaning broken -> Optional.empty();
         });
   }

@@ -7,8 +7,10 @@ package org.spanloom.language.model;
 
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
 import java.util.function.UnaryOperator;
 import org.spanloom.language.text.Span;
 import org.spanloom.language.units.Dimension;
@@ -23,7 +25,8 @@ import org.spanloom.language.units.Dimension;
  * @param depth bound on the depth of the terms in it, named expressions followed
  */
 record Quantity(
-    Map<StateKey, Part> coefficients, Part constant, Dimension dimension, boolean zero, int depth) {
+    Map<StateKey, Part> coefficients, Part constant, Dimension dimension, boolean zero, int depth)
+    implements Value {
 
   /**
    * A term with the places in the text it comes from.
@@ -50,6 +53,13 @@ record Quantity(
       return new Part(term, all, true);
     }
 
+    /** Returns the product with a part without states; it comes from the places of both. */
+    Part times(Part factor) {
+      Set<Span> all = new LinkedHashSet<>(sources);
+      all.addAll(factor.sources);
+      return new Part(Simplifier.product(factor.term, term), List.copyOf(all), placed);
+    }
+
     /** Returns the same part as a statement sees it that uses it by name. */
     Part inherited() {
       return new Part(term, sources, false);
@@ -65,7 +75,8 @@ record Quantity(
     return new Quantity(one, Part.ZERO, dimension, false, 1);
   }
 
-  boolean holdsStates() {
+  @Override
+  public boolean holdsStates() {
     return !coefficients.isEmpty();
   }
 
@@ -83,6 +94,28 @@ record Quantity(
     boolean absent = holdsStates() && Simplifier.isZero(constant.term());
     Part rest = absent ? Part.ZERO : constant.map(change);
     return new Quantity(changed, rest, newDimension, false, newDepth);
+  }
+
+  /**
+   * Returns the product with a quantity without states. Unlike {@link #map} it comes from the
+   * places of both, as is wanted of entries of matrices, which stand elsewhere than their products.
+   */
+  Quantity times(Quantity factor, Dimension product) {
+    int deeper = Math.max(depth, factor.depth) + 1;
+    if (!holdsStates()) {
+      return new Quantity(Map.of(), constant.times(factor.constant), product, false, deeper);
+    }
+    Map<StateKey, Part> changed = new LinkedHashMap<>();
+    coefficients.forEach((key, part) -> changed.put(key, part.times(factor.constant)));
+    boolean absent = Simplifier.isZero(constant.term());
+    Part rest = absent ? Part.ZERO : constant.times(factor.constant);
+    return new Quantity(changed, rest, product, false, deeper);
+  }
+
+  /** Returns a quantity without states as one that comes from a place in another statement. */
+  Quantity from(Span place) {
+    Part part = new Part(constant.term(), constant.sources(), false).placedAt(place).inherited();
+    return new Quantity(coefficients, part, dimension, zero, depth);
   }
 
   /** Returns the quantity as a statement sees it that uses it by name. */

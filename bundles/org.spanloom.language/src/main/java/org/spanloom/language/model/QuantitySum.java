@@ -77,6 +77,14 @@ final class QuantitySum {
     count++;
   }
 
+  /** Adds a quantity that stands at no place of its own in the statement at hand. */
+  void add(Quantity quantity) {
+    quantity.coefficients().forEach((key, part) -> addState(false, key, part));
+    constants.add(false, quantity.constant());
+    depth = Math.max(depth, quantity.depth());
+    count++;
+  }
+
   /** Adds or subtracts the coefficient of one state. */
   void addState(boolean minus, StateKey key, Part part) {
     states.computeIfAbsent(key, k -> new Summands()).add(minus, part);

@@ -5,9 +5,11 @@
  */
 package org.spanloom.language.model;
 
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import org.spanloom.language.model.MatrixAlgebra.Summand;
 import org.spanloom.language.problem.Fix;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.syntax.Expression;
@@ -43,21 +45,32 @@ final class Resolver {
   private final Problems problems;
   private final Literals literals;
   private final NameResolver names;
+  private final MatrixAlgebra matrices;
 
   Resolver(Frame frame) {
     this.frame = frame;
     this.problems = frame.problems();
     this.literals = new Literals(problems, frame.units());
     this.names = new NameResolver(this, frame.scope(), problems);
+    this.matrices = new MatrixAlgebra(this, frame);
   }
 
   Literals literals() {
     return literals;
   }
 
-  /** Returns the value of an expression. */
+  MatrixAlgebra matrices() {
+    return matrices;
+  }
+
+  /** Returns the value of an expression where a single one belongs. */
   Optional<Quantity> quantity(Expression expression, Place place) {
-    Optional<Quantity> value =
+    return value(expression, place).flatMap(v -> matrices.single(v, expression.span()));
+  }
+
+  /** Returns the value of an expression, which may be a matrix. */
+  Optional<? extends Value> value(Expression expression, Place place) {
+    Optional<? extends Value> value =
         switch (expression) {
           case NumberExpression number -> literals.quantity(number, false);
           case NameExpression name -> names.name(name, place);
@@ -66,13 +79,13 @@ final class Resolver {
           case SumExpression sum -> sum(sum, place);
           case ProductExpression product -> product(product, place);
           case PowerExpression power -> power(power, place);
-          case ParenthesisedExpression parenthesised -> quantity(parenthesised.inner(), place);
+          case ParenthesisedExpression parenthesised -> value(parenthesised.inner(), place);
           case MissingExpression missing -> Optional.empty();
         };
     return value.filter(v -> isWithinLimits(v, expression));
   }
 
-  private boolean isWithinLimits(Quantity value, Expression expression) {
+  private boolean isWithinLimits(Value value, Expression expression) {
     if (value.depth() > DEPTH_LIMIT) {
       problems.report(
           ProblemKind.NESTING_TOO_DEEP,
@@ -82,8 +95,7 @@ final class Resolver {
               + " steps one after another, named expressions included: make it shorter.");
       return false;
     }
-    if (value.constant().term() instanceof Term.Constant(double number)
-        && !Double.isFinite(number)) {
+    if (!isFinite(value)) {
       problems.report(
           ProblemKind.NUMBER_OUT_OF_RANGE,
           expression.span(),
@@ -91,6 +103,16 @@ final class Resolver {
       return false;
     }
     return true;
+  }
+
+  private static boolean isFinite(Value value) {
+    return switch (value) {
+      case Quantity single ->
+          !(single.constant().term() instanceof Term.Constant(double number))
+              || Double.isFinite(number);
+      case MatrixValue matrix ->
+          matrix.entries().stream().allMatch(entry -> isFinite(entry.value()));
+    };
   }
 
   /**
@@ -141,7 +163,7 @@ final class Resolver {
   }
 
   /** Tells whether a value has the dimension asked for; reports it if not. */
-  boolean fits(Quantity value, Dimension dimension, String code, Span span, String what) {
+  boolean fits(Value value, Dimension dimension, String code, Span span, String what) {
     if (value.zero() || value.dimension().equals(dimension)) {
       return true;
     }
@@ -160,7 +182,7 @@ final class Resolver {
     return false;
   }
 
-  private Optional<Quantity> signed(SignedExpression signed, Place place) {
+  private Optional<? extends Value> signed(SignedExpression signed, Place place) {
     Optional<UnitOfMeasure> offset = Literals.offsetUnit(signed.operand());
     if (offset.isPresent() && signed.operand() instanceof NumberExpression number) {
       return literals.quantity(number, signed.negative());
@@ -168,33 +190,38 @@ final class Resolver {
     if (offset.isPresent()) {
       return misusedOffset(signed.span(), offset.get());
     }
-    Optional<Quantity> operand = quantity(signed.operand(), place);
-    return signed.negative()
-        ? operand.map(q -> {
-          Quantity negated = q.map(Simplifier::negation, q.dimension(), q.depth() + 1);
-          return new Quantity(
-              negated.coefficients(),
-              negated.constant(),
-              negated.dimension(),
-              q.zero(),
-              negated.depth());
-        })
-        : operand;
+    Optional<? extends Value> operand = value(signed.operand(), place);
+    if (operand.isEmpty() || !signed.negative()) {
+      return operand;
+    }
+    return Optional.of(
+        switch (operand.get()) {
+          case Quantity single -> negated(single);
+          case MatrixValue matrix -> matrix.map(Resolver::negated, matrix.dimension());
+        });
   }
 
-  private Optional<Quantity> sum(SumExpression sum, Place place) {
-    QuantitySum total = new QuantitySum();
-    Optional<Quantity> first = Optional.empty();
+  private static Quantity negated(Quantity q) {
+    Quantity negated = q.map(Simplifier::negation, q.dimension(), q.depth() + 1);
+    return new Quantity(
+        negated.coefficients(), negated.constant(), negated.dimension(), q.zero(), negated.depth());
+  }
+
+  private Optional<? extends Value> sum(SumExpression sum, Place place) {
+    List<Summand> summands = new ArrayList<>(sum.addends().size());
+    Optional<? extends Value> first = Optional.empty();
     Span firstSpan = sum.span();
     boolean sound = true;
+    boolean single = true;
     int zeroPoints = 0;
     for (Addend addend : sum.addends()) {
       Expression expression = addend.value();
-      Optional<Quantity> value = quantity(expression, place);
+      Optional<? extends Value> value = value(expression, place);
       sound &= value.isPresent();
       if (value.isEmpty() || !sound) {
         continue;
       }
+      single &= value.get() instanceof Quantity;
       if (Literals.offsetUnit(expression).isPresent()) {
         zeroPoints += addend.subtracted() ? -1 : 1;
       }
@@ -204,7 +231,7 @@ final class Resolver {
       } else if (!value.get().zero()) {
         sound = fitsFirst(first.orElseThrow(), firstSpan, value.get(), expression);
       }
-      total.add(addend.subtracted(), value.get(), frame.placed(expression.span()));
+      summands.add(new Summand(addend.subtracted(), value.get(), expression.span()));
     }
     if (Math.abs(zeroPoints) > 1) {
       problems.report(
@@ -213,11 +240,24 @@ final class Resolver {
           "Absolute temperatures cannot be added: write a difference with [K].");
       return Optional.empty();
     }
-    Dimension dimension = first.map(Quantity::dimension).orElse(Dimension.NONE);
-    return sound ? Optional.of(total.total(dimension)) : Optional.empty();
+    Dimension dimension = first.map(Value::dimension).orElse(Dimension.NONE);
+    if (!sound) {
+      return Optional.empty();
+    }
+    return single ? Optional.of(singleSum(summands, dimension)) : matrices.sum(summands, dimension);
   }
 
-  private boolean fitsFirst(Quantity first, Span firstSpan, Quantity value, Expression expression) {
+  private Quantity singleSum(List<Summand> summands, Dimension dimension) {
+    QuantitySum total = new QuantitySum();
+    for (Summand summand : summands) {
+      if (summand.value() instanceof Quantity quantity) {
+        total.add(summand.subtracted(), quantity, frame.placed(summand.span()));
+      }
+    }
+    return total.total(dimension);
+  }
+
+  private boolean fitsFirst(Value first, Span firstSpan, Value value, Expression expression) {
     if (first.dimension().equals(value.dimension())) {
       return true;
     }
@@ -246,22 +286,22 @@ final class Resolver {
     return new Fix[] {Fix.insert("Add [" + code + "]", expression.span().end(), " [" + code + "]")};
   }
 
-  private Optional<Quantity> product(ProductExpression product, Place place) {
-    Optional<Quantity> result = Optional.empty();
+  private Optional<? extends Value> product(ProductExpression product, Place place) {
+    Optional<? extends Value> result = Optional.empty();
     Span statesAt = product.span();
     boolean sound = true;
     for (Factor factor : product.factors()) {
       Expression expression = factor.value();
       Optional<UnitOfMeasure> offset = Literals.offsetUnit(expression);
-      Optional<Quantity> value =
+      Optional<? extends Value> value =
           offset.isPresent()
               ? misusedOffset(expression.span(), offset.get())
-              : quantity(expression, place);
+              : value(expression, place);
       sound &= value.isPresent();
       if (!sound) {
         continue;
       }
-      Quantity right = value.orElseThrow();
+      Value right = value.orElseThrow();
       if (right.holdsStates() && factor.divides()) {
         sound = notLinear(product.span(), "the divisor " + holding(expression));
       } else if (right.holdsStates() && result.isPresent() && result.get().holdsStates()) {
@@ -275,25 +315,37 @@ final class Resolver {
                     + "\" hold states");
       } else {
         statesAt = right.holdsStates() ? expression.span() : statesAt;
-        result = result.isEmpty() ? value : times(result.get(), right, factor.divides(), product);
+        result = result.isEmpty() ? value : times(result.get(), right, factor, product);
         sound = result.isPresent();
       }
     }
     return sound ? result : Optional.empty();
   }
 
-  private Optional<Quantity> times(
-      Quantity left, Quantity right, boolean divides, ProductExpression product) {
+  private Optional<? extends Value> times(
+      Value left, Value right, Factor factor, ProductExpression product) {
+    boolean divides = factor.divides();
     Optional<Dimension> dimension =
         divides
             ? bounded(left.dimension().over(right.dimension()), product.span())
             : bounded(left.dimension().times(right.dimension()), product.span());
-    int depth = Math.max(left.depth(), right.depth()) + 1;
-    Term a = left.constant().term();
-    Term b = right.constant().term();
     if (dimension.isEmpty()) {
       return Optional.empty();
     }
+    return left instanceof Quantity a && right instanceof Quantity b
+        ? times(a, b, divides, dimension.get(), product)
+        : matrices.product(left, right, factor, dimension.get(), product);
+  }
+
+  private Optional<Quantity> times(
+      Quantity left,
+      Quantity right,
+      boolean divides,
+      Dimension dimension,
+      ProductExpression product) {
+    int depth = Math.max(left.depth(), right.depth()) + 1;
+    Term a = left.constant().term();
+    Term b = right.constant().term();
     if (divides && Simplifier.isZero(b)) {
       problems.report(
           ProblemKind.NUMBER_OUT_OF_RANGE,
@@ -302,12 +354,12 @@ final class Resolver {
       return Optional.empty();
     }
     if (divides) {
-      return Optional.of(left.map(t -> Simplifier.quotient(t, b), dimension.get(), depth));
+      return Optional.of(left.map(t -> Simplifier.quotient(t, b), dimension, depth));
     }
     return Optional.of(
         right.holdsStates()
-            ? right.map(t -> Simplifier.product(a, t), dimension.get(), depth)
-            : left.map(t -> Simplifier.product(t, b), dimension.get(), depth));
+            ? right.map(t -> Simplifier.product(a, t), dimension, depth)
+            : left.map(t -> Simplifier.product(t, b), dimension, depth));
   }
 
   private Optional<Quantity> power(PowerExpression power, Place place) {

@@ -82,6 +82,9 @@ final class Scope {
     for (NamedConstant constant : NamedConstant.values()) {
       names.add(constant.code());
     }
+    for (MatrixFunction function : MatrixFunction.values()) {
+      names.add(function.code());
+    }
     return Nearest.of(word, names);
   }
 }

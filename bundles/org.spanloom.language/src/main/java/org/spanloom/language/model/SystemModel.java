@@ -19,6 +19,7 @@ import org.spanloom.language.units.UnitOfMeasure;
  * @param interval the interval, in the time unit
  * @param parameters parameters, in order of declaration
  * @param lets named expressions, in order of declaration
+ * @param matrices matrices, in order of declaration
  * @param states the state vector
  * @param outputs outputs, in order of declaration
  * @param equations the linear form; empty when errors leave it unknown
@@ -41,6 +42,7 @@ public record SystemModel(
     TimeInterval interval,
     List<Parameter> parameters,
     List<Let> lets,
+    List<NamedMatrix> matrices,
     List<StateComponent> states,
     List<Output> outputs,
     Optional<LinearForm> equations,
@@ -62,6 +64,7 @@ public record SystemModel(
   public SystemModel {
     parameters = List.copyOf(parameters);
     lets = List.copyOf(lets);
+    matrices = List.copyOf(matrices);
     states = List.copyOf(states);
     outputs = List.copyOf(outputs);
     jumps = List.copyOf(jumps);

@@ -27,6 +27,7 @@ import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.JumpStatement;
 import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
+import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.RequireStatement;
@@ -146,9 +147,11 @@ final class SystemReader {
     system.root().declarations().reportUnused();
     List<Parameter> parameters = new ArrayList<>(file.declarations().parameters());
     List<Let> lets = new ArrayList<>(file.declarations().lets());
+    List<NamedMatrix> matrices = new ArrayList<>(file.declarations().matrices());
     for (Frame frame : frames) {
       parameters.addAll(frame.declarations().parameters());
       lets.addAll(frame.declarations().lets());
+      matrices.addAll(frame.declarations().matrices());
     }
     return new SystemModel(
         statement.name().text(),
@@ -157,6 +160,7 @@ final class SystemReader {
         times.interval(),
         parameters,
         lets,
+        matrices,
         components.list(),
         outputs,
         form,
@@ -210,6 +214,7 @@ final class SystemReader {
         case ParameterStatement parameter -> declarations.collect(parameter);
         case LetStatement let -> declarations.collect(let);
         case InputStatement input -> declarations.collect(input);
+        case MatrixStatement matrix -> declarations.collect(matrix);
         case OutputStatement output -> declarations.collect(output);
         case StateStatement state when state.primes() > 0 -> derivatives.add(state);
         case StateStatement state -> {

@@ -73,6 +73,12 @@ public enum ProblemKind {
       "A unit with a zero point of its own stands for something else than an absolute value."),
   /** An exponent that is not a plain number where one is needed. */
   EXPONENT_NOT_CONSTANT("An exponent must be a plain number here."),
+  /** Matrices, or a matrix and a single value, whose shapes do not fit together. */
+  SHAPE_MISMATCH("Matrices stand together whose shapes do not fit."),
+  /** Rows of a matrix that differ in length. */
+  MATRIX_ROW_LENGTH("Rows of a matrix differ in length."),
+  /** A matrix, or work with matrices, beyond the limits. */
+  MATRIX_TOO_LARGE("Matrices are larger than the limits."),
   /** A product, quotient, power or function of states. */
   NOT_LINEAR("An expression is not linear in the states."),
   /** A state where only parameters and time may stand. */

@@ -8,11 +8,15 @@ package org.spanloom.language.syntax;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.Function;
 import org.spanloom.language.problem.Fix;
 import org.spanloom.language.problem.Problem;
 import org.spanloom.language.problem.ProblemKind;
+import org.spanloom.language.syntax.MatrixSource.MatrixRow;
+import org.spanloom.language.syntax.MatrixSource.MatrixRows;
 import org.spanloom.language.syntax.Statement.BasisStatement;
 import org.spanloom.language.syntax.Statement.LaterStatement;
+import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.Row;
 import org.spanloom.language.syntax.Statement.SystemStatement;
 import org.spanloom.language.text.SourceText;
@@ -157,8 +161,9 @@ public final class Parser {
       case "jump" -> blocks.jump(line);
       case "boundary" -> blocks.boundary(line);
       case "basis" -> basis(line);
+      case "matrix" -> matrix(line);
       case "row" -> strayRow(line);
-      case "import", "table", "matrix", "for", "part" -> later(line, word);
+      case "import", "table", "for", "part" -> later(line, word);
       default -> simple(line);
     };
   }
@@ -208,23 +213,10 @@ public final class Parser {
     }
     parser.expectEnd();
     parser.expectNoBlock();
-    List<Row> rows = new ArrayList<>();
-    boolean allRead = true;
-    Span span = line.span();
     boolean mayHaveRows = hasRows || cursor.failed();
-    while (mayHaveRows
-        && !last.closesBlock()
-        && !last.opensBlock()
-        && isWord(lines.peek(), "row")) {
-      take();
-      StatementParser rowParser = new StatementParser(text, last);
-      Optional<Row> row = rowParser.row();
-      rowParser.expectNoBlock();
-      note(rowParser.cursor());
-      row.ifPresent(rows::add);
-      allRead &= row.isPresent();
-      span = span.join(last.span());
-    }
+    RowLines<Row> found = rows(line, mayHaveRows, StatementParser::row);
+    List<Row> rows = found.rows();
+    boolean allRead = found.allRead();
     if (hasRows && allRead && rows.isEmpty() && !cursor.failed()) {
       cursor.fail(
           ProblemKind.WORD_UNEXPECTED,
@@ -239,7 +231,55 @@ public final class Parser {
     return cursor.failed()
         ? parser.unread()
         : new BasisStatement(
-            name, argument, time, hasRows, rows, allRead, line.documentation(), span);
+            name, argument, time, hasRows, rows, allRead, line.documentation(), found.span());
+  }
+
+  /**
+   * The rows below the first line of a statement.
+   *
+   * @param allRead whether each of them could be read
+   * @param span the statement with its rows
+   */
+  private record RowLines<R>(List<R> rows, boolean allRead, Span span) {}
+
+  private <R> RowLines<R> rows(
+      StatementLine line, boolean mayFollow, Function<StatementParser, Optional<R>> reader) {
+    List<R> rows = new ArrayList<>();
+    boolean allRead = true;
+    Span span = line.span();
+    while (mayFollow && !last.closesBlock() && !last.opensBlock() && isWord(lines.peek(), "row")) {
+      take();
+      StatementParser parser = new StatementParser(text, last);
+      Optional<R> row = reader.apply(parser);
+      parser.expectNoBlock();
+      note(parser.cursor());
+      row.ifPresent(rows::add);
+      allRead &= row.isPresent();
+      span = span.join(last.span());
+    }
+    return new RowLines<>(rows, allRead, span);
+  }
+
+  /** A matrix with its rows, if it has any; see {@link MatrixParser}. */
+  private Statement matrix(StatementLine line) {
+    StatementParser parser = new StatementParser(text, line);
+    MatrixParser matrix = new MatrixParser(parser);
+    MatrixStatement head = matrix.head();
+    boolean hasRows = head.source() instanceof MatrixRows || parser.cursor().failed();
+    RowLines<MatrixRow> found = rows(line, hasRows, MatrixParser::row);
+    if (hasRows && found.allRead() && found.rows().isEmpty()) {
+      matrix.failWithoutRows();
+    }
+    note(parser.cursor());
+    if (last.opensBlock()) {
+      blocks.skip();
+    }
+    if (parser.cursor().failed()) {
+      return parser.unread();
+    }
+    MatrixSource source = hasRows ? new MatrixRows(found.rows(), found.allRead()) : head.source();
+    return new MatrixStatement(
+        head.name(), head.argument(), head.unit(), source, head.documentation(), found.span());
   }
 
   private Statement strayRow(StatementLine line) {
@@ -247,7 +287,8 @@ public final class Parser {
     problem(
         ProblemKind.STATEMENT_MISPLACED,
         line.span(),
-        "A row belongs to the basis in the lines before it: end the line of the basis with \"=\".");
+        "A row belongs to the basis or matrix in the lines before it: end the first line of that"
+            + " with \"=\".");
     if (line.opensBlock()) {
       blocks.skip();
     }
@@ -263,10 +304,6 @@ public final class Parser {
         "\"" + word + "\" is not read by this version yet: write the model without it.");
     if (line.opensBlock()) {
       span = new Span(span.start(), blocks.skip());
-    } else if (word.equals("matrix")) {
-      while (!last.closesBlock() && isWord(lines.peek(), "row")) {
-        span = span.join(take().span());
-      }
     }
     Optional<Name> declares =
         line.tokens().size() > 1 && line.tokens().get(1).kind().isName() && !word.equals("for")

@@ -178,6 +178,21 @@ public sealed interface Statement {
   }
 
   /**
+   * {@code matrix K(t) [N/m] =} with rows, {@code matrix M [kg] = file "mass.mtx"}, {@code matrix D
+   * [N.s/m] = a*M + b*K}.
+   *
+   * @param argument the independent variable of a matrix of functions of it, if there is one
+   */
+  record MatrixStatement(
+      Name name,
+      Optional<Name> argument,
+      Optional<UnitText> unit,
+      MatrixSource source,
+      String documentation,
+      Span span)
+      implements Declaration {}
+
+  /**
    * {@code boundary soak { T_air(0) = 277; T_wall(48) = 280 }}.
    *
    * @param allRead whether every line of the block could be read

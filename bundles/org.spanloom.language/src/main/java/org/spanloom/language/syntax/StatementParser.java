@@ -52,6 +52,14 @@ final class StatementParser {
     return cursor;
   }
 
+  ExpressionParser expressions() {
+    return expressions;
+  }
+
+  StatementLine line() {
+    return line;
+  }
+
   /**
    * {@code simple statement = parameter | let | input | state | output | require | accuracy |
    * transfer | equation ;} for any other word see {@link Parser}.
@@ -439,7 +447,7 @@ final class StatementParser {
     return Optional.of(name);
   }
 
-  private Optional<UnitText> unit() {
+  Optional<UnitText> unit() {
     if (cursor.is(TokenKind.UNIT)) {
       return Optional.of(expressions.unit());
     }
@@ -455,7 +463,7 @@ final class StatementParser {
     return Optional.empty();
   }
 
-  private void equalsSign() {
+  void equalsSign() {
     if (!cursor.accept(TokenKind.EQUALS) && !cursor.failed()) {
       cursor.failHere(ProblemKind.WORD_UNEXPECTED, "\"=\" belongs here");
     }

@@ -87,6 +87,7 @@ public final class Words {
           case "values" -> previous.equals("initial");
           case "every" -> previous.equals("jump");
           case "outside" -> first.equals("transfer");
+          case "file" -> first.equals("matrix") && previous.isEmpty();
           case "scale" -> first.equals("state") && !previous.equals("state");
           case "condition" -> previous.equals("scaled") || previous.equals("require");
           default -> REQUIREMENT_SET.contains(word) && previous.equals("require");
