@@ -14,7 +14,7 @@ package org.spanloom.numerics;
  * @param force writes b(t)
  * @param hasConstantMatrix whether A is constant
  * @param hasConstantForcing whether b is constant
- * @param jumps times where either may jump
+ * @param corners times where either may jump
  */
 public record FormulaSystem(
     int dimension,
@@ -23,7 +23,7 @@ public record FormulaSystem(
     Formula force,
     boolean hasConstantMatrix,
     boolean hasConstantForcing,
-    double... jumps)
+    double... corners)
     implements LinearSystem {
 
   /** All of time. */
@@ -53,8 +53,8 @@ public record FormulaSystem(
   }
 
   /** Returns a system with varying A and no forcing. */
-  public static FormulaSystem varying(int n, TimeRange range, Formula a, double... jumps) {
-    return new FormulaSystem(n, range, a, copy(new double[n]), false, true, jumps);
+  public static FormulaSystem varying(int n, TimeRange range, Formula a, double... corners) {
+    return new FormulaSystem(n, range, a, copy(new double[n]), false, true, corners);
   }
 
   private static Formula copy(double[] from) {
@@ -79,6 +79,6 @@ public record FormulaSystem(
 
   @Override
   public double[] breakpoints() {
-    return jumps.clone();
+    return corners.clone();
   }
 }

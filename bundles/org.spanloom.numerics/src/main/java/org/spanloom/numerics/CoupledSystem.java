@@ -6,6 +6,7 @@
 package org.spanloom.numerics;
 
 import java.util.Arrays;
+import java.util.List;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.factory.LinearSolverFactory_DDRM;
 import org.ejml.interfaces.linsol.LinearSolverDense;
@@ -119,6 +120,11 @@ public final class CoupledSystem implements LinearSystem {
   @Override
   public double[] breakpoints() {
     return rightSide.breakpoints();
+  }
+
+  @Override
+  public List<Jump> jumps() {
+    return rightSide.jumps();
   }
 
   /**

@@ -5,6 +5,8 @@
  */
 package org.spanloom.numerics;
 
+import java.util.List;
+
 /**
  * A linear system {@code x'(t) = A(t) x(t) + b(t)} on an interval, as the solvers see it: arrays
  * only.
@@ -53,4 +55,12 @@ public interface LinearSystem {
    * Returns the times inside the range where A or b may jump, strictly increasing; a fresh array.
    */
   double[] breakpoints();
+
+  /**
+   * Returns the changes of the states at fixed times inside {@link #range()}, by time; those at one
+   * time take place one after another. Solutions are continuous from the right at them.
+   */
+  default List<Jump> jumps() {
+    return List.of();
+  }
 }

@@ -49,6 +49,8 @@ public sealed interface Outcome<T> {
     STEP_TOO_SMALL,
     /** The work limit was reached. */
     TOO_MUCH_WORK,
+    /** A jump that cannot be undone lies between the values given and those asked for. */
+    JUMP_SINGULAR,
     /** The range asked for is not bounded or not inside the system's range. */
     RANGE
   }

@@ -5,6 +5,8 @@
  */
 package org.spanloom.numerics.basis;
 
+import java.util.List;
+import org.spanloom.numerics.Jump;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Side;
 import org.spanloom.numerics.internal.algebra.LuFactors;
@@ -19,6 +21,7 @@ final class ConditionMeter {
 
   private final Solution solution;
   private final TraceIntegral trace;
+  private final List<Jump> jumps;
   private final Watch watch;
   private final int n;
   private final int m;
@@ -30,7 +33,8 @@ final class ConditionMeter {
     this.n = solution.dimension();
     this.m = solution.columns();
     this.trace = new TraceIntegral(system, solution.nodes(), solution.startTime(), watch);
-    Scaled start = new Scaled(solution.startTime());
+    this.jumps = system.jumps();
+    Scaled start = new Scaled(solution.startTime(), Side.AFTER);
     this.startLog = start.determinant().log();
   }
 
@@ -45,10 +49,10 @@ final class ConditionMeter {
     double error;
     boolean vanishes;
 
-    Scaled(double t) {
+    Scaled(double t, Side side) {
       double[] e = new double[n * m];
-      solution.value(t, Side.AFTER, x);
-      solution.errorEstimate(t, e);
+      solution.value(t, side, x);
+      solution.errorEstimate(t, side, e);
       for (int j = 0; j < m; j++) {
         double norm = norm(x, j);
         double size = norm(e, j);
@@ -89,7 +93,12 @@ final class ConditionMeter {
    * their time.
    */
   ConditionSample at(double t) {
-    Scaled columns = new Scaled(t);
+    return at(t, Side.AFTER);
+  }
+
+  /** Takes a sample on one side of a time. */
+  ConditionSample at(double t, Side side) {
+    Scaled columns = new Scaled(t, side);
     double noise = Math.sqrt(m) * Math.max(columns.error, ROUNDING);
     double[] scaled = SingularValues.general(columns.unit, n, m, watch);
     if (scaled[m - 1] > noise / 4) {
@@ -108,7 +117,23 @@ final class ConditionMeter {
         resolved ? scaled[0] / scaled[m - 1] : Double.POSITIVE_INFINITY,
         determinant.log(),
         determinant.sign(),
-        startLog + trace.at(t),
+        startLog + trace.at(t) + jumped(t, side),
         columns.error);
+  }
+
+  /** Returns what the jumps between the start and a time add to ln |det X|. */
+  private double jumped(double t, Side side) {
+    double start = solution.startTime();
+    double sum = 0;
+    for (Jump jump : jumps) {
+      double s = jump.time();
+      boolean past = side == Side.AFTER ? s <= t : s < t;
+      if (s > start && past) {
+        sum += jump.logDeterminant();
+      } else if (s <= start && !past) {
+        sum -= jump.logDeterminant();
+      }
+    }
+    return sum;
   }
 }

@@ -17,6 +17,7 @@ import java.util.function.ToDoubleFunction;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Progress;
+import org.spanloom.numerics.Side;
 import org.spanloom.numerics.TimeRange;
 import org.spanloom.numerics.internal.work.Cancelled;
 import org.spanloom.numerics.internal.work.Hopeless;
@@ -70,7 +71,7 @@ public final class ConditionProfile {
       List<ConditionSample> samples = new ArrayList<>();
       double[] times = times(basis, over);
       for (int k = 0; k < times.length; k++) {
-        samples.add(meter.at(times[k]));
+        addSamples(meter, basis, times[k], samples);
         progress.worked((k + 1.0) / times.length);
       }
       return new Outcome.Solved<>(new ConditionProfile(meter, samples, basis.startTime()));
@@ -120,7 +121,7 @@ public final class ConditionProfile {
       ConditionMeter meter = new ConditionMeter(system, basis, new Watch(progress));
       List<ConditionSample> samples = new ArrayList<>();
       for (double t : times(basis, over)) {
-        samples.add(meter.at(t));
+        addSamples(meter, basis, t, samples);
         if (samples.getLast().scaled() > limit) {
           break;
         }
@@ -132,6 +133,15 @@ public final class ConditionProfile {
     } catch (Hopeless hopeless) {
       return hopeless.outcome();
     }
+  }
+
+  /** Adds the sample at a time, and where the basis jumps inside the range the one before it. */
+  private static void addSamples(
+      ConditionMeter meter, Solution basis, double t, List<ConditionSample> samples) {
+    if (!samples.isEmpty() && Arrays.binarySearch(basis.jumpTimes(), t) >= 0) {
+      samples.add(meter.at(t, Side.BEFORE));
+    }
+    samples.add(meter.at(t));
   }
 
   /**
@@ -150,6 +160,10 @@ public final class ConditionProfile {
     int stride = 1 + nodes.length / (most - even);
     for (int k = 0; k < nodes.length; k += stride) {
       times.add(nodes[k]);
+    }
+    double[] jumps = Arrays.stream(basis.jumpTimes()).filter(over::contains).toArray();
+    for (int k = 0; k < jumps.length; k += 1 + jumps.length / most) {
+      times.add(jumps[k]);
     }
     for (int cell = 0; cell < even; cell++) {
       double from = over.start() + over.length() * (cell / (double) even);

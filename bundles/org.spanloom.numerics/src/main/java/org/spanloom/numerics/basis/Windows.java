@@ -88,7 +88,7 @@ public final class Windows {
         case End.At at when !at.limited() -> step *= 2;
         case End.At at -> {
           double length = at.time() - start;
-          if (system.hasConstantMatrix()) {
+          if (system.hasConstantMatrix() && system.jumps().isEmpty()) {
             return equal(length);
           }
           windows++;

@@ -55,6 +55,7 @@ public final class ExponentialSolution implements Solution {
   private final double startTime;
   private final TimeRange range;
   private final int[] order;
+  private final double constant;
   private final double[][] start;
   private final double[] scale;
   private final Ladders later;
@@ -75,7 +76,7 @@ public final class ExponentialSolution implements Solution {
     this.range = values.span();
     this.scale = values.accuracy().scale();
     double[] x0 = values.x0();
-    double constant = b.map(f -> constantState(a, f, n)).orElse(1.0);
+    constant = b.map(f -> constantState(a, f, n)).orElse(1.0);
     int size = forced ? n + 1 : n;
     double[][] whole = new double[size][size];
     for (int i = 0; i < n; i++) {
@@ -87,19 +88,62 @@ public final class ExponentialSolution implements Solution {
     TriangularOrder structure = TriangularOrder.of(patternOf(whole));
     order = structure.order();
     double[][] ordered = new double[size][size];
-    start = new double[size][m];
     for (int i = 0; i < size; i++) {
       for (int j = 0; j < size; j++) {
         ordered[i][j] = whole[order[i]][order[j]];
       }
-      for (int j = 0; j < m; j++) {
-        start[i][j] = order[i] < n ? x0[order[i] * m + j] : constant;
-      }
     }
+    start = start(x0, constant);
     boolean[] alone = structure.alone();
     later = ladders(ordered, alone, range.end() - startTime, watch);
     earlier = ladders(Rows.scaled(ordered, -1), alone, startTime - range.start(), watch);
     nodes = chooseNodes();
+  }
+
+  private ExponentialSolution(
+      ExponentialSolution shared, double t0, double[] x0, TimeRange span, boolean forced) {
+    this.n = shared.n;
+    this.m = x0.length / n;
+    this.forced = shared.forced;
+    this.startTime = t0;
+    this.range = span;
+    this.scale = shared.scale;
+    this.constant = shared.constant;
+    this.order = shared.order;
+    this.later = shared.later;
+    this.earlier = shared.earlier;
+    this.start = start(x0, forced ? constant : 0);
+    this.nodes = chooseNodes();
+  }
+
+  private double[][] start(double[] x0, double lastState) {
+    double[][] rows = new double[order.length][m];
+    for (int i = 0; i < rows.length; i++) {
+      for (int j = 0; j < m; j++) {
+        rows[i][j] = order[i] < n ? x0[order[i] * m + j] : lastState;
+      }
+    }
+    return rows;
+  }
+
+  /**
+   * Returns a solution of the same system from other values, with the same propagators.
+   *
+   * @param t0 time of the values, an end of the range
+   * @param x0 columns there, n by any number of them, row by row
+   * @param span range to be covered; best not longer to either side than that of this solution
+   * @param forcingCounts whether the forcing of this solution counts
+   * @param watch asked while working
+   * @throws Hopeless when the solution overflows in the range
+   */
+  public ExponentialSolution restarted(
+      double t0, double[] x0, TimeRange span, boolean forcingCounts, Watch watch) {
+    ExponentialSolution other = new ExponentialSolution(this, t0, x0, span, forcingCounts);
+    double far = t0 == span.start() ? span.end() : span.start();
+    if (!other.isFiniteAt(far, watch)) {
+      other.requireFinite(watch);
+    }
+    return other;
   }
 
   /**

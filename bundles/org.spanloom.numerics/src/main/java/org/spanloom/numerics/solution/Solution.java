@@ -39,12 +39,29 @@ public interface Solution {
   void value(double t, Side side, double[] x);
 
   /**
-   * Writes estimates of the absolute global error of what {@link #value} writes.
+   * Writes estimates of the absolute global error of what {@link #value} writes; where the solution
+   * jumps, for the value after it.
    *
    * @param t time inside {@link #range()}
    * @param error receives n*m numbers, not negative, finite
    */
   void errorEstimate(double t, double[] error);
+
+  /**
+   * Writes estimates of the absolute global error of what {@link #value} writes for a side.
+   *
+   * @param t time inside {@link #range()}
+   * @param side the side to take where the solution jumps
+   * @param error receives n*m numbers, not negative, finite
+   */
+  default void errorEstimate(double t, Side side, double[] error) {
+    errorEstimate(t, error);
+  }
+
+  /** Returns the times in the range at which the solution itself jumps, increasing. */
+  default double[] jumpTimes() {
+    return new double[0];
+  }
 
   /**
    * Returns the times at which the method stepped, increasing, with both ends of the range; a fresh

@@ -7,6 +7,7 @@ package org.spanloom.numerics.solution;
 
 import java.util.Optional;
 import org.spanloom.numerics.Accuracy;
+import org.spanloom.numerics.JumpSelection;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Outcome.Reason;
@@ -76,7 +77,11 @@ public final class SolutionSolver {
   private static Outcome<Solution> solve(InitialValues values, Progress progress) {
     try {
       requireSolvable(values);
-      Solution solution = bySystem(values, new Watch(progress));
+      Watch watch = new Watch(progress);
+      Solution solution =
+          JumpSolver.isNeededFor(values)
+              ? JumpSolver.solve(values, betweenJumps(values, watch), watch)
+              : bySystem(values, watch);
       progress.worked(1);
       return new Outcome.Solved<>(solution);
     } catch (Cancelled cancelled) {
@@ -113,6 +118,32 @@ public final class SolutionSolver {
     }
   }
 
+  /** Returns the method for the pieces; with constant coefficients all share their propagators. */
+  private static JumpSolver.PieceMethod betweenJumps(InitialValues values, Watch watch) {
+    LinearSystem smooth = JumpSelection.without(values.system());
+    int n = smooth.dimension();
+    double earlier = JumpSolver.longestPiece(values, values.span().start());
+    double later = JumpSolver.longestPiece(values, values.span().end());
+    double t0 = values.t0();
+    TimeRange longest =
+        new TimeRange(
+            Math.max(t0 - earlier, values.span().start()),
+            Math.min(t0 + later, values.span().end()));
+    InitialValues still =
+        new InitialValues(
+            smooth, values.forced(), t0, new double[n], 1, longest, values.accuracy());
+    if (n > 0
+        && longest.length() > 0
+        && MethodChoice.of(still, watch).method() == Method.MATRIX_EXPONENTIAL) {
+      ExponentialSolution shared = exponential(still, watch);
+      return (start, x0, span, forced, accuracy) ->
+          shared.restarted(start, x0, span, forced, watch);
+    }
+    return (start, x0, span, forced, accuracy) ->
+        bySystem(
+            new InitialValues(smooth, forced, start, x0, values.columns(), span, accuracy), watch);
+  }
+
   private static Solution bySystem(InitialValues values, Watch watch) {
     int n = values.system().dimension();
     int m = values.columns();
@@ -132,7 +163,7 @@ public final class SolutionSolver {
     };
   }
 
-  private static Solution exponential(InitialValues values, Watch watch) {
+  private static ExponentialSolution exponential(InitialValues values, Watch watch) {
     LinearSystem system = values.system();
     double t0 = values.t0();
     int n = system.dimension();

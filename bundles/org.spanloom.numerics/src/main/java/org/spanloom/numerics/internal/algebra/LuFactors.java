@@ -146,6 +146,17 @@ public final class LuFactors {
     return singular;
   }
 
+  /** Returns the smallest pivot over the largest, without their signs; 1 for an order of 0. */
+  public double pivotRatio() {
+    double least = Double.POSITIVE_INFINITY;
+    double most = 0;
+    for (int k = 0; k < rows.length; k++) {
+      least = Math.min(least, Math.abs(rows[k][k]));
+      most = Math.max(most, Math.abs(rows[k][k]));
+    }
+    return rows.length == 0 ? 1 : least / most;
+  }
+
   /** Returns ln |det|; negative infinity when singular. */
   public double logDeterminant() {
     double sum = 0;
