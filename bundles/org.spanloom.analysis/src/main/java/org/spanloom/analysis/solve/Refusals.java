@@ -28,6 +28,8 @@ public final class Refusals {
               "the steps become too small to go on; a coefficient is probably unbounded there";
           case TOO_MUCH_WORK ->
               "the work limit was reached; ask for a shorter range or a larger relative error";
+          case JUMP_SINGULAR ->
+              "a jump takes place that cannot be undone, and the values are given behind it; give them before it";
           case RANGE -> "the range asked for is not inside the interval of the system";
         };
     return place + what + (unsolved.detail().isEmpty() ? "" : " (" + unsolved.detail() + ")") + ".";
