@@ -34,6 +34,7 @@ final class DefinednessCheck {
   private final Times times;
   private final double start;
   private final BooleanSupplier cancelled;
+  private final KnownConstants constants = new KnownConstants();
   private final Set<Let> faulty = Collections.newSetFromMap(new IdentityHashMap<>());
   private final Set<Span> reported = new HashSet<>();
 
@@ -115,7 +116,7 @@ final class DefinednessCheck {
     ModelReader.check(cancelled);
     boolean bounded = times.interval().isBounded();
     boolean trivial = isPlain(term, 0) || !bounded && Simplifier.surelyHasAValue(term);
-    if (trivial || system.problems().isFull() || usesFaulty(term)) {
+    if (trivial || constants.isKnown(term) || system.problems().isFull() || usesFaulty(term)) {
       return true;
     }
     return switch (Definedness.of(term, times.interval(), times.unit(), start)) {

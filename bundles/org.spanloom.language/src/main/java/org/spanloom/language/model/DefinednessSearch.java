@@ -49,6 +49,7 @@ final class DefinednessSearch {
   private final TermTape tape;
   private final TermIntervals intervals;
   private final TermEvaluator value;
+  private final double[] constants;
   private final List<Guard> guards = new ArrayList<>();
   private final Map<Guard, GuardProbe> probes = new HashMap<>();
   private final TimeInterval interval;
@@ -61,7 +62,8 @@ final class DefinednessSearch {
   DefinednessSearch(Term term, TimeInterval interval, UnitOfMeasure timeUnit, double start) {
     this.tape = TermTape.of(term);
     this.intervals = new TermIntervals(tape);
-    this.value = TermEvaluator.of(term);
+    this.value = TermEvaluator.of(tape);
+    this.constants = value.constants();
     this.interval = interval;
     this.timeUnit = timeUnit;
     this.first = timeUnit.toBase(interval.start());
@@ -123,7 +125,7 @@ final class DefinednessSearch {
   }
 
   private boolean failsAlways(Guard guard) {
-    double x = TermEvaluator.constant(tape.node(guard.node()));
+    double x = constants[guard.node()];
     Interval exponent = GuardProbe.exponent(guard, intervals);
     return Double.isNaN(x) || guard.judge(Interval.at(x), exponent) == Guard.Verdict.FAILS;
   }

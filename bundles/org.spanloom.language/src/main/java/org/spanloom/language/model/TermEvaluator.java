@@ -21,8 +21,8 @@ public final class TermEvaluator {
   private final Map<String, Double> replaced;
   private final double[] values;
 
-  private TermEvaluator(Term term, Map<String, Double> replaced) {
-    this.tape = TermTape.of(term);
+  private TermEvaluator(TermTape tape, Map<String, Double> replaced) {
+    this.tape = tape;
     this.replaced = Map.copyOf(replaced);
     this.values = new double[tape.size()];
   }
@@ -31,7 +31,12 @@ public final class TermEvaluator {
    * Returns an evaluator that takes parameters as declared; not for use by several threads at once.
    */
   public static TermEvaluator of(Term term) {
-    return new TermEvaluator(term, Map.of());
+    return of(TermTape.of(term));
+  }
+
+  /** Returns an evaluator of a term that is laid out already. */
+  static TermEvaluator of(TermTape tape) {
+    return new TermEvaluator(tape, Map.of());
   }
 
   /**
@@ -42,12 +47,18 @@ public final class TermEvaluator {
    * @param replaced values in coherent SI units by name of parameter
    */
   public static TermEvaluator of(Term term, Map<String, Double> replaced) {
-    return new TermEvaluator(term, replaced);
+    return new TermEvaluator(TermTape.of(term), replaced);
   }
 
   /** Returns the value of a term without time, parameters as declared, in coherent SI units. */
   public static double constant(Term term) {
-    return of(term).at(Double.NaN);
+    return term instanceof Term.Constant(double value) ? value : of(term).at(Double.NaN);
+  }
+
+  /** Returns the values of all nodes, those without time as {@link #constant} has them. */
+  double[] constants() {
+    at(Double.NaN);
+    return values.clone();
   }
 
   /**

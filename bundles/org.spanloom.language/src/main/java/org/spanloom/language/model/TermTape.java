@@ -49,16 +49,19 @@ final class TermTape {
         continue;
       }
       List<Term> below = operands(term);
+      int[] indices = new int[below.size()];
       boolean ready = true;
-      for (Term operand : below) {
-        if (!places.containsKey(identity(operand))) {
-          open.push(operand);
+      for (int i = 0; i < indices.length; i++) {
+        Integer place = places.get(identity(below.get(i)));
+        if (place == null) {
+          open.push(below.get(i));
           ready = false;
+        } else {
+          indices[i] = place;
         }
       }
       if (ready) {
         open.pop();
-        int[] indices = below.stream().mapToInt(operand -> places.get(identity(operand))).toArray();
         places.put(identity(term), nodes.size());
         nodes.add(term);
         operands.add(indices);
