@@ -18,6 +18,12 @@ public enum FindingKind {
   SOLUTION_MISSING("solution-missing", Severity.ERROR),
   /** The estimated error of a result is larger than the accuracy asked for. */
   ACCURACY_NOT_REACHED("accuracy-not-reached", Severity.WARNING),
+  /** Boundary conditions that no solution meets. */
+  BOUNDARY_WITHOUT_SOLUTION("boundary-without-solution", Severity.ERROR),
+  /** Boundary conditions that infinitely many solutions meet. */
+  BOUNDARY_NOT_UNIQUE("boundary-not-unique", Severity.ERROR),
+  /** Boundary conditions that leave fewer digits than the system asks for. */
+  BOUNDARY_ILL_CONDITIONED("boundary-ill-conditioned", Severity.WARNING),
   /** A candidate basis whose columns are linearly dependent. */
   BASIS_DEPENDENT("basis-dependent", Severity.ERROR),
   /** A closed form that does not solve the system. */

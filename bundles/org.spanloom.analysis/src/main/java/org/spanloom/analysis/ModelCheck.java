@@ -11,6 +11,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.SequencedMap;
 import org.spanloom.analysis.basis.BasisProfiles;
+import org.spanloom.analysis.boundary.BoundaryCheck;
 import org.spanloom.analysis.coefficients.CompiledSystem;
 import org.spanloom.analysis.coefficients.SystemCompiler;
 import org.spanloom.analysis.requirement.RequirementCheck;
@@ -101,9 +102,11 @@ public final class ModelCheck {
     CompiledSystem system = SystemCompiler.compile(model, new LinkedHashMap<>());
     SystemSolutions solutions = new SystemSolutions(system, settings, part);
     if (hasSingularMass(system, solutions)) {
-      return new SystemReport(model, List.of(), List.of());
+      return new SystemReport(model, List.of(), List.of(), List.of());
     }
     trajectories(system, solutions);
+    BoundaryCheck boundaries = new BoundaryCheck(solutions);
+    findings.addAll(boundaries.findings());
     BasisProfiles bases = new BasisProfiles(solutions);
     findings.addAll(bases.findings());
     RequirementCheck check = new RequirementCheck(solutions, bases);
@@ -113,7 +116,7 @@ public final class ModelCheck {
       results.add(result);
       requirement(result);
     }
-    return new SystemReport(model, bases.reports(), results);
+    return new SystemReport(model, boundaries.reports(), bases.reports(), results);
   }
 
   private boolean hasSingularMass(CompiledSystem system, SystemSolutions solutions) {
@@ -165,23 +168,8 @@ public final class ModelCheck {
     double asked = system.model().accuracy();
     Reached worst = Reached.worst(system, solution);
     if (worst.relative() > asked) {
-      SequencedMap<String, Double> numbers = new LinkedHashMap<>();
-      numbers.put("asked", asked);
-      numbers.put("reached", worst.relative());
-      numbers.put("time", worst.time());
-      String label = system.model().states().get(worst.component()).label();
-      findings.add(
-          FindingKind.ACCURACY_NOT_REACHED.at(
-              system.model().accuracySpan(),
-              "the solution%s is known to a relative %s only, at %s in %s, not to the %s asked for; ask for less, give %s a larger scale, or shorten the interval"
-                  .formatted(
-                      initial.name().isEmpty() ? "" : " of " + initial.name(),
-                      Figures.text(worst.relative(), 2),
-                      Figures.at(system.model(), worst.time()),
-                      label,
-                      Figures.text(asked, 2),
-                      label),
-              numbers));
+      String whose = initial.name().isEmpty() ? "" : " of " + initial.name();
+      findings.add(worst.finding(system, asked, whose));
     }
   }
 

@@ -5,6 +5,8 @@
  */
 package org.spanloom.analysis;
 
+import java.util.LinkedHashMap;
+import java.util.SequencedMap;
 import org.spanloom.analysis.coefficients.CompiledSystem;
 import org.spanloom.numerics.Side;
 import org.spanloom.numerics.solution.Solution;
@@ -37,5 +39,29 @@ public record Reached(double relative, int component, double time) {
       }
     }
     return worst;
+  }
+
+  /**
+   * Returns the finding that the accuracy asked for was not reached.
+   *
+   * @param whose which solution, as " of NAME"; empty for the only one
+   */
+  public Finding finding(CompiledSystem system, double asked, String whose) {
+    SequencedMap<String, Double> numbers = new LinkedHashMap<>();
+    numbers.put("asked", asked);
+    numbers.put("reached", relative);
+    numbers.put("time", time);
+    String label = system.model().states().get(component).label();
+    return FindingKind.ACCURACY_NOT_REACHED.at(
+        system.model().accuracySpan(),
+        "the solution%s is known to a relative %s only, at %s in %s, not to the %s asked for; ask for less, give %s a larger scale, or shorten the interval"
+            .formatted(
+                whose,
+                Figures.text(relative, 2),
+                Figures.at(system.model(), time),
+                label,
+                Figures.text(asked, 2),
+                label),
+        numbers);
   }
 }

@@ -9,17 +9,20 @@ import java.util.LinkedHashMap;
 import java.util.Map;
 import java.util.Optional;
 import java.util.TreeSet;
+import org.spanloom.analysis.boundary.BoundaryProblem;
 import org.spanloom.analysis.coefficients.AffineEvaluator;
 import org.spanloom.analysis.coefficients.CompiledSystem;
 import org.spanloom.analysis.settings.Settings;
 import org.spanloom.language.model.AffineValue;
 import org.spanloom.language.model.Basis;
+import org.spanloom.language.model.Boundary;
 import org.spanloom.language.model.InitialValues;
 import org.spanloom.language.model.Requirement;
 import org.spanloom.language.model.TimeInterval;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Progress;
 import org.spanloom.numerics.TimeRange;
+import org.spanloom.numerics.boundary.BoundaryAnswer;
 import org.spanloom.numerics.solution.Solution;
 import org.spanloom.numerics.solution.SolutionSolver;
 
@@ -31,6 +34,7 @@ public final class SystemSolutions {
   private final Progress progress;
   private final Optional<TimeRange> range;
   private final Map<String, Outcome<Solution>> trajectories = new LinkedHashMap<>();
+  private final Map<String, Outcome<BoundaryAnswer>> boundaries = new LinkedHashMap<>();
 
   /** Prepares; nothing is solved yet. */
   public SystemSolutions(CompiledSystem system, Settings settings, Progress progress) {
@@ -75,6 +79,11 @@ public final class SystemSolutions {
         case Basis.Principal p -> named.add(system.time(p.time()));
         case Basis.Given g -> named.add(system.time(g.time()));
         case Basis.ClosedForm c -> {}
+      }
+    }
+    for (Boundary boundary : system.model().boundaries()) {
+      for (Boundary.Condition condition : boundary.conditions()) {
+        condition.samples().forEach(s -> s.at().map(system::time).ifPresent(named::add));
       }
     }
     for (Requirement requirement : system.model().requirements()) {
@@ -136,5 +145,39 @@ public final class SystemSolutions {
                 range.orElseThrow(),
                 system.accuracy(system.model().accuracy()),
                 progress));
+  }
+
+  /** Returns what is known of boundary conditions of the system. */
+  public Outcome<BoundaryAnswer> boundary(Boundary boundary) {
+    return boundaries.computeIfAbsent(
+        boundary.name(),
+        name -> BoundaryProblem.of(system, boundary).solve(system.model().accuracy(), progress));
+  }
+
+  /**
+   * Returns the solution of initial values or boundary conditions of a name; empty where there is
+   * none or not exactly one.
+   *
+   * @param name the name; the empty one is that of the values in the declarations
+   */
+  public Optional<Outcome<Solution>> named(String name) {
+    Optional<InitialValues> initial = initial(name);
+    if (initial.isPresent()) {
+      return initial.map(this::trajectory);
+    }
+    Optional<Boundary> found =
+        system.model().boundaries().stream().filter(b -> b.name().equals(name)).findFirst();
+    if (found.isEmpty()) {
+      return Optional.empty();
+    }
+    return switch (boundary(found.get())) {
+      case Outcome.Solved<BoundaryAnswer> s ->
+          s.value() instanceof BoundaryAnswer.Unique unique
+              ? Optional.of(new Outcome.Solved<>(unique.solution()))
+              : Optional.empty();
+      case Outcome.Cancelled<BoundaryAnswer> c -> Optional.of(new Outcome.Cancelled<>());
+      case Outcome.Unsolved<BoundaryAnswer> u ->
+          Optional.of(new Outcome.Unsolved<>(u.reason(), u.time(), u.detail()));
+    };
   }
 }

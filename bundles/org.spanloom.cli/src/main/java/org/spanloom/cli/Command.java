@@ -47,6 +47,18 @@ enum Command {
       return new BasisCommand(values, streams).run();
     }
   },
+  /** Lists the solution of a boundary-value problem. */
+  BOUNDARY("boundary", "list the solution that meets boundary conditions") {
+    @Override
+    void describe(CommandSpec spec) {
+      BoundaryCommand.describe(spec);
+    }
+
+    @Override
+    int run(Options.Values values, Streams streams) throws CommandFailure {
+      return new BoundaryCommand(values, streams).run();
+    }
+  },
   /** Lists eigenvalues or multipliers. */
   SPECTRUM("spectrum", "list eigenvalues with their modes, or multipliers of a periodic system") {
     @Override

@@ -15,6 +15,7 @@ import org.spanloom.analysis.CheckReport;
 import org.spanloom.analysis.Finding;
 import org.spanloom.analysis.SystemReport;
 import org.spanloom.analysis.basis.BasisReport;
+import org.spanloom.analysis.boundary.BoundaryReport;
 import org.spanloom.analysis.requirement.RequirementResult;
 import org.spanloom.language.text.Position;
 import org.spanloom.language.text.SourceText;
@@ -24,9 +25,9 @@ import org.spanloom.language.text.Span;
  * A check as JSON (RFC 8259) for machines.
  *
  * <p>Shape: {@code {"format": 1, "caution": text, "files": [{"file", "findings": [...], "systems":
- * [{"system", "states", "bases": [...], "requirements": [...]}]}], "clean": boolean}}. A number
- * that is not finite is the text {@code "infinite"}, one that does not apply is absent. Lines and
- * columns count from 1.
+ * [{"system", "states", "boundaries": [...], "bases": [...], "requirements": [...]}]}], "clean":
+ * boolean}}. A number that is not finite is the text {@code "infinite"}, one that does not apply is
+ * absent. Lines and columns count from 1.
  */
 public final class JsonReport {
 
@@ -111,6 +112,11 @@ public final class JsonReport {
     json.name("system").value(report.system().name());
     json.name("states").value(report.system().states().size());
     json.name("timeUnit").value(report.system().timeUnit().code());
+    json.name("boundaries").beginArray();
+    for (BoundaryReport boundary : report.boundaries()) {
+      boundary(json, source, boundary);
+    }
+    json.endArray();
     json.name("bases").beginArray();
     for (BasisReport basis : report.bases()) {
       basis(json, source, basis);
@@ -121,6 +127,19 @@ public final class JsonReport {
       requirement(json, source, result);
     }
     json.endArray();
+    json.endObject();
+  }
+
+  private static void boundary(JsonWriter json, SourceText source, BoundaryReport boundary)
+      throws IOException {
+    json.beginObject();
+    json.name("boundary").value(boundary.name());
+    json.name("solutions").value(boundary.verdict().name().toLowerCase(Locale.ROOT));
+    place(json, source, boundary.span());
+    number(json, "toConditions", boundary.toConditions());
+    number(json, "toForcing", boundary.toForcing());
+    number(json, "digitsLeft", boundary.digitsLeft());
+    json.name("detail").value(boundary.detail());
     json.endObject();
   }
 

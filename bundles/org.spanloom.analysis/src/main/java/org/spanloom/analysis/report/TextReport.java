@@ -13,6 +13,7 @@ import org.spanloom.analysis.Figures;
 import org.spanloom.analysis.Finding;
 import org.spanloom.analysis.SystemReport;
 import org.spanloom.analysis.basis.BasisReport;
+import org.spanloom.analysis.boundary.BoundaryReport;
 import org.spanloom.analysis.requirement.RequirementResult;
 import org.spanloom.analysis.solve.Choice;
 import org.spanloom.language.model.SystemModel;
@@ -24,9 +25,12 @@ public final class TextReport {
 
   /** The cautions that go with every report. */
   public static final String CAUTION =
-      "Numerical results are approximations with an estimated error; a model that passes every check can still be the\n"
-          + "wrong model. Results that bear on health, structures, pressure, electricity or radiation need review by a\n"
-          + "qualified, where required licensed, practitioner under the local codes. Spanloom is not a medical device and\n"
+      "Numerical results are approximations with an estimated error; a model that passes every"
+          + " check can still be the\n"
+          + "wrong model. Results that bear on health, structures, pressure, electricity or"
+          + " radiation need review by a\n"
+          + "qualified, where required licensed, practitioner under the local codes. Spanloom is"
+          + " not a medical device and\n"
           + "not a certified design tool.\n";
 
   private TextReport() {}
@@ -74,6 +78,10 @@ public final class TextReport {
             system.states().size(),
             system.states().size() == 1 ? "state" : "states",
             Choice.describe(system)));
+    for (BoundaryReport boundary : report.boundaries()) {
+      text.append("    boundary  ").append(boundary.name()).append(": ");
+      text.append(boundary.detail()).append('\n');
+    }
     if (report.bases().isEmpty() && !system.states().isEmpty()) {
       text.append("    basis     none was followed\n");
     }

@@ -16,7 +16,6 @@ import org.spanloom.analysis.coefficients.AffineEvaluator.Estimate;
 import org.spanloom.analysis.coefficients.CompiledSystem;
 import org.spanloom.analysis.requirement.RequirementResult.Status;
 import org.spanloom.analysis.solve.Refusals;
-import org.spanloom.language.model.InitialValues;
 import org.spanloom.language.model.Requirement;
 import org.spanloom.language.model.StateComponent;
 import org.spanloom.language.model.Term;
@@ -38,25 +37,29 @@ final class TrajectoryRequirements {
 
   /** A trajectory, or the result that says why there is none. */
   private sealed interface Found {
-    record Trajectory(Solution solution, InitialValues initial) implements Found {}
+    record Trajectory(Solution solution) implements Found {}
 
     record Missing(RequirementResult result) implements Found {}
   }
 
   private Found find(Requirement requirement, String under) {
-    Optional<InitialValues> initial = solutions.initial(under);
-    if (initial.isEmpty()) {
-      return missing(
-          requirement,
-          under.isEmpty()
-              ? "no set of initial values is complete in the declarations; name one with 'under NAME'"
-              : "there is no complete set of initial values '" + under + "'");
-    }
     if (solutions.range().isEmpty()) {
       return missing(requirement, "the interval is not bounded; add 'until TIME'");
     }
-    return switch (solutions.trajectory(initial.get())) {
-      case Outcome.Solved<Solution> s -> new Found.Trajectory(s.value(), initial.get());
+    Optional<Outcome<Solution>> outcome = solutions.named(under);
+    if (outcome.isEmpty()) {
+      return missing(
+          requirement,
+          under.isEmpty()
+              ? "no set of initial values is complete in the declarations; name one with 'under"
+                  + " NAME'"
+              : "there is no complete set of initial values and no one solution of boundary"
+                  + " conditions '"
+                  + under
+                  + "'");
+    }
+    return switch (outcome.get()) {
+      case Outcome.Solved<Solution> s -> new Found.Trajectory(s.value());
       case Outcome.Cancelled<Solution> c -> missing(requirement, "the check was cancelled");
       case Outcome.Unsolved<Solution> u -> missing(requirement, Refusals.text(system, u));
     };

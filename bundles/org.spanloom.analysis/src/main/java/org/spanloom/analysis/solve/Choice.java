@@ -162,7 +162,8 @@ public final class Choice {
       throw new RefusedException(
           true,
           String.format(
-              "'%s' is %s and cannot be set to a number; change its line in the model, or set a parameter in it.",
+              "'%s' is %s and cannot be set to a number; change its line in the model, or set a"
+                  + " parameter in it.",
               name,
               named.get().isInput()
                   ? "an input, a function of " + system.timeName() + ","
@@ -191,6 +192,21 @@ public final class Choice {
               describe(system.model())));
     }
     return t;
+  }
+
+  /**
+   * Returns the relative error to aim at.
+   *
+   * @param wanted what was asked for; the system's own if empty
+   */
+  public static double accuracy(OptionalDouble wanted, CompiledSystem system)
+      throws RefusedException {
+    double accuracy = wanted.orElse(system.model().accuracy());
+    if (!(accuracy > 0 && accuracy < 1)) {
+      throw new RefusedException(
+          true, "the accuracy must be a number between 0 and 1, for example 1e-8.");
+    }
+    return accuracy;
   }
 
   /** The ends of a range. */

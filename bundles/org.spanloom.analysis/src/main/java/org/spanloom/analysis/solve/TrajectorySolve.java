@@ -5,31 +5,22 @@
  */
 package org.spanloom.analysis.solve;
 
-import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.stream.DoubleStream;
 import java.util.stream.IntStream;
-import org.spanloom.analysis.Reached;
-import org.spanloom.analysis.coefficients.AffineEvaluator;
 import org.spanloom.analysis.coefficients.CompiledSystem;
 import org.spanloom.language.model.InitialValues;
-import org.spanloom.language.model.Output;
-import org.spanloom.language.model.StateComponent;
 import org.spanloom.language.model.TimeInterval;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Progress;
-import org.spanloom.numerics.Side;
 import org.spanloom.numerics.TimeRange;
 import org.spanloom.numerics.solution.Solution;
 import org.spanloom.numerics.solution.SolutionSolver;
 
 /** Solves an initial value problem of a model and lists the solution. */
 public final class TrajectorySolve {
-
-  /** Most numbers in a table; about 400 MB with their errors. */
-  public static final int MOST_NUMBERS = 25_000_000;
 
   private TrajectorySolve() {}
 
@@ -52,14 +43,11 @@ public final class TrajectorySolve {
       throws Choice.RefusedException {
     CompiledSystem system = Choice.system(request.model(), request.system(), request.parameters());
     InitialValues initial = initial(system, request.initial());
-    double accuracy = request.accuracy().orElse(system.model().accuracy());
-    if (!(accuracy > 0 && accuracy < 1)) {
-      throw new Choice.RefusedException(
-          true, "the accuracy must be a number between 0 and 1, for example 1e-8.");
-    }
+    double accuracy = Choice.accuracy(request.accuracy(), system);
     double t0 = system.time(initial.time());
     double[] times = times(request, system, t0);
-    checkSize((long) times.length * (1 + system.dimension() + system.model().outputs().size()));
+    Listing.checkSize(
+        (long) times.length * (1 + system.dimension() + system.model().outputs().size()));
     double first = Math.min(t0, Arrays.stream(times).min().orElse(t0));
     double last = Math.max(t0, Arrays.stream(times).max().orElse(t0));
     Outcome<Solution> outcome =
@@ -73,9 +61,9 @@ public final class TrajectorySolve {
     return switch (outcome) {
       case Outcome.Solved<Solution> s ->
           new SolveAnswer.Solved(
-              table(
+              Listing.table(
                   system,
-                  initial,
+                  initial.name(),
                   s.value(),
                   listed(request.sampling(), times, s.value()),
                   accuracy));
@@ -93,7 +81,8 @@ public final class TrajectorySolve {
           false,
           "system "
               + system.model().name()
-              + " has no complete set of initial values; give each state one, as in 'state x = 1'.");
+              + " has no complete set of initial values; give each state one, as in 'state x ="
+              + " 1'.");
     }
     if (wanted.isEmpty() && all.getFirst().name().isEmpty()) {
       return all.getFirst();
@@ -105,14 +94,7 @@ public final class TrajectorySolve {
   private static double[] times(SolveRequest request, CompiledSystem system, double t0)
       throws Choice.RefusedException {
     if (request.sampling() instanceof Sampling.At at) {
-      if (at.times().isEmpty()) {
-        throw new Choice.RefusedException(true, "no time was given; name at least one.");
-      }
-      double[] times = new double[at.times().size()];
-      for (int i = 0; i < times.length; i++) {
-        times[i] = Choice.inside(system, at.times().get(i));
-      }
-      return times;
+      return Listing.named(system, at);
     }
     TimeInterval interval = system.model().interval();
     boolean startsAtInitial = interval.startOpen() || !Double.isFinite(interval.start());
@@ -127,34 +109,7 @@ public final class TrajectorySolve {
           true,
           "the range from " + Choice.number(from) + " to " + Choice.number(until) + " is empty.");
     }
-    int count =
-        switch (request.sampling()) {
-          case Sampling.Even even -> even.count();
-          case Sampling.Curve curve -> curve.count();
-          case Sampling.At at -> at.times().size();
-        };
-    if (count < 2) {
-      throw new Choice.RefusedException(true, "at least 2 points are needed, not " + count + ".");
-    }
-    checkSize((long) count * (1 + system.dimension()));
-    double[] times = new double[count];
-    for (int i = 0; i < count; i++) {
-      double share = (double) i / (count - 1);
-      times[i] = i == count - 1 ? until : from + share * (until - from);
-    }
-    return times;
-  }
-
-  private static void checkSize(long numbers) throws Choice.RefusedException {
-    if (numbers > MOST_NUMBERS) {
-      throw new Choice.RefusedException(
-          true,
-          "the table would hold "
-              + numbers
-              + " numbers; the limit is "
-              + MOST_NUMBERS
-              + ". Ask for fewer points.");
-    }
+    return Listing.even(request.sampling(), from, until, 1L + system.dimension());
   }
 
   private static double[] listed(Sampling sampling, double[] times, Solution solution) {
@@ -168,65 +123,5 @@ public final class TrajectorySolve {
     DoubleStream some =
         IntStream.range(0, nodes.length).filter(i -> i % stride == 0).mapToDouble(i -> nodes[i]);
     return DoubleStream.concat(Arrays.stream(times), some).sorted().distinct().toArray();
-  }
-
-  private static SolutionTable table(
-      CompiledSystem system,
-      InitialValues initial,
-      Solution solution,
-      double[] times,
-      double accuracy) {
-    int n = system.dimension();
-    List<Output> outputs = system.model().outputs();
-    List<AffineEvaluator> evaluators =
-        outputs.stream().map(o -> new AffineEvaluator(system, o.value(), solution)).toList();
-    double[][] values = new double[n + outputs.size()][times.length];
-    double[][] errors = new double[n + outputs.size()][times.length];
-    double[] x = new double[n];
-    double[] e = new double[n];
-    for (int k = 0; k < times.length; k++) {
-      solution.value(times[k], Side.AFTER, x);
-      solution.errorEstimate(times[k], e);
-      for (int i = 0; i < n; i++) {
-        values[i][k] = x[i];
-        errors[i][k] = e[i];
-      }
-      for (int j = 0; j < outputs.size(); j++) {
-        AffineEvaluator.Estimate estimate = evaluators.get(j).at(times[k], x, e);
-        values[n + j][k] = outputs.get(j).unit().fromBase(estimate.value());
-        errors[n + j][k] = estimate.error() / outputs.get(j).unit().factor();
-      }
-    }
-    List<SolutionTable.Column> columns = new ArrayList<>();
-    for (int i = 0; i < n; i++) {
-      StateComponent state = system.model().states().get(i);
-      columns.add(
-          new SolutionTable.Column(
-              state.label(), state.unit().code(), SolutionTable.Kind.STATE, values[i], errors[i]));
-    }
-    for (int j = 0; j < outputs.size(); j++) {
-      columns.add(
-          new SolutionTable.Column(
-              outputs.get(j).name(),
-              outputs.get(j).unit().code(),
-              SolutionTable.Kind.OUTPUT,
-              values[n + j],
-              errors[n + j]));
-    }
-    SolutionTable.Column time =
-        new SolutionTable.Column(
-            system.model().timeName(),
-            system.model().timeUnit().code(),
-            SolutionTable.Kind.TIME,
-            times,
-            new double[times.length]);
-    return new SolutionTable(
-        system.model().name(),
-        initial.name(),
-        time,
-        columns,
-        solution.method(),
-        accuracy,
-        Reached.worst(system, solution).relative());
   }
 }

@@ -6,7 +6,7 @@
 package org.spanloom.language.model;
 
 import java.util.ArrayList;
-import java.util.HashSet;
+import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
@@ -27,7 +27,7 @@ final class BoundaryReader {
   private final Set<String> initialValues;
   private final Problems problems;
   private final List<Boundary> boundaries = new ArrayList<>();
-  private final Set<String> names = new HashSet<>();
+  private final Set<String> names = new LinkedHashSet<>();
 
   /**
    * Prepares.
@@ -46,6 +46,16 @@ final class BoundaryReader {
   /** Returns the complete ones, in the order of the text. */
   List<Boundary> boundaries() {
     return boundaries;
+  }
+
+  /** Returns the names of all of them, complete or not. */
+  Set<String> names() {
+    return names;
+  }
+
+  /** Notes conditions whose statement could not be read, so that uses of them are not reported. */
+  void noteUnread(Name name) {
+    names.add(name.text());
   }
 
   void read(BoundaryStatement statement) {

@@ -34,6 +34,7 @@ final class RequirementReader {
   private final Components components;
   private final Times times;
   private final InitialValuesReader initialValues;
+  private final BoundaryReader boundaries;
   private final BasisReader bases;
   private final NamedValues named;
   private final Problems problems;
@@ -44,11 +45,13 @@ final class RequirementReader {
       Components components,
       Times times,
       InitialValuesReader initialValues,
+      BoundaryReader boundaries,
       BasisReader bases) {
     this.system = system;
     this.components = components;
     this.times = times;
     this.initialValues = initialValues;
+    this.boundaries = boundaries;
     this.bases = bases;
     this.named = new NamedValues(system, components, times);
     this.problems = system.problems();
@@ -251,25 +254,38 @@ final class RequirementReader {
     return system.resolver().given(expression, unit, what, place).map(q -> q.constant().term());
   }
 
-  /** Returns the name of the initial values meant, empty for those of the declarations. */
+  /**
+   * Returns the name of the initial values or boundary conditions meant, empty for the values of
+   * the declarations.
+   */
   private Optional<String> under(Optional<Name> name, boolean needed, Span span) {
+    List<String> names = new ArrayList<>(initialValues.names());
+    names.addAll(boundaries.names());
     if (name.isPresent()) {
-      boolean known = initialValues.names().contains(name.get().text());
+      boolean known = names.contains(name.get().text());
       if (!known) {
-        unknown(name.get(), "set of initial values", initialValues.names());
+        unknown(
+            name.get(),
+            boundaries.names().isEmpty()
+                ? "set of initial values"
+                : "set of initial values or boundary conditions",
+            names);
       }
       return known ? Optional.of(name.get().text()) : Optional.empty();
     }
     if (!needed || initialValues.declarationsHaveValues()) {
       return Optional.of("");
     }
-    List<String> names = List.copyOf(initialValues.names());
     return incomplete(
             span,
             names.isEmpty()
                 ? "It needs a solution, and there are no initial values: give the states values, as"
                     + " in state x = 1."
-                : "It does not say for which initial values: write under and one of "
+                : "It does not say for which "
+                    + (boundaries.names().isEmpty()
+                        ? "initial values"
+                        : "initial values or boundary conditions")
+                    + ": write under and one of "
                     + String.join(", ", names)
                     + ".",
             names.stream()

@@ -133,13 +133,19 @@ final class SystemReader {
     }
     BoundaryReader boundaries =
         new BoundaryReader(system, components, times, initialValues.names());
-    RequirementReader requirements =
-        new RequirementReader(system, components, times, initialValues, bases);
     for (Statement s : statement.body()) {
       switch (s) {
-        case RequireStatement require -> requirements.read(require.clause());
         case BoundaryStatement boundary -> boundaries.read(boundary);
+        case UnreadStatement unread when unread.word().equals("boundary") ->
+            unread.declares().ifPresent(boundaries::noteUnread);
         default -> {}
+      }
+    }
+    RequirementReader requirements =
+        new RequirementReader(system, components, times, initialValues, boundaries, bases);
+    for (Statement s : statement.body()) {
+      if (s instanceof RequireStatement require) {
+        requirements.read(require.clause());
       }
     }
     checkDefinedness(times, form, outputs, initialValues.complete(), bases.bases());
