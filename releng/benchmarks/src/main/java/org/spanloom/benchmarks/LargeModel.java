@@ -45,6 +45,7 @@ public final class LargeModel {
 
           parameter flow [kg/s] = 2.35 ± 3 %
           let T_soil(t) = T_mean + T_year*sin(2*pi*t/year)
+          let day(t) = max(0, cos(2*pi*(t - 13 [h])/(24 [h])))
           input boiler(t) [kW] = 38
 
         """);
@@ -87,7 +88,7 @@ public final class LargeModel {
     parameter(text, "weight", i, "", 0.8 + 0.4 * random.nextDouble(), "share of the sun");
     parameter(text, "sun", i, "[W/m2]", 40 + 60 * random.nextDouble(), "through the path");
     parameter(text, "width", i, "[cm]", 60 + 30 * random.nextDouble(), "of the trench");
-    parameter(text, "noon", i, "[h]", 11 + 3 * random.nextDouble(), "");
+    parameter(text, "shade", i, "[%]", 20 + 30 * random.nextDouble(), "");
     parameter(text, "spare", i, "[kJ/K]", 10 + 5 * random.nextDouble(), "");
     String heater = (i == 1 ? "boiler(t) + pump" : "pump") + i;
     for (String line : SEGMENT_LINES) {
@@ -126,8 +127,8 @@ public final class LargeModel {
     "  let R_s~ = log(4*depth~/outer~)/(2*pi*lam_s~*len~)",
     "  let g_s~ = 1/(R_f~ + R_s~)                 ## wall to soil",
     "  let g_w~ = alpha~*face~                    ## water to wall",
-    "  let day~(t) = max(0, cos(2*pi*(t - noon~)/(24 [h])))",
-    "  let heat~(t) = weight~*sun~*width~*len~*day~(t)",
+    "  let open~ = (1 - shade~)*weight~",
+    "  let heat~(t) = open~*sun~*width~*len~*day(t)",
     "  state T~ [K] = 341 scale 10",
     "  state W~ [K] = 339 scale 10",
     "  output loss~ [W] = g_s~*(W~ - T_soil(t))   ## to the soil",
