@@ -12,8 +12,6 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
-import java.util.SortedMap;
-import java.util.TreeMap;
 import org.spanloom.language.model.Meaning.BrokenMeaning;
 import org.spanloom.language.model.Meaning.LetMeaning;
 import org.spanloom.language.model.Meaning.MatrixMeaning;
@@ -50,10 +48,10 @@ final class Declarations {
   private final List<Declaration> collected = new ArrayList<>();
   private final Map<String, Name> taken = new HashMap<>();
   private final Set<String> duplicates = new HashSet<>();
-  private final SortedMap<Integer, Parameter> parameters = new TreeMap<>();
-  private final SortedMap<Integer, Let> lets = new TreeMap<>();
-  private final SortedMap<Integer, ReadOutput> outputs = new TreeMap<>();
-  private final SortedMap<Integer, NamedMatrix> matrices = new TreeMap<>();
+  private final InTextOrder<Parameter> parameters = new InTextOrder<>();
+  private final InTextOrder<Let> lets = new InTextOrder<>();
+  private final InTextOrder<ReadOutput> outputs = new InTextOrder<>();
+  private final InTextOrder<NamedMatrix> matrices = new InTextOrder<>();
 
   /** An output whose place in the state vector is not known yet. */
   record ReadOutput(OutputStatement statement, Quantity value, UnitOfMeasure unit) {}
@@ -69,22 +67,22 @@ final class Declarations {
 
   /** Returns the parameters read, in the order of the text. */
   List<Parameter> parameters() {
-    return List.copyOf(parameters.values());
+    return parameters.values();
   }
 
   /** Returns the named expressions read, in the order of the text. */
   List<Let> lets() {
-    return List.copyOf(lets.values());
+    return lets.values();
   }
 
   /** Returns the matrices read, in the order of the text. */
   List<NamedMatrix> matrices() {
-    return List.copyOf(matrices.values());
+    return matrices.values();
   }
 
   /** Returns the outputs read, in the order of the text. */
   List<ReadOutput> outputs() {
-    return List.copyOf(outputs.values());
+    return outputs.values();
   }
 
   /** Takes a declaration to be read later; reports a name that is not free. */

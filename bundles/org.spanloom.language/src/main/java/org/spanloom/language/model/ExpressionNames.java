@@ -9,7 +9,10 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.function.Consumer;
 import org.spanloom.language.syntax.Expression;
+import org.spanloom.language.syntax.Expression.Addend;
+import org.spanloom.language.syntax.Expression.Argument;
 import org.spanloom.language.syntax.Expression.CallExpression;
+import org.spanloom.language.syntax.Expression.Factor;
 import org.spanloom.language.syntax.Expression.MissingExpression;
 import org.spanloom.language.syntax.Expression.NameExpression;
 import org.spanloom.language.syntax.Expression.NumberExpression;
@@ -59,11 +62,21 @@ final class ExpressionNames {
       case NameExpression name -> {}
       case CallExpression call -> {
         visit(call.callee(), visitor);
-        call.arguments().forEach(a -> visit(a.value(), visitor));
+        for (Argument argument : call.arguments()) {
+          visit(argument.value(), visitor);
+        }
       }
       case SignedExpression signed -> visit(signed.operand(), visitor);
-      case SumExpression sum -> sum.addends().forEach(a -> visit(a.value(), visitor));
-      case ProductExpression product -> product.factors().forEach(f -> visit(f.value(), visitor));
+      case SumExpression sum -> {
+        for (Addend addend : sum.addends()) {
+          visit(addend.value(), visitor);
+        }
+      }
+      case ProductExpression product -> {
+        for (Factor factor : product.factors()) {
+          visit(factor.value(), visitor);
+        }
+      }
       case PowerExpression power -> {
         visit(power.base(), visitor);
         visit(power.exponent(), visitor);

@@ -7,7 +7,9 @@ package org.spanloom.language.model;
 
 import java.util.Arrays;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
+import java.util.stream.Collectors;
 import org.spanloom.language.units.Dimension;
 
 /**
@@ -76,6 +78,9 @@ public enum Function {
     NOT_ODD_QUARTER_TURNS
   }
 
+  private static final Map<String, Function> BY_NAME =
+      Arrays.stream(values()).collect(Collectors.toUnmodifiableMap(Function::code, f -> f));
+
   private final String code;
   private final int arity;
   private final DimensionRule rule;
@@ -117,7 +122,7 @@ public enum Function {
 
   /** Returns the function of a name, matched exactly. */
   public static Optional<Function> named(String name) {
-    return Arrays.stream(values()).filter(f -> f.code.equals(name)).findFirst();
+    return Optional.ofNullable(BY_NAME.get(name));
   }
 
   /**

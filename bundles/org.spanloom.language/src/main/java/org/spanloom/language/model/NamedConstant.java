@@ -6,12 +6,17 @@
 package org.spanloom.language.model;
 
 import java.util.Arrays;
+import java.util.Map;
 import java.util.Optional;
+import java.util.stream.Collectors;
 
 /** Pure numbers that a model may name; the base of natural logarithms is {@code exp(1)}. */
 public enum NamedConstant {
   /** Half the circumference of the unit circle. */
   PI("pi", Math.PI, "ratio of a circle's circumference to its diameter");
+
+  private static final Map<String, NamedConstant> BY_NAME =
+      Arrays.stream(values()).collect(Collectors.toUnmodifiableMap(NamedConstant::code, c -> c));
 
   private final String code;
   private final double value;
@@ -40,6 +45,6 @@ public enum NamedConstant {
 
   /** Returns the constant of a name, matched exactly. */
   public static Optional<NamedConstant> named(String name) {
-    return Arrays.stream(values()).filter(c -> c.code.equals(name)).findFirst();
+    return Optional.ofNullable(BY_NAME.get(name));
   }
 }

@@ -82,6 +82,9 @@ record Quantity(
 
   /** Returns the quantity with every part changed; parts that become 0 are left out. */
   Quantity map(UnaryOperator<Term> change, Dimension newDimension, int newDepth) {
+    if (!holdsStates()) {
+      return new Quantity(Map.of(), constant.map(change), newDimension, false, newDepth);
+    }
     Map<StateKey, Part> changed = new LinkedHashMap<>();
     coefficients.forEach((key, part) -> {
       Part mapped = part.map(change);

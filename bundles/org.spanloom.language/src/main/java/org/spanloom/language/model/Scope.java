@@ -6,12 +6,10 @@
 package org.spanloom.language.model;
 
 import java.util.ArrayList;
-import java.util.HashSet;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.Set;
 import org.spanloom.language.problem.Nearest;
 
 /**
@@ -20,16 +18,21 @@ import org.spanloom.language.problem.Nearest;
 final class Scope {
 
   private final Optional<Scope> outer;
-  private final Map<String, Meaning> meanings = new LinkedHashMap<>();
-  private final Set<String> used = new HashSet<>();
+  private final Map<String, Entry> meanings = new LinkedHashMap<>();
   private String timeName = "";
+
+  /** What a name stands for, and whether it is used. */
+  private static final class Entry {
+    private Meaning meaning;
+    private boolean used;
+  }
 
   Scope(Optional<Scope> outer) {
     this.outer = outer;
   }
 
   void define(String name, Meaning meaning) {
-    meanings.put(name, meaning);
+    meanings.computeIfAbsent(name, n -> new Entry()).meaning = meaning;
     if (meaning instanceof Meaning.TimeMeaning) {
       timeName = name;
     }
@@ -42,17 +45,17 @@ final class Scope {
 
   /** Returns what a name stands for and notes that it is used. */
   Optional<Meaning> use(String name) {
-    Meaning meaning = meanings.get(name);
-    if (meaning != null) {
-      used.add(name);
-      return Optional.of(meaning);
+    Entry entry = meanings.get(name);
+    if (entry != null) {
+      entry.used = true;
+      return Optional.of(entry.meaning);
     }
     return outer.flatMap(o -> o.use(name));
   }
 
   /** Returns what a name of this very scope stands for, without using it. */
   Optional<Meaning> own(String name) {
-    return Optional.ofNullable(meanings.get(name));
+    return Optional.ofNullable(meanings.get(name)).map(entry -> entry.meaning);
   }
 
   /** Tells whether a name is declared further out. */
@@ -61,15 +64,17 @@ final class Scope {
   }
 
   void markUsed(String name) {
-    if (meanings.containsKey(name)) {
-      used.add(name);
+    Entry entry = meanings.get(name);
+    if (entry != null) {
+      entry.used = true;
     } else {
       outer.ifPresent(o -> o.markUsed(name));
     }
   }
 
   boolean isUsed(String name) {
-    return used.contains(name);
+    Entry entry = meanings.get(name);
+    return entry != null && entry.used;
   }
 
   /** Returns the declared name, function or constant nearest to a word. */
