@@ -23,6 +23,7 @@ import org.eclipse.core.runtime.SubMonitor;
 import org.eclipse.core.runtime.jobs.ISchedulingRule;
 import org.spanloom.analysis.CheckReport;
 import org.spanloom.analysis.ModelCheck;
+import org.spanloom.language.files.ProjectFiles;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.ModelReader;
 import org.spanloom.numerics.Progress;
@@ -102,7 +103,7 @@ public final class ModelBuilder extends IncrementalProjectBuilder {
     }
     switch (ModelFile.read(file)) {
       case ModelFile.Content.Readable r -> {
-        Model model = ModelReader.read(r.text(), progress::isCancelled);
+        Model model = ModelReader.read(r.text(), ProjectFiles.none(), progress::isCancelled);
         if (progress.isCancelled()) {
           throw new OperationCanceledException();
         }

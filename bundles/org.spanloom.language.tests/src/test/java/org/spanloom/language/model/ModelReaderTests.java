@@ -21,6 +21,7 @@ import java.util.concurrent.CancellationException;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import org.spanloom.language.files.ProjectFiles;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.text.SourceText;
 
@@ -106,7 +107,8 @@ class ModelReaderTests {
   void theUnitOfAnUndeclaredDerivativeIsTheStatesOverThatOfTime() {
     Model model =
         read(
-            "system S over t [h] from 0 to 1 { state x [km]; x'' = 0; state y; y'' = 0; state T [Cel]; T'' = 0 }");
+            "system S over t [h] from 0 to 1 { state x [km]; x'' = 0; state y; y'' = 0; state T"
+                + " [Cel]; T'' = 0 }");
     assertEquals(
         List.of("km", "km/h", "1", "/h", "Cel", "K/h"),
         model.systems().getFirst().states().stream().map(s -> s.unit().code()).toList());
@@ -239,7 +241,12 @@ class ModelReaderTests {
   void theOrderOfDeclarationsDoesNotMatter() {
     SystemModel system =
         system(
-            "system S over t from 0 to 1 { x' = -c*x + q\n output q = b*x\n let c = a + b\n let b = 2*a\n parameter a = 1\n state x = 1 }");
+            "system S over t from 0 to 1 { x' = -c*x + q\n"
+                + " output q = b*x\n"
+                + " let c = a + b\n"
+                + " let b = 2*a\n"
+                + " parameter a = 1\n"
+                + " state x = 1 }");
     assertEquals(List.of("c", "b"), system.lets().stream().map(Let::name).toList());
   }
 
@@ -271,7 +278,9 @@ class ModelReaderTests {
   @Test
   void readingCanBeCancelled() {
     SourceText source = new SourceText("s", "system S over t from 0 to 1 { state x = 1; x' = 0 }");
-    assertThrows(CancellationException.class, () -> ModelReader.read(source, () -> true));
+    assertThrows(
+        CancellationException.class,
+        () -> ModelReader.read(source, ProjectFiles.none(), () -> true));
   }
 
   @Test

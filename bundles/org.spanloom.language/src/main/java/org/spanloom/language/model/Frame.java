@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.Optional;
 import org.spanloom.language.model.Meaning.BrokenMeaning;
 import org.spanloom.language.model.Meaning.StateMeaning;
+import org.spanloom.language.syntax.QuotedText;
 import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.text.SourceText;
 import org.spanloom.language.text.Span;
@@ -25,7 +26,7 @@ import org.spanloom.language.units.UnitOfMeasure;
  */
 final class Frame {
 
-  private final SourceText source;
+  private final SourceFile file;
   private final List<Statement> body;
   private final Scope scope;
   private final Problems problems;
@@ -38,14 +39,14 @@ final class Frame {
   /**
    * Opens a frame.
    *
-   * @param source the text that the statements stand in
+   * @param file where the statements stand
    * @param body the statements
    * @param scope the names they can use
    * @param problems takes what is wrong with them
    * @param prefix what stands before the names declared in it when they are named from without
    */
-  Frame(SourceText source, List<Statement> body, Scope scope, Problems problems, String prefix) {
-    this.source = source;
+  Frame(SourceFile file, List<Statement> body, Scope scope, Problems problems, String prefix) {
+    this.file = file;
     this.body = body;
     this.scope = scope;
     this.problems = problems;
@@ -104,7 +105,20 @@ final class Frame {
 
   /** Returns the characters of a place of the frame's own text. */
   String slice(Span own) {
-    return source.slice(own);
+    return file.text().slice(own);
+  }
+
+  /** Returns the file that the statements stand in. */
+  SourceFile file() {
+    return file;
+  }
+
+  /**
+   * Returns the text of a file of the project that a statement of this frame names; reports it if
+   * there is none.
+   */
+  Optional<FileAccess.Found> text(QuotedText path) {
+    return file.files().text(file.key(), path, problems);
   }
 
   /** Returns a state that the frame declares or can name. */
@@ -148,8 +162,8 @@ final class Frame {
 
   /** Returns the blanks before the line that a statement begins in. */
   String indent(Span own) {
-    Span line = source.lineSpan(source.line(own.start()));
-    String text = source.slice(line);
+    SourceText source = file.text();
+    String text = source.slice(source.lineSpan(source.line(own.start())));
     int blanks = 0;
     while (blanks < text.length() && (text.charAt(blanks) == ' ' || text.charAt(blanks) == '\t')) {
       blanks++;

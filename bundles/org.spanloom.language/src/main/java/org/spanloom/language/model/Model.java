@@ -6,6 +6,7 @@
 package org.spanloom.language.model;
 
 import java.util.List;
+import org.spanloom.language.files.FileKey;
 import org.spanloom.language.problem.Problem;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.problem.Severity;
@@ -17,14 +18,21 @@ import org.spanloom.language.text.SourceText;
  *
  * @param source the text
  * @param syntax its tree
+ * @param files the other files that were asked for while it was read, there or not, so that one
+ *     knows when it must be read again
  * @param systems its systems, in order; those with errors too, as far as they can be understood
  * @param problems everything found, in the order of the text
  */
 public record Model(
-    SourceText source, SyntaxFile syntax, List<SystemModel> systems, List<Problem> problems) {
+    SourceText source,
+    SyntaxFile syntax,
+    List<FileKey> files,
+    List<SystemModel> systems,
+    List<Problem> problems) {
 
   /** Copies the lists. */
   public Model {
+    files = List.copyOf(files);
     systems = List.copyOf(systems);
     problems = List.copyOf(problems);
   }

@@ -12,6 +12,7 @@ import java.util.Optional;
 import java.util.Set;
 import java.util.concurrent.CancellationException;
 import java.util.function.BooleanSupplier;
+import org.spanloom.language.files.ProjectFiles;
 import org.spanloom.language.model.Meaning.BrokenMeaning;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.syntax.Name;
@@ -34,44 +35,53 @@ public final class ModelReader {
 
   private final SyntaxFile file;
   private final BooleanSupplier cancelled;
+  private final FileAccess files;
   private final Problems problems = new Problems();
   private final Frame frame;
   private final Declarations globals;
 
-  private ModelReader(SyntaxFile file, BooleanSupplier cancelled) {
+  private ModelReader(SyntaxFile file, ProjectFiles files, BooleanSupplier cancelled) {
     this.file = file;
+    this.files = new FileAccess(files);
     this.cancelled = cancelled;
     this.frame =
-        new Frame(file.source(), file.statements(), new Scope(Optional.empty()), problems, "");
+        new Frame(
+            new SourceFile(files.self(), file.source(), this.files),
+            file.statements(),
+            new Scope(Optional.empty()),
+            problems,
+            "");
     this.globals = frame.declarations();
   }
 
-  /** Returns the model of a text. */
+  /** Returns the model of a text that belongs to no project: every file it names is missing. */
   public static Model read(SourceText source) {
-    return read(source, () -> false);
+    return read(source, ProjectFiles.none(), () -> false);
   }
 
   /**
    * Returns the model of a text.
    *
    * @param source the text
+   * @param files the files that it may name
    * @param cancelled asked now and then; once it says true, the work ends
    * @throws CancellationException if the work was cancelled
    */
-  public static Model read(SourceText source, BooleanSupplier cancelled) {
-    return read(Parser.parse(source), cancelled);
+  public static Model read(SourceText source, ProjectFiles files, BooleanSupplier cancelled) {
+    return read(Parser.parse(source), files, cancelled);
   }
 
   /**
    * Returns the model of a tree.
    *
    * @param file the tree
+   * @param files the files that it may name
    * @param cancelled asked now and then; once it says true, the work ends
    * @throws CancellationException if the work was cancelled
    */
-  public static Model read(SyntaxFile file, BooleanSupplier cancelled) {
+  public static Model read(SyntaxFile file, ProjectFiles files, BooleanSupplier cancelled) {
     check(cancelled);
-    return new ModelReader(file, cancelled).read();
+    return new ModelReader(file, files, cancelled).read();
   }
 
   static void check(BooleanSupplier cancelled) {
@@ -98,7 +108,7 @@ public final class ModelReader {
     for (Statement statement : file.statements()) {
       if (statement instanceof SystemStatement system) {
         reportDuplicate(system.name(), names);
-        systems.add(new SystemReader(file.source(), system, frame, problems, cancelled).read());
+        systems.add(new SystemReader(system, frame, problems, cancelled).read());
       }
     }
     boolean complete =
@@ -107,7 +117,8 @@ public final class ModelReader {
     if (complete) {
       globals.reportUnused();
     }
-    return new Model(file.source(), file, systems, problems.inTextOrder(file.problems()));
+    return new Model(
+        file.source(), file, files.asked(), systems, problems.inTextOrder(file.problems()));
   }
 
   private void broken(Name name) {

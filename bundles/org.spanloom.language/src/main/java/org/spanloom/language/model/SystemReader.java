@@ -36,7 +36,6 @@ import org.spanloom.language.syntax.Statement.SystemStatement;
 import org.spanloom.language.syntax.Statement.TransferStatement;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.syntax.Token;
-import org.spanloom.language.text.SourceText;
 import org.spanloom.language.text.Span;
 import org.spanloom.language.units.UnitOfMeasure;
 
@@ -60,17 +59,13 @@ final class SystemReader {
   private Span accuracySpan;
 
   SystemReader(
-      SourceText source,
-      SystemStatement statement,
-      Frame file,
-      Problems problems,
-      BooleanSupplier cancelled) {
+      SystemStatement statement, Frame file, Problems problems, BooleanSupplier cancelled) {
     this.statement = statement;
     this.file = file;
     this.problems = problems;
     this.cancelled = cancelled;
     Scope scope = new Scope(Optional.of(file.scope()));
-    Frame root = new Frame(source, statement.body(), scope, problems, "");
+    Frame root = new Frame(file.file(), statement.body(), scope, problems, "");
     Optional<UnitOfMeasure> timeUnit = timeUnit(statement, root.units(), problems);
     this.timeKnown = timeUnit.isPresent();
     timeUnit.ifPresent(root::setTimeUnit);

@@ -64,6 +64,16 @@ public enum ProblemKind {
   NAME_MISUSED("A name is used as something it is not."),
   /** A function with the wrong number of arguments. */
   ARGUMENT_COUNT("A function has too few or too many arguments."),
+  /** A path that is none. */
+  FILE_PATH_MALFORMED("The path of a file is not written by the rules."),
+  /** A file that is not there. */
+  FILE_MISSING("A file is not there."),
+  /** A path that leads out of the project. */
+  FILE_OUTSIDE_PROJECT("A path leads out of the project."),
+  /** A file with more in it than is read. */
+  FILE_TOO_LARGE("A file is too large, or there are too many."),
+  /** A file that is no text. */
+  FILE_UNREADABLE("A file cannot be read as text."),
   /** A unit code that UCUM does not have. */
   UNIT_UNKNOWN("A unit code that cannot be read."),
   /** Quantities of different dimensions where equal ones belong. */

@@ -463,6 +463,21 @@ final class StatementParser {
     return Optional.empty();
   }
 
+  /**
+   * {@code text = '"', { any character but '"' and line ends }, '"' ;}
+   *
+   * @param expected what belongs here, for a message
+   */
+  QuotedText quoted(String expected) {
+    Token token = cursor.peek();
+    if (cursor.accept(TokenKind.STRING)) {
+      return new QuotedText(
+          cursor.text(new Span(token.start() + 1, token.end() - 1)), token.span());
+    }
+    cursor.failHere(ProblemKind.WORD_UNEXPECTED, expected);
+    return new QuotedText("", token.span());
+  }
+
   void equalsSign() {
     if (!cursor.accept(TokenKind.EQUALS) && !cursor.failed()) {
       cursor.failHere(ProblemKind.WORD_UNEXPECTED, "\"=\" belongs here");
