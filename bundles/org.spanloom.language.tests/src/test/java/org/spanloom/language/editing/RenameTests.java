@@ -20,6 +20,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.spanloom.language.RecordText;
 import org.spanloom.language.TestTexts;
+import org.spanloom.language.files.ProjectFiles;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.ModelReader;
 import org.spanloom.language.problem.Problem;
@@ -198,7 +199,7 @@ class RenameTests {
     Set<Symbol> symbols = new LinkedHashSet<>();
     Names.of(file).occurrences().forEach(o -> symbols.add(o.symbol()));
     boolean guesses =
-        ModelReader.read(file, () -> false).problems().stream()
+        ModelReader.read(file, ProjectFiles.none(), () -> false).problems().stream()
             .anyMatch(p -> p.message().contains("did you mean"));
     String before = listing(text, guesses);
     for (Symbol symbol : symbols) {
