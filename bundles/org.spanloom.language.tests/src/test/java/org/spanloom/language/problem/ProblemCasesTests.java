@@ -67,6 +67,11 @@ class ProblemCasesTests {
         EnumSet.complementOf(
             EnumSet.of(
                 ProblemKind.TOO_MANY_PROBLEMS,
+                ProblemKind.FILE_PATH_MALFORMED,
+                ProblemKind.FILE_MISSING,
+                ProblemKind.FILE_OUTSIDE_PROJECT,
+                ProblemKind.FILE_TOO_LARGE,
+                ProblemKind.FILE_UNREADABLE,
                 ProblemKind.MATRIX_TOO_LARGE,
                 ProblemKind.NESTING_TOO_DEEP,
                 ProblemKind.COEFFICIENT_UNDECIDED));
