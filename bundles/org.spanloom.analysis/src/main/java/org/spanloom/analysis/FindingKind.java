@@ -24,6 +24,8 @@ public enum FindingKind {
   BOUNDARY_NOT_UNIQUE("boundary-not-unique", Severity.ERROR),
   /** Boundary conditions that leave fewer digits than the system asks for. */
   BOUNDARY_ILL_CONDITIONED("boundary-ill-conditioned", Severity.WARNING),
+  /** A property of the system: a jump behind which no basis is one any more. */
+  JUMP_SINGULAR("jump-singular", Severity.NOTE),
   /** A candidate basis whose columns are linearly dependent. */
   BASIS_DEPENDENT("basis-dependent", Severity.ERROR),
   /** A closed form that does not solve the system. */

@@ -19,6 +19,7 @@ import org.spanloom.language.model.Boundary;
 import org.spanloom.language.model.InitialValues;
 import org.spanloom.language.model.Requirement;
 import org.spanloom.language.model.TimeInterval;
+import org.spanloom.numerics.Jump;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Progress;
 import org.spanloom.numerics.TimeRange;
@@ -99,6 +100,9 @@ public final class SystemSolutions {
         case Requirement.Invariant r -> {}
         case Requirement.Nonnegative r -> {}
       }
+    }
+    for (Jump jump : system.linear().jumps()) {
+      named.add(jump.time());
     }
     boolean hasStart = Double.isFinite(interval.start()) && !interval.startOpen();
     boolean hasEnd = Double.isFinite(interval.end()) && !interval.endOpen();

@@ -9,6 +9,7 @@ import org.spanloom.analysis.coefficients.CompiledSystem;
 import org.spanloom.language.model.Basis;
 import org.spanloom.language.model.SystemModel;
 import org.spanloom.language.text.Span;
+import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Progress;
 import org.spanloom.numerics.TimeRange;
@@ -74,10 +75,18 @@ record BasisColumns(
     return identity;
   }
 
-  /** Solves the homogeneous system for all columns over a range that holds the start time. */
+  /**
+   * Solves the homogeneous system for all columns over a range that holds the start time.
+   *
+   * @param linear the coefficients and the jumps that count
+   */
   Outcome<Solution> solve(
-      CompiledSystem system, TimeRange range, double accuracy, Progress progress) {
+      CompiledSystem system,
+      LinearSystem linear,
+      TimeRange range,
+      double accuracy,
+      Progress progress) {
     return SolutionSolver.homogeneous(
-        system.linear(), startTime, start, range, system.accuracy(accuracy), progress);
+        linear, startTime, start, range, system.accuracy(accuracy), progress);
   }
 }

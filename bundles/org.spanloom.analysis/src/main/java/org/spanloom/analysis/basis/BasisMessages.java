@@ -5,9 +5,11 @@
  */
 package org.spanloom.analysis.basis;
 
+import java.util.Optional;
 import org.spanloom.analysis.Figures;
 import org.spanloom.analysis.coefficients.CompiledSystem;
 import org.spanloom.analysis.settings.Settings;
+import org.spanloom.numerics.Jump;
 import org.spanloom.numerics.basis.ClosedFormResidual;
 import org.spanloom.numerics.basis.ConditionSample;
 import org.spanloom.numerics.basis.Dependence;
@@ -104,6 +106,38 @@ final class BasisMessages {
             Figures.text(residual.relative(), 3),
             at(residual.time()),
             Figures.text(settings.residualLimit(), 2));
+  }
+
+  /** Says what a jump that cannot be undone loses. */
+  String lost(Jump jump) {
+    int k = jump.rows().size();
+    Optional<Dependence> dependence = Dependence.among(jump.block(), k, k);
+    return "the jump at %s cannot be undone%s, so every basis is singular from there on; nothing to do unless something relies on one behind it"
+        .formatted(
+            at(jump.time()),
+            dependence
+                .map(d ->
+                    ": solutions that differ by %s just before it are one behind it"
+                        .formatted(difference(jump, d)))
+                .orElse(""));
+  }
+
+  private String difference(Jump jump, Dependence dependence) {
+    StringBuilder text = new StringBuilder(label(jump, dependence.column()));
+    double[] factors = dependence.factors();
+    for (int k = 0; k < factors.length; k++) {
+      if (factors[k] != 0) {
+        String size = Figures.text(Math.abs(factors[k]), 6);
+        text.append(sign(-factors[k], false))
+            .append(size.equals("1") ? "" : size + " times ")
+            .append(label(jump, k));
+      }
+    }
+    return text.toString();
+  }
+
+  private String label(Jump jump, int row) {
+    return system.model().states().get(jump.rows().get(row).row()).label();
   }
 
   private String remedy(BasisReport report) {

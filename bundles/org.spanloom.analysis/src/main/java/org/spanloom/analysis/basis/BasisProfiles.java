@@ -6,12 +6,15 @@
 package org.spanloom.analysis.basis;
 
 import java.util.ArrayList;
+import java.util.HashSet;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalInt;
 import java.util.SequencedMap;
+import java.util.Set;
+import java.util.stream.Collectors;
 import org.spanloom.analysis.Finding;
 import org.spanloom.analysis.FindingKind;
 import org.spanloom.analysis.SystemSolutions;
@@ -20,6 +23,9 @@ import org.spanloom.analysis.solve.Refusals;
 import org.spanloom.language.model.Basis;
 import org.spanloom.language.model.Requirement;
 import org.spanloom.language.text.Span;
+import org.spanloom.numerics.Jump;
+import org.spanloom.numerics.JumpSelection;
+import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.TimeRange;
 import org.spanloom.numerics.basis.ClosedFormResidual;
@@ -82,6 +88,7 @@ public final class BasisProfiles {
     if (solutions.range().isEmpty() && !system.model().bases().isEmpty()) {
       add(FindingKind.RANGE_UNBOUNDED, system.model().nameSpan(), messages.unbounded());
     }
+    singularJumps();
     for (Basis basis : system.model().bases()) {
       judged.put(
           basis.name(),
@@ -111,6 +118,50 @@ public final class BasisProfiles {
     return judged.getOrDefault(name, new Judged.Unfit("there is no basis '" + name + "'"));
   }
 
+  /** Where a basis is followed: a range, and the jumps that count in it. */
+  private record Part(LinearSystem linear, TimeRange range) {}
+
+  private Part whole() {
+    return new Part(system.linear(), solutions.range().orElseThrow());
+  }
+
+  /** Returns the range up to the first jump behind which no basis is one. */
+  private Part sound() {
+    TimeRange range = solutions.range().orElseThrow();
+    for (Jump jump : system.linear().jumps()) {
+      if (jump.isSingular() && range.contains(jump.time())) {
+        return new Part(
+            JumpSelection.between(system.linear(), Double.NEGATIVE_INFINITY, jump.time()),
+            new TimeRange(range.start(), jump.time()));
+      }
+    }
+    return whole();
+  }
+
+  /** Says once for each statement that its jump cannot be undone. */
+  private void singularJumps() {
+    Set<Span> told = new HashSet<>();
+    Map<Double, List<Jump>> byTime =
+        system.linear().jumps().stream().collect(Collectors.groupingBy(Jump::time));
+    for (org.spanloom.language.model.Jump statement : system.model().jumps()) {
+      Set<Integer> rows =
+          statement.changes().stream()
+              .map(org.spanloom.language.model.Jump.Change::component)
+              .collect(Collectors.toSet());
+      for (double time : system.times(statement)) {
+        for (Jump jump : byTime.getOrDefault(time, List.of())) {
+          boolean own =
+              rows.equals(jump.rows().stream().map(Jump.Row::row).collect(Collectors.toSet()));
+          if (own && jump.isSingular() && told.add(statement.span())) {
+            SequencedMap<String, Double> numbers = new LinkedHashMap<>();
+            numbers.put("time", time);
+            add(FindingKind.JUMP_SINGULAR, statement.timesSpan(), messages.lost(jump), numbers);
+          }
+        }
+      }
+    }
+  }
+
   private void add(FindingKind kind, Span span, String message) {
     add(kind, span, message, new LinkedHashMap<>());
   }
@@ -130,8 +181,8 @@ public final class BasisProfiles {
           FindingKind.BASIS_NOT_FOLLOWED,
           system.model().nameSpan(),
           messages.notFollowed(LARGEST_UNASKED));
-    } else {
-      columns(BasisColumns.principal(system, start), system.model().nameSpan());
+    } else if (sound().range().length() > 0 || whole().range().length() == 0) {
+      follow(BasisColumns.principal(system, start), sound(), system.model().nameSpan());
     }
   }
 
@@ -143,12 +194,20 @@ public final class BasisProfiles {
     if (solutions.range().isEmpty()) {
       return new Judged.Unfit("the interval is not bounded; add 'until TIME'");
     }
-    TimeRange range = solutions.range().get();
+    return follow(basis, whole(), span);
+  }
+
+  private Judged follow(BasisColumns basis, Part part, Span span) {
     Outcome<Solution> outcome =
-        basis.solve(system, range, solutions.settings().basisAccuracy(), solutions.progress());
+        basis.solve(
+            system,
+            part.linear(),
+            part.range(),
+            solutions.settings().basisAccuracy(),
+            solutions.progress());
     return switch (outcome) {
       case Outcome.Solved<Solution> s ->
-          profile(s.value(), basis.name(), basis.declared(), range, span);
+          profile(s.value(), basis.name(), basis.declared(), part, span);
       case Outcome.Cancelled<Solution> c -> new Judged.Unfit("the check was cancelled");
       case Outcome.Unsolved<Solution> u -> missing(u, span);
     };
@@ -201,7 +260,7 @@ public final class BasisProfiles {
     Optional<Judged.Unfit> unfit = unfit(columns, basis.nameSpan());
     return unfit.isPresent()
         ? unfit.get()
-        : profile(candidate, basis.name(), true, range, basis.nameSpan());
+        : profile(candidate, basis.name(), true, whole(), basis.nameSpan());
   }
 
   /**
@@ -228,13 +287,12 @@ public final class BasisProfiles {
     return wrong;
   }
 
-  private Judged profile(
-      Solution solution, String name, boolean declared, TimeRange range, Span span) {
+  private Judged profile(Solution solution, String name, boolean declared, Part part, Span span) {
     Outcome<ConditionProfile> outcome =
-        ConditionProfile.of(system.linear(), solution, range, solutions.progress());
+        ConditionProfile.of(part.linear(), solution, part.range(), solutions.progress());
     return switch (outcome) {
       case Outcome.Solved<ConditionProfile> s -> {
-        judge(solution, s.value(), name, declared, range, span);
+        judge(solution, s.value(), name, declared, part, span);
         yield new Judged.Fit(solution, s.value());
       }
       case Outcome.Cancelled<ConditionProfile> c -> new Judged.Unfit("the check was cancelled");
@@ -247,9 +305,10 @@ public final class BasisProfiles {
       ConditionProfile profile,
       String name,
       boolean declared,
-      TimeRange range,
+      Part part,
       Span span) {
-    BasisReport report = report(profile, name, declared, range, span);
+    TimeRange range = part.range();
+    BasisReport report = report(profile, name, declared, part, span);
     reports.add(report);
     TimeRange relied = declared ? relied(name, solution, range) : range;
     Digits digits = Digits.of(profile, relied, solution.startTime());
@@ -293,11 +352,12 @@ public final class BasisProfiles {
   }
 
   private BasisReport report(
-      ConditionProfile profile, String name, boolean declared, TimeRange range, Span span) {
+      ConditionProfile profile, String name, boolean declared, Part part, Span span) {
+    TimeRange range = part.range();
     double limit = solutions.settings().windowCondition();
     OptionalInt windows =
         switch (Windows.count(
-            system.linear(),
+            part.linear(),
             range,
             system.accuracy(solutions.settings().basisAccuracy()),
             limit,

@@ -100,6 +100,7 @@ public final class BasisSolve {
     Outcome<Solution> outcome =
         basis.solve(
             system,
+            system.linear(),
             hull(times, basis.startTime()),
             Math.min(request.settings().basisAccuracy(), system.model().accuracy()),
             progress);

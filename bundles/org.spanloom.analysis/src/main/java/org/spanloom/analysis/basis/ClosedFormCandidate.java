@@ -86,7 +86,7 @@ final class ClosedFormCandidate implements CandidateBasis, Solution {
 
   @Override
   public void value(double t, Side side, double[] x) {
-    value(t, x);
+    CandidateBasis.super.value(t, side, x);
   }
 
   @Override

@@ -60,7 +60,7 @@ public final class AffineEvaluator {
         double t = clamp(system.time(sample.at().get()), solution);
         solution.value(t, sample.before() ? Side.BEFORE : Side.AFTER, x);
         namedValues[k] = x[sample.component()];
-        solution.errorEstimate(t, x);
+        solution.errorEstimate(t, sample.before() ? Side.BEFORE : Side.AFTER, x);
         namedErrors[k] = x[sample.component()];
       }
     }

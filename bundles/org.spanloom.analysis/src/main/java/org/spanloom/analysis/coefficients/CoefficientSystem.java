@@ -5,6 +5,8 @@
  */
 package org.spanloom.analysis.coefficients;
 
+import java.util.List;
+import org.spanloom.numerics.Jump;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Side;
 import org.spanloom.numerics.SparsityPattern;
@@ -19,6 +21,7 @@ import org.spanloom.numerics.TimeRange;
  * @param forcing b, n values
  * @param pattern entries of A that are not zero by structure
  * @param corners times inside the range where a coefficient has a corner or a jump, increasing
+ * @param jumps changes of the states, by time
  */
 record CoefficientSystem(
     int dimension,
@@ -26,8 +29,14 @@ record CoefficientSystem(
     CompiledTerms matrix,
     CompiledTerms forcing,
     SparsityPattern pattern,
-    Breakpoints corners)
+    Breakpoints corners,
+    List<Jump> jumps)
     implements LinearSystem {
+
+  /** Copies the list. */
+  CoefficientSystem {
+    jumps = List.copyOf(jumps);
+  }
 
   @Override
   public void matrix(double t, Side side, double[] a) {

@@ -8,6 +8,7 @@ package org.spanloom.analysis.coefficients;
 import java.util.List;
 import java.util.Optional;
 import org.spanloom.language.model.InitialValues;
+import org.spanloom.language.model.Jump;
 import org.spanloom.language.model.StateComponent;
 import org.spanloom.language.model.SystemModel;
 import org.spanloom.language.model.Term;
@@ -38,6 +39,11 @@ public record CompiledSystem(SystemModel model, LinearSystem linear, TermCompile
   /** Returns a constant time in the declared unit. */
   public double time(Term term) {
     return model.timeUnit().fromBase(terms.constant(term));
+  }
+
+  /** Returns the times of a jump, in the declared unit. */
+  public double[] times(Jump jump) {
+    return jump.times().times(model.timeUnit(), terms.parameters());
   }
 
   /** Returns initial values in declared units. */

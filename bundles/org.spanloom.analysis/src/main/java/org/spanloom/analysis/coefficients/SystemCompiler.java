@@ -9,12 +9,14 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.TreeSet;
 import org.spanloom.language.model.LinearForm;
 import org.spanloom.language.model.SystemModel;
 import org.spanloom.language.model.TimeInterval;
 import org.spanloom.language.units.UnitOfMeasure;
 import org.spanloom.numerics.CoupledSystem;
+import org.spanloom.numerics.Jump;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.SparsityPattern;
 import org.spanloom.numerics.TimeRange;
@@ -49,7 +51,8 @@ public final class SystemCompiler {
    *
    * @param model a sound system
    * @param parameters values that replace those of parameters, by name, in coherent SI units
-   * @throws IllegalArgumentException if the equations of the system are not known
+   * @throws IllegalArgumentException if the equations of the system are not known, or if there is a
+   *     {@link #refusal}
    */
   public static CompiledSystem compile(SystemModel model, Map<String, Double> parameters) {
     LinearForm form =
@@ -57,10 +60,21 @@ public final class SystemCompiler {
             .equations()
             .orElseThrow(() -> new IllegalArgumentException(model.name() + " has no linear form"));
     SystemCompiler compiler = new SystemCompiler(model, form, parameters);
-    return new CompiledSystem(model, compiler.system(), compiler.terms);
+    List<Jump> jumps = new JumpCompiler(model, compiler.terms, parameters).jumps();
+    return new CompiledSystem(model, compiler.system(jumps), compiler.terms);
   }
 
-  private LinearSystem system() {
+  /**
+   * Says why values of parameters leave a system without meaning; empty where they do not.
+   *
+   * @param model a sound system
+   * @param parameters values that replace those of parameters, by name, in coherent SI units
+   */
+  public static Optional<String> refusal(SystemModel model, Map<String, Double> parameters) {
+    return JumpCompiler.refusal(model, parameters);
+  }
+
+  private LinearSystem system(List<Jump> jumps) {
     int[] coupled = coupledRows();
     int[] divisor = divisors(coupled);
     int[] a = new int[n * n];
@@ -93,7 +107,8 @@ public final class SystemCompiler {
             new CompiledTerms(graph, a),
             new CompiledTerms(graph, b),
             pattern(a),
-            corners);
+            corners,
+            jumps);
     return coupled.length == 0 ? right : coupled(right, coupled, mass, corners);
   }
 

@@ -26,6 +26,11 @@ public final class TermCompiler {
     this.parameters = Map.copyOf(parameters);
   }
 
+  /** Returns the values that replace those of parameters, in coherent SI units, by name. */
+  Map<String, Double> parameters() {
+    return parameters;
+  }
+
   /** Starts an empty graph for terms of the system. */
   TermGraph graph() {
     return new TermGraph(timeFactor, parameters);

@@ -24,6 +24,8 @@ import org.spanloom.language.model.Term;
 import org.spanloom.language.model.TimeDerivative;
 import org.spanloom.language.model.TimeInterval;
 import org.spanloom.language.units.UnitOfMeasure;
+import org.spanloom.numerics.Jump;
+import org.spanloom.numerics.JumpSelection;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Side;
@@ -124,7 +126,7 @@ final class StructureRequirements {
     }
     Outcome<Solution> outcome =
         SolutionSolver.homogeneous(
-            system.linear(),
+            JumpSelection.without(system.linear()),
             start,
             identity,
             new TimeRange(start, start + length),
@@ -184,11 +186,23 @@ final class StructureRequirements {
         worstTime = t;
       }
     }
+    Optional<Jump> guilty = Optional.empty();
+    for (Jump jump : system.linear().jumps()) {
+      double change = flow.change(jump);
+      if (!(change <= worst) && change > CANCELLED) {
+        worst = change;
+        worstTime = jump.time();
+        guilty = Optional.of(jump);
+      }
+    }
     String detail =
         n == 0
             ? "there are no states"
-            : "its rate of change, relative to the terms it is made of, is at most "
-                + Figures.text(worst, 2);
+            : guilty
+                .map(j -> "the jump at " + Figures.at(model, j.time()) + " changes it")
+                .orElse(
+                    "its rate of change, relative to the terms it is made of, is at most "
+                        + Figures.text(worst, 2));
     return new RequirementResult(
         model.name(),
         requirement.text(),
@@ -225,6 +239,33 @@ final class StructureRequirements {
       }
       all.add(TimeDerivative.of(value.constant()));
       terms = system.terms().compile(all);
+    }
+
+    /** Returns how much a jump changes the value, relative to the terms of the change. */
+    double change(Jump jump) {
+      drift(jump.time());
+      double worst = 0;
+      double[] sums = new double[n];
+      double[] sizes = new double[n];
+      double shift = 0;
+      double shiftSize = 0;
+      for (Jump.Row row : jump.rows()) {
+        int i = row.row();
+        int[] columns = row.columns();
+        double[] factors = row.factors();
+        sums[i] -= c[i];
+        sizes[i] += Math.abs(c[i]);
+        for (int k = 0; k < columns.length; k++) {
+          sums[columns[k]] += c[i] * factors[k];
+          sizes[columns[k]] += Math.abs(c[i] * factors[k]);
+        }
+        shift += c[i] * row.shift();
+        shiftSize += Math.abs(c[i] * row.shift());
+      }
+      for (int j = 0; j < n; j++) {
+        worst = Math.max(worst, relative(sums[j], sizes[j]));
+      }
+      return Math.max(worst, relative(shift, shiftSize));
     }
 
     double drift(double t) {
@@ -298,6 +339,16 @@ final class StructureRequirements {
       }
     }
     double share = largest == 0 ? 0 : worst / largest;
+    OptionalDouble lonely = new JumpPeriod(system.linear(), length).firstWithoutCounterpart();
+    if (lonely.isPresent()) {
+      return Margins.plain(
+          model,
+          requirement,
+          Status.FAILED,
+          "the jump at "
+              + Figures.at(model, lonely.getAsDouble())
+              + " does not take place one period earlier or later");
+    }
     return new RequirementResult(
         model.name(),
         requirement.text(),

@@ -8,7 +8,6 @@ package org.spanloom.analysis.requirement;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
-import java.util.function.DoubleUnaryOperator;
 import org.spanloom.analysis.Figures;
 import org.spanloom.analysis.SystemSolutions;
 import org.spanloom.analysis.coefficients.AffineEvaluator;
@@ -102,21 +101,21 @@ final class TrajectoryRequirements {
         AffineEvaluator left = new AffineEvaluator(system, requirement.left(), solution);
         AffineEvaluator right = new AffineEvaluator(system, requirement.right(), solution);
         Along along = new Along(solution);
-        DoubleUnaryOperator margin =
-            t ->
+        Along.Sided margin =
+            (t, side) ->
                 Margins.margin(
                     requirement.relation(),
-                    along.estimate(left, t).value(),
-                    along.estimate(right, t).value());
-        double worst = Minimum.of(margin, solution.nodes(), range(solution, requirement.until()));
+                    along.estimate(left, t, side).value(),
+                    along.estimate(right, t, side).value());
+        Place worst = along.least(margin, solution.nodes(), range(solution, requirement.until()));
         yield Margins.compared(
             system.model(),
             requirement,
             requirement.relation(),
-            along.estimate(left, worst),
-            along.estimate(right, worst),
+            along.estimate(left, worst.time(), worst.side()),
+            along.estimate(right, worst.time(), worst.side()),
             requirement.left().unit(),
-            OptionalDouble.of(worst));
+            OptionalDouble.of(worst.time()));
       }
     };
   }
@@ -139,25 +138,29 @@ final class TrajectoryRequirements {
     Solution solution = found.solution();
     Along along = new Along(solution);
     int worst = -1;
-    double worstTime = solution.range().start();
+    Place worstPlace = new Place(solution.range().start(), Side.AFTER);
     double worstMargin = Double.POSITIVE_INFINITY;
     for (int i = 0; i < system.dimension(); i++) {
       int component = i;
-      double t = Minimum.of(s -> along.state(s)[component], solution.nodes(), solution.range());
-      double beyondError = along.state(t)[i] + along.error(t)[i];
+      Place least =
+          along.least(
+              (t, side) -> along.state(t, side)[component], solution.nodes(), solution.range());
+      double beyondError =
+          along.state(least.time(), least.side())[i] + along.error(least.time(), least.side())[i];
       double scale = system.model().states().get(i).scale();
       if (beyondError / scale < worstMargin) {
         worstMargin = beyondError / scale;
         worst = i;
-        worstTime = t;
+        worstPlace = least;
       }
     }
     if (worst < 0) {
       return Margins.plain(system.model(), requirement, Status.HELD, "there are no states");
     }
     StateComponent state = system.model().states().get(worst);
-    double value = along.state(worstTime)[worst];
-    double error = along.error(worstTime)[worst];
+    double worstTime = worstPlace.time();
+    double value = along.state(worstTime, worstPlace.side())[worst];
+    double error = along.error(worstTime, worstPlace.side())[worst];
     String detail =
         "least is %s = %s at %s, with an estimated error of %s"
             .formatted(
@@ -179,6 +182,9 @@ final class TrajectoryRequirements {
         requirement.span());
   }
 
+  /** A time and the side of it that is meant. */
+  private record Place(double time, Side side) {}
+
   /** Reads a solution at running times, with arrays of its own. */
   private final class Along {
     private final Solution solution;
@@ -189,18 +195,41 @@ final class TrajectoryRequirements {
       this.solution = solution;
     }
 
-    Estimate estimate(AffineEvaluator evaluator, double t) {
-      return evaluator.at(t, state(t), error(t));
+    /** A value along the solution, on either side of a time. */
+    private interface Sided {
+      double at(double t, Side side);
     }
 
-    double[] state(double t) {
-      solution.value(t, Side.AFTER, x);
+    Estimate estimate(AffineEvaluator evaluator, double t, Side side) {
+      return evaluator.at(t, state(t, side), error(t, side));
+    }
+
+    double[] state(double t, Side side) {
+      solution.value(t, side, x);
       return x;
     }
 
-    double[] error(double t) {
-      solution.errorEstimate(t, e);
+    double[] error(double t, Side side) {
+      solution.errorEstimate(t, side, e);
       return e;
+    }
+
+    /** Finds where a value is least, the limits before jumps inside the range included. */
+    Place least(Sided value, double[] nodes, TimeRange range) {
+      double time = Minimum.of(t -> value.at(t, Side.AFTER), nodes, range);
+      Place place = new Place(time, Side.AFTER);
+      double least = value.at(time, Side.AFTER);
+      for (double jump : solution.jumpTimes()) {
+        double before =
+            jump > range.start() && jump <= range.end()
+                ? value.at(jump, Side.BEFORE)
+                : Double.POSITIVE_INFINITY;
+        if (before < least) {
+          least = before;
+          place = new Place(jump, Side.BEFORE);
+        }
+      }
+      return place;
     }
   }
 }

@@ -75,7 +75,18 @@ public final class Choice {
               + " has errors and cannot be solved"
               + firstError(model).map(e -> "; the first is " + e).orElse("."));
     }
-    return SystemCompiler.compile(system, values(system, parameters));
+    Map<String, Double> values = values(system, parameters);
+    Optional<String> refusal = SystemCompiler.refusal(system, values);
+    if (refusal.isPresent()) {
+      throw new RefusedException(
+          true,
+          "with these values of parameters system "
+              + system.name()
+              + " has no solution: "
+              + refusal.get()
+              + ".");
+    }
+    return SystemCompiler.compile(system, values);
   }
 
   private static Optional<String> firstError(Model model) {

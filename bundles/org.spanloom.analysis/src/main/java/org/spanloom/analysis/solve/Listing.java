@@ -122,6 +122,21 @@ public final class Listing {
    */
   public static SolutionTable table(
       CompiledSystem system, String name, Solution solution, double[] times, double accuracy) {
+    return table(system, name, solution, times, false, accuracy);
+  }
+
+  /**
+   * Lists a solution.
+   *
+   * @param twice whether the first of two equal times stands for the values before a jump there
+   */
+  static SolutionTable table(
+      CompiledSystem system,
+      String name,
+      Solution solution,
+      double[] times,
+      boolean twice,
+      double accuracy) {
     int n = system.dimension();
     List<Output> outputs = system.model().outputs();
     List<AffineEvaluator> evaluators =
@@ -131,8 +146,10 @@ public final class Listing {
     double[] x = new double[n];
     double[] e = new double[n];
     for (int k = 0; k < times.length; k++) {
-      solution.value(times[k], Side.AFTER, x);
-      solution.errorEstimate(times[k], e);
+      boolean before = twice && k + 1 < times.length && times[k] == times[k + 1];
+      Side side = before ? Side.BEFORE : Side.AFTER;
+      solution.value(times[k], side, x);
+      solution.errorEstimate(times[k], side, e);
       for (int i = 0; i < n; i++) {
         values[i][k] = x[i];
         errors[i][k] = e[i];

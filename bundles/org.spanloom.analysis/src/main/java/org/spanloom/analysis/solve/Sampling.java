@@ -30,7 +30,8 @@ public sealed interface Sampling {
   }
 
   /**
-   * For drawing: even steps and the steps of the method, so that no fast change is missed.
+   * For drawing: even steps and the steps of the method, so that no fast change is missed. A time
+   * at which the solution jumps stands there twice, first for the value before the jump.
    *
    * @param count number of even steps
    * @param most bound on the number of times

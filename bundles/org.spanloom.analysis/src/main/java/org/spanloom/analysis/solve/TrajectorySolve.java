@@ -66,6 +66,7 @@ public final class TrajectorySolve {
                   initial.name(),
                   s.value(),
                   listed(request.sampling(), times, s.value()),
+                  request.sampling() instanceof Sampling.Curve,
                   accuracy));
       case Outcome.Cancelled<Solution> c -> new SolveAnswer.Cancelled();
       case Outcome.Unsolved<Solution> u -> new SolveAnswer.Refused(false, Refusals.text(system, u));
@@ -122,6 +123,16 @@ public final class TrajectorySolve {
     int stride = 1 + nodes.length / Math.max(1, curve.most() - times.length);
     DoubleStream some =
         IntStream.range(0, nodes.length).filter(i -> i % stride == 0).mapToDouble(i -> nodes[i]);
-    return DoubleStream.concat(Arrays.stream(times), some).sorted().distinct().toArray();
+    // A time of a jump stands there twice, for the value before and the one after it.
+    double[] jumps =
+        Arrays.stream(solution.jumpTimes())
+            .filter(t -> first < t && t <= last)
+            .limit(curve.most())
+            .toArray();
+    double[] single =
+        DoubleStream.concat(Arrays.stream(times), DoubleStream.concat(some, Arrays.stream(jumps)))
+            .distinct()
+            .toArray();
+    return DoubleStream.concat(Arrays.stream(single), Arrays.stream(jumps)).sorted().toArray();
   }
 }

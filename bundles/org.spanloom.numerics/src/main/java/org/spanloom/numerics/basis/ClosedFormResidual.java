@@ -5,6 +5,8 @@
  */
 package org.spanloom.numerics.basis;
 
+import java.util.Arrays;
+import org.spanloom.numerics.Jump;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Progress;
@@ -15,7 +17,8 @@ import org.spanloom.numerics.internal.work.Watch;
 
 /**
  * How far a candidate misses the equations: the largest {@code |x_i' - sum a_ij x_j|} of a column,
- * relative to the size of its terms {@code |x_i'| + sum |a_ij x_j|} there.
+ * relative to the size of its terms {@code |x_i'| + sum |a_ij x_j|} there; or by how much it misses
+ * what a jump makes of it.
  *
  * <p>Terms that are small beside the largest of their row over the range count as at least a
  * millionth of it, so that rounding of a value that passes zero is no residual. True closed forms
@@ -99,7 +102,49 @@ public record ClosedFormResidual(double relative, int column, int component, dou
           }
         }
       }
+      for (Jump jump : system.jumps()) {
+        if (jump.time() > range.start() && jump.time() <= range.end()) {
+          across(jump, worst);
+        }
+      }
       return worst;
+    }
+
+    /** Compares what a candidate is behind a jump with what the jump makes of it. */
+    private void across(Jump jump, ClosedFormResidual[] worst) {
+      double[] before = new double[n * m];
+      double[] sizes = new double[n * m];
+      candidate.value(jump.time(), Side.BEFORE, before);
+      candidate.value(jump.time(), Side.AFTER, x);
+      watch.spend(4.0 * n * m);
+      double[] after = jump.after(before, m, false);
+      Arrays.setAll(sizes, e -> Math.abs(before[e]));
+      for (Jump.Row row : jump.rows()) {
+        int[] columns = row.columns();
+        double[] factors = row.factors();
+        for (int j = 0; j < m; j++) {
+          double size = 0;
+          for (int k = 0; k < columns.length; k++) {
+            size += Math.abs(factors[k] * before[columns[k] * m + j]);
+          }
+          sizes[row.row() * m + j] = size;
+        }
+      }
+      double[] columnSizes = new double[m];
+      for (int e = 0; e < n * m; e++) {
+        columnSizes[e % m] = Math.max(columnSizes[e % m], Math.abs(before[e]));
+      }
+      for (int e = 0; e < n * m; e++) {
+        double difference = Math.abs(x[e] - after[e]);
+        double size = Math.abs(x[e]) + sizes[e] + SMALL * columnSizes[e % m];
+        double relative =
+            Double.isFinite(difference) && Double.isFinite(size)
+                ? (size == 0 ? 0 : difference / size)
+                : Double.POSITIVE_INFINITY;
+        if (relative > worst[e % m].relative()) {
+          worst[e % m] = new ClosedFormResidual(relative, e % m, e / m, jump.time());
+        }
+      }
     }
 
     private void evaluate(double t) {
