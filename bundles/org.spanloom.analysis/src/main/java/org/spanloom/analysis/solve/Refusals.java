@@ -21,7 +21,8 @@ public final class Refusals {
     String what =
         switch (unsolved.reason()) {
           case COEFFICIENT_NOT_FINITE ->
-              "a coefficient is not a finite number; look at divisions, logarithms and powers there";
+              "a coefficient is not a finite number; look at divisions, logarithms and powers"
+                  + " there";
           case OVERFLOW ->
               "the solution grows beyond the largest floating point number; end the range earlier";
           case STEP_TOO_SMALL ->
@@ -29,9 +30,11 @@ public final class Refusals {
           case TOO_MUCH_WORK ->
               "the work limit was reached; ask for a shorter range or a larger relative error";
           case JUMP_SINGULAR ->
-              "a jump takes place that cannot be undone, and the values are given behind it; give them before it";
+              "a jump takes place that cannot be undone, and the values are given behind it; give"
+                  + " them before it";
           case JUMP_INSIDE ->
-              "a jump takes place, and boundary conditions are not solved across jumps in this version; give initial values instead";
+              "a jump takes place, and boundary conditions are not solved across jumps in this"
+                  + " version; give initial values instead";
           case RANGE -> "the range asked for is not inside the interval of the system";
         };
     return place + what + (unsolved.detail().isEmpty() ? "" : " (" + unsolved.detail() + ")") + ".";
