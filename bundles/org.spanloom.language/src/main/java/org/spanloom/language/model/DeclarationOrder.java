@@ -126,7 +126,8 @@ final class DeclarationOrder {
     };
   }
 
-  private static List<NameExpression> uses(Declaration declaration) {
+  /** Returns the names that a declaration uses. */
+  static List<NameExpression> uses(Declaration declaration) {
     List<Expression> expressions = new ArrayList<>();
     switch (declaration) {
       case ParameterStatement parameter -> {

@@ -52,6 +52,7 @@ final class Declarations {
   private final InTextOrder<Let> lets = new InTextOrder<>();
   private final InTextOrder<ReadOutput> outputs = new InTextOrder<>();
   private final InTextOrder<NamedMatrix> matrices = new InTextOrder<>();
+  private final Set<String> inBrokenMatrices = new HashSet<>();
 
   /** An output whose place in the state vector is not known yet. */
   record ReadOutput(OutputStatement statement, Quantity value, UnitOfMeasure unit) {}
@@ -73,6 +74,11 @@ final class Declarations {
   /** Returns the named expressions read, in the order of the text. */
   List<Let> lets() {
     return lets.values();
+  }
+
+  /** Returns the names in matrices without a meaning: equations may give derivatives of them. */
+  Set<String> inBrokenMatrices() {
+    return Set.copyOf(inBrokenMatrices);
   }
 
   /** Returns the matrices read, in the order of the text. */
@@ -325,6 +331,9 @@ final class Declarations {
             .declared(statement.unit())
             .filter(unit -> hasNoOffset(statement, unit))
             .flatMap(unit -> matrixReader.read(statement, unit));
+    if (meaning.isEmpty()) {
+      DeclarationOrder.uses(statement).forEach(n -> inBrokenMatrices.add(n.name().text()));
+    }
     meaning.ifPresent(m -> matrices.put(statement.span().start(), m.matrix()));
     return meaning;
   }

@@ -10,6 +10,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.TreeMap;
+import java.util.function.UnaryOperator;
 import org.spanloom.language.problem.Fix;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.problem.TextEdit;
@@ -106,7 +107,7 @@ final class MatrixAlgebra {
       List<MatrixValue.Entry> entries) {
     sums.forEach((column, sum) -> {
       Quantity total = sum.total(dimension);
-      if (total.holdsStates() || !Simplifier.isZero(total.constant().term())) {
+      if (!MatrixValue.isZero(total)) {
         entries.add(new MatrixValue.Entry(row, column, unplaced ? total.inherited() : total));
       }
     });
@@ -149,10 +150,12 @@ final class MatrixAlgebra {
       return quotient(left, right, factor, dimension);
     }
     return switch (left) {
-      case Quantity a -> scaled((MatrixValue) right, a, dimension, product.span());
+      case Quantity a ->
+          scaled((MatrixValue) right, q -> Quantity.product(a, q, dimension), dimension, product);
       case MatrixValue a ->
           switch (right) {
-            case Quantity b -> scaled(a, b, dimension, product.span());
+            case Quantity b ->
+                scaled(a, q -> Quantity.product(q, b, dimension), dimension, product);
             case MatrixValue b -> matrixProduct(a, b, factor, dimension, product);
           };
     };
@@ -194,15 +197,13 @@ final class MatrixAlgebra {
   }
 
   private Optional<Value> scaled(
-      MatrixValue matrix, Quantity factor, Dimension dimension, Span span) {
-    return counted(matrix.entries().size(), span)
-        ? Optional.of(matrix.map(q -> multiplied(q, factor, dimension), dimension))
+      MatrixValue matrix,
+      UnaryOperator<Quantity> change,
+      Dimension dimension,
+      ProductExpression product) {
+    return counted(matrix.entries().size(), product.span())
+        ? Optional.of(matrix.map(change, dimension))
         : Optional.empty();
-  }
-
-  /** Returns a product of which at most one factor holds states. */
-  private static Quantity multiplied(Quantity a, Quantity b, Dimension dimension) {
-    return b.holdsStates() ? b.times(a, dimension) : a.times(b, dimension);
   }
 
   private Optional<Value> matrixProduct(
@@ -225,7 +226,7 @@ final class MatrixAlgebra {
         }
         for (MatrixValue.Entry b : others) {
           sums.computeIfAbsent(b.column(), c -> new QuantitySum())
-              .add(multiplied(b.value(), a.value(), dimension));
+              .add(Quantity.product(a.value(), b.value(), dimension));
         }
       }
       addRow(row, sums, dimension, true, entries);

@@ -61,7 +61,7 @@ final class MatrixReader {
         Expression text = row.values().get(j);
         Optional<Quantity> value = resolver.given(text, unit, what, place);
         sound &= value.isPresent();
-        if (sound && !Simplifier.isZero(value.get().constant().term())) {
+        if (sound && !MatrixValue.isZero(value.get())) {
           Quantity placed = value.get().from(frame.placed(text.span()));
           entries.add(new MatrixValue.Entry(i, j, placed));
         }

@@ -123,12 +123,17 @@ final class MatrixValue implements Value {
     return rows == 1 ? "a row of " + columns : rows + " x " + columns;
   }
 
+  /** Tells whether a quantity is 0 by structure and so no entry. */
+  static boolean isZero(Quantity value) {
+    return !value.holdsStates() && Simplifier.isZero(value.constant().term());
+  }
+
   /** Returns the matrix with every entry changed; entries that become 0 are left out. */
   MatrixValue map(UnaryOperator<Quantity> change, Dimension newDimension) {
     List<Entry> changed = new ArrayList<>(entries.size());
     for (Entry entry : entries) {
       Quantity value = change.apply(entry.value());
-      if (value.holdsStates() || !Simplifier.isZero(value.constant().term())) {
+      if (!isZero(value)) {
         changed.add(new Entry(entry.row(), entry.column(), value));
       }
     }

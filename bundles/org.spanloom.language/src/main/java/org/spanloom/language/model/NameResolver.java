@@ -31,11 +31,13 @@ final class NameResolver {
   private final Resolver resolver;
   private final Scope scope;
   private final Problems problems;
+  private final MatrixNames matrices;
 
   NameResolver(Resolver resolver, Scope scope, Problems problems) {
     this.resolver = resolver;
     this.scope = scope;
     this.problems = problems;
+    this.matrices = new MatrixNames(this, resolver, scope, problems);
   }
 
   boolean isStateOrOutput(NameExpression name) {
@@ -61,7 +63,7 @@ final class NameResolver {
       case LetMeaning m -> Optional.of(let(m));
       case StateMeaning m -> state(m, name, place);
       case MatrixMeaning m when m.matrix().dependsOnTime() -> bareFunctionOfTime(name);
-      case MatrixMeaning m -> Optional.of(MatrixAlgebra.simplest(m.value()));
+      case MatrixMeaning m -> matrices.value(m, name, place);
       case OutputMeaning m -> output(m, name, place);
       case BrokenMeaning m -> Optional.empty();
     };
@@ -84,9 +86,7 @@ final class NameResolver {
           isFunctionOfTime(call, place) ? Optional.of(let(m)) : Optional.empty();
       case LetMeaning m -> notCallable(call, m);
       case MatrixMeaning m when m.matrix().dependsOnTime() ->
-          isFunctionOfTime(call, place)
-              ? Optional.of(MatrixAlgebra.simplest(m.value()))
-              : Optional.empty();
+          isFunctionOfTime(call, place) ? matrices.value(m, callee, place) : Optional.empty();
       case MatrixMeaning m -> notCallable(call, m);
       case StateMeaning m ->
           isRunningTime(call) ? state(m, callee, place) : sampledState(m, call, place);
@@ -133,7 +133,8 @@ final class NameResolver {
   }
 
   private boolean hasNoDerivative(NameExpression name, Meaning meaning) {
-    if (meaning instanceof StateMeaning || meaning instanceof BrokenMeaning) {
+    boolean matrix = meaning instanceof MatrixMeaning m && m.value().holdsStates();
+    if (meaning instanceof StateMeaning || matrix || meaning instanceof BrokenMeaning) {
       return false;
     }
     problems.report(
@@ -252,10 +253,14 @@ final class NameResolver {
   }
 
   private Dimension dimension(StateMeaning state, NameExpression name) {
-    Dimension dimension = state.unit().dimension();
+    return over(state.unit().dimension(), name.primes());
+  }
+
+  /** Returns the dimension of a derivative. */
+  Dimension over(Dimension dimension, int primes) {
     Dimension time =
         scope.own(timeName()).map(NameResolver::dimensionOfTime).orElse(Dimension.NONE);
-    return dimension.over(time.power(Math.min(name.primes(), StateVector.ORDER_LIMIT)));
+    return dimension.over(time.power(Math.min(primes, StateVector.ORDER_LIMIT)));
   }
 
   private static Dimension dimensionOfTime(Meaning meaning) {
@@ -346,7 +351,7 @@ final class NameResolver {
     NameExpression callee = call.callee();
     String word = callee.name().text();
     if (MatrixFunction.named(word).isPresent() && callee.primes() == 0) {
-      return transposed(call, place);
+      return takesArguments(call, 1) ? matrices.transposed(call, place) : Optional.empty();
     }
     Optional<Function> named = Function.named(word);
     if (named.isEmpty() || callee.primes() > 0) {
@@ -403,14 +408,6 @@ final class NameResolver {
             + (labelled ? " without a name" : ", not " + call.arguments().size())
             + ".");
     return false;
-  }
-
-  private Optional<Value> transposed(CallExpression call, Place place) {
-    if (!takesArguments(call, 1)) {
-      return Optional.empty();
-    }
-    Expression argument = call.arguments().getFirst().value();
-    return resolver.value(argument, place).map(resolver.matrices()::transposed);
   }
 
   private void reportDimensions(CallExpression call, Function function, List<Dimension> found) {

@@ -18,8 +18,8 @@ record Place(String what, boolean time, boolean states, boolean samples) {
   static final Place PARAMETER = new Place("a parameter", false, false, false);
   static final Place LET = new Place("a named expression", false, false, false);
   static final Place LET_OF_TIME = new Place("a named expression", true, false, false);
-  static final Place MATRIX = new Place("a matrix", false, false, false);
-  static final Place MATRIX_OF_TIME = new Place("a matrix", true, false, false);
+  static final Place MATRIX = new Place("a matrix", false, true, false);
+  static final Place MATRIX_OF_TIME = new Place("a matrix", true, true, false);
   static final Place INPUT = new Place("an input", true, false, false);
   static final Place OUTPUT = new Place("an output", true, true, false);
   static final Place EQUATION = new Place("an equation", true, true, false);

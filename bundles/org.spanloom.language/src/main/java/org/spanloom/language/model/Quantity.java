@@ -10,6 +10,7 @@ import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Set;
 import java.util.function.UnaryOperator;
 import org.spanloom.language.text.Span;
@@ -53,11 +54,9 @@ record Quantity(
       return new Part(term, all, true);
     }
 
-    /** Returns the product with a part without states; it comes from the places of both. */
-    Part times(Part factor) {
-      Set<Span> all = new LinkedHashSet<>(sources);
-      all.addAll(factor.sources);
-      return new Part(Simplifier.product(factor.term, term), List.copyOf(all), placed);
+    /** Returns the part as one that comes from a place in another statement. */
+    Part from(Span place) {
+      return new Part(term, List.of(place), false);
     }
 
     /** Returns the same part as a statement sees it that uses it by name. */
@@ -100,25 +99,42 @@ record Quantity(
   }
 
   /**
-   * Returns the product with a quantity without states. Unlike {@link #map} it comes from the
-   * places of both, as is wanted of entries of matrices, which stand elsewhere than their products.
+   * Returns a product of which at most one factor holds states. Unlike with {@link #map} its parts
+   * come from the places of both, as is wanted of entries of matrices, which stand elsewhere than
+   * their products.
    */
-  Quantity times(Quantity factor, Dimension product) {
-    int deeper = Math.max(depth, factor.depth) + 1;
-    if (!holdsStates()) {
-      return new Quantity(Map.of(), constant.times(factor.constant), product, false, deeper);
-    }
-    Map<StateKey, Part> changed = new LinkedHashMap<>();
-    coefficients.forEach((key, part) -> changed.put(key, part.times(factor.constant)));
-    boolean absent = Simplifier.isZero(constant.term());
-    Part rest = absent ? Part.ZERO : constant.times(factor.constant);
-    return new Quantity(changed, rest, product, false, deeper);
+  static Quantity product(Quantity left, Quantity right, Dimension dimension) {
+    int depth = Math.max(left.depth, right.depth) + 1;
+    Map<StateKey, Part> parts = new LinkedHashMap<>();
+    left.coefficients.forEach((key, part) -> parts.put(key, product(part, right.constant)));
+    right.coefficients.forEach((key, part) -> parts.put(key, product(left.constant, part)));
+    Part rest = product(left.constant, right.constant);
+    boolean absent = !parts.isEmpty() && Simplifier.isZero(rest.term());
+    return new Quantity(parts, absent ? Part.ZERO : rest, dimension, false, depth);
   }
 
-  /** Returns a quantity without states as one that comes from a place in another statement. */
+  private static Part product(Part left, Part right) {
+    Set<Span> places = new LinkedHashSet<>(left.sources);
+    places.addAll(right.sources);
+    Term term = Simplifier.product(left.term, right.term);
+    return new Part(term, List.copyOf(places), left.placed || right.placed);
+  }
+
+  /** Returns the quantity as one that comes from a place in another statement. */
   Quantity from(Span place) {
-    Part part = new Part(constant.term(), constant.sources(), false).placedAt(place).inherited();
-    return new Quantity(coefficients, part, dimension, zero, depth);
+    Map<StateKey, Part> changed = new LinkedHashMap<>();
+    coefficients.forEach((key, part) -> changed.put(key, part.from(place)));
+    boolean absent = holdsStates() && Simplifier.isZero(constant.term());
+    Part rest = absent ? Part.ZERO : constant.from(place);
+    return new Quantity(changed, rest, dimension, zero, depth);
+  }
+
+  /** Returns the state or derivative that the quantity is, if it is nothing but that. */
+  Optional<StateKey> single() {
+    boolean alone = coefficients.size() == 1 && Simplifier.isZero(constant.term());
+    return alone && Term.ONE.equals(coefficients.values().iterator().next().term())
+        ? Optional.of(coefficients.keySet().iterator().next())
+        : Optional.empty();
   }
 
   /** Returns the quantity as a statement sees it that uses it by name. */

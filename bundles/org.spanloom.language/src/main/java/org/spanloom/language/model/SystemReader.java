@@ -98,6 +98,10 @@ final class SystemReader {
     EquationReader equations = new EquationReader(system);
     for (Frame frame : frames) {
       readEquations(frame, equations);
+      Set<String> broken = frame.declarations().inBrokenMatrices();
+      if (!broken.isEmpty()) {
+        equations.noteUnread(frame, broken);
+      }
     }
     readTransfers(equations);
     if (hasUnread) {
