@@ -17,6 +17,7 @@ import org.junit.jupiter.api.DynamicTest;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.TestFactory;
 import org.spanloom.language.TestTexts;
+import org.spanloom.language.formatting.LayoutPropertyTests;
 import org.spanloom.language.formatting.PrinterTests;
 import org.spanloom.language.syntax.Parser;
 import org.spanloom.language.syntax.SyntaxFile;
@@ -60,6 +61,7 @@ class GrammarTests {
       String text = sentences.sentence("file");
       assertEquals(List.of(), messages(text), text);
       PrinterTests.assertPrintsItself(parse(text), text);
+      LayoutPropertyTests.assertChangesBlanksOnly(text);
     }
   }
 

@@ -126,8 +126,22 @@ final class Spacing {
   private boolean isCalled(int i) {
     return switch (layout.kind(i)) {
       case NAME, PRIMES, CLOSE_BRACKET -> true;
-      case CONTEXT_WORD -> layout.text(i).equals("condition");
+      case CONTEXT_WORD -> layout.text(i).equals("condition") || isCompared(i);
       default -> false;
     };
+  }
+
+  /** Tells whether a sign of comparison stands behind a token in its statement. */
+  private boolean isCompared(int token) {
+    int statement = layout.statement(token);
+    boolean compared = false;
+    for (int i = token; i < layout.size() && layout.statement(i) == statement; i++) {
+      compared |=
+          switch (layout.kind(i)) {
+            case LESS, AT_MOST, GREATER, AT_LEAST -> true;
+            default -> false;
+          };
+    }
+    return compared;
   }
 }
