@@ -69,8 +69,11 @@ public class LayoutPropertyTests {
     StringBuilder listing = new StringBuilder(RecordText.of(model.systems()));
     model
         .problems()
-        .forEach(
-            p -> listing.append(p.kind()).append(p.message().replaceAll("\"[^\"]*\"", "_")).append('\n'));
+        .forEach(p ->
+            listing
+                .append(p.kind())
+                .append(p.message().replaceAll("\"[^\"]*\"", "_"))
+                .append('\n'));
     return listing.toString().replaceAll("[ \\t]", "");
   }
 }

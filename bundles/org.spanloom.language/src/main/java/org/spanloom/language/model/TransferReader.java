@@ -72,6 +72,7 @@ final class TransferReader {
       equations.noteUnread(frame, names(transfer));
       return;
     }
+    TransferDirection.reportReversed(frame, transfer);
     flows.add(new Flow(frame, flow.get(), transfer.flow().span()));
     from.ifPresent(state -> add(frame, transfer, state, true, flow.get()));
     to.ifPresent(state -> add(frame, transfer, state, false, flow.get()));
@@ -89,6 +90,10 @@ final class TransferReader {
     Set<String> names = new HashSet<>();
     for (TransferEnd end : List.of(transfer.from(), transfer.to())) {
       end.state().ifPresent(s -> names.add(s.name().text()));
+    }
+    if (names.isEmpty()) {
+      // It may be meant for any state in the flow.
+      ExpressionNames.of(transfer.flow()).forEach(n -> names.add(n.name().text()));
     }
     return names;
   }
@@ -203,7 +208,8 @@ final class TransferReader {
           .report(
               ProblemKind.TRANSFER_INVALID,
               ends,
-              "Both ends of this transfer are outside: name the state that it fills or empties.");
+              "Both ends of this transfer are outside: name the state that it fills or empties.",
+              TransferDirection.stateInFlow(frame, transfer));
       return false;
     }
     if (from.isEmpty() || to.isEmpty()) {
@@ -217,7 +223,8 @@ final class TransferReader {
               ends,
               "This transfer leads from \""
                   + from.get().name()
-                  + "\" back to it and changes nothing: name another end.");
+                  + "\" back to it and changes nothing: name another end.",
+              Fix.replace("Lead to outside", transfer.to().span(), "outside"));
       return false;
     }
     UnitOfMeasure left = from.get().unit();

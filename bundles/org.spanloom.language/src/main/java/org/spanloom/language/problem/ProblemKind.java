@@ -107,6 +107,8 @@ public enum ProblemKind {
   TOO_MANY_EQUATIONS("There are more equations than derivatives to be found."),
   /** A transfer that leads from nowhere to nowhere or back to where it began. */
   TRANSFER_INVALID("A transfer does not lead from one place to another."),
+  /** A transfer whose flow has a minus in front. */
+  TRANSFER_REVERSED(Severity.NOTE, "The flow of a transfer is written with a minus in front."),
   /** A jump that cannot take place as written. */
   JUMP_INVALID("A jump cannot take place as written."),
   /** A boundary condition that says nothing about values at named times. */
