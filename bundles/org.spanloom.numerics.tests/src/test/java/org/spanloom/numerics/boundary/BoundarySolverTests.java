@@ -5,6 +5,7 @@
  */
 package org.spanloom.numerics.boundary;
 
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertInstanceOf;
 import static org.junit.jupiter.api.Assertions.assertThrows;
@@ -19,6 +20,8 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 import org.junit.jupiter.params.provider.ValueSource;
 import org.spanloom.numerics.Accuracy;
+import org.spanloom.numerics.Jump;
+import org.spanloom.numerics.JumpSelection;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Progress;
@@ -348,6 +351,49 @@ final class BoundarySolverTests {
     Solution solution = unique(system, List.of(at(3, 0, 5)), 1e-12);
     assertEquals(3, value(solution, 0.5)[0], 1e-12);
     assertEquals(4, value(solution, 2)[0], 1e-12);
+  }
+
+  /**
+   * x' = -x with x(s) = 2 x(s-) + 1 at s = 1 and s = 2, and conditions on both sides of a jump.
+   * Solved by hand: x(1-) = c/e, and so on.
+   */
+  @Test
+  void jumpsOfTheStates() {
+    List<Jump.Row> rows = List.of(new Jump.Row(0, new int[] {0}, new double[] {2}, 1));
+    LinearSystem system =
+        new JumpSelection(
+            FormulaSystem.constant(new double[] {-1}, 0, 3),
+            List.of(Jump.of(1, rows), Jump.of(2, rows)));
+    double e = Math.exp(-1);
+    double atOne = 2 * 4 * e + 1;
+    double atTwo = 2 * atOne * e + 1;
+    for (BoundaryCondition condition :
+        List.of(
+            at(0, 0, 4),
+            at(1, 0, atOne),
+            new BoundaryCondition(
+                List.of(new BoundaryCondition.Sample(2, Side.BEFORE, 0, 1)), atOne * e),
+            at(3, 0, atTwo * e))) {
+      Solution solution = unique(system, List.of(condition), 1e-11);
+      assertEquals(4, value(solution, 0)[0], 1e-10);
+      assertEquals(atOne, value(solution, 1)[0], 1e-10);
+      double[] left = new double[1];
+      solution.value(1, Side.BEFORE, left);
+      assertEquals(4 * e, left[0], 1e-10);
+      assertEquals(atTwo * Math.exp(-0.5), value(solution, 2.5)[0], 1e-10);
+      assertArrayEquals(new double[] {1, 2}, solution.jumpTimes());
+    }
+  }
+
+  /** A jump that forgets the state leaves its value before it open. */
+  @Test
+  void aJumpThatCannotBeUndone() {
+    LinearSystem system =
+        new JumpSelection(
+            FormulaSystem.constant(new double[] {-1}, 0, 2),
+            List.of(Jump.of(1, List.of(new Jump.Row(0, new int[0], new double[0], 5)))));
+    assertInstanceOf(Family.class, solve(system, List.of(at(2, 0, 5 * Math.exp(-1))), 1e-9));
+    assertInstanceOf(None.class, solve(system, List.of(at(2, 0, 4)), 1e-9));
   }
 
   /** Scales only change how errors are measured, not what is found. */

@@ -13,6 +13,8 @@ import java.util.List;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import org.spanloom.numerics.Jump;
+import org.spanloom.numerics.JumpSelection;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Progress;
@@ -163,6 +165,19 @@ final class FloquetMultipliersTests {
     }
     for (Multiplier m : multipliers(FormulaSystem.constant(a, 0, 2), 2, 1e-10).multipliers()) {
       assertEquals(-0.2, m.logModulus(), 1e-9);
+    }
+  }
+
+  /** Decay and a repeated jump that trebles: one multiplier, 3 exp(-P). */
+  @Test
+  void jumpsBelongToThePeriod() {
+    Jump trebled = Jump.of(0, List.of(new Jump.Row(0, new int[] {0}, new double[] {3}, 0)));
+    for (double end : new double[] {2, 2.5}) {
+      LinearSystem system =
+          new JumpSelection(
+              FormulaSystem.constant(new double[] {-1}, 0, end), List.of(trebled, trebled.at(2)));
+      double found = multipliers(system, 2, 1e-11).multipliers().getFirst().logModulus();
+      assertEquals(Math.log(3) - 2, found, 1e-9);
     }
   }
 

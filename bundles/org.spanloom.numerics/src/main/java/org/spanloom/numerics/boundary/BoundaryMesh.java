@@ -9,13 +9,16 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.TreeSet;
+import org.spanloom.numerics.Jump;
 import org.spanloom.numerics.LinearSystem;
+import org.spanloom.numerics.Side;
 import org.spanloom.numerics.TimeRange;
 
 /**
- * The nodes of a collocation mesh.
+ * The nodes of a collocation mesh. Where the states jump there are two nodes at one time, and the
+ * link between them is the jump instead of a step.
  *
- * @param times increasing, at least two
+ * @param times not decreasing, at least two
  * @param stations the nodes that conditions name, with both ends; increasing
  */
 record BoundaryMesh(double[] times, int[] stations) {
@@ -31,9 +34,16 @@ record BoundaryMesh(double[] times, int[] stations) {
    */
   static BoundaryMesh first(
       LinearSystem system, TimeRange range, List<BoundaryCondition> conditions, double speed) {
-    TreeSet<Double> named = new TreeSet<>(List.of(range.start(), range.end()));
-    conditions.forEach(c -> c.samples().forEach(s -> named.add(s.time())));
-    TreeSet<Double> corners = new TreeSet<>(named);
+    TreeSet<Double> jumps = new TreeSet<>();
+    for (Jump jump : system.jumps()) {
+      // A jump at the start is over when the range begins.
+      if (range.start() < jump.time() && jump.time() <= range.end()) {
+        jumps.add(jump.time());
+      }
+    }
+    TreeSet<Double> corners = new TreeSet<>(List.of(range.end()));
+    corners.addAll(jumps);
+    conditions.forEach(c -> c.samples().forEach(s -> corners.add(s.time())));
     for (double t : system.breakpoints()) {
       if (range.start() < t && t < range.end()) {
         corners.add(t);
@@ -44,9 +54,25 @@ record BoundaryMesh(double[] times, int[] stations) {
     times.add(before);
     for (double corner : corners.tailSet(range.start(), false)) {
       addGraded(times, before, corner, range.length(), speed);
+      if (jumps.contains(corner)) {
+        times.add(corner);
+      }
       before = corner;
     }
-    return of(times.stream().mapToDouble(Double::doubleValue).toArray(), named);
+    double[] nodes = times.stream().mapToDouble(Double::doubleValue).toArray();
+    TreeSet<Integer> stations = new TreeSet<>(List.of(0, nodes.length - 1));
+    for (BoundaryCondition condition : conditions) {
+      condition.samples().forEach(s -> stations.add(node(nodes, s.time(), s.side())));
+    }
+    return new BoundaryMesh(nodes, stations.stream().mapToInt(Integer::intValue).toArray());
+  }
+
+  /** Returns the node at a time: of two, the one on the side asked for. */
+  private static int node(double[] times, double time, Side side) {
+    int node = Arrays.binarySearch(times, time);
+    int before = node > 0 && times[node - 1] == time ? node - 1 : node;
+    boolean twice = before + 1 < times.length && times[before + 1] == time;
+    return twice && side == Side.AFTER ? before + 1 : before;
   }
 
   private static void addGraded(
@@ -69,26 +95,25 @@ record BoundaryMesh(double[] times, int[] stations) {
     times.add(to);
   }
 
-  private static BoundaryMesh of(double[] times, TreeSet<Double> named) {
-    int[] stations = named.stream().mapToInt(t -> Arrays.binarySearch(times, t)).toArray();
-    return new BoundaryMesh(times, stations);
-  }
-
-  /** Returns the number of steps. */
-  int steps() {
+  /** Returns the number of links: steps and jumps. */
+  int links() {
     return times.length - 1;
   }
 
+  /** Tells whether a link is a jump of the states. */
+  boolean isJump(int link) {
+    return times[link] == times[link + 1];
+  }
+
   /** Returns the number of the station at a time. */
-  int station(double time) {
-    int node = Arrays.binarySearch(times, time);
-    return Arrays.binarySearch(stations, node);
+  int station(double time, Side side) {
+    return Arrays.binarySearch(stations, node(times, time, side));
   }
 
   /**
    * Returns the mesh with each step split into equal parts.
    *
-   * @param parts how many, for each step, at least 1
+   * @param parts how many, for each link, at least 1; 1 for a jump
    */
   BoundaryMesh split(int[] parts) {
     int count = Arrays.stream(parts).sum();
@@ -109,8 +134,8 @@ record BoundaryMesh(double[] times, int[] stations) {
 
   /** Returns the mesh with each step halved. */
   BoundaryMesh halved() {
-    int[] two = new int[steps()];
-    Arrays.fill(two, 2);
-    return split(two);
+    int[] parts = new int[links()];
+    Arrays.setAll(parts, k -> isJump(k) ? 1 : 2);
+    return split(parts);
   }
 }

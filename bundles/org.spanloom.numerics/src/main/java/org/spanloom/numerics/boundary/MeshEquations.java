@@ -5,11 +5,15 @@
  */
 package org.spanloom.numerics.boundary;
 
+import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.SingularOps_DDRM;
 import org.ejml.dense.row.factory.DecompositionFactory_DDRM;
 import org.ejml.interfaces.decomposition.SingularValueDecomposition_F64;
+import org.spanloom.numerics.Jump;
+import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome.Reason;
 import org.spanloom.numerics.collocation.StepPropagator;
 import org.spanloom.numerics.internal.algebra.Rows;
@@ -26,7 +30,8 @@ final class MeshEquations {
   private static final double MOST_NUMBERS = 5e7;
 
   private final BoundaryMesh mesh;
-  private final StepPropagator[] steps;
+  private final List<Optional<StepPropagator>> steps = new ArrayList<>();
+  private final double[][] offsets;
   private final double[] scale;
   private final int n;
   private final double[][][] matrices;
@@ -41,12 +46,14 @@ final class MeshEquations {
   /**
    * Sets up and factors.
    *
-   * @param maker makes the steps of the system
+   * @param system the system
+   * @param maker makes its steps
    * @param mesh the mesh
    * @param asked n conditions
    * @param scale n scales, positive
    */
   MeshEquations(
+      LinearSystem system,
       StepPropagator.Maker maker,
       BoundaryMesh mesh,
       List<BoundaryCondition> asked,
@@ -55,19 +62,33 @@ final class MeshEquations {
     this.mesh = mesh;
     this.scale = scale.clone();
     this.n = scale.length;
-    int count = mesh.steps();
+    int count = mesh.links();
     if ((double) count * n * n * 8 > MOST_NUMBERS) {
       throw new Hopeless(
           Reason.TOO_MUCH_WORK, mesh.times()[0], "more than " + count + " mesh steps are needed");
     }
-    steps = new StepPropagator[count];
     matrices = new double[count][][];
+    offsets = new double[count][n];
     for (int k = 0; k < count; k++) {
-      steps[k] = maker.step(mesh.times()[k], mesh.times()[k + 1], watch);
-      matrices[k] = scaled(steps[k].matrix());
-      if (!Rows.areFinite(matrices[k])) {
-        throw new Hopeless(
-            Reason.OVERFLOW, mesh.times()[k], "a step of the mesh has no finite propagator");
+      double from = mesh.times()[k];
+      double[][] matrix;
+      double[] offset;
+      if (mesh.isJump(k)) {
+        steps.add(Optional.empty());
+        matrix = Rows.of(jumped(system, from, Rows.flat(Rows.identity(n), n), n, false), n, n);
+        offset = jumped(system, from, new double[n], 1, true);
+      } else {
+        StepPropagator step = maker.step(from, mesh.times()[k + 1], watch);
+        steps.add(Optional.of(step));
+        matrix = step.matrix();
+        offset = step.offset();
+      }
+      matrices[k] = scaled(matrix);
+      for (int i = 0; i < n; i++) {
+        offsets[k][i] = offset[i] / scale[i];
+      }
+      if (!Rows.areFinite(matrices[k]) || !Rows.isFinite(offsets[k])) {
+        throw new Hopeless(Reason.OVERFLOW, from, "a step of the mesh has no finite propagator");
       }
     }
     int segments = mesh.stations().length - 1;
@@ -84,7 +105,7 @@ final class MeshEquations {
     values = new double[n];
     for (int i = 0; i < n; i++) {
       for (BoundaryCondition.Sample s : asked.get(i).samples()) {
-        conditions[i][mesh.station(s.time()) * n + s.component()] +=
+        conditions[i][mesh.station(s.time(), s.side()) * n + s.component()] +=
             s.coefficient() * scale[s.component()];
       }
       conditionSizes[i] = norm(conditions[i]);
@@ -110,6 +131,17 @@ final class MeshEquations {
     for (int i = 0; i < unknowns; i++) {
       sigma[i] = values.get(i, i);
     }
+  }
+
+  private static double[] jumped(
+      LinearSystem system, double time, double[] x, int m, boolean shifted) {
+    double[] result = x;
+    for (Jump jump : system.jumps()) {
+      if (jump.time() == time) {
+        result = jump.after(result, m, shifted);
+      }
+    }
+    return result;
   }
 
   private double[][] condensed(int unknowns) {
@@ -159,9 +191,9 @@ final class MeshEquations {
     return mesh;
   }
 
-  /** Returns a step of the mesh. */
-  StepPropagator step(int k) {
-    return steps[k];
+  /** Returns a step of the mesh; empty for a jump. */
+  Optional<StepPropagator> step(int k) {
+    return steps.get(k);
   }
 
   /** Returns the singular values of the condensed equations, largest first. */
@@ -179,43 +211,41 @@ final class MeshEquations {
 
   /** Returns the right sides of the problem itself, one column. */
   Right right() {
-    double[][][] offsets = new double[steps.length][n][1];
+    double[][][] given = new double[matrices.length][][];
     double[][] beta = new double[n][1];
-    for (int k = 0; k < steps.length; k++) {
-      for (int i = 0; i < n; i++) {
-        offsets[k][i][0] = steps[k].offset()[i] / scale[i];
-      }
+    for (int k = 0; k < given.length; k++) {
+      given[k] = Rows.of(offsets[k], n, 1);
     }
     for (int i = 0; i < n; i++) {
       beta[i][0] = values[i];
     }
-    return new Right(offsets, beta);
+    return new Right(given, beta);
   }
 
   /** Returns n columns: in each, one condition is 1 and everything else 0. */
   Right unitConditions() {
-    return new Right(new double[steps.length][n][n], Rows.identity(n));
+    return new Right(new double[matrices.length][n][n], Rows.identity(n));
   }
 
   /** Returns n columns: in each, one component of one step is 1 and everything else 0. */
   Right unitStep(int k) {
-    double[][][] offsets = new double[steps.length][n][n];
-    offsets[k] = Rows.identity(n);
-    return new Right(offsets, new double[n][n]);
+    double[][][] unit = new double[matrices.length][n][n];
+    unit[k] = Rows.identity(n);
+    return new Right(unit, new double[n][n]);
   }
 
   /** Returns what the right sides lack for given values at the nodes. */
   Right residual(Right right, double[][][] x) {
     int m = right.conditions()[0].length;
-    double[][][] offsets = new double[steps.length][][];
-    for (int k = 0; k < steps.length; k++) {
-      offsets[k] = Rows.copy(right.steps()[k]);
+    double[][][] lacking = new double[matrices.length][][];
+    for (int k = 0; k < matrices.length; k++) {
+      lacking[k] = Rows.copy(right.steps()[k]);
       for (int i = 0; i < n; i++) {
         for (int j = 0; j < m; j++) {
-          offsets[k][i][j] -= x[k + 1][i][j];
+          lacking[k][i][j] -= x[k + 1][i][j];
         }
         for (int l = 0; l < n; l++) {
-          Rows.addScaled(offsets[k][i], matrices[k][i][l], x[k][l], 0, m);
+          Rows.addScaled(lacking[k][i], matrices[k][i][l], x[k][l], 0, m);
         }
       }
     }
@@ -227,7 +257,7 @@ final class MeshEquations {
         }
       }
     }
-    return new Right(offsets, beta);
+    return new Right(lacking, beta);
   }
 
   /** Returns the coefficients of condensed right sides in the left singular vectors. */
@@ -312,7 +342,7 @@ final class MeshEquations {
   }
 
   private double[][][] fill(double[][] y, Chain.Reduced[] reduced, int m, Watch watch) {
-    double[][][] x = new double[steps.length + 1][][];
+    double[][][] x = new double[matrices.length + 1][][];
     for (int s = 0; s <= chains.length; s++) {
       double[][] here = new double[n][];
       System.arraycopy(y, s * n, here, 0, n);

@@ -8,6 +8,7 @@ package org.spanloom.numerics.boundary;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 import org.spanloom.numerics.Accuracy;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Side;
@@ -77,10 +78,11 @@ final class MeshRefinement {
     int withoutGain = 0;
     for (int round = 0; ; round++) {
       watch.ask();
-      MeshEquations coarse = new MeshEquations(maker, mesh, conditions, scale, watch);
-      MeshEquations fine = new MeshEquations(maker, mesh.halved(), conditions, scale, watch);
+      MeshEquations coarse = new MeshEquations(system, maker, mesh, conditions, scale, watch);
+      MeshEquations fine =
+          new MeshEquations(system, maker, mesh.halved(), conditions, scale, watch);
       int rank = rank(coarse.singularValues(), fine.singularValues());
-      boolean mayGoOn = round + 1 < MOST_ROUNDS && 4 * mesh.steps() < MOST_STEPS;
+      boolean mayGoOn = round + 1 < MOST_ROUNDS && 4 * mesh.links() < MOST_STEPS;
       boolean open = isOpen(coarse.singularValues(), fine.singularValues(), rank);
       Solved onCoarse = coarse.solve(coarse.right(), rank, watch);
       if (open && mayGoOn) {
@@ -164,16 +166,19 @@ final class MeshRefinement {
     int nodes = x.length;
     double[][] differences = new double[nodes][n];
     double[] middle = new double[n];
+    int node = 0;
     for (int k = 0; k < onCoarse.length; k++) {
       for (int i = 0; i < n; i++) {
-        differences[2 * k][i] = Math.abs(onCoarse[k][i][0] - x[2 * k][i][0]);
+        differences[node][i] = Math.abs(onCoarse[k][i][0] - x[node][i][0]);
       }
-      if (k + 1 < onCoarse.length) {
-        polynomial(coarse, k, onCoarse[k]).value(0.5, middle);
+      if (k + 1 < onCoarse.length && coarse.step(k).isPresent()) {
+        node++;
+        polynomial(coarse, k, onCoarse[k]).orElseThrow().value(0.5, middle);
         for (int i = 0; i < n; i++) {
-          differences[2 * k + 1][i] = Math.abs(middle[i] / scale[i] - x[2 * k + 1][i][0]);
+          differences[node][i] = Math.abs(middle[i] / scale[i] - x[node][i][0]);
         }
       }
+      node++;
     }
     double gain = 3 * Math.pow(2, -tableau.stages());
     double[][] errors = new double[nodes][n];
@@ -204,22 +209,26 @@ final class MeshRefinement {
     return new Level(fine, x, errors, between, worst, rounding);
   }
 
-  private StepPropagator.Polynomial polynomial(MeshEquations equations, int k, double[][] x) {
+  private Optional<StepPropagator.Polynomial> polynomial(
+      MeshEquations equations, int k, double[][] x) {
     double[] start = new double[n];
     for (int i = 0; i < n; i++) {
       start[i] = x[i][0] * scale[i];
     }
-    return equations.step(k).from(start, true);
+    return equations.step(k).map(step -> step.from(start, true));
   }
 
   /** Splits the steps where the polynomials leave out too much. */
   private BoundaryMesh refined(MeshEquations coarse, double[][][] x) {
     BoundaryMesh mesh = coarse.mesh();
-    int steps = mesh.steps();
+    int steps = mesh.links();
     double target = 0.2 * relative * Math.pow(2, tableau.stages()) / 3;
     double[] wanted = new double[steps];
     for (int k = 0; k < steps; k++) {
-      StepPropagator.Polynomial polynomial = polynomial(coarse, k, x[k]);
+      if (mesh.isJump(k)) {
+        continue;
+      }
+      StepPropagator.Polynomial polynomial = polynomial(coarse, k, x[k]).orElseThrow();
       double worst = 0;
       for (int i = 0; i < n; i++) {
         double size =
@@ -262,7 +271,7 @@ final class MeshRefinement {
     double[][] values = new double[nodes][n];
     double[][] errors = new double[nodes][n];
     double[][] between = new double[nodes - 1][n];
-    StepPropagator.Polynomial[] polynomials = new StepPropagator.Polynomial[nodes - 1];
+    List<Optional<StepPropagator.Polynomial>> polynomials = new ArrayList<>();
     for (int k = 0; k < nodes; k++) {
       for (int i = 0; i < n; i++) {
         values[k][i] = level.x()[k][i][0] * scale[i];
@@ -272,7 +281,7 @@ final class MeshRefinement {
         }
       }
       if (k + 1 < nodes) {
-        polynomials[k] = polynomial(level.equations(), k, level.x()[k]);
+        polynomials.add(polynomial(level.equations(), k, level.x()[k]));
       }
     }
     String method = "Gauss collocation, order " + tableau.order() + ", global";

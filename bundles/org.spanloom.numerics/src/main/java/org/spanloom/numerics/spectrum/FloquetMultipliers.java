@@ -89,19 +89,30 @@ public record FloquetMultipliers(List<Multiplier> multipliers, double period, in
       if (system.dimension() == 0) {
         return new Outcome.Solved<>(new FloquetMultipliers(List.of(), period, 1));
       }
-      int pieces = pieces(system, start, period);
+      double from = seam(system, start, period);
+      int pieces = pieces(system, from, period);
       List<ProductSpectrum.Value> rough =
-          values(system, start, period, pieces, accuracy, progress, watch);
+          values(system, from, period, pieces, accuracy, progress, watch);
       Accuracy tighter = accuracy.withRelative(accuracy.relative() / TIGHTER);
       int more = pieces + Math.max(1, pieces / 2);
       List<ProductSpectrum.Value> fine =
-          values(system, start, period, more, tighter, progress, watch);
+          values(system, from, period, more, tighter, progress, watch);
       return new Outcome.Solved<>(new FloquetMultipliers(compared(rough, fine), period, more));
     } catch (Cancelled cancelled) {
       return new Outcome.Cancelled<>();
     } catch (Hopeless hopeless) {
       return hopeless.outcome();
     }
+  }
+
+  /**
+   * Returns the time from which to follow one period. A jump that repeats with the period stands at
+   * both ends of it or, by a rounding error, at neither; so the seam lies apart from jumps where
+   * the range allows.
+   */
+  private static double seam(LinearSystem system, double start, double period) {
+    double moved = start + 0.0137 * period;
+    return system.jumps().isEmpty() || moved + period > system.range().end() ? start : moved;
   }
 
   private static int pieces(LinearSystem system, double start, double period) {
@@ -154,6 +165,7 @@ public record FloquetMultipliers(List<Multiplier> multipliers, double period, in
                 throw new Hopeless(u.reason(), u.time(), u.detail());
           };
       DMatrixRMaj factor = new DMatrixRMaj(n, n);
+      // A jump between two pieces belongs to the later one, which starts with it.
       solution.value(to, Side.BEFORE, factor.data);
       factors.add(factor);
       watch.ask();
