@@ -51,8 +51,6 @@ public sealed interface Outcome<T> {
     TOO_MUCH_WORK,
     /** A jump that cannot be undone lies between the values given and those asked for. */
     JUMP_SINGULAR,
-    /** A method that does not cross jumps was asked to. */
-    JUMP_INSIDE,
     /** The range asked for is not bounded or not inside the system's range. */
     RANGE
   }

@@ -32,9 +32,6 @@ public final class Refusals {
           case JUMP_SINGULAR ->
               "a jump takes place that cannot be undone, and the values are given behind it; give"
                   + " them before it";
-          case JUMP_INSIDE ->
-              "a jump takes place, and boundary conditions are not solved across jumps in this"
-                  + " version; give initial values instead";
           case RANGE -> "the range asked for is not inside the interval of the system";
         };
     return place + what + (unsolved.detail().isEmpty() ? "" : " (" + unsolved.detail() + ")") + ".";

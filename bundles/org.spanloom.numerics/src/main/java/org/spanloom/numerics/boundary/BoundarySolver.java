@@ -7,7 +7,6 @@ package org.spanloom.numerics.boundary;
 
 import java.util.List;
 import org.spanloom.numerics.Accuracy;
-import org.spanloom.numerics.Jump;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Outcome.Reason;
@@ -93,11 +92,6 @@ public final class BoundarySolver {
           Reason.RANGE,
           range.start(),
           "the system is defined from " + system.range().start() + " to " + system.range().end());
-    }
-    for (Jump jump : system.jumps()) {
-      if (range.contains(jump.time())) {
-        throw new Hopeless(Reason.JUMP_INSIDE, jump.time(), "");
-      }
     }
     for (BoundaryCondition condition : conditions) {
       double sum = condition.value();
