@@ -64,7 +64,8 @@ final class SolveJob extends Job {
             choice.until(),
             new Sampling.Curve(EVEN_STEPS, MOST_TIMES),
             new LinkedHashMap<>(),
-            OptionalDouble.empty());
+            OptionalDouble.empty(),
+            Optional.empty());
     SolveAnswer answer;
     try {
       answer = TrajectorySolve.solve(request, new MonitorProgress(monitor, () -> false));

@@ -311,7 +311,8 @@ class JumpCheckTests {
             OptionalDouble.empty(),
             sampling,
             parameters,
-            OptionalDouble.empty()),
+            OptionalDouble.empty(),
+            Optional.empty()),
         Progress.NONE);
   }
 

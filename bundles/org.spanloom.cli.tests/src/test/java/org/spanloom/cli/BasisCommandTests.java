@@ -40,6 +40,14 @@ class BasisCommandTests {
   }
 
   @Test
+  void takesTheMethodAskedFor() {
+    CommandRun run =
+        CommandRun.of("basis", Models.drain(folder), "--at", "2", "--method", "gauss10");
+    assertEquals(0, run.code(), run.err());
+    assertTrue(run.err().contains("method: Gauss collocation, order 10"), run.err());
+  }
+
+  @Test
   void takesTheDeclaredVectors() {
     CommandRun run =
         CommandRun.of(

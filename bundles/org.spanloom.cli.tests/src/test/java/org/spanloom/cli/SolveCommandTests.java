@@ -143,6 +143,61 @@ class SolveCommandTests {
   }
 
   @Test
+  void takesTheMethodAskedFor() {
+    Path file =
+        CommandRun.model(
+            folder,
+            "mast.span",
+            """
+            system Mast over t [s] from 0 to 4 {
+              state x [m] = 0.1
+              state x' [m/s] = 0
+              x'' = -(9 + sin(t/1 [s]))/1 [s2]*x - 0.1 [Hz]*x'
+            }
+            """);
+    double[] reached = new double[3];
+    String[] methods = {"magnus6", "radau9", "gauss14"};
+    String[] labels = {
+      "Magnus integrator, order 6", "Radau IIA collocation, order 9", "Gauss collocation, order 14"
+    };
+    for (int k = 0; k < 3; k++) {
+      CommandRun run = CommandRun.of("solve", file, "--at", "4", "--method", methods[k]);
+      assertEquals(0, run.code(), run.err());
+      assertTrue(run.err().contains("method: " + labels[k] + ";"), run.err());
+      reached[k] = new PrintedResult(run).last("x");
+    }
+    assertEquals(reached[0], reached[1], 1e-6);
+    assertEquals(reached[0], reached[2], 1e-6);
+  }
+
+  @Test
+  void aMethodThatDoesNotApplyIsRefused() {
+    CommandRun unknown = CommandRun.of("solve", Models.drain(folder), "--method", "radau7");
+    assertEquals(2, unknown.code());
+    assertTrue(
+        unknown
+            .err()
+            .contains(
+                "there is no method 'radau7'; choose one of: exponential, magnus4, magnus6,"
+                    + " magnus8,"),
+        unknown.err());
+    Path file =
+        CommandRun.model(
+            folder,
+            "leak.span",
+            """
+            system Leak over t from 0 to 4 {
+              state x = 1
+              x' = -(1 + t)*x
+            }
+            """);
+    CommandRun run = CommandRun.of("solve", file, "--method", "exponential");
+    assertEquals(1, run.code(), run.err());
+    assertTrue(
+        run.err().contains("the method asked for does not apply; leave the method out"), run.err());
+  }
+
+  @Test
   void writesAFileAndNothingElse() throws Exception {
     Path target = folder.resolve("out.csv");
     CommandRun run = CommandRun.of("solve", Models.drain(folder), "--at", "0", "--output", target);

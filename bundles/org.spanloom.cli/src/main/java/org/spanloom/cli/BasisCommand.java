@@ -40,6 +40,7 @@ final class BasisCommand {
             "which basis; needed if several are declared; the principal one at the start of the"
                 + " interval if none is"));
     spec.addOption(Options.required("--at", "T,T,...", "the times to list, in this order"));
+    spec.addOption(MethodOption.spec());
     spec.addOption(
         Options.one("--output", "FILE", "write the list to FILE instead of standard output"));
     spec.usageMessage()
@@ -64,7 +65,8 @@ final class BasisCommand {
             values.one("--basis"),
             times,
             new LinkedHashMap<>(),
-            ProjectSettings.required(path));
+            ProjectSettings.required(path),
+            values.one(MethodOption.NAME));
     BasisTable table;
     try (TerminalProgress progress = new TerminalProgress(streams, "solving " + file)) {
       table =

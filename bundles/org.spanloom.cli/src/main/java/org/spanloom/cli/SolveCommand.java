@@ -47,6 +47,7 @@ final class SolveCommand {
             "--accuracy",
             "R",
             "relative error to aim at, for example 1e-9, instead of the model's"));
+    spec.addOption(MethodOption.spec());
     spec.addOption(
         Options.one("--output", "FILE", "write the list to FILE instead of standard output"));
     spec.usageMessage()
@@ -76,7 +77,8 @@ final class SolveCommand {
             until,
             sampling,
             parameters,
-            accuracy);
+            accuracy,
+            values.one(MethodOption.NAME));
     SolutionTable table;
     try (TerminalProgress progress = new TerminalProgress(streams, "solving " + file)) {
       table =

@@ -52,6 +52,8 @@ public sealed interface Outcome<T> {
     /** A jump that cannot be undone lies between the values given and those asked for. */
     JUMP_SINGULAR,
     /** The range asked for is not bounded or not inside the system's range. */
-    RANGE
+    RANGE,
+    /** The method asked for does not apply to the system. */
+    METHOD
   }
 }

@@ -5,6 +5,7 @@
  */
 package org.spanloom.analysis.basis;
 
+import java.util.Optional;
 import org.spanloom.analysis.coefficients.CompiledSystem;
 import org.spanloom.language.model.Basis;
 import org.spanloom.language.model.SystemModel;
@@ -13,6 +14,7 @@ import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Progress;
 import org.spanloom.numerics.TimeRange;
+import org.spanloom.numerics.solution.MethodChoice;
 import org.spanloom.numerics.solution.Solution;
 import org.spanloom.numerics.solution.SolutionSolver;
 
@@ -85,8 +87,9 @@ record BasisColumns(
       LinearSystem linear,
       TimeRange range,
       double accuracy,
+      Optional<MethodChoice> method,
       Progress progress) {
     return SolutionSolver.homogeneous(
-        linear, startTime, start, range, system.accuracy(accuracy), progress);
+        linear, startTime, start, range, system.accuracy(accuracy), method, progress);
   }
 }

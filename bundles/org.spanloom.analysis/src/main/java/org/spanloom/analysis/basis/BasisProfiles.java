@@ -204,6 +204,7 @@ public final class BasisProfiles {
             part.linear(),
             part.range(),
             solutions.settings().basisAccuracy(),
+            Optional.empty(),
             solutions.progress());
     return switch (outcome) {
       case Outcome.Solved<Solution> s ->

@@ -23,6 +23,8 @@ import org.spanloom.language.model.Model;
  * @param times times to list it at, in the order given
  * @param parameters values that replace those of parameters, by name, in their declared units
  * @param settings thresholds of the project
+ * @param method name of the method, one of {@link org.spanloom.analysis.solve.MethodNames#all()};
+ *     chosen by the system if empty
  */
 public record BasisRequest(
     Model model,
@@ -30,7 +32,8 @@ public record BasisRequest(
     Optional<String> basis,
     List<Double> times,
     SequencedMap<String, Double> parameters,
-    Settings settings) {
+    Settings settings,
+    Optional<String> method) {
 
   /** Copies the collections. */
   public BasisRequest {

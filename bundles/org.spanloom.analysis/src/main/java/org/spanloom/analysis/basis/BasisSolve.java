@@ -11,6 +11,7 @@ import java.util.List;
 import java.util.Optional;
 import org.spanloom.analysis.coefficients.CompiledSystem;
 import org.spanloom.analysis.solve.Choice;
+import org.spanloom.analysis.solve.MethodNames;
 import org.spanloom.analysis.solve.Refusals;
 import org.spanloom.language.model.Basis;
 import org.spanloom.language.model.StateComponent;
@@ -73,6 +74,13 @@ public final class BasisSolve {
           columns(request, system, BasisColumns.of(system, b), times, progress);
       case Basis.Given b -> columns(request, system, BasisColumns.of(system, b), times, progress);
       case Basis.ClosedForm b -> {
+        if (request.method().isPresent()) {
+          yield new BasisAnswer.Refused(
+              true,
+              "basis "
+                  + b.name()
+                  + " is given in closed form and needs no method; leave the method out.");
+        }
         Solution candidate = new ClosedFormCandidate(system, b, hull(times, times.getFirst()));
         yield table(system, b.name(), candidate, times, progress);
       }
@@ -96,13 +104,15 @@ public final class BasisSolve {
       CompiledSystem system,
       BasisColumns basis,
       List<Double> times,
-      Progress progress) {
+      Progress progress)
+      throws Choice.RefusedException {
     Outcome<Solution> outcome =
         basis.solve(
             system,
             system.linear(),
             hull(times, basis.startTime()),
             Math.min(request.settings().basisAccuracy(), system.model().accuracy()),
+            MethodNames.read(request.method()),
             progress);
     return switch (outcome) {
       case Outcome.Solved<Solution> s -> table(system, basis.name(), s.value(), times, progress);

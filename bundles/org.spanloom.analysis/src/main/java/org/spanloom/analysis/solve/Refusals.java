@@ -33,6 +33,9 @@ public final class Refusals {
               "a jump takes place that cannot be undone, and the values are given behind it; give"
                   + " them before it";
           case RANGE -> "the range asked for is not inside the interval of the system";
+          case METHOD ->
+              "the method asked for does not apply; leave the method out and it is chosen by the"
+                  + " system";
         };
     return place + what + (unsolved.detail().isEmpty() ? "" : " (" + unsolved.detail() + ")") + ".";
   }

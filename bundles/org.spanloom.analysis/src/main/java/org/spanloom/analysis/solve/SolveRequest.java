@@ -23,6 +23,7 @@ import org.spanloom.language.model.Model;
  * @param sampling at which times
  * @param parameters values that replace those of parameters, by name, in their declared units
  * @param accuracy relative error asked for; the system's own if empty
+ * @param method name of the method, one of {@link MethodNames#all()}; chosen by the system if empty
  */
 public record SolveRequest(
     Model model,
@@ -32,7 +33,8 @@ public record SolveRequest(
     OptionalDouble until,
     Sampling sampling,
     SequencedMap<String, Double> parameters,
-    OptionalDouble accuracy) {
+    OptionalDouble accuracy,
+    Optional<String> method) {
 
   /** Copies the map. */
   public SolveRequest {
@@ -49,6 +51,7 @@ public record SolveRequest(
         OptionalDouble.empty(),
         sampling,
         new LinkedHashMap<>(),
-        OptionalDouble.empty());
+        OptionalDouble.empty(),
+        Optional.empty());
   }
 }

@@ -16,6 +16,7 @@ import org.spanloom.language.model.TimeInterval;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Progress;
 import org.spanloom.numerics.TimeRange;
+import org.spanloom.numerics.solution.MethodChoice;
 import org.spanloom.numerics.solution.Solution;
 import org.spanloom.numerics.solution.SolutionSolver;
 
@@ -44,6 +45,7 @@ public final class TrajectorySolve {
     CompiledSystem system = Choice.system(request.model(), request.system(), request.parameters());
     InitialValues initial = initial(system, request.initial());
     double accuracy = Choice.accuracy(request.accuracy(), system);
+    Optional<MethodChoice> method = MethodNames.read(request.method());
     double t0 = system.time(initial.time());
     double[] times = times(request, system, t0);
     Listing.checkSize(
@@ -57,6 +59,7 @@ public final class TrajectorySolve {
             system.values(initial),
             new TimeRange(first, last),
             system.accuracy(accuracy),
+            method,
             progress);
     return switch (outcome) {
       case Outcome.Solved<Solution> s ->

@@ -5,12 +5,13 @@
  */
 package org.spanloom.numerics.collocation;
 
-import java.util.Arrays;
 import java.util.Optional;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome.Reason;
 import org.spanloom.numerics.TimeRange;
 import org.spanloom.numerics.internal.algebra.Rows;
+import org.spanloom.numerics.internal.step.ErrorWeights;
+import org.spanloom.numerics.internal.step.RoundingSigns;
 import org.spanloom.numerics.internal.work.Hopeless;
 import org.spanloom.numerics.internal.work.Watch;
 
@@ -238,19 +239,5 @@ final class CollocationIntegrator {
     double speed = here.norm(balance);
     double step = speed * left > 1 ? 1 / speed : left;
     return Math.max(step, 64 * Math.ulp(Math.max(Math.abs(t), Math.abs(stop))));
-  }
-
-  /** Returns the times to stop at from t0 to the end: breakpoints in between, then the end. */
-  static double[] stops(LinearSystem system, double t0, double end) {
-    double low = Math.min(t0, end);
-    double high = Math.max(t0, end);
-    double[] inside =
-        Arrays.stream(system.breakpoints()).filter(t -> t > low && t < high).toArray();
-    double[] stops = new double[inside.length + 1];
-    for (int k = 0; k < inside.length; k++) {
-      stops[k] = end > t0 ? inside[k] : inside[inside.length - 1 - k];
-    }
-    stops[inside.length] = end;
-    return stops;
   }
 }

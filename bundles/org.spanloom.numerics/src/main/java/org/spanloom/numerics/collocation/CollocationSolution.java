@@ -12,6 +12,7 @@ import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Side;
 import org.spanloom.numerics.TimeRange;
 import org.spanloom.numerics.internal.algebra.Rows;
+import org.spanloom.numerics.internal.step.ErrorWeights;
 import org.spanloom.numerics.solution.Solution;
 
 /**

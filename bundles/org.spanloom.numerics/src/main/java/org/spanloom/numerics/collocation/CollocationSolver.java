@@ -11,6 +11,8 @@ import org.spanloom.numerics.Outcome.Reason;
 import org.spanloom.numerics.TimeRange;
 import org.spanloom.numerics.collocation.CollocationIntegrator.TooLoose;
 import org.spanloom.numerics.internal.algebra.Rows;
+import org.spanloom.numerics.internal.step.ErrorWeights;
+import org.spanloom.numerics.internal.step.Stops;
 import org.spanloom.numerics.internal.work.Hopeless;
 import org.spanloom.numerics.internal.work.Watch;
 import org.spanloom.numerics.solution.InitialValues;
@@ -78,7 +80,7 @@ public final class CollocationSolver {
       nodes.add(t0, x0, new double[system.dimension()][m]);
       return nodes;
     }
-    double[] stops = CollocationIntegrator.stops(system, t0, end);
+    double[] stops = Stops.between(system, t0, end);
     // Damped errors do not add up from step to step, others do.
     double first = tableau.endsAtPoint() ? 0.25 : 0.1;
     double local = Math.max(first * weights.relative(), SMALLEST_LOCAL);

@@ -6,6 +6,8 @@
 package org.spanloom.numerics.collocation;
 
 import org.spanloom.numerics.internal.algebra.Rows;
+import org.spanloom.numerics.internal.step.ErrorWeights;
+import org.spanloom.numerics.internal.step.RoundingSigns;
 
 /**
  * One step done as a whole and again in two halves, with the error of the halves.

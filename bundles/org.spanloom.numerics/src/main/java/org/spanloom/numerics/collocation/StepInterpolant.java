@@ -9,6 +9,7 @@ import java.util.ArrayList;
 import java.util.List;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.internal.algebra.Rows;
+import org.spanloom.numerics.internal.step.ErrorWeights;
 import org.spanloom.numerics.internal.work.Watch;
 
 /**

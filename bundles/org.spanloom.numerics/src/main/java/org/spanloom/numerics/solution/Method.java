@@ -9,6 +9,8 @@ package org.spanloom.numerics.solution;
 public enum Method {
   /** Constant coefficients: the exponential of the matrix, to about the unit roundoff. */
   MATRIX_EXPONENTIAL,
+  /** Magnus integrators: smooth coefficients, oscillatory systems or small ones. */
+  MAGNUS,
   /** Collocation at Radau points: varying coefficients with fast decaying directions. */
   RADAU_COLLOCATION,
   /** Collocation at Gauss points: varying coefficients, oscillatory or slow. */

@@ -22,6 +22,8 @@ import org.spanloom.numerics.internal.algebra.Rows;
 import org.spanloom.numerics.internal.work.Cancelled;
 import org.spanloom.numerics.internal.work.Hopeless;
 import org.spanloom.numerics.internal.work.Watch;
+import org.spanloom.numerics.magnus.MagnusOrder;
+import org.spanloom.numerics.magnus.MagnusSolver;
 
 /** Computes solutions; chooses the method by the system. */
 public final class SolutionSolver {
@@ -47,9 +49,21 @@ public final class SolutionSolver {
       TimeRange span,
       Accuracy accuracy,
       Progress progress) {
+    return homogeneous(system, t0, x0, span, accuracy, Optional.empty(), progress);
+  }
+
+  /** Solves the homogeneous system as above, by a method if one is given. */
+  public static Outcome<Solution> homogeneous(
+      LinearSystem system,
+      double t0,
+      double[] x0,
+      TimeRange span,
+      Accuracy accuracy,
+      Optional<MethodChoice> method,
+      Progress progress) {
     int n = system.dimension();
     int m = n == 0 ? 0 : x0.length / n;
-    return solve(new InitialValues(system, false, t0, x0, m, span, accuracy), progress);
+    return solve(new InitialValues(system, false, t0, x0, m, span, accuracy), method, progress);
   }
 
   /**
@@ -71,17 +85,30 @@ public final class SolutionSolver {
       TimeRange span,
       Accuracy accuracy,
       Progress progress) {
-    return solve(new InitialValues(system, true, t0, x0, 1, span, accuracy), progress);
+    return trajectory(system, t0, x0, span, accuracy, Optional.empty(), progress);
   }
 
-  private static Outcome<Solution> solve(InitialValues values, Progress progress) {
+  /** Solves for a trajectory as above, by a method if one is given. */
+  public static Outcome<Solution> trajectory(
+      LinearSystem system,
+      double t0,
+      double[] x0,
+      TimeRange span,
+      Accuracy accuracy,
+      Optional<MethodChoice> method,
+      Progress progress) {
+    return solve(new InitialValues(system, true, t0, x0, 1, span, accuracy), method, progress);
+  }
+
+  private static Outcome<Solution> solve(
+      InitialValues values, Optional<MethodChoice> method, Progress progress) {
     try {
       requireSolvable(values);
       Watch watch = new Watch(progress);
       Solution solution =
           JumpSolver.isNeededFor(values)
-              ? JumpSolver.solve(values, betweenJumps(values, watch), watch)
-              : bySystem(values, watch);
+              ? JumpSolver.solve(values, betweenJumps(values, method, watch), watch)
+              : bySystem(values, method, watch);
       progress.worked(1);
       return new Outcome.Solved<>(solution);
     } catch (Cancelled cancelled) {
@@ -119,7 +146,8 @@ public final class SolutionSolver {
   }
 
   /** Returns the method for the pieces; with constant coefficients all share their propagators. */
-  private static JumpSolver.PieceMethod betweenJumps(InitialValues values, Watch watch) {
+  private static JumpSolver.PieceMethod betweenJumps(
+      InitialValues values, Optional<MethodChoice> method, Watch watch) {
     LinearSystem smooth = JumpSelection.without(values.system());
     int n = smooth.dimension();
     double earlier = JumpSolver.longestPiece(values, values.span().start());
@@ -134,32 +162,62 @@ public final class SolutionSolver {
             smooth, values.forced(), t0, new double[n], 1, longest, values.accuracy());
     if (n > 0
         && longest.length() > 0
-        && MethodChoice.of(still, watch).method() == Method.MATRIX_EXPONENTIAL) {
+        && method.orElseGet(() -> MethodChoice.of(still, watch)).method()
+            == Method.MATRIX_EXPONENTIAL
+        && MethodChoice.fitsExponential(still)) {
       ExponentialSolution shared = exponential(still, watch);
       return (start, x0, span, forced, accuracy) ->
           shared.restarted(start, x0, span, forced, watch);
     }
     return (start, x0, span, forced, accuracy) ->
         bySystem(
-            new InitialValues(smooth, forced, start, x0, values.columns(), span, accuracy), watch);
+            new InitialValues(smooth, forced, start, x0, values.columns(), span, accuracy),
+            method,
+            watch);
   }
 
-  private static Solution bySystem(InitialValues values, Watch watch) {
+  private static Solution bySystem(
+      InitialValues values, Optional<MethodChoice> method, Watch watch) {
     int n = values.system().dimension();
     int m = values.columns();
     if (n == 0 || m == 0 || values.span().length() == 0) {
       return new ConstantSolution(n, m, values.t0(), values.span(), values.x0());
     }
     watch.ask();
+    if (method.isPresent()) {
+      return by(method.get(), values, watch);
+    }
     MethodChoice choice = MethodChoice.of(values, watch);
+    try {
+      return by(choice, values, watch);
+    } catch (Hopeless hopeless) {
+      if (choice.method() != Method.MAGNUS || hopeless.reason() != Reason.TOO_MUCH_WORK) {
+        throw hopeless;
+      }
+      // What made so many steps necessary may be less to a method that damps.
+      return by(new MethodChoice(Method.RADAU_COLLOCATION, 9), values, watch);
+    }
+  }
+
+  private static Solution by(MethodChoice choice, InitialValues values, Watch watch) {
     return switch (choice.method()) {
-      case MATRIX_EXPONENTIAL -> exponential(values, watch);
+      case MATRIX_EXPONENTIAL -> {
+        if (!MethodChoice.fitsExponential(values)) {
+          throw new Hopeless(
+              Reason.METHOD,
+              values.t0(),
+              "the exponential of a matrix needs coefficients that do not change with time, and"
+                  + " memory for their powers");
+        }
+        yield exponential(values, watch);
+      }
+      case MAGNUS -> MagnusSolver.solve(values, MagnusOrder.of(choice.order()), watch);
       case RADAU_COLLOCATION ->
           CollocationSolver.solve(
-              values, CollocationTableau.of(Family.RADAU_IIA, choice.stages()), watch);
+              values, CollocationTableau.of(Family.RADAU_IIA, (choice.order() + 1) / 2), watch);
       case GAUSS_COLLOCATION ->
           CollocationSolver.solve(
-              values, CollocationTableau.of(Family.GAUSS, choice.stages()), watch);
+              values, CollocationTableau.of(Family.GAUSS, choice.order() / 2), watch);
     };
   }
 

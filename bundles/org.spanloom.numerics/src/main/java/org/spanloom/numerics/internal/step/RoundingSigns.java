@@ -3,18 +3,18 @@
  *
  * SPDX-License-Identifier: EPL-2.0
  */
-package org.spanloom.numerics.collocation;
+package org.spanloom.numerics.internal.step;
 
 /**
  * Signs as rounding errors have them, without pattern, yet the same in every run (xorshift
  * generator; Marsaglia 2003, J. Stat. Softw. 8).
  */
-final class RoundingSigns {
+public final class RoundingSigns {
 
   private long state = 0x9E3779B97F4A7C15L;
 
   /** Returns -1 or 1. */
-  double next() {
+  public double next() {
     state ^= state << 13;
     state ^= state >>> 7;
     state ^= state << 17;
