@@ -82,6 +82,7 @@ public enum Icon {
       case PARAMETER -> CONSTANT;
       case LET -> FUNCTION;
       case MATRIX -> MATRIX;
+      case PART, IMPORT -> SYSTEM;
       case STATE -> STATE;
       case OUTPUT -> OUTPUT;
       case EQUATION, JUMP -> EQUATION;

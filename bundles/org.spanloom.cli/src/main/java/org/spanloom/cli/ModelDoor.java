@@ -7,6 +7,7 @@ package org.spanloom.cli;
 
 import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
+import org.spanloom.analysis.files.DiskFiles;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.ModelReader;
 
@@ -35,6 +36,6 @@ final class ModelDoor {
    * @throws CommandFailure if the file cannot be read
    */
   static Model open(Path file) throws CommandFailure {
-    return ModelReader.read(ModelFile.read(file));
+    return ModelReader.read(ModelFile.read(file), DiskFiles.of(file), () -> false);
   }
 }

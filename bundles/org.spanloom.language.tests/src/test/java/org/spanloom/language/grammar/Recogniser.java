@@ -37,6 +37,7 @@ final class Recogniser {
   private static final Map<String, Set<TokenKind>> SIGNS =
       Map.of(
           "name", Set.of(TokenKind.NAME, TokenKind.CONTEXT_WORD),
+          "dotted name", Set.of(TokenKind.NAME, TokenKind.CONTEXT_WORD),
           "number", Set.of(TokenKind.NUMBER),
           "unit", Set.of(TokenKind.UNIT),
           "primes", Set.of(TokenKind.PRIMES),
@@ -56,10 +57,27 @@ final class Recogniser {
     this.text = text;
     this.names = names(grammar);
     for (StatementLine line : StatementLines.of(text)) {
-      tokens.addAll(line.tokens());
+      line.tokens().forEach(this::add);
       if (line.end().span().length() > 0) {
         tokens.add(line.end());
       }
+    }
+  }
+
+  /** Takes a token; a name and the point and the name behind it are one sign. */
+  private void add(Token token) {
+    int last = tokens.size() - 1;
+    boolean joins =
+        last > 0
+            && token.kind().isName()
+            && tokens.get(last).kind() == TokenKind.DOT
+            && tokens.get(last - 1).kind().isName();
+    if (joins) {
+      tokens.removeLast();
+      Token name = tokens.removeLast();
+      tokens.add(new Token(TokenKind.NAME, name.start(), token.end()));
+    } else {
+      tokens.add(token);
     }
   }
 

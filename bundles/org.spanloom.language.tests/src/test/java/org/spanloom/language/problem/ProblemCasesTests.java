@@ -19,6 +19,7 @@ import java.util.stream.Stream;
 import org.junit.jupiter.api.DynamicTest;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.TestFactory;
+import org.spanloom.language.model.Model;
 import org.spanloom.language.model.ModelReader;
 import org.spanloom.language.text.Position;
 import org.spanloom.language.text.SourceText;
@@ -36,12 +37,21 @@ class ProblemCasesTests {
 
   private static final List<String> FILES =
       List.of(
-          "text", "system", "names", "units", "linear", "transfers", "inputs", "jumps", "matrices");
+          "text",
+          "system",
+          "names",
+          "units",
+          "linear",
+          "transfers",
+          "inputs",
+          "jumps",
+          "matrices",
+          "parts");
 
   private record Case(String file, String title, String input, String expected) {
 
     String text() {
-      boolean whole = file.equals("system") || input.contains("system ");
+      boolean whole = file.equals("system") || file.equals("parts") || input.contains("system ");
       return whole ? input : HEADER + input + "\n}";
     }
   }
@@ -73,12 +83,12 @@ class ProblemCasesTests {
                 ProblemKind.FILE_TOO_LARGE,
                 ProblemKind.FILE_UNREADABLE,
                 ProblemKind.MATRIX_TOO_LARGE,
+                ProblemKind.IMPORT_TOO_DEEP,
+                ProblemKind.PARTS_TOO_MANY,
                 ProblemKind.NESTING_TOO_DEEP,
                 ProblemKind.COEFFICIENT_UNDECIDED));
     for (Case c : cases()) {
-      ModelReader.read(new SourceText("case.span", c.text()))
-          .problems()
-          .forEach(p -> missing.remove(p.kind()));
+      read(new SourceText("case.span", c.text())).problems().forEach(p -> missing.remove(p.kind()));
     }
     assertEquals(Set.of(), missing);
   }
@@ -87,11 +97,11 @@ class ProblemCasesTests {
   void everyFixMakesItsProblemGo() {
     for (Case c : cases()) {
       SourceText source = new SourceText("case.span", c.text());
-      for (Problem problem : ModelReader.read(source).problems()) {
+      for (Problem problem : read(source).problems()) {
         for (Fix fix : problem.fixes()) {
           String fixed = apply(source.content(), fix);
           boolean still =
-              ModelReader.read(new SourceText("fixed.span", fixed)).problems().stream()
+              read(new SourceText("case.span", fixed)).problems().stream()
                   .anyMatch(p ->
                       p.kind() == problem.kind()
                           && p.span().start() == problem.span().start()
@@ -130,6 +140,10 @@ class ProblemCasesTests {
     return cases;
   }
 
+  private static Model read(SourceText source) {
+    return ModelReader.read(source, new CaseProject(), () -> false);
+  }
+
   private static String read(String file) {
     try (InputStream stream =
         ProblemCasesTests.class.getResourceAsStream(
@@ -143,7 +157,7 @@ class ProblemCasesTests {
   private static String problems(String text) {
     SourceText source = new SourceText("case.span", text);
     StringBuilder list = new StringBuilder();
-    for (Problem problem : ModelReader.read(source).problems()) {
+    for (Problem problem : read(source).problems()) {
       Position place = source.position(problem.span().start());
       list.append(place.line()).append(':').append(place.column()).append(' ');
       list.append(problem.kind().id()).append(' ').append(problem.message());

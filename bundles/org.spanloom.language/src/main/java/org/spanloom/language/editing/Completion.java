@@ -27,6 +27,7 @@ import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.PartStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
@@ -289,6 +290,7 @@ public final class Completion {
               name + matrix.argument().map(a -> "(" + a.text() + ")").orElse(""),
               "matrix" + unit(matrix.unit().map(u -> u.code())));
       case OutputStatement output -> offer(name, "output" + unit(output.unit().map(u -> u.code())));
+      case PartStatement part -> offer(name, "part, a copy of " + part.system().text());
       case SystemStatement system -> {}
       case InitialValuesStatement values -> {}
       case BoundaryStatement boundary -> {}

@@ -45,6 +45,7 @@ import org.spanloom.language.syntax.Statement.BoundaryStatement;
 import org.spanloom.language.syntax.Statement.Change;
 import org.spanloom.language.syntax.Statement.Condition;
 import org.spanloom.language.syntax.Statement.EquationStatement;
+import org.spanloom.language.syntax.Statement.ImportStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.JumpStatement;
@@ -55,6 +56,7 @@ import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.PartStatement;
 import org.spanloom.language.syntax.Statement.RequireStatement;
 import org.spanloom.language.syntax.Statement.Row;
 import org.spanloom.language.syntax.Statement.Setting;
@@ -139,6 +141,8 @@ final class NameBinder {
         end(transfer.to());
         expression(transfer.flow());
       }
+      case PartStatement part -> part(part);
+      case ImportStatement read -> {}
       case JumpStatement jump -> jump(jump);
       case InitialValuesStatement values -> initialValues(values);
       case BoundaryStatement boundary -> boundary(boundary);
@@ -147,6 +151,25 @@ final class NameBinder {
       case AccuracyStatement accuracy -> expression(accuracy.value());
       case LaterStatement later -> words(later.span());
       case UnreadStatement unread -> words(unread.span());
+    }
+  }
+
+  private void part(PartStatement part) {
+    if (!part.allRead()) {
+      words(part.span());
+      return;
+    }
+    declared(Room.VALUES, part.name(), 0);
+    used(Room.SYSTEMS, part.system());
+    Optional<NameScope> inner = scopes.named(part.system().text());
+    for (Setting binding : part.bindings()) {
+      NameExpression target = binding.target();
+      inner
+          .flatMap(names -> names.own(Room.VALUES, target.name().text()))
+          .ifPresent(symbol ->
+              found.add(
+                  new Occurrence(symbol, Role.WRITTEN, target.name().span(), target.primes())));
+      expression(binding.value());
     }
   }
 
@@ -304,7 +327,32 @@ final class NameBinder {
   }
 
   private void name(NameExpression name, Role role) {
+    if (name.name().text().indexOf('.') > 0) {
+      dotted(name, role);
+      return;
+    }
     add(Room.VALUES, name.name().text(), role, name.name().span(), name.primes());
+  }
+
+  /** Takes each word of a name such as {@code lower.T}: all but the last one are parts. */
+  private void dotted(NameExpression name, Role role) {
+    String[] words = name.name().text().split("\\.");
+    int start = name.name().span().start();
+    Optional<NameScope> names = Optional.of(scope);
+    for (int i = 0; i < words.length && names.isPresent(); i++) {
+      String word = words[i];
+      Optional<Symbol> symbol =
+          i == 0 ? names.get().find(Room.VALUES, word) : names.get().own(Room.VALUES, word);
+      boolean last = i == words.length - 1;
+      Span span = new Span(start, start + word.length());
+      int primes = last ? name.primes() : 0;
+      boolean derivative = inEquation && primes > 0;
+      symbol.ifPresent(s ->
+          (derivative ? derivatives : found)
+              .add(new Occurrence(s, last ? role : Role.READ, span, primes)));
+      names = symbol.flatMap(scopes::inPart);
+      start = span.end() + 1;
+    }
   }
 
   private void used(Room room, Name name) {
@@ -352,6 +400,7 @@ final class NameBinder {
       case "under", "values", "boundary" -> Room.CONDITIONS;
       case "basis" -> Room.BASES;
       case "system" -> Room.SYSTEMS;
+      case "=" -> word(text, tokens, i - 3).equals("part") ? Room.SYSTEMS : Room.VALUES;
       case "(" -> word(text, tokens, i - 2).equals("condition") ? Room.BASES : Room.VALUES;
       default -> Room.VALUES;
     };

@@ -6,6 +6,7 @@
 package org.spanloom.language.editing;
 
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.IdentityHashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -24,6 +25,7 @@ import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.PartStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
@@ -37,15 +39,32 @@ import org.spanloom.language.text.Span;
 final class NameScopes {
 
   private final NameScope file;
+  private final Map<Symbol, String> partTypes = new IdentityHashMap<>();
+  private final Map<String, SystemStatement> types = new HashMap<>();
   private final Map<SystemStatement, NameScope> systems = new IdentityHashMap<>();
 
   NameScopes(SyntaxFile file) {
+    for (Statement statement : file.statements()) {
+      if (statement instanceof SystemStatement system) {
+        types.putIfAbsent(system.name().text(), system);
+      }
+    }
     this.file = new NameScope(Optional.empty(), symbols(file.statements(), Optional.empty()));
   }
 
   /** Returns the names of the file. */
   NameScope file() {
     return file;
+  }
+
+  /** Returns the names of a system of this file; empty where there is none of that name. */
+  Optional<NameScope> named(String system) {
+    return Optional.ofNullable(types.get(system)).map(this::of);
+  }
+
+  /** Returns the names in a part; empty where it is the copy of a system of another file. */
+  Optional<NameScope> inPart(Symbol part) {
+    return Optional.ofNullable(partTypes.get(part)).flatMap(this::named);
   }
 
   /** Returns the names of a system. */
@@ -66,7 +85,7 @@ final class NameScopes {
                                 new Declared(o.name().span(), 0, o.span(), ""))))));
   }
 
-  private static List<Symbol> symbols(List<Statement> body, Optional<Symbol> first) {
+  private List<Symbol> symbols(List<Statement> body, Optional<Symbol> first) {
     Map<String, Symbol> symbols = new LinkedHashMap<>();
     first.ifPresent(s -> add(symbols, s));
     for (Statement statement : body) {
@@ -81,6 +100,14 @@ final class NameScopes {
                 .ifPresent(n -> add(symbols, symbol(SymbolKind.UNREAD, n, later.span())));
         case Declaration declaration -> add(symbols, symbol(declaration));
         default -> {}
+      }
+    }
+    for (Statement statement : body) {
+      if (statement instanceof PartStatement part) {
+        Symbol symbol = symbols.get(SymbolKind.PART.room() + " " + part.name().text());
+        if (symbol != null && symbol.kind() == SymbolKind.PART) {
+          partTypes.putIfAbsent(symbol, part.system().text());
+        }
       }
     }
     return new ArrayList<>(symbols.values());
@@ -126,6 +153,7 @@ final class NameScopes {
       case InputStatement s -> SymbolKind.INPUT;
       case StateStatement s -> SymbolKind.STATE;
       case MatrixStatement s -> SymbolKind.MATRIX;
+      case PartStatement s -> SymbolKind.PART;
       case OutputStatement s -> SymbolKind.OUTPUT;
       case InitialValuesStatement s -> SymbolKind.INITIAL_VALUES;
       case BoundaryStatement s -> SymbolKind.BOUNDARY;
@@ -142,6 +170,7 @@ final class NameScopes {
       case "input" -> SymbolKind.INPUT;
       case "state" -> SymbolKind.STATE;
       case "matrix" -> SymbolKind.MATRIX;
+      case "part" -> SymbolKind.PART;
       case "output" -> SymbolKind.OUTPUT;
       case "initial" -> SymbolKind.INITIAL_VALUES;
       case "boundary" -> SymbolKind.BOUNDARY;

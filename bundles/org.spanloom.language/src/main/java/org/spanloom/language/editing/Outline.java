@@ -15,6 +15,7 @@ import org.spanloom.language.syntax.Statement.AccuracyStatement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
 import org.spanloom.language.syntax.Statement.BoundaryStatement;
 import org.spanloom.language.syntax.Statement.EquationStatement;
+import org.spanloom.language.syntax.Statement.ImportStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.JumpStatement;
@@ -23,6 +24,7 @@ import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.PartStatement;
 import org.spanloom.language.syntax.Statement.RequireStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
@@ -96,6 +98,8 @@ public final class Outline {
               matrix.span(),
               matrix.name().span(),
               List.of());
+      case PartStatement part -> leaf(Kind.PART, part.name(), part.system().text(), part.span());
+      case ImportStatement read -> text(Kind.IMPORT, read.span(), read.span());
       case OutputStatement output ->
           leaf(Kind.OUTPUT, output.name(), unit(output.unit()), output.span());
       case EquationStatement equation -> text(Kind.EQUATION, equation.span(), equation.span());

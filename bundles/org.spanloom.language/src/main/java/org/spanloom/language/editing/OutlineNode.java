@@ -38,6 +38,10 @@ public record OutlineNode(
     STATE,
     /** A matrix. */
     MATRIX,
+    /** A part. */
+    PART,
+    /** An import. */
+    IMPORT,
     /** An output. */
     OUTPUT,
     /** An equation or a transfer. */

@@ -27,6 +27,8 @@ public enum SymbolKind {
   BOUNDARY("set of boundary conditions", Room.CONDITIONS),
   /** A matrix. */
   MATRIX("matrix", Room.VALUES),
+  /** A part. */
+  PART("part", Room.VALUES),
   /** A candidate basis. */
   BASIS("basis", Room.BASES),
   /** A declaration that could not be read. */

@@ -5,6 +5,7 @@
  */
 package org.spanloom.language.formatting;
 
+import java.util.List;
 import org.spanloom.language.syntax.MatrixSource.MatrixExpression;
 import org.spanloom.language.syntax.MatrixSource.MatrixFile;
 import org.spanloom.language.syntax.MatrixSource.MatrixRow;
@@ -16,6 +17,7 @@ import org.spanloom.language.syntax.Statement.BoundaryStatement;
 import org.spanloom.language.syntax.Statement.Change;
 import org.spanloom.language.syntax.Statement.Condition;
 import org.spanloom.language.syntax.Statement.EquationStatement;
+import org.spanloom.language.syntax.Statement.ImportStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.JumpStatement;
@@ -25,6 +27,7 @@ import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.PartStatement;
 import org.spanloom.language.syntax.Statement.RequireStatement;
 import org.spanloom.language.syntax.Statement.Row;
 import org.spanloom.language.syntax.Statement.Setting;
@@ -88,6 +91,8 @@ public final class Printer {
         state.scale().ifPresent(e -> out.words("scale").expression(e));
       }
       case MatrixStatement matrix -> matrix(matrix);
+      case ImportStatement read -> out.words("import", "\"" + read.path().text() + "\"");
+      case PartStatement part -> part(part);
       case OutputStatement output -> {
         documentation(output.documentation());
         out.words("output", output.name().text()).unit(output.unit()).words("=");
@@ -177,14 +182,28 @@ public final class Printer {
     out.words("}");
   }
 
+  private void part(PartStatement part) {
+    documentation(part.documentation());
+    out.words("part", part.name().text(), "=", part.system().text());
+    if (!part.bindings().isEmpty()) {
+      out.words("{").endLine();
+      settings(part.bindings());
+      out.words("}");
+    }
+  }
+
+  private void settings(List<Setting> settings) {
+    for (Setting setting : settings) {
+      out.expression(setting.target()).words("=").expression(setting.value()).endLine();
+    }
+  }
+
   private void initialValues(InitialValuesStatement values) {
     documentation(values.documentation());
     out.words("initial", "values", values.name().text());
     values.time().ifPresent(e -> out.words("at").expression(e));
     out.words("{").endLine();
-    for (Setting setting : values.settings()) {
-      out.expression(setting.target()).words("=").expression(setting.value()).endLine();
-    }
+    settings(values.settings());
     out.words("}");
   }
 

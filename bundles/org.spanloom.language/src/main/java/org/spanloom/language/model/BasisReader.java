@@ -108,7 +108,7 @@ final class BasisReader {
   private List<Span> spans(BasisStatement statement) {
     Span[] spans = new Span[components.dimension()];
     for (Row row : statement.rows()) {
-      components.find(row.target()).ifPresent(c -> spans[c.index()] = row.span());
+      components.find(system.root(), row.target()).ifPresent(c -> spans[c.index()] = row.span());
     }
     return Arrays.asList(spans);
   }
@@ -120,7 +120,7 @@ final class BasisReader {
     boolean sound = statement.allRead();
     int columns = statement.rows().isEmpty() ? 0 : statement.rows().getFirst().values().size();
     for (Row row : statement.rows()) {
-      Optional<StateComponent> component = components.find(row.target());
+      Optional<StateComponent> component = components.find(system.root(), row.target());
       if (component.isEmpty()) {
         sound = false;
       } else if (!given.add(component.get().index())) {

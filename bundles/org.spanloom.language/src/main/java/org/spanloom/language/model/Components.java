@@ -117,6 +117,19 @@ final class Components {
     return frames.get(index);
   }
 
+  /** Returns the initial value that the declaration of a component or its part gives. */
+  Optional<Binding> initial(int index) {
+    StateComponent component = list.get(index);
+    Frame frame = frames.get(index);
+    return frame
+        .binding(component.label().substring(component.label().lastIndexOf('.') + 1))
+        .or(() ->
+            declarations
+                .get(index)
+                .flatMap(StateStatement::initial)
+                .map(value -> new Binding(frame, value)));
+  }
+
   /** Returns the labels of some components for a message. */
   String labels(List<Integer> some) {
     List<String> labels =
@@ -131,15 +144,15 @@ final class Components {
   }
 
   /** Returns the component of a name with primes; reports it if there is none. */
-  Optional<StateComponent> find(NameExpression name) {
-    Integer index = indices.get(name.label());
+  Optional<StateComponent> find(Frame frame, NameExpression name) {
+    Integer index = indices.get(frame.label(name.label()));
     if (index != null) {
       return Optional.of(list.get(index));
     }
-    Optional<Meaning> meaning = system.scope().own(name.name().text());
+    Optional<Meaning> meaning = frame.scope().own(name.name().text());
     boolean broken =
         meaning.isPresent() && meaning.get() instanceof Meaning.BrokenMeaning
-            || system.derivative(name.label()).isPresent();
+            || system.derivative(frame.label(name.label())).isPresent();
     if (!broken) {
       Optional<String> nearest =
           system.problems().maySuggest()

@@ -8,10 +8,12 @@ package org.spanloom.language.model;
 import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.HashSet;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import org.spanloom.language.model.Meaning.BoundInputMeaning;
 import org.spanloom.language.model.Meaning.BrokenMeaning;
 import org.spanloom.language.model.Meaning.LetMeaning;
 import org.spanloom.language.model.Meaning.MatrixMeaning;
@@ -45,7 +47,7 @@ final class Declarations {
   private final UnitResolver units;
   private final Resolver resolver;
   private final MatrixReader matrixReader;
-  private final List<Declaration> collected = new ArrayList<>();
+  private final Map<String, DeclaredItem> items = new LinkedHashMap<>();
   private final Map<String, Name> taken = new HashMap<>();
   private final Set<String> duplicates = new HashSet<>();
   private final InTextOrder<Parameter> parameters = new InTextOrder<>();
@@ -91,10 +93,42 @@ final class Declarations {
     return outputs.values();
   }
 
+  Frame frame() {
+    return frame;
+  }
+
+  /** Returns what a part gives a declaration of the system that it is a copy of. */
+  Optional<Binding> binding(Declaration declaration) {
+    return declaration instanceof ParameterStatement || declaration instanceof InputStatement
+        ? frame.binding(declaration.name().text())
+        : Optional.empty();
+  }
+
+  /** Returns the names of everything collected. */
+  Set<String> names() {
+    return items.keySet();
+  }
+
+  /**
+   * Returns the declaration that a name of this frame stands for, through parts if it is dotted.
+   */
+  Optional<DeclaredItem> item(String name) {
+    DeclaredItem own = items.get(name);
+    if (own != null) {
+      return Optional.of(own);
+    }
+    int dot = name.indexOf('.');
+    return dot < 0
+        ? Optional.empty()
+        : scope
+            .part(name.substring(0, dot))
+            .flatMap(part -> part.declarations().item(name.substring(dot + 1)));
+  }
+
   /** Takes a declaration to be read later; reports a name that is not free. */
   void collect(Declaration declaration) {
     if (takesName(declaration.name())) {
-      collected.add(declaration);
+      items.put(declaration.name().text(), new DeclaredItem(this, declaration));
     }
   }
 
@@ -133,34 +167,38 @@ final class Declarations {
     return !builtIn && earlier == null;
   }
 
-  /** Gives everything collected a meaning. */
-  void read() {
+  /** Gives everything that some frames collected a meaning. */
+  static void read(List<Frame> frames) {
+    List<DeclaredItem> all = new ArrayList<>();
+    frames.forEach(frame -> all.addAll(frame.declarations().items.values()));
     Set<String> cyclic = new HashSet<>();
-    List<Declaration> ordered = DeclarationOrder.of(collected, cycle -> reportCycle(cycle, cyclic));
-    for (Declaration declaration : ordered) {
-      Name name = declaration.name();
+    for (DeclaredItem item : DeclarationOrder.of(all, cycle -> reportCycle(cycle, cyclic))) {
+      Name name = item.declaration().name();
+      Declarations owner = item.owner();
       Optional<? extends Meaning> meaning =
-          cyclic.contains(name.text())
-              ? Optional.empty()
-              : switch (declaration) {
-                case ParameterStatement parameter -> parameter(parameter);
-                case LetStatement let -> let(let);
-                case InputStatement input -> input(input);
-                case MatrixStatement matrix -> matrix(matrix);
-                case OutputStatement output -> output(output);
-                default -> Optional.empty();
-              };
-      scope.define(
-          name.text(), meaning.isPresent() ? meaning.get() : new BrokenMeaning(name.span()));
+          cyclic.contains(item.label()) ? Optional.empty() : owner.meaning(item.declaration());
+      owner.scope.define(
+          name.text(), meaning.isPresent() ? meaning.get() : owner.frame.broken(name));
     }
   }
 
-  private void reportCycle(List<Declaration> cycle, Set<String> cyclic) {
+  private Optional<? extends Meaning> meaning(Declaration declaration) {
+    return switch (declaration) {
+      case ParameterStatement parameter -> parameter(parameter);
+      case LetStatement let -> let(let);
+      case InputStatement input -> input(input);
+      case MatrixStatement matrix -> matrix(matrix);
+      case OutputStatement output -> output(output);
+      default -> Optional.empty();
+    };
+  }
+
+  private static void reportCycle(List<DeclaredItem> cycle, Set<String> cyclic) {
     List<String> names = new ArrayList<>();
     boolean fresh = false;
-    for (Declaration declaration : cycle) {
-      names.add(declaration.name().text());
-      fresh |= cyclic.add(declaration.name().text());
+    for (DeclaredItem item : cycle) {
+      names.add(item.label());
+      fresh |= cyclic.add(item.label());
     }
     if (fresh) {
       names.add(names.getFirst());
@@ -168,14 +206,18 @@ final class Declarations {
           names.size() <= 8
               ? String.join(" -> ", names)
               : String.join(" -> ", names.subList(0, 7)) + " -> ...";
-      problems.report(
-          ProblemKind.NAME_CYCLE,
-          cycle.getFirst().name().span(),
-          names.size() == 2
-              ? "\"" + names.getFirst() + "\" is declared by itself: give it a value."
-              : "These need each other in a circle, so that none has a value: "
-                  + circle
-                  + ". Break the circle.");
+      DeclaredItem first = cycle.getFirst();
+      first
+          .owner()
+          .problems
+          .report(
+              ProblemKind.NAME_CYCLE,
+              first.declaration().name().span(),
+              names.size() == 2
+                  ? "\"" + names.getFirst() + "\" is declared by itself: give it a value."
+                  : "These need each other in a circle, so that none has a value: "
+                      + circle
+                      + ". Break the circle.");
     }
   }
 
@@ -185,14 +227,16 @@ final class Declarations {
     if (unit.isEmpty()) {
       return Optional.empty();
     }
-    String what = "the parameter " + name;
-    Optional<Quantity> value = resolver.given(statement.value(), unit.get(), what, Place.PARAMETER);
-    if (value.isEmpty() || !isFinite(value.get(), statement)) {
+    String what = "the parameter " + frame.label(name);
+    Binding text = frame.binding(name).orElse(new Binding(frame, statement.value()));
+    Optional<Quantity> value =
+        text.frame().resolver().given(text.value(), unit.get(), what, Place.PARAMETER);
+    if (value.isEmpty() || !isFinite(value.get(), name, text)) {
       return Optional.empty();
     }
     Term term = value.get().constant().term();
     Optional<Term> halfWidth = Optional.empty();
-    if (statement.uncertainty().isPresent()) {
+    if (statement.uncertainty().isPresent() && frame.binding(name).isEmpty()) {
       halfWidth = halfWidth(statement.uncertainty().get(), term, unit.get(), what);
       if (halfWidth.isEmpty()) {
         return Optional.empty();
@@ -211,16 +255,18 @@ final class Declarations {
     return Optional.of(new ParameterMeaning(parameter, value.get().depth() + 1));
   }
 
-  private boolean isFinite(Quantity value, ParameterStatement statement) {
+  private static boolean isFinite(Quantity value, String name, Binding text) {
     Term term = value.constant().term();
     boolean finite = term instanceof Term.Constant || Double.isFinite(TermEvaluator.constant(term));
     if (!finite) {
-      problems.report(
-          ProblemKind.NUMBER_OUT_OF_RANGE,
-          statement.value().span(),
-          "The value of the parameter "
-              + statement.name().text()
-              + " is not a finite number: check divisors, roots and logarithms.");
+      text.frame()
+          .problems()
+          .report(
+              ProblemKind.NUMBER_OUT_OF_RANGE,
+              text.value().span(),
+              "The value of the parameter "
+                  + name
+                  + " is not a finite number: check divisors, roots and logarithms.");
     }
     return finite;
   }
@@ -298,19 +344,30 @@ final class Declarations {
     return Optional.of(new LetMeaning(let, value.get().depth() + 1));
   }
 
-  private Optional<LetMeaning> input(InputStatement statement) {
+  private Optional<? extends Meaning> input(InputStatement statement) {
     Optional<UnitOfMeasure> unit = units.declared(statement.unit());
     if (!isTime(statement.argument(), "an input") || unit.isEmpty()) {
       return Optional.empty();
     }
-    String what = "the input " + statement.name().text();
-    Optional<Quantity> value = resolver.given(statement.value(), unit.get(), what, Place.INPUT);
+    String name = statement.name().text();
+    String what = "the input " + frame.label(name);
+    Optional<Binding> bound = frame.binding(name);
+    Binding text = bound.orElse(new Binding(frame, statement.value()));
+    Place place = bound.isPresent() ? Place.BOUND_INPUT : Place.INPUT;
+    Optional<Quantity> value = text.frame().resolver().given(text.value(), unit.get(), what, place);
     if (value.isEmpty()) {
       return Optional.empty();
     }
+    if (value.get().holdsStates()) {
+      return Optional.of(
+          new BoundInputMeaning(
+              placed(value.get(), text, unit.get().dimension()),
+              unit.get(),
+              frame.placed(statement.name().span())));
+    }
     Let input =
         new Let(
-            frame.label(statement.name().text()),
+            frame.label(name),
             unit.get(),
             value.get().constant().term(),
             true,
@@ -320,6 +377,13 @@ final class Declarations {
             frame.placed(statement.name().span()));
     lets.put(statement.span().start(), input);
     return Optional.of(new LetMeaning(input, value.get().depth() + 1));
+  }
+
+  /** Returns a quantity whose parts know the place of the expression it comes from. */
+  private static Quantity placed(Quantity value, Binding text, Dimension dimension) {
+    QuantitySum placed = new QuantitySum();
+    placed.add(false, value, text.frame().placed(text.value().span()));
+    return placed.total(dimension);
   }
 
   private Optional<MatrixMeaning> matrix(MatrixStatement statement) {
@@ -332,7 +396,7 @@ final class Declarations {
             .filter(unit -> hasNoOffset(statement, unit))
             .flatMap(unit -> matrixReader.read(statement, unit));
     if (meaning.isEmpty()) {
-      DeclarationOrder.uses(statement).forEach(n -> inBrokenMatrices.add(n.name().text()));
+      DeclaredItem.names(statement).forEach(n -> inBrokenMatrices.add(n.name().text()));
     }
     meaning.ifPresent(m -> matrices.put(statement.span().start(), m.matrix()));
     return meaning;
@@ -401,9 +465,7 @@ final class Declarations {
     Quantity found = value.get();
     // A lone 0 given to a declared unit has its dimension, not that of a pure number.
     Dimension dimension = statement.unit().isPresent() ? unit.get().dimension() : found.dimension();
-    QuantitySum placed = new QuantitySum();
-    placed.add(false, found, frame.placed(statement.value().span()));
-    Quantity output = placed.total(dimension);
+    Quantity output = placed(found, new Binding(frame, statement.value()), dimension);
     UnitOfMeasure shown = statement.unit().isPresent() ? unit.get() : coherent(dimension);
     outputs.put(statement.span().start(), new ReadOutput(statement, output, shown));
     return Optional.of(new OutputMeaning(output, shown, frame.placed(statement.name().span())));

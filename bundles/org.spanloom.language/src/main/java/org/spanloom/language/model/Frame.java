@@ -6,9 +6,11 @@
 package org.spanloom.language.model;
 
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import org.spanloom.language.model.Meaning.BrokenMeaning;
 import org.spanloom.language.model.Meaning.StateMeaning;
+import org.spanloom.language.syntax.Name;
 import org.spanloom.language.syntax.QuotedText;
 import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.text.SourceText;
@@ -34,6 +36,8 @@ final class Frame {
   private final UnitResolver units;
   private final Resolver resolver;
   private final Declarations declarations;
+  private final Optional<Span> place;
+  private final Map<String, Binding> bindings;
   private UnitOfMeasure timeUnit = UnitOfMeasure.ONE;
 
   /**
@@ -46,11 +50,30 @@ final class Frame {
    * @param prefix what stands before the names declared in it when they are named from without
    */
   Frame(SourceFile file, List<Statement> body, Scope scope, Problems problems, String prefix) {
+    this(file, body, scope, problems, prefix, Optional.empty(), Map.of());
+  }
+
+  /**
+   * Opens a frame whose statements stand somewhere else than where they take effect.
+   *
+   * @param place what stands for every place of the frame in the text of the file being read
+   * @param bindings what parameters, inputs and initial values have other values than declared
+   */
+  Frame(
+      SourceFile file,
+      List<Statement> body,
+      Scope scope,
+      Problems problems,
+      String prefix,
+      Optional<Span> place,
+      Map<String, Binding> bindings) {
     this.file = file;
     this.body = body;
     this.scope = scope;
     this.problems = problems;
     this.prefix = prefix;
+    this.place = place;
+    this.bindings = bindings;
     this.units = new UnitResolver(problems);
     this.resolver = new Resolver(this);
     this.declarations = new Declarations(this);
@@ -100,7 +123,21 @@ final class Frame {
    * text.
    */
   Span placed(Span own) {
-    return own;
+    return place.orElse(own);
+  }
+
+  /** Tells whether the statements stand in another place than the one they are shown at. */
+  boolean isElsewhere() {
+    return place.isPresent();
+  }
+
+  /** Returns what something declared in the frame is instead of what its declaration says. */
+  Optional<Binding> binding(String label) {
+    return Optional.ofNullable(bindings.get(label));
+  }
+
+  BrokenMeaning broken(Name name) {
+    return new BrokenMeaning(placed(name.span()));
   }
 
   /** Returns the characters of a place of the frame's own text. */

@@ -61,14 +61,13 @@ final class InitialValuesReader {
     Term[] values = new Term[components.dimension()];
     boolean sound = true;
     for (StateComponent component : components.list()) {
-      Optional<Expression> initial =
-          components.declaration(component.index()).flatMap(StateStatement::initial);
+      Optional<Binding> initial = components.initial(component.index());
       if (initial.isEmpty()) {
         missing.add(component.index());
         continue;
       }
       declarationsHaveValues = true;
-      Optional<Term> value = value(components.frame(component.index()), component, initial.get());
+      Optional<Term> value = value(initial.get().frame(), component, initial.get().value());
       value.ifPresent(v -> values[component.index()] = v);
       sound &= value.isPresent();
     }
@@ -96,6 +95,16 @@ final class InitialValuesReader {
 
   private void reportMissingDeclarations(List<Integer> missing) {
     StateComponent first = components.get(missing.getFirst());
+    if (components.frame(first.index()).isElsewhere()) {
+      problems.report(
+          ProblemKind.INITIAL_VALUE_MISSING,
+          first.declaration(),
+          "Other states have initial values, but "
+              + components.labels(missing)
+              + (missing.size() == 1 ? " has" : " have")
+              + " none: give one in the braces of the part, or where the state is declared.");
+      return;
+    }
     Optional<StateStatement> declaration = components.declaration(first.index());
     String code = first.unit().code();
     String unit = code.equals("1") ? "" : " [" + code + "]";
@@ -148,7 +157,7 @@ final class InitialValuesReader {
     Set<Integer> given = new HashSet<>();
     boolean sound = statement.allRead();
     for (Setting setting : statement.settings()) {
-      Optional<StateComponent> component = components.find(setting.target());
+      Optional<StateComponent> component = components.find(system.root(), setting.target());
       if (component.isEmpty()) {
         sound = false;
       } else if (!given.add(component.get().index())) {

@@ -101,7 +101,7 @@ final class JumpReader {
     Set<Integer> changed = new HashSet<>();
     boolean sound = statement.allRead();
     for (Change line : statement.changes()) {
-      Optional<StateComponent> component = components.find(line.target());
+      Optional<StateComponent> component = components.find(system.root(), line.target());
       if (component.isPresent() && !changed.add(component.get().index())) {
         invalid(
             line.target().span(),

@@ -83,6 +83,21 @@ sealed interface Meaning {
   /** An output. */
   record OutputMeaning(Quantity value, UnitOfMeasure unit, Span nameSpan) implements Meaning {}
 
+  /**
+   * An input of a part that is bound to something that holds states of the surrounding system.
+   *
+   * @param value what it is bound to
+   * @param unit its declared unit
+   */
+  record BoundInputMeaning(Quantity value, UnitOfMeasure unit, Span nameSpan) implements Meaning {}
+
+  /**
+   * A part.
+   *
+   * @param frame where its statements are read
+   */
+  record PartMeaning(Frame frame, Span nameSpan) implements Meaning {}
+
   /** Something whose declaration has a problem of its own; uses of it are not reported again. */
   record BrokenMeaning(Span nameSpan) implements Meaning {}
 
@@ -95,6 +110,8 @@ sealed interface Meaning {
       case StateMeaning m -> "a state";
       case MatrixMeaning m -> "a matrix";
       case OutputMeaning m -> "an output";
+      case BoundInputMeaning m -> "an input";
+      case PartMeaning m -> "a part";
       case BrokenMeaning m -> "a broken declaration";
     };
   }

@@ -8,11 +8,13 @@ package org.spanloom.language.model;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import org.spanloom.language.model.Meaning.BoundInputMeaning;
 import org.spanloom.language.model.Meaning.BrokenMeaning;
 import org.spanloom.language.model.Meaning.LetMeaning;
 import org.spanloom.language.model.Meaning.MatrixMeaning;
 import org.spanloom.language.model.Meaning.OutputMeaning;
 import org.spanloom.language.model.Meaning.ParameterMeaning;
+import org.spanloom.language.model.Meaning.PartMeaning;
 import org.spanloom.language.model.Meaning.StateMeaning;
 import org.spanloom.language.model.Meaning.TimeMeaning;
 import org.spanloom.language.problem.Fix;
@@ -43,7 +45,10 @@ final class NameResolver {
   boolean isStateOrOutput(NameExpression name) {
     return scope
         .own(name.name().text())
-        .filter(m -> m instanceof StateMeaning || m instanceof OutputMeaning)
+        .filter(m ->
+            m instanceof StateMeaning
+                || m instanceof OutputMeaning
+                || m instanceof BoundInputMeaning)
         .isPresent();
   }
 
@@ -65,6 +70,8 @@ final class NameResolver {
       case MatrixMeaning m when m.matrix().dependsOnTime() -> bareFunctionOfTime(name);
       case MatrixMeaning m -> matrices.value(m, name, place);
       case OutputMeaning m -> output(m, name, place);
+      case BoundInputMeaning m -> bareFunctionOfTime(name);
+      case PartMeaning m -> barePart(name, m);
       case BrokenMeaning m -> Optional.empty();
     };
   }
@@ -92,6 +99,9 @@ final class NameResolver {
           isRunningTime(call) ? state(m, callee, place) : sampledState(m, call, place);
       case OutputMeaning m ->
           isRunningTime(call) ? output(m, callee, place) : sampledOutput(m, call, place);
+      case BoundInputMeaning m ->
+          isFunctionOfTime(call, place) ? boundInput(m, callee, place) : Optional.empty();
+      case PartMeaning m -> barePart(callee, m);
       case BrokenMeaning m -> Optional.empty();
     };
   }
@@ -116,6 +126,9 @@ final class NameResolver {
 
   private void unknown(NameExpression name) {
     String word = name.name().text();
+    if (scope.isOpen()) {
+      return;
+    }
     Optional<String> nearest = problems.maySuggest() ? scope.nearest(word) : Optional.empty();
     nearest.ifPresent(scope::markUsed);
     problems.report(
@@ -126,7 +139,10 @@ final class NameResolver {
             + "\" is not declared: "
             + nearest
                 .map(n -> "did you mean " + n + "?")
-                .orElse("declare it as a parameter, a named expression or a state."),
+                .orElse(
+                    word.indexOf('.') < 0
+                        ? "declare it as a parameter, a named expression or a state."
+                        : "name a part and, behind the point, something that it declares."),
         nearest.stream()
             .map(n -> Fix.replace("Write " + n, name.name().span(), n))
             .toArray(Fix[]::new));
@@ -265,6 +281,32 @@ final class NameResolver {
 
   private static Dimension dimensionOfTime(Meaning meaning) {
     return meaning instanceof TimeMeaning time ? time.unit().dimension() : Dimension.NONE;
+  }
+
+  private Optional<Quantity> boundInput(BoundInputMeaning input, NameExpression name, Place place) {
+    if (!place.states()) {
+      problems.report(
+          ProblemKind.STATE_MISPLACED,
+          name.span(),
+          "The input \""
+              + name.label()
+              + "\" is bound to states here and cannot stand in "
+              + place.what()
+              + ": declare what uses it as an output, or bind the input to a function of time.");
+      return Optional.empty();
+    }
+    return Optional.of(input.value().inherited());
+  }
+
+  private Optional<Quantity> barePart(NameExpression name, PartMeaning part) {
+    String label = name.name().text();
+    String example =
+        part.frame().scope().firstState().map(state -> ", as in " + label + "." + state).orElse("");
+    problems.report(
+        ProblemKind.NAME_MISUSED,
+        name.span(),
+        "\"" + label + "\" is a part and has no value: name something in it" + example + ".");
+    return Optional.empty();
   }
 
   private Optional<Quantity> output(OutputMeaning output, NameExpression name, Place place) {

@@ -71,6 +71,8 @@ final class NamedValues {
           case Meaning.LetMeaning let -> Optional.of(let.let().unit());
           case Meaning.TimeMeaning time -> Optional.of(time.unit());
           case Meaning.MatrixMeaning matrix -> Optional.of(matrix.matrix().unit());
+          case Meaning.BoundInputMeaning input -> Optional.of(input.unit());
+          case Meaning.PartMeaning part -> Optional.empty();
           case Meaning.BrokenMeaning broken -> Optional.empty();
         });
   }

@@ -21,6 +21,7 @@ record Place(String what, boolean time, boolean states, boolean samples) {
   static final Place MATRIX = new Place("a matrix", false, true, false);
   static final Place MATRIX_OF_TIME = new Place("a matrix", true, true, false);
   static final Place INPUT = new Place("an input", true, false, false);
+  static final Place BOUND_INPUT = new Place("an input of a part", true, true, false);
   static final Place OUTPUT = new Place("an output", true, true, false);
   static final Place EQUATION = new Place("an equation", true, true, false);
   static final Place TRANSFER = new Place("a transfer", true, true, false);

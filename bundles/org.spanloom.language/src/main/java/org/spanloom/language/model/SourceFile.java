@@ -5,6 +5,7 @@
  */
 package org.spanloom.language.model;
 
+import java.util.Map;
 import org.spanloom.language.files.FileKey;
 import org.spanloom.language.text.SourceText;
 
@@ -13,6 +14,8 @@ import org.spanloom.language.text.SourceText;
  *
  * @param key which file of the project it is
  * @param text its text
+ * @param systems the systems that its statements can name, its own and those imported
  * @param files the other files of the project
  */
-record SourceFile(FileKey key, SourceText text, FileAccess files) {}
+record SourceFile(
+    FileKey key, SourceText text, Map<String, SystemType> systems, FileAccess files) {}

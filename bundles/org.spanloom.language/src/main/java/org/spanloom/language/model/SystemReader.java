@@ -7,12 +7,15 @@ package org.spanloom.language.model;
 
 import java.util.ArrayList;
 import java.util.HashSet;
+import java.util.IdentityHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import java.util.function.BooleanSupplier;
-import org.spanloom.language.model.Meaning.BrokenMeaning;
+import org.spanloom.language.model.Meaning.PartMeaning;
 import org.spanloom.language.model.Meaning.TimeMeaning;
+import org.spanloom.language.model.PartReader.PartProblems;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.syntax.Lexer;
 import org.spanloom.language.syntax.Name;
@@ -22,6 +25,7 @@ import org.spanloom.language.syntax.Statement.AccuracyStatement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
 import org.spanloom.language.syntax.Statement.BoundaryStatement;
 import org.spanloom.language.syntax.Statement.EquationStatement;
+import org.spanloom.language.syntax.Statement.ImportStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.JumpStatement;
@@ -30,6 +34,7 @@ import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.PartStatement;
 import org.spanloom.language.syntax.Statement.RequireStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
@@ -46,32 +51,41 @@ final class SystemReader {
   private static final double LARGEST_ACCURACY = 1;
 
   private final SystemStatement statement;
-  private final Frame file;
+  private final FileReading file;
+  private final Library library;
   private final Problems problems;
   private final BooleanSupplier cancelled;
   private final SystemScope system;
   private final List<Frame> frames = new ArrayList<>();
-  private final Set<String> unreadGoverned = new HashSet<>();
-  private final Set<String> unreadNames = new HashSet<>();
+  private final Map<Frame, Set<String>> unreadGoverned = new IdentityHashMap<>();
+  private final Map<Frame, Set<String>> unreadNames = new IdentityHashMap<>();
+  private final PartReader parts;
   private final boolean timeKnown;
   private boolean hasUnread;
   private double accuracy = SystemModel.DEFAULT_ACCURACY;
   private Span accuracySpan;
 
-  SystemReader(
-      SystemStatement statement, Frame file, Problems problems, BooleanSupplier cancelled) {
+  SystemReader(SystemStatement statement, FileReading file, Library library) {
     this.statement = statement;
     this.file = file;
-    this.problems = problems;
-    this.cancelled = cancelled;
-    Scope scope = new Scope(Optional.of(file.scope()));
-    Frame root = new Frame(file.file(), statement.body(), scope, problems, "");
+    this.library = library;
+    this.problems = file.found();
+    this.cancelled = library.cancelled();
+    this.parts = new PartReader(statement, library.budget());
+    Scope scope = new Scope(Optional.of(file.frame().scope()));
+    Frame root =
+        new Frame(
+            file.frame().file(), statement.body(), scope, problems, "", file.place(), Map.of());
     Optional<UnitOfMeasure> timeUnit = timeUnit(statement, root.units(), problems);
     this.timeKnown = timeUnit.isPresent();
     timeUnit.ifPresent(root::setTimeUnit);
     this.system = new SystemScope(root);
-    this.frames.add(root);
     this.accuracySpan = statement.name().span();
+  }
+
+  /** Returns the parts of the system with what is wrong in them. */
+  List<PartProblems> parts() {
+    return parts.opened();
   }
 
   /** Returns the unit of time, or empty where there is no sound one. */
@@ -92,8 +106,8 @@ final class SystemReader {
   }
 
   SystemModel read() {
-    frames.forEach(this::collect);
-    frames.forEach(frame -> frame.declarations().read());
+    collect(system.root(), List.of(statement));
+    Declarations.read(frames);
     Times times = new Times(system, statement.over(), timeKnown);
     EquationReader equations = new EquationReader(system);
     for (Frame frame : frames) {
@@ -105,7 +119,8 @@ final class SystemReader {
     }
     readTransfers(equations);
     if (hasUnread) {
-      equations.noteUnread(system.root(), unreadGoverned);
+      equations.noteUnread();
+      unreadGoverned.forEach(equations::noteUnread);
     }
     StateVector vector = equations.stateVector();
     LinearFormBuilder builder = new LinearFormBuilder(equations, vector);
@@ -147,13 +162,19 @@ final class SystemReader {
         requirements.read(require.clause());
       }
     }
-    checkDefinedness(times, form, outputs, initialValues.complete(), bases.bases());
-    unreadNames.forEach(system.scope()::markUsed);
+    if (file.place().isEmpty()) {
+      checkDefinedness(times, form, outputs, initialValues.complete(), bases.bases());
+    }
+    unreadNames.getOrDefault(system.root(), Set.of()).forEach(system.scope()::markUsed);
     system.root().declarations().reportUnused();
-    List<Parameter> parameters = new ArrayList<>(file.declarations().parameters());
-    List<Let> lets = new ArrayList<>(file.declarations().lets());
-    List<NamedMatrix> matrices = new ArrayList<>(file.declarations().matrices());
-    for (Frame frame : frames) {
+    List<Parameter> parameters = new ArrayList<>();
+    List<Let> lets = new ArrayList<>();
+    List<NamedMatrix> matrices = new ArrayList<>();
+    List<Frame> all = new ArrayList<>();
+    library.imported().forEach(imported -> all.add(imported.frame()));
+    all.add(file.frame());
+    all.addAll(frames);
+    for (Frame frame : all) {
       parameters.addAll(frame.declarations().parameters());
       lets.addAll(frame.declarations().lets());
       matrices.addAll(frame.declarations().matrices());
@@ -203,16 +224,16 @@ final class SystemReader {
     transfers.finish();
   }
 
-  /** Takes all names of a frame, so that the order of declarations does not matter. */
-  private void collect(Frame frame) {
-    Scope scope = frame.scope();
+  /**
+   * Takes all names of a frame and of the parts in it, so that the order of declarations does not
+   * matter.
+   *
+   * @param types the systems whose statements are being read, the innermost last
+   */
+  private void collect(Frame frame, List<SystemStatement> types) {
+    frames.add(frame);
+    collectTime(frame, types.getLast());
     Declarations declarations = frame.declarations();
-    Name time = statement.over().map(OverClause::name).orElse(new Name("t", statement.header()));
-    if (!timeKnown) {
-      scope.define(time.text(), new BrokenMeaning(time.span()));
-    } else if (declarations.takesName(time)) {
-      scope.define(time.text(), new TimeMeaning(frame.timeUnit(), time.span()));
-    }
     List<StateStatement> derivatives = new ArrayList<>();
     for (Statement s : frame.body()) {
       switch (s) {
@@ -227,12 +248,15 @@ final class SystemReader {
             system.declareState(frame, state);
           }
         }
+        case PartStatement part -> collect(frame, types, part);
         case UnreadStatement unread ->
             unread(
+                frame,
                 unread.span(),
                 unread.declares(),
                 unread.word().isEmpty() || unread.word().equals("transfer"));
-        case LaterStatement later -> unread(later.span(), later.declares(), true);
+        case LaterStatement later -> unread(frame, later.span(), later.declares(), true);
+        case ImportStatement read -> misplacedImport(frame, read);
         case SystemStatement inner -> {}
         case EquationStatement equation -> {}
         case TransferStatement transfer -> {}
@@ -247,25 +271,99 @@ final class SystemReader {
     derivatives.forEach(d -> system.declareDerivative(frame, d));
   }
 
+  private void collectTime(Frame frame, SystemStatement type) {
+    Name time = type.over().map(OverClause::name).orElse(new Name("t", type.header()));
+    boolean known = frame == system.root() ? timeKnown : knowsTime(frame, type);
+    if (!known) {
+      frame.scope().define(time.text(), frame.broken(time));
+    } else if (frame.declarations().takesName(time)) {
+      frame
+          .scope()
+          .define(time.text(), new TimeMeaning(frame.timeUnit(), frame.placed(time.span())));
+    }
+  }
+
+  /** Finds the unit of time of a part; inside of the system all times are one. */
+  private static boolean knowsTime(Frame part, SystemStatement type) {
+    Optional<UnitOfMeasure> unit = timeUnit(type, part.units(), part.problems());
+    unit.ifPresent(part::setTimeUnit);
+    return unit.isPresent();
+  }
+
+  private void collect(Frame frame, List<SystemStatement> types, PartStatement statement) {
+    if (!frame.declarations().takesName(statement.name())) {
+      return;
+    }
+    String name = statement.name().text();
+    Optional<PartReader.Part> part = parts.open(frame, types, statement);
+    if (part.isEmpty()) {
+      frame.scope().define(name, frame.broken(statement.name()));
+      noteUnread(frame);
+      return;
+    }
+    Frame inner = part.get().frame();
+    frame.scope().define(name, new PartMeaning(inner, frame.placed(statement.name().span())));
+    List<SystemStatement> deeper = new ArrayList<>(types);
+    deeper.add(part.get().type().statement());
+    collect(inner, deeper);
+    if (!statement.allRead()) {
+      noteUnread(frame);
+    }
+    checkTime(frame, inner, statement);
+  }
+
+  /** Notes that something of a frame is not known, so that nothing is reported for want of it. */
+  private void noteUnread(Frame frame) {
+    hasUnread = true;
+    unreadGoverned.computeIfAbsent(frame, f -> new HashSet<>());
+  }
+
+  private static void checkTime(Frame frame, Frame inner, PartStatement statement) {
+    boolean known = !frame.scope().timeName().isEmpty() && !inner.scope().timeName().isEmpty();
+    if (known && !frame.timeUnit().dimension().equals(inner.timeUnit().dimension())) {
+      frame
+          .problems()
+          .report(
+              ProblemKind.UNIT_MISMATCH,
+              statement.system().span(),
+              "The independent variable of "
+                  + statement.system().text()
+                  + " is "
+                  + Resolver.in(inner.timeUnit().dimension())
+                  + ", but that of this system is "
+                  + Resolver.in(frame.timeUnit().dimension())
+                  + ": a part shares it, so give both one dimension.");
+    }
+  }
+
+  private static void misplacedImport(Frame frame, ImportStatement statement) {
+    frame
+        .problems()
+        .report(
+            ProblemKind.STATEMENT_MISPLACED,
+            statement.span(),
+            "An import stands outside of systems: move this line to the beginning of the file.");
+  }
+
   /**
    * Notes what a statement that could not be read may declare, use or govern.
    *
    * @param mayGovern whether it may be the equation of a state named in it
    */
-  private void unread(Span span, Optional<Name> declares, boolean mayGovern) {
-    hasUnread = true;
+  private void unread(Frame frame, Span span, Optional<Name> declares, boolean mayGovern) {
+    noteUnread(frame);
     declares.ifPresent(name -> {
-      if (system.scope().own(name.text()).isEmpty()) {
-        system.scope().define(name.text(), new BrokenMeaning(name.span()));
+      if (frame.scope().own(name.text()).isEmpty()) {
+        frame.scope().define(name.text(), frame.broken(name));
       }
     });
-    String text = system.slice(span);
+    String text = frame.slice(span);
     for (Token token : Lexer.lex(text)) {
       if (token.kind().isName()) {
         String name = text.substring(token.start(), token.end());
-        unreadNames.add(name);
+        unreadNames.computeIfAbsent(frame, f -> new HashSet<>()).add(name);
         if (mayGovern) {
-          unreadGoverned.add(name);
+          unreadGoverned.get(frame).add(name);
         }
       }
     }

@@ -64,6 +64,18 @@ public enum ProblemKind {
   NAME_MISUSED("A name is used as something it is not."),
   /** A function with the wrong number of arguments. */
   ARGUMENT_COUNT("A function has too few or too many arguments."),
+  /** Files that import each other. */
+  IMPORT_CYCLE("Files import each other in a circle."),
+  /** An import behind too many others. */
+  IMPORT_TOO_DEEP("Files import each other in too long a chain."),
+  /** A file with errors of its own that another one imports. */
+  IMPORT_BROKEN("An imported file has errors."),
+  /** A system that would hold itself. */
+  PART_OF_ITSELF("A system would be a part of itself."),
+  /** More parts than the limit. */
+  PARTS_TOO_MANY("The parts of a file hold more than the limit."),
+  /** Something that a part cannot set. */
+  BINDING_INVALID("A part sets something that it cannot set."),
   /** A path that is none. */
   FILE_PATH_MALFORMED("The path of a file is not written by the rules."),
   /** A file that is not there. */

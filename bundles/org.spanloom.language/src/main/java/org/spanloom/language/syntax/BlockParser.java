@@ -17,6 +17,7 @@ import org.spanloom.language.syntax.Statement.Condition;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.JumpStatement;
 import org.spanloom.language.syntax.Statement.JumpTime;
+import org.spanloom.language.syntax.Statement.PartStatement;
 import org.spanloom.language.syntax.Statement.Setting;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.text.Span;
@@ -110,6 +111,32 @@ final class BlockParser {
         ? unread("boundary", named(name), block)
         : new BoundaryStatement(
             name, block.lines(), block.allRead(), line.documentation(), block.span());
+  }
+
+  /** {@code part = "part", name, "=", name, [ "{", { binding, ( ";" | line end ) }, "}" ] ;} */
+  Statement part(StatementLine line) {
+    StatementParser parser = new StatementParser(text, line);
+    PartStatement head = parser.part();
+    parser.cursor().problem().ifPresent(problems::add);
+    if (!line.opensBlock() && (line.closesBlock() || !acceptOpeningBrace())) {
+      return parser.cursor().failed() ? parser.unread() : head;
+    }
+    Block<Setting> block =
+        block(
+            line,
+            StatementParser::binding,
+            Setting::span,
+            "The part is not closed: write \"}\" behind its last line.");
+    return parser.cursor().failed()
+        ? unread("part", named(head.name()), block)
+        : new PartStatement(
+            head.name(),
+            head.system(),
+            block.lines(),
+            block.allRead(),
+            head.documentation(),
+            line.span(),
+            block.span());
   }
 
   private static Optional<Name> named(Name name) {

@@ -163,7 +163,8 @@ public final class Parser {
       case "basis" -> basis(line);
       case "matrix" -> matrix(line);
       case "row" -> strayRow(line);
-      case "import", "table", "for", "part" -> later(line, word);
+      case "part" -> blocks.part(line);
+      case "table", "for" -> later(line, word);
       default -> simple(line);
     };
   }

@@ -45,6 +45,32 @@ public sealed interface Statement {
     }
   }
 
+  /** {@code import "materials.span"}: brings what another file declares. */
+  record ImportStatement(QuotedText path, Span span) implements Statement {}
+
+  /**
+   * {@code part lower = Zone { g = 0.2 [kW/K]; T_side = upper.T }}: a system inside of this one.
+   *
+   * @param system the name of the system that it is a copy of
+   * @param bindings what its parameters, inputs and initial values are here
+   * @param allRead whether every line of the block could be read
+   * @param header the first line
+   */
+  record PartStatement(
+      Name name,
+      Name system,
+      List<Setting> bindings,
+      boolean allRead,
+      String documentation,
+      Span header,
+      Span span)
+      implements Declaration {
+    /** Copies the list. */
+    public PartStatement {
+      bindings = List.copyOf(bindings);
+    }
+  }
+
   /** {@code parameter g [kW/K] = 0.12 ± 5 %}. */
   record ParameterStatement(
       Name name,

@@ -17,11 +17,13 @@ import org.spanloom.language.syntax.Statement.AccuracyStatement;
 import org.spanloom.language.syntax.Statement.Change;
 import org.spanloom.language.syntax.Statement.Condition;
 import org.spanloom.language.syntax.Statement.EquationStatement;
+import org.spanloom.language.syntax.Statement.ImportStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.JumpTime;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.PartStatement;
 import org.spanloom.language.syntax.Statement.RequireStatement;
 import org.spanloom.language.syntax.Statement.Row;
 import org.spanloom.language.syntax.Statement.Setting;
@@ -61,8 +63,8 @@ final class StatementParser {
   }
 
   /**
-   * {@code simple statement = parameter | let | input | state | output | require | accuracy |
-   * transfer | equation ;} for any other word see {@link Parser}.
+   * {@code simple statement = import | parameter | let | input | state | output | require |
+   * accuracy | transfer | equation ;} for any other word see {@link Parser}.
    */
   Statement statement() {
     String word = firstWord();
@@ -76,6 +78,7 @@ final class StatementParser {
           case "require" -> require();
           case "accuracy" -> accuracy();
           case "transfer" -> transfer();
+          case "import" -> importOfFile();
           default -> equation();
         };
     expectEnd();
@@ -91,6 +94,7 @@ final class StatementParser {
             && !word.equals("row")
             && !word.equals("require")
             && !word.equals("transfer")
+            && !word.equals("import")
             && !word.equals("jump")
             && line.tokens().size() > place
             && line.tokens().get(place).kind().isName();
@@ -390,6 +394,52 @@ final class StatementParser {
     } while (cursor.accept(TokenKind.COMMA));
     expectEnd();
     return cursor.failed() ? Optional.empty() : Optional.of(new Row(target, values, line.span()));
+  }
+
+  /** {@code import = "import", text ;} */
+  private Statement importOfFile() {
+    cursor.take();
+    QuotedText path = quoted("The path of a file belongs here, as in import \"materials.span\"");
+    if (!cursor.failed() && !cursor.atEnd()) {
+      cursor.failHere(ProblemKind.WORD_UNEXPECTED, "The statement should end here");
+    }
+    return new ImportStatement(path, line.span());
+  }
+
+  /** {@code part = "part", name, "=", name, [ "{", ... "}" ] ;} before the opening brace. */
+  PartStatement part() {
+    cursor.take();
+    Name name = name("part");
+    equalsSign();
+    Name system = cursor.failed() ? name : name("system");
+    expectEnd();
+    return new PartStatement(
+        name, system, List.of(), true, line.documentation(), line.span(), line.span());
+  }
+
+  /** {@code binding = name, [ primes ], "=", expression ;} */
+  Optional<Setting> binding() {
+    NameExpression target = target("The name of a parameter, an input or a state of the part");
+    if (!cursor.failed() && cursor.is(TokenKind.OPEN_PARENTHESIS)) {
+      int open = cursor.peek().start();
+      while (!cursor.atEnd() && !cursor.is(TokenKind.EQUALS)) {
+        cursor.take();
+      }
+      Span arguments = cursor.from(open);
+      cursor.fail(
+          ProblemKind.WORD_UNEXPECTED,
+          arguments,
+          "An input is bound by its name alone, as in "
+              + target.label()
+              + " = upper.T: remove the parentheses.",
+          Fix.replace("Remove them", arguments, ""));
+    }
+    equalsSign();
+    Expression value = expressions.expression();
+    expectEnd();
+    return cursor.failed()
+        ? Optional.empty()
+        : Optional.of(new Setting(target, value, line.span()));
   }
 
   private NameExpression target(String expected) {
