@@ -71,6 +71,18 @@ enum Command {
       return new SpectrumCommand(values, streams).run();
     }
   },
+  /** Lists which state depends on which. */
+  STRUCTURE("structure", "list which state depends on which, and the blocks of A") {
+    @Override
+    void describe(CommandSpec spec) {
+      StructureCommand.describe(spec);
+    }
+
+    @Override
+    int run(Options.Values values, Streams streams) throws CommandFailure {
+      return new StructureCommand(values, streams).run();
+    }
+  },
   /** Lays out model files. */
   FORMAT("format", "give model files their canonical layout") {
     @Override

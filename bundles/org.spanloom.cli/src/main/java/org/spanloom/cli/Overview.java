@@ -29,7 +29,7 @@ final class Overview {
     text.append("Spanloom keeps linear dynamic models honest: x' = A(t) x + b(t), as text.\n\n");
     for (Command command : Command.values()) {
       text.append(
-          String.format(Locale.ROOT, "  spanloom %-6s %s%n", command.word(), command.purpose())
+          String.format(Locale.ROOT, "  spanloom %-9s %s%n", command.word(), command.purpose())
               .replace(System.lineSeparator(), "\n"));
     }
     text.append(
