@@ -67,7 +67,9 @@ final class ModelProposal
 
   @Override
   public String getAdditionalProposalInfo() {
-    return proposal.detail().isEmpty() ? null : proposal.detail();
+    String documentation = proposal.documentation();
+    String text = documentation.isEmpty() ? proposal.detail() : documentation;
+    return text.isEmpty() ? null : text;
   }
 
   @Override

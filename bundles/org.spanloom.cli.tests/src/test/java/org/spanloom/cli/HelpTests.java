@@ -31,6 +31,18 @@ class HelpTests {
                   "--set",
                   "--accuracy",
                   "--output"),
+          Command.BOUNDARY,
+              List.of(
+                  "FILE",
+                  "--system",
+                  "--boundary",
+                  "--points",
+                  "--at",
+                  "--set",
+                  "--accuracy",
+                  "--output"),
+          Command.SPECTRUM, List.of("FILE", "--system", "--at", "--output"),
+          Command.STRUCTURE, List.of("FILE", "--system", "--state", "--output"),
           Command.BASIS, List.of("FILE", "--system", "--basis", "--at", "--output"),
           Command.FORMAT, List.of("PATH...", "--check"));
 

@@ -181,6 +181,39 @@ class EditingTests {
   }
 
   @Test
+  void completionOffersWhatMayStandInAPlace() {
+    String before = MODEL.substring(0, MODEL.indexOf("  let broken"));
+    List<String> constants = complete(before + "  parameter z = |\n}");
+    assertTrue(constants.containsAll(List.of("k", "m", "twice", "gravity", "pi")));
+    assertFalse(constants.contains("x") || constants.contains("force"));
+    assertFalse(constants.contains("tide(t)") || constants.contains("t"));
+    List<String> ofTime = complete(before + "  let y(t) = |\n}");
+    assertTrue(ofTime.containsAll(List.of("k", "tide(t)", "t")));
+    assertFalse(ofTime.contains("x"));
+    assertTrue(complete(before + "  output y = |\n}").containsAll(List.of("x", "force", "t")));
+    List<String> initial = complete(before + "  initial values b { x = |}\n}");
+    assertTrue(initial.contains("k"));
+    assertFalse(initial.contains("x") || initial.contains("t"));
+  }
+
+  @Test
+  void completionOffersUnitsThatFitFirst() {
+    String before = MODEL.substring(0, MODEL.indexOf("  let broken"));
+    assertEquals("mm", complete(before + "  require x < 3 [|\n}").getFirst());
+    assertEquals("mm/s", complete(before + "  require x' < 3 [|\n}").getFirst());
+    assertEquals("mm/h2", complete(before + "  let y = x'' + 3 [|\n}").getFirst());
+    assertEquals("N/m", complete(before + "  let y = k + 3 [N|\n}").getFirst());
+  }
+
+  @Test
+  void completionShowsDocumentation() {
+    String text = "## Stiffness.\nparameter k = 2\nlet twice = k";
+    Completion.Proposal proposal = Completion.at(model(text), text.length()).getFirst();
+    assertEquals("k", proposal.text());
+    assertEquals("Stiffness.", proposal.documentation());
+  }
+
+  @Test
   void completionReplacesTheWordBegun() {
     String text = "system S over t from 0 to 1 { state x = 1; x' = -x\n  req\n}";
     Completion.Proposal proposal = Completion.at(model(text), text.indexOf("req") + 3).getFirst();

@@ -16,6 +16,7 @@ import org.spanloom.language.model.MatrixFunction;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.NamedConstant;
 import org.spanloom.language.syntax.Lexer;
+import org.spanloom.language.syntax.OverClause;
 import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
 import org.spanloom.language.syntax.Statement.BoundaryStatement;
@@ -33,6 +34,7 @@ import org.spanloom.language.syntax.Statement.SystemStatement;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.syntax.Token;
 import org.spanloom.language.syntax.TokenKind;
+import org.spanloom.language.syntax.UnitText;
 import org.spanloom.language.syntax.Words;
 import org.spanloom.language.text.Span;
 import org.spanloom.language.units.UnitNames;
@@ -64,17 +66,27 @@ public final class Completion {
   private final List<Token> before = new ArrayList<>();
   private final Span replaced;
   private final String prefix;
+  private Reach reach = Reach.STATES;
+  private String documentation = "";
   private final List<Proposal> proposals = new ArrayList<>();
   private final Set<String> offered = new HashSet<>();
+
+  /** How much may stand in an expression: each holds what those before it hold. */
+  private enum Reach {
+    CONSTANTS,
+    TIME,
+    STATES
+  }
 
   /**
    * A text that can stand at the caret.
    *
    * @param text the text to insert
    * @param detail what it is, in a few words
+   * @param documentation documentation comments of what it names, empty if there are none
    * @param replaced the place it takes: the beginning of the word before the caret
    */
-  public record Proposal(String text, String detail, Span replaced) {}
+  public record Proposal(String text, String detail, String documentation, Span replaced) {}
 
   private Completion(Model model, int offset) {
     this.model = model;
@@ -130,6 +142,7 @@ public final class Completion {
         boolean inside =
             offset > last.start() && (offset < last.end() || last.kind() == TokenKind.OPEN_UNIT);
         if (inside) {
+          unitsBeside();
           units();
           return proposals;
         }
@@ -193,11 +206,35 @@ public final class Completion {
         } else if (first.equals("row") && before.size() == 1) {
           states();
         } else {
-          values(true);
+          reach = reach(first);
           clauses(first);
+          values(true);
         }
       }
     }
+  }
+
+  /** Returns what the values of a statement may depend on. */
+  private Reach reach(String first) {
+    boolean ofTime =
+        before.stream().anyMatch(t -> t.kind() == TokenKind.OPEN_PARENTHESIS)
+            && before.stream().anyMatch(t -> t.kind() == TokenKind.EQUALS);
+    return switch (first) {
+      case "parameter", "state", "system", "accuracy", "initial" -> Reach.CONSTANTS;
+      case "let", "matrix" -> ofTime ? Reach.TIME : Reach.CONSTANTS;
+      case "input", "table", "row" -> Reach.TIME;
+      default -> isInitialValue() ? Reach.CONSTANTS : Reach.STATES;
+    };
+  }
+
+  /** Tells whether the caret stands behind the equals sign of an initial value. */
+  private boolean isInitialValue() {
+    return before.stream().anyMatch(t -> t.kind() == TokenKind.EQUALS)
+        && system().map(SystemStatement::body).orElse(List.of()).stream()
+            .anyMatch(s ->
+                s.span().touches(offset)
+                    && (s instanceof InitialValuesStatement
+                        || s instanceof UnreadStatement unread && unread.word().equals("initial")));
   }
 
   /** Tells whether the caret stands in the parentheses behind {@code condition}. */
@@ -255,9 +292,11 @@ public final class Completion {
         name(declaration);
       }
     }
-    system()
-        .flatMap(SystemStatement::over)
-        .ifPresent(o -> offer(o.name().text(), "independent variable"));
+    if (reach != Reach.CONSTANTS) {
+      system()
+          .flatMap(SystemStatement::over)
+          .ifPresent(o -> offer(o.name().text(), "independent variable"));
+    }
     if (functions) {
       for (Function function : Function.values()) {
         offer(function.code(), function.meaning());
@@ -272,6 +311,27 @@ public final class Completion {
   }
 
   private void name(Declaration declaration) {
+    if (needed(declaration).compareTo(reach) > 0) {
+      return;
+    }
+    documentation = declaration.documentation();
+    named(declaration);
+    documentation = "";
+  }
+
+  /** Returns what an expression must be allowed to depend on to hold a name. */
+  private static Reach needed(Declaration declaration) {
+    return switch (declaration) {
+      case StateStatement state -> Reach.STATES;
+      case OutputStatement output -> Reach.STATES;
+      case InputStatement input -> Reach.TIME;
+      case LetStatement let -> let.argument().isPresent() ? Reach.TIME : Reach.CONSTANTS;
+      case MatrixStatement matrix -> matrix.argument().isPresent() ? Reach.TIME : Reach.CONSTANTS;
+      default -> Reach.CONSTANTS;
+    };
+  }
+
+  private void named(Declaration declaration) {
     String name = declaration.name().text();
     switch (declaration) {
       case ParameterStatement p -> offer(name, "parameter" + unit(p.unit().map(u -> u.code())));
@@ -326,6 +386,67 @@ public final class Completion {
     }
   }
 
+  /**
+   * Offers whole units that are likely before all symbols: of a derivative, the unit of its state
+   * over that of time; else those of the names on the line before the caret.
+   */
+  private void unitsBeside() {
+    Token open = before.getLast();
+    if (!model.source().slice(new Span(open.start() + 1, offset)).equals(prefix)) {
+      return;
+    }
+    for (int i = before.size() - 2; i >= 0; i--) {
+      if (before.get(i).kind().isName()) {
+        boolean primed = before.get(i + 1).kind() == TokenKind.PRIMES;
+        int primes = primed ? before.get(i + 1).span().length() : 0;
+        String label = text(before.get(i)) + "'".repeat(primes);
+        unitOf(text(before.get(i)), primes).ifPresent(u -> offer(u, "unit of " + label));
+      }
+    }
+  }
+
+  /** Returns the declared unit of a name; of a derivative, also that of its state over time. */
+  private Optional<String> unitOf(String name, int primes) {
+    List<Statement> statements =
+        new ArrayList<>(system().map(SystemStatement::body).orElse(List.of()));
+    statements.addAll(model.syntax().statements());
+    Optional<String> found = Optional.empty();
+    for (Statement statement : statements) {
+      Optional<UnitText> unit =
+          switch (statement) {
+            case ParameterStatement p when isNamed(p, name) -> p.unit();
+            case LetStatement let when isNamed(let, name) -> let.unit();
+            case InputStatement input when isNamed(input, name) -> input.unit();
+            case OutputStatement output when isNamed(output, name) -> output.unit();
+            case MatrixStatement matrix when isNamed(matrix, name) -> matrix.unit();
+            case StateStatement state when isNamed(state, name) && state.primes() == primes ->
+                state.unit();
+            case StateStatement state when isNamed(state, name) && state.primes() == 0 -> {
+              found = state.unit().flatMap(u -> overTime(u.code(), primes));
+              yield Optional.empty();
+            }
+            default -> Optional.empty();
+          };
+      if (unit.isPresent()) {
+        return unit.map(UnitText::code);
+      }
+    }
+    return found;
+  }
+
+  private static boolean isNamed(Declaration declaration, String name) {
+    return declaration.name().text().equals(name);
+  }
+
+  private Optional<String> overTime(String code, int primes) {
+    return system()
+        .flatMap(SystemStatement::over)
+        .flatMap(OverClause::unit)
+        .map(UnitText::code)
+        .filter(time -> time.chars().allMatch(Character::isLetter))
+        .map(time -> code + "/" + time + (primes == 1 ? "" : primes));
+  }
+
   private void units() {
     for (UnitReader.Symbol symbol : UnitReader.known()) {
       String quantity = UnitNames.quantity(symbol.dimension()).map(q -> ", " + q).orElse("");
@@ -344,7 +465,7 @@ public final class Completion {
   private void offer(String text, String detail) {
     boolean begins = text.toLowerCase(Locale.ROOT).startsWith(prefix.toLowerCase(Locale.ROOT));
     if (begins && !text.isEmpty() && offered.add(text)) {
-      proposals.add(new Proposal(text, detail, replaced));
+      proposals.add(new Proposal(text, detail, documentation, replaced));
     }
   }
 }

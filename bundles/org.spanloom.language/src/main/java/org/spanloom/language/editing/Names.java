@@ -77,11 +77,6 @@ public final class Names {
         .findFirst();
   }
 
-  /** Returns the names that can be used at an offset. */
-  NameScope scopeAt(int offset) {
-    return systemAt(offset).map(scopes::of).orElse(scopes.file());
-  }
-
   /**
    * Returns what has a name in a body in which a symbol can be used: declared beside it, around it
    * or inside of a body around which it stands.
