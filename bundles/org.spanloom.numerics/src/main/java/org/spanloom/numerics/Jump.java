@@ -173,6 +173,31 @@ public final class Jump {
     return new Jump(other, change);
   }
 
+  /**
+   * Returns the jumps of a list from one time to another, both included.
+   *
+   * @param byTime jumps by time
+   */
+  public static List<Jump> within(List<Jump> byTime, double from, double to) {
+    int first = firstFrom(byTime, from);
+    int end = firstFrom(byTime, Math.nextUp(to));
+    return byTime.subList(first, Math.max(first, end));
+  }
+
+  private static int firstFrom(List<Jump> byTime, double time) {
+    int low = 0;
+    int high = byTime.size();
+    while (low < high) {
+      int middle = (low + high) >>> 1;
+      if (byTime.get(middle).time < time) {
+        low = middle + 1;
+      } else {
+        high = middle;
+      }
+    }
+    return low;
+  }
+
   /** Returns when it takes place. */
   public double time() {
     return time;

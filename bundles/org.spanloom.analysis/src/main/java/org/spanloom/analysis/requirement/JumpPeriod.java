@@ -45,28 +45,8 @@ final class JumpPeriod {
     if (!inside || atEnd) {
       return false;
     }
-    int at = firstFrom(there - slack);
-    while (at < jumps.size() && jumps.get(at).time() <= there + slack) {
-      if (isSame(jump, jumps.get(at))) {
-        return false;
-      }
-      at++;
-    }
-    return true;
-  }
-
-  private int firstFrom(double time) {
-    int low = 0;
-    int high = jumps.size();
-    while (low < high) {
-      int middle = (low + high) >>> 1;
-      if (jumps.get(middle).time() < time) {
-        low = middle + 1;
-      } else {
-        high = middle;
-      }
-    }
-    return low;
+    return Jump.within(jumps, there - slack, there + slack).stream()
+        .noneMatch(other -> isSame(jump, other));
   }
 
   private static boolean isSame(Jump a, Jump b) {

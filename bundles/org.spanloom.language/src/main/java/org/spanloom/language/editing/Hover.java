@@ -11,6 +11,7 @@ import java.util.Locale;
 import java.util.Optional;
 import org.spanloom.language.editing.Symbol.Declared;
 import org.spanloom.language.model.Function;
+import org.spanloom.language.model.Jump;
 import org.spanloom.language.model.Let;
 import org.spanloom.language.model.MatrixFunction;
 import org.spanloom.language.model.Model;
@@ -186,6 +187,14 @@ public final class Hover {
     }
     if (isLast(system, component) && !component.equation().equals(component.declaration())) {
       lines.add("governed by: " + line(component.equation()));
+    }
+    if (component.order() == primes) {
+      for (Jump jump : system.jumps()) {
+        boolean changed = jump.changes().stream().anyMatch(c -> c.component() == component.index());
+        if (changed) {
+          lines.add("changed by: jump " + line(jump.timesSpan()));
+        }
+      }
     }
   }
 

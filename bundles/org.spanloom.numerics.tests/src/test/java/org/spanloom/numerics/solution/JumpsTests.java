@@ -107,6 +107,16 @@ class JumpsTests {
     assertEquals(peak(count), Solved.at(solution, (count - 1) * PAUSE)[0], 1e-11 * peak(count));
   }
 
+  /** What decays beyond the smallest floating point number is followed down to 0. */
+  @Test
+  void aBasisMayDieOutAcrossJumps() {
+    LinearSystem system = doses(FormulaSystem.constant(new double[] {-1}, 0, 1000 * PAUSE), 1000);
+    Solution basis = Solved.principal(system, 1e-8);
+    assertEquals(Math.exp(-9 * PAUSE), Solved.at(basis, 9 * PAUSE)[0], 1e-44);
+    assertEquals(0, Solved.at(basis, 999 * PAUSE)[0]);
+    assertEquals(0, Solved.errorsAt(basis, 999 * PAUSE)[0], 1e-300);
+  }
+
   private static final double[] SPRING = {0, 1, -9, -0.3};
   private static final double[] LOAD = {0, 2};
 

@@ -124,15 +124,13 @@ final class ConditionMeter {
   /** Returns what the jumps between the start and a time add to ln |det X|. */
   private double jumped(double t, Side side) {
     double start = solution.startTime();
+    double last = side == Side.AFTER ? t : Math.nextDown(t);
     double sum = 0;
-    for (Jump jump : jumps) {
-      double s = jump.time();
-      boolean past = side == Side.AFTER ? s <= t : s < t;
-      if (s > start && past) {
-        sum += jump.logDeterminant();
-      } else if (s <= start && !past) {
-        sum -= jump.logDeterminant();
-      }
+    for (Jump jump : Jump.within(jumps, Math.nextUp(start), last)) {
+      sum += jump.logDeterminant();
+    }
+    for (Jump jump : Jump.within(jumps, Math.nextUp(last), start)) {
+      sum -= jump.logDeterminant();
     }
     return sum;
   }

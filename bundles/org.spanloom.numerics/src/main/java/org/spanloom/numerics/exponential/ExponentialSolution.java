@@ -346,7 +346,10 @@ public final class ExponentialSolution implements Solution {
       for (int i = 0; i < order.length; i++) {
         if (order[i] < n) {
           double size = Math.abs(pair.first()[i][j]);
-          double shared = Math.min(SHARE * largest * scale[order[i]], largestRelative * size);
+          // Where a value has died out in one ladder and not yet in the other, the ratio is
+          // infinite.
+          double relative = size == 0 ? 0 : largestRelative * size;
+          double shared = Math.min(SHARE * largest * scale[order[i]], relative);
           double estimate = SAFETY * Math.max(difference(pair, i, j), shared) + 4 * Math.ulp(size);
           error[order[i] * m + j] = Math.min(estimate, Double.MAX_VALUE);
         }

@@ -70,16 +70,18 @@ final class JumpSolver {
     this.n = values.system().dimension();
     this.m = values.columns();
     this.scale = values.accuracy().scale();
-    for (Jump jump : values.system().jumps()) {
-      if (values.span().contains(jump.time())) {
-        jumps.computeIfAbsent(jump.time(), t -> new ArrayList<>()).add(jump);
-      }
+    for (Jump jump : inside(values, values.span())) {
+      jumps.computeIfAbsent(jump.time(), t -> new ArrayList<>()).add(jump);
     }
   }
 
   /** Tells whether a jump lies in the range to be solved on. */
   static boolean isNeededFor(InitialValues values) {
-    return values.system().jumps().stream().anyMatch(j -> values.span().contains(j.time()));
+    return !inside(values, values.span()).isEmpty();
+  }
+
+  private static List<Jump> inside(InitialValues values, TimeRange part) {
+    return Jump.within(values.system().jumps(), part.start(), part.end());
   }
 
   /**
@@ -97,13 +99,11 @@ final class JumpSolver {
   static double longestPiece(InitialValues values, double end) {
     double t0 = values.t0();
     TimeRange part = new TimeRange(Math.min(t0, end), Math.max(t0, end));
-    double[] stops =
-        values.system().jumps().stream().mapToDouble(Jump::time).filter(part::contains).toArray();
     double longest = 0;
     double before = part.start();
-    for (double stop : stops) {
-      longest = Math.max(longest, stop - before);
-      before = stop;
+    for (Jump jump : inside(values, part)) {
+      longest = Math.max(longest, jump.time() - before);
+      before = jump.time();
     }
     return Math.max(longest, part.end() - before);
   }
