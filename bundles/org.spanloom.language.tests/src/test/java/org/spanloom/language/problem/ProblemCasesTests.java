@@ -81,6 +81,7 @@ class ProblemCasesTests {
                 ProblemKind.FILE_MISSING,
                 ProblemKind.FILE_OUTSIDE_PROJECT,
                 ProblemKind.FILE_TOO_LARGE,
+                ProblemKind.FILE_MALFORMED,
                 ProblemKind.FILE_UNREADABLE,
                 ProblemKind.MATRIX_TOO_LARGE,
                 ProblemKind.IMPORT_TOO_DEEP,

@@ -11,6 +11,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.OptionalInt;
 import java.util.Set;
+import org.spanloom.language.model.Meaning.MatrixMeaning;
 import org.spanloom.language.model.Meaning.StateMeaning;
 import org.spanloom.language.problem.Fix;
 import org.spanloom.language.problem.ProblemKind;
@@ -129,12 +130,24 @@ final class EquationReader {
     for (NameExpression name : ExpressionNames.of(side)) {
       if (name.primes() > 0) {
         Optional<StateMeaning> state = frame.state(name.name().text());
-        if (state.isPresent()) {
-          mentioned[state.get().index()] = true;
-          raise(state.get().index(), name.primes());
+        state.ifPresent(s -> mention(s.index(), name.primes()));
+        if (state.isEmpty()
+            && frame.scope().own(name.name().text()).orElse(null) instanceof MatrixMeaning m) {
+          noteDerivatives(m.value(), name.primes());
         }
       }
     }
+  }
+
+  private void noteDerivatives(MatrixValue states, int primes) {
+    for (MatrixValue.Entry entry : states.entries()) {
+      entry.value().single().ifPresent(key -> mention(key.state(), key.order() + primes));
+    }
+  }
+
+  private void mention(int state, int order) {
+    mentioned[state] = true;
+    raise(state, order);
   }
 
   private void noteOrders(Quantity side) {

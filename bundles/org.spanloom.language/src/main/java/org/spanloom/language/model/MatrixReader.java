@@ -7,7 +7,11 @@ package org.spanloom.language.model;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
+import org.spanloom.language.files.MarketMatrix;
+import org.spanloom.language.files.MatrixMarketReader;
+import org.spanloom.language.files.MatrixMarketReader.Result;
 import org.spanloom.language.model.Meaning.MatrixMeaning;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.syntax.Expression;
@@ -16,6 +20,7 @@ import org.spanloom.language.syntax.MatrixSource.MatrixFile;
 import org.spanloom.language.syntax.MatrixSource.MatrixRow;
 import org.spanloom.language.syntax.MatrixSource.MatrixRows;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
+import org.spanloom.language.text.Span;
 import org.spanloom.language.units.UnitOfMeasure;
 
 /** Gives the declaration of a matrix its meaning. */
@@ -127,11 +132,47 @@ final class MatrixReader {
 
   private Optional<MatrixMeaning> file(
       MatrixStatement statement, MatrixFile file, UnitOfMeasure unit) {
+    return frame
+        .text(file.path())
+        .flatMap(found ->
+            switch (MatrixMarketReader.read(found.text())) {
+              case Result.Read(MarketMatrix matrix) ->
+                  Optional.of(meaning(statement, unit, value(matrix, unit, file.path().span())));
+              case Result.Malformed(int line, String message) ->
+                  refuse(ProblemKind.FILE_MALFORMED, file, line, message);
+              case Result.TooLarge(int line, String message) ->
+                  refuse(ProblemKind.MATRIX_TOO_LARGE, file, line, message);
+            });
+  }
+
+  private Optional<MatrixMeaning> refuse(
+      ProblemKind kind, MatrixFile file, int line, String message) {
     problems.report(
-        ProblemKind.STATEMENT_NOT_SUPPORTED,
-        file.span(),
-        "Files of matrices are not read by this version yet: write the rows.");
+        kind,
+        file.path().span(),
+        "Line "
+            + line
+            + " of \""
+            + Quotes.shortened(file.path().text())
+            + "\": "
+            + message
+            + ". Mend the file.");
     return Optional.empty();
+  }
+
+  private MatrixValue value(MarketMatrix matrix, UnitOfMeasure unit, Span place) {
+    List<Span> sources = List.of(frame.placed(place));
+    List<MatrixValue.Entry> entries = new ArrayList<>(matrix.count());
+    for (int i = 0; i < matrix.count(); i++) {
+      Term value = new Term.Constant(unit.toBase(matrix.value(i)));
+      Quantity.Part part = new Quantity.Part(value, sources, false);
+      entries.add(
+          new MatrixValue.Entry(
+              matrix.row(i),
+              matrix.column(i),
+              new Quantity(Map.of(), part, unit.dimension(), false, 1)));
+    }
+    return new MatrixValue(matrix.rows(), matrix.columns(), entries, unit.dimension());
   }
 
   private MatrixMeaning meaning(MatrixStatement statement, UnitOfMeasure unit, MatrixValue value) {

@@ -84,6 +84,8 @@ public enum ProblemKind {
   FILE_OUTSIDE_PROJECT("A path leads out of the project."),
   /** A file with more in it than is read. */
   FILE_TOO_LARGE("A file is too large, or there are too many."),
+  /** A file that breaks the rules of its format. */
+  FILE_MALFORMED("A file breaks the rules of its format."),
   /** A file that is no text. */
   FILE_UNREADABLE("A file cannot be read as text."),
   /** A unit code that UCUM does not have. */

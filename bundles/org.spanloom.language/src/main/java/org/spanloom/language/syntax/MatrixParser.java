@@ -54,11 +54,12 @@ final class MatrixParser {
     if (cursor.atEnd()) {
       return new MatrixRows(List.of(), true);
     }
-    boolean file = cursor.isWord("file") && cursor.kindAfter() == TokenKind.STRING;
-    if (file) {
+    TokenKind after = cursor.kindAfter();
+    if (cursor.isWord("file") && (after == TokenKind.STRING || after.isName())) {
       cursor.take();
-      Span span = cursor.take().span();
-      return new MatrixFile(cursor.text(new Span(span.start() + 1, span.end() - 1)), span);
+      return new MatrixFile(
+          statement.quoted(
+              "The name of the file belongs here in quotation marks, as in file \"mass.mtx\""));
     }
     if (cursor.is(TokenKind.STRING)) {
       int start = cursor.peek().start();
@@ -67,12 +68,6 @@ final class MatrixParser {
           cursor.peek().span(),
           "A matrix read from a file says so: write file in front of its name.",
           Fix.insert("Insert file", start, "file "));
-    }
-    if (cursor.isWord("file") && cursor.kindAfter().isName()) {
-      cursor.take();
-      cursor.failHere(
-          ProblemKind.WORD_UNEXPECTED,
-          "The name of the file belongs here in quotation marks, as in file \"mass.mtx\"");
     }
     return new MatrixExpression(statement.expressions().expression());
   }

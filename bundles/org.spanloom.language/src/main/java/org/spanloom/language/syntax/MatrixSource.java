@@ -23,13 +23,8 @@ public sealed interface MatrixSource {
     }
   }
 
-  /**
-   * In a file: {@code file "mass.mtx"}.
-   *
-   * @param path the path as written, without quotation marks
-   * @param span its place, with quotation marks
-   */
-  record MatrixFile(String path, Span span) implements MatrixSource {}
+  /** In a file: {@code file "mass.mtx"}. */
+  record MatrixFile(QuotedText path) implements MatrixSource {}
 
   /** In other matrices: {@code a*M + b*K}. */
   record MatrixExpression(Expression value) implements MatrixSource {}
