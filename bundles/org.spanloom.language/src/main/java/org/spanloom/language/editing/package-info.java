@@ -16,6 +16,9 @@
  * <tr><td>Where is this used?</td><td>{@link org.spanloom.language.editing.References}</td></tr>
  * <tr><td>May this be called otherwise?</td><td>{@link org.spanloom.language.editing.Rename}</td></tr>
  * <tr><td>What can stand here?</td><td>{@link org.spanloom.language.editing.Completion}</td></tr>
+ * <tr><td>Can this long line be broken?</td><td>{@link org.spanloom.language.editing.LineSplit}</td></tr>
+ * <tr><td>Can these equations be one of matrices, or the other way round?</td><td>{@link
+ *     org.spanloom.language.editing.MatrixForm}</td></tr>
  * </table>
  *
  * <p>{@link org.spanloom.language.editing.Names} says what a name stands for, and every answer

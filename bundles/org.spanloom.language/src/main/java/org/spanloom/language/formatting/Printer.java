@@ -150,7 +150,7 @@ public final class Printer {
     matrix.argument().ifPresent(a -> out.words("(", a.text(), ")"));
     out.unit(matrix.unit()).words("=");
     switch (matrix.source()) {
-      case MatrixFile inFile -> out.words("file", "\"" + inFile.path() + "\"");
+      case MatrixFile inFile -> out.words("file", "\"" + inFile.path().text() + "\"");
       case MatrixExpression expression -> out.expression(expression.value());
       case MatrixRows rows -> {
         for (MatrixRow row : rows.rows()) {

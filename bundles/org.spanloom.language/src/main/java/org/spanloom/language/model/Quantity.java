@@ -108,9 +108,10 @@ record Quantity(
     Map<StateKey, Part> parts = new LinkedHashMap<>();
     left.coefficients.forEach((key, part) -> parts.put(key, product(part, right.constant)));
     right.coefficients.forEach((key, part) -> parts.put(key, product(left.constant, part)));
-    Part rest = product(left.constant, right.constant);
-    boolean absent = !parts.isEmpty() && Simplifier.isZero(rest.term());
-    return new Quantity(parts, absent ? Part.ZERO : rest, dimension, false, depth);
+    Part besideStates = left.holdsStates() ? left.constant : right.constant;
+    boolean absent = !parts.isEmpty() && Simplifier.isZero(besideStates.term());
+    Part rest = absent ? Part.ZERO : product(left.constant, right.constant);
+    return new Quantity(parts, rest, dimension, false, depth);
   }
 
   private static Part product(Part left, Part right) {
