@@ -6,6 +6,7 @@
 package org.spanloom.benchmarks;
 
 import java.util.Collection;
+import java.util.List;
 import org.openjdk.jmh.results.RunResult;
 import org.openjdk.jmh.runner.Runner;
 import org.openjdk.jmh.runner.RunnerException;
@@ -20,7 +21,8 @@ public final class Benchmarks {
   /**
    * Runs.
    *
-   * @param arguments {@code --model STATEMENTS}, or options of JMH and names of benchmarks
+   * @param arguments {@code --model STATEMENTS}, {@code --peers [PROBLEM...]}, or options of JMH
+   *     and names of benchmarks
    */
   public static void main(String[] arguments)
       throws CommandLineOptionException, RunnerException, java.io.IOException {
@@ -29,6 +31,10 @@ public final class Benchmarks {
           LargeModel.text(Integer.parseInt(arguments[1]))
               .getBytes(java.nio.charset.StandardCharsets.UTF_8));
       System.out.flush();
+      return;
+    }
+    if (arguments.length > 0 && arguments[0].equals("--peers")) {
+      PeerTable.print(List.of(arguments).subList(1, arguments.length), System.out);
       return;
     }
     CommandLineOptions options = new CommandLineOptions(arguments);
