@@ -9,7 +9,9 @@ import java.util.Comparator;
 import java.util.LinkedHashSet;
 import java.util.Map;
 import java.util.SequencedSet;
+import java.util.Set;
 import java.util.TreeSet;
+import java.util.concurrent.CancellationException;
 import java.util.function.BooleanSupplier;
 import org.eclipse.core.resources.IFile;
 import org.eclipse.core.resources.IProject;
@@ -23,15 +25,15 @@ import org.eclipse.core.runtime.SubMonitor;
 import org.eclipse.core.runtime.jobs.ISchedulingRule;
 import org.spanloom.analysis.CheckReport;
 import org.spanloom.analysis.ModelCheck;
-import org.spanloom.language.files.ProjectFiles;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.ModelReader;
 import org.spanloom.numerics.Progress;
 
 /**
- * Checks the models of a project that changed since the last build; all of them when settings
- * changed. The work can be cancelled, and an automatic build gives way to whoever wants to change
- * the project; in both cases the next build begins again from the same state.
+ * Checks the models of a project that changed since the last build or that use a file which did;
+ * all of them when settings changed. The work can be cancelled, and an automatic build gives way to
+ * whoever wants to change the project; in both cases the next build begins again from the same
+ * state.
  */
 public final class ModelBuilder extends IncrementalProjectBuilder {
 
@@ -40,6 +42,8 @@ public final class ModelBuilder extends IncrementalProjectBuilder {
 
   private static final Comparator<IFile> BY_PATH =
       Comparator.comparing(f -> f.getFullPath().toString());
+
+  private final FileUses uses = new FileUses();
 
   @Override
   public ISchedulingRule getRule(int kind, Map<String, String> args) {
@@ -62,6 +66,9 @@ public final class ModelBuilder extends IncrementalProjectBuilder {
     }
     BooleanSupplier interrupted = () -> kind == AUTO_BUILD && isInterrupted();
     try {
+      if (!work.changed.isEmpty()) {
+        addUsers(work, () -> interrupted.getAsBoolean() || monitor.isCanceled());
+      }
       checkAll(work, interrupted, monitor);
     } catch (OperationCanceledException e) {
       rememberLastBuiltState();
@@ -73,6 +80,22 @@ public final class ModelBuilder extends IncrementalProjectBuilder {
   @Override
   protected void clean(IProgressMonitor monitor) throws CoreException {
     FindingMarkers.delete(getProject(), IResource.DEPTH_INFINITE);
+  }
+
+  /** Adds the models that use a file which changed, came or went. */
+  private void addUsers(Work work, BooleanSupplier cancelled) throws CoreException {
+    Work all = new Work();
+    all.collectAll(getProject());
+    work.removed.forEach(uses::forget);
+    try {
+      for (IFile model : all.models) {
+        if (!work.models.contains(model) && uses.usesAny(model, work.changed, cancelled)) {
+          work.models.add(model);
+        }
+      }
+    } catch (CancellationException e) {
+      throw new OperationCanceledException();
+    }
   }
 
   private void checkAll(Work work, BooleanSupplier interrupted, IProgressMonitor monitor)
@@ -97,13 +120,15 @@ public final class ModelBuilder extends IncrementalProjectBuilder {
     }
   }
 
-  private static void check(IFile file, Progress progress) throws CoreException {
+  private void check(IFile file, Progress progress) throws CoreException {
     if (progress.isCancelled()) {
       throw new OperationCanceledException();
     }
     switch (ModelFile.read(file)) {
       case ModelFile.Content.Readable r -> {
-        Model model = ModelReader.read(r.text(), ProjectFiles.none(), progress::isCancelled);
+        WorkspaceFiles files = WorkspaceFiles.of(file);
+        Model model = ModelReader.read(r.text(), files, progress::isCancelled);
+        uses.note(file, files, model);
         if (progress.isCancelled()) {
           throw new OperationCanceledException();
         }
@@ -122,6 +147,8 @@ public final class ModelBuilder extends IncrementalProjectBuilder {
 
     private final SequencedSet<IFile> models = new LinkedHashSet<>();
     private final SequencedSet<IFile> settings = new LinkedHashSet<>();
+    private final Set<IFile> changed = new LinkedHashSet<>();
+    private final Set<IFile> removed = new LinkedHashSet<>();
     private boolean settingsChanged;
 
     private void collectAll(IProject project) throws CoreException {
@@ -145,14 +172,20 @@ public final class ModelBuilder extends IncrementalProjectBuilder {
       switch (delta.getKind()) {
         case IResourceDelta.ADDED -> {
           add(file);
+          changed.add(file);
           dropStrayMarkers(file);
         }
         case IResourceDelta.CHANGED -> {
           if ((delta.getFlags() & CONTENT_CHANGES) != 0) {
             add(file);
+            changed.add(file);
           }
         }
-        case IResourceDelta.REMOVED -> settingsChanged |= ModelFile.isSettings(file);
+        case IResourceDelta.REMOVED -> {
+          changed.add(file);
+          removed.add(file);
+          settingsChanged |= ModelFile.isSettings(file);
+        }
         default -> {
           // Phantoms and markers are no business of a build.
         }

@@ -28,6 +28,7 @@ public final class ModelFile {
   public static final int LARGEST = 64 << 20;
 
   private static final String EXTENSION = "span";
+  private static final String TOO_LARGE = "file-too-large";
 
   private ModelFile() {}
 
@@ -43,7 +44,12 @@ public final class ModelFile {
      * @param code stable id of the finding
      * @param message why, and what to do
      */
-    record Unreadable(String code, String message) implements Content {}
+    record Unreadable(String code, String message) implements Content {
+      /** Tells whether there is more than is read. */
+      boolean isTooLarge() {
+        return code.equals(TOO_LARGE);
+      }
+    }
   }
 
   /**
@@ -84,7 +90,7 @@ public final class ModelFile {
 
   private static Content tooLarge() {
     return new Content.Unreadable(
-        "file-too-large",
+        TOO_LARGE,
         "The file is larger than "
             + (LARGEST >> 20)
             + " MiB and is not read. Split the model, or check that this is a model file.");

@@ -53,8 +53,11 @@ final class ModelCompletionProcessor implements IContentAssistProcessor {
             .latest()
             .filter(s -> s.stamp() == ModelReconcilingStrategy.stamp(document))
             .map(ModelSnapshot::model);
-    return current.orElseGet(
-        () -> ModelReader.read(new SourceText(editor.getTitle(), document.get())));
+    return current.orElseGet(() ->
+        ModelReader.read(
+            new SourceText(editor.getTitle(), document.get()),
+            EditorFiles.of(editor),
+            () -> false));
   }
 
   @Override

@@ -13,7 +13,6 @@ import org.eclipse.jface.text.IRegion;
 import org.eclipse.jface.text.reconciler.DirtyRegion;
 import org.eclipse.jface.text.reconciler.IReconcilingStrategy;
 import org.eclipse.jface.text.reconciler.IReconcilingStrategyExtension;
-import org.spanloom.language.files.ProjectFiles;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.ModelReader;
 import org.spanloom.language.text.SourceText;
@@ -73,7 +72,7 @@ final class ModelReconcilingStrategy
     Model model =
         ModelReader.read(
             new SourceText(editor.getTitle(), text),
-            ProjectFiles.none(),
+            EditorFiles.of(editor),
             () -> monitor.isCanceled() || stamp(read) != stamp);
     if (!monitor.isCanceled() && stamp(read) == stamp) {
       snapshots.publish(new ModelSnapshot(model, stamp));

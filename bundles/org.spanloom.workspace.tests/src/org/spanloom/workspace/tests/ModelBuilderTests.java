@@ -12,6 +12,8 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.io.IOException;
 import java.io.RandomAccessFile;
 import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.List;
 import org.eclipse.core.resources.IFile;
 import org.eclipse.core.resources.IMarker;
@@ -22,6 +24,7 @@ import org.eclipse.core.runtime.IPath;
 import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
 import org.spanloom.workspace.Ids;
 import org.spanloom.workspace.MarkerAttributes;
 import org.spanloom.workspace.ModelFile;
@@ -155,6 +158,44 @@ class ModelBuilderTests {
     project.build();
     assertEquals(before, ids(other), "the markers of the other file must be the same ones");
     assertNotEquals(beforeChanged, ids(changed));
+  }
+
+  @Test
+  void checksTheModelsThatUseAFileWhenItChanges() throws CoreException {
+    IFile zone = project.write("zone.span", "parameter leak = 0.5\n");
+    IFile user =
+        project.write(
+            "user.span",
+            """
+            import "between.span"
+            system Tank over t from 0 to 4 {
+              state level = 2
+              level' = -drain*level
+            }
+            """);
+    project.build();
+    assertEquals(List.of("file-missing"), TestProject.codes(user));
+    project.write("between.span", "import \"zone.span\"\nparameter drain = 2*leak\n");
+    project.build();
+    assertEquals(List.of(), TestProject.codes(user));
+    project.write("zone.span", "parameter leek = 0.5\n");
+    project.build();
+    assertEquals(List.of("import-broken"), TestProject.codes(user));
+    project.write("zone.span", "parameter leak = 0.25\n");
+    project.build();
+    assertEquals(List.of(), TestProject.codes(user));
+    zone.delete(true, null);
+    project.build();
+    assertEquals(List.of("import-broken"), TestProject.codes(user));
+  }
+
+  @Test
+  void aLinkedFileIsOutsideOfTheProject(@TempDir Path folder) throws Exception {
+    Path outside = Files.writeString(folder.resolve("outside.span"), "parameter a = 1\n");
+    project.file("linked.span").createLink(outside.toUri(), IResource.NONE, null);
+    IFile user = project.write("user.span", "import \"linked.span\"\n");
+    project.build();
+    assertEquals(List.of("file-outside-project"), TestProject.codes(user));
   }
 
   @Test
