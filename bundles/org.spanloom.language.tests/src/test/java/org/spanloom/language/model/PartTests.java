@@ -11,6 +11,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import static org.spanloom.language.model.ModelListing.equations;
 import static org.spanloom.language.model.ModelListing.system;
 
+import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
@@ -207,6 +208,40 @@ class PartTests {
     assertTrue(
         numbers(system, 0).contains("K upper_oil upper_oil " + -all),
         numbers(system, 0).toString());
+  }
+
+  @Test
+  void jumpsOfAPartTakePlaceInItsOwnUnitOfTime() {
+    SystemModel system =
+        sound(
+            read(
+                """
+                system Cup over t [min] from 0 to 90 {
+                  parameter sip [mL] = 20
+                  state tea [mL] = 200
+                  tea' = -1 [mL/min]
+                  jump every 30 from 30 to 90 { tea becomes tea - sip }
+                }
+                system Table over t [h] from 0 to 2 {
+                  part mine = Cup { sip = 5 [mL] }
+                  state pot [mL] = 900
+                  pot' = 0 [mL/h]
+                  jump at 1 { mine.tea becomes mine.tea + 30 [mL]; pot becomes pot - 30 [mL] }
+                }
+                """,
+                Map.of()),
+            "Table");
+    Jump own = system.jumps().getFirst();
+    Jump sips = system.jumps().getLast();
+    assertEquals(
+        List.of(1.0),
+        Arrays.stream(own.times().times(system.timeUnit(), Map.of())).boxed().toList());
+    assertEquals(
+        List.of(0.5, 1.0, 1.5),
+        Arrays.stream(sips.times().times(system.timeUnit(), Map.of())).boxed().toList());
+    assertEquals(
+        -5e-6, TermEvaluator.constant(sips.changes().getFirst().value().constant()), 1e-20);
+    assertEquals(List.of(0, 1), own.changes().stream().map(Jump.Change::component).toList());
   }
 
   @Test

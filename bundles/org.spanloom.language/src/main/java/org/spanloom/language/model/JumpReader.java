@@ -20,18 +20,14 @@ import org.spanloom.language.text.Span;
 /** Reads jumps. */
 final class JumpReader {
 
-  private final SystemScope system;
   private final Components components;
   private final Times times;
-  private final Problems problems;
   private final List<Jump> jumps = new ArrayList<>();
   private long count;
 
-  JumpReader(SystemScope system, Components components, Times times) {
-    this.system = system;
+  JumpReader(Components components, Times times) {
     this.components = components;
     this.times = times;
-    this.problems = system.problems();
   }
 
   /** Returns the jumps that have a meaning, in the order of the text. */
@@ -39,54 +35,64 @@ final class JumpReader {
     return jumps;
   }
 
-  void read(JumpStatement statement) {
-    Optional<JumpTimes> when = times(statement.time());
-    Optional<List<Jump.Change>> changes = changes(statement);
+  /** Takes a jump of a frame. */
+  void read(Frame frame, JumpStatement statement) {
+    Optional<JumpTimes> when = times(frame, statement.time());
+    Optional<List<Jump.Change>> changes = changes(frame, statement);
     if (when.isEmpty() || changes.isEmpty() || !times.isKnown()) {
       return;
     }
-    if (fewEnough(when.get(), statement.time().span()) && areDefined(when.get(), changes.get())) {
-      jumps.add(new Jump(when.get(), changes.get(), statement.time().span(), statement.span()));
+    if (fewEnough(frame, when.get(), statement.time().span())
+        && areDefined(when.get(), changes.get())) {
+      jumps.add(
+          new Jump(
+              when.get(),
+              changes.get(),
+              frame.placed(statement.time().span()),
+              frame.placed(statement.span())));
     }
   }
 
-  private Optional<JumpTimes> times(JumpTime stated) {
+  private Optional<JumpTimes> times(Frame frame, JumpTime stated) {
     return switch (stated) {
-      case JumpTime.Once once -> times.time(once.time()).map(JumpTimes.Once::new);
-      case JumpTime.Repeated repeated -> repeated(repeated);
+      case JumpTime.Once once -> times.time(frame, once.time()).map(JumpTimes.Once::new);
+      case JumpTime.Repeated repeated -> repeated(frame, repeated);
     };
   }
 
-  private Optional<JumpTimes> repeated(JumpTime.Repeated stated) {
+  private Optional<JumpTimes> repeated(Frame frame, JumpTime.Repeated stated) {
     Optional<Term> period =
-        system
+        frame
             .resolver()
-            .given(stated.period(), times.unit(), "the independent variable", Place.PERIOD)
+            .given(stated.period(), frame.timeUnit(), "the independent variable", Place.PERIOD)
             .map(q -> q.constant().term());
-    Optional<Term> first = times.time(stated.first());
-    Optional<Term> last = times.time(stated.last());
+    Optional<Term> first = times.time(frame, stated.first());
+    Optional<Term> last = times.time(frame, stated.last());
     if (period.isEmpty() || first.isEmpty() || last.isEmpty()) {
       return Optional.empty();
     }
     double step = TermEvaluator.constant(period.get());
     if (!(step > 0) || Double.isInfinite(step)) {
-      return invalid(stated.period().span(), "A period is positive and finite: check its value.");
+      return invalid(
+          frame, stated.period().span(), "A period is positive and finite: check its value.");
     }
     if (TermEvaluator.constant(first.get()) > TermEvaluator.constant(last.get())) {
       return invalid(
+          frame,
           stated.first().span().join(stated.last().span()),
           "The first jump lies behind the last one: the times behind \"from\" and \"to\" ascend.");
     }
     return Optional.of(new JumpTimes.Repeated(period.get(), first.get(), last.get()));
   }
 
-  private boolean fewEnough(JumpTimes when, Span span) {
+  private boolean fewEnough(Frame frame, JumpTimes when, Span span) {
     long more = when.count(Map.of());
     if (more <= JumpTimes.LIMIT - count) {
       count += more;
       return true;
     }
     invalid(
+        frame,
         span,
         "The jumps of a system take place at most "
             + JumpTimes.LIMIT
@@ -96,14 +102,15 @@ final class JumpReader {
     return false;
   }
 
-  private Optional<List<Jump.Change>> changes(JumpStatement statement) {
+  private Optional<List<Jump.Change>> changes(Frame frame, JumpStatement statement) {
     List<Jump.Change> changes = new ArrayList<>();
     Set<Integer> changed = new HashSet<>();
     boolean sound = statement.allRead();
     for (Change line : statement.changes()) {
-      Optional<StateComponent> component = components.find(system.root(), line.target());
+      Optional<StateComponent> component = components.find(frame, line.target());
       if (component.isPresent() && !changed.add(component.get().index())) {
         invalid(
+            frame,
             line.target().span(),
             "\""
                 + component.get().label()
@@ -112,14 +119,15 @@ final class JumpReader {
         sound = false;
         continue;
       }
-      Optional<AffineValue> value = component.flatMap(c -> value(c, line));
+      Optional<AffineValue> value = component.flatMap(c -> value(frame, c, line));
       component
-          .flatMap(c -> value.map(v -> new Jump.Change(c.index(), v, line.span())))
+          .flatMap(c -> value.map(v -> new Jump.Change(c.index(), v, frame.placed(line.span()))))
           .ifPresent(changes::add);
       sound &= value.isPresent();
     }
     if (sound && changes.isEmpty()) {
       invalid(
+          frame,
           statement.header(),
           "This jump changes nothing: write a line such as \"x becomes x + 1\" in its braces.");
       return Optional.empty();
@@ -128,9 +136,9 @@ final class JumpReader {
   }
 
   /** Returns what a component becomes; a lone number takes its unit. */
-  private Optional<AffineValue> value(StateComponent component, Change line) {
+  private Optional<AffineValue> value(Frame frame, StateComponent component, Change line) {
     String what = "the state " + component.label();
-    Resolver resolver = system.resolver();
+    Resolver resolver = frame.resolver();
     Optional<Quantity> value =
         Literals.isBare(line.value())
             ? resolver.given(line.value(), component.unit(), what, Place.JUMP)
@@ -143,8 +151,7 @@ final class JumpReader {
                         component.unit().code(),
                         line.value().span(),
                         what));
-    return value.flatMap(
-        q -> components.affine(system.root(), q, component.unit(), line.value().span()));
+    return value.flatMap(q -> components.affine(frame, q, component.unit(), line.value().span()));
   }
 
   /** Tells whether every number in the lines is finite at every time of the jump. */
@@ -168,20 +175,22 @@ final class JumpReader {
     boolean constant = TimeDependence.of(term) != TimeDependence.TIME;
     for (double time : at) {
       if (!Double.isFinite(evaluator.at(times.unit().toBase(time)))) {
-        problems.report(
-            ProblemKind.COEFFICIENT_UNDEFINED,
-            span,
-            "\""
-                + system.resolver().shown(span)
-                + "\" has no finite value"
-                + (constant
-                    ? ""
-                    : " when the jump takes place at "
-                        + system.scope().timeName()
-                        + " = "
-                        + Times.number(time)
-                        + times.unitText())
-                + ": check its divisors, roots and logarithms.");
+        times
+            .problems()
+            .report(
+                ProblemKind.COEFFICIENT_UNDEFINED,
+                span,
+                "\""
+                    + times.shown(span)
+                    + "\" has no finite value"
+                    + (constant
+                        ? ""
+                        : " when the jump takes place at "
+                            + times.name()
+                            + " = "
+                            + Times.number(time)
+                            + times.unitText())
+                    + ": check its divisors, roots and logarithms.");
         return false;
       }
       if (constant) {
@@ -191,8 +200,8 @@ final class JumpReader {
     return true;
   }
 
-  private <T> Optional<T> invalid(Span span, String message) {
-    problems.report(ProblemKind.JUMP_INVALID, span, message);
+  private static <T> Optional<T> invalid(Frame frame, Span span, String message) {
+    frame.problems().report(ProblemKind.JUMP_INVALID, span, message);
     return Optional.empty();
   }
 }

@@ -130,13 +130,19 @@ final class SystemReader {
     List<Output> outputs = outputs(components);
     InitialValuesReader initialValues = new InitialValuesReader(system, components, times);
     BasisReader bases = new BasisReader(system, components, times);
-    JumpReader jumps = new JumpReader(system, components, times);
+    JumpReader jumps = new JumpReader(components, times);
     initialValues.readDeclarations(statement.header());
+    for (Frame frame : frames) {
+      for (Statement s : frame.body()) {
+        if (s instanceof JumpStatement jump) {
+          jumps.read(frame, jump);
+        }
+      }
+    }
     for (Statement s : statement.body()) {
       switch (s) {
         case InitialValuesStatement values -> initialValues.read(values);
         case BasisStatement basis -> bases.read(basis);
-        case JumpStatement jump -> jumps.read(jump);
         case AccuracyStatement stated -> accuracy(stated);
         case UnreadStatement unread when unread.word().equals("initial") ->
             unread.declares().ifPresent(initialValues::noteUnread);

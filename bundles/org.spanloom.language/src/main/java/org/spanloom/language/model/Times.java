@@ -104,22 +104,52 @@ final class Times {
 
   /** Returns a time inside the interval in coherent SI units. */
   Optional<Term> time(Expression expression) {
+    return time(system.root(), expression);
+  }
+
+  /** Returns a time that stands in a statement of a frame, in whose unit of time a number is. */
+  Optional<Term> time(Frame frame, Expression expression) {
     if (!unitKnown) {
       return Optional.empty();
     }
-    Optional<Quantity> value =
-        system.resolver().given(expression, unit, "the independent variable", Place.NAMED_TIME);
-    return value.map(q -> q.constant().term()).filter(t -> isInside(t, expression.span()));
+    return frame
+        .resolver()
+        .given(expression, frame.timeUnit(), "the independent variable", Place.NAMED_TIME)
+        .map(q -> q.constant().term())
+        .filter(t -> isInside(frame, t, expression.span()));
+  }
+
+  /** Returns where problems of the system's own statements go. */
+  Problems problems() {
+    return problems;
+  }
+
+  /** Returns the name of the independent variable. */
+  String name() {
+    return system.scope().timeName();
+  }
+
+  /** Returns the text at a place of the file being read, shortened to be quoted in a message. */
+  String shown(Span placed) {
+    return system.resolver().shown(placed);
   }
 
   /** Tells whether a time lies inside the interval, parameters as declared; reports it if not. */
   boolean isInside(Term time, Span span) {
+    return isInside(system.root(), time, span);
+  }
+
+  private boolean isInside(Frame frame, Term time, Span span) {
     double base = TermEvaluator.constant(time);
     if (!Double.isFinite(base)) {
-      problems.report(
-          ProblemKind.NUMBER_OUT_OF_RANGE,
-          span,
-          "The time \"" + system.resolver().shown(span) + "\" is not a finite number: check it.");
+      frame
+          .problems()
+          .report(
+              ProblemKind.NUMBER_OUT_OF_RANGE,
+              span,
+              "The time \""
+                  + frame.resolver().shown(span)
+                  + "\" is not a finite number: check it.");
       return false;
     }
     double left = unit.toBase(interval.start());
@@ -128,15 +158,17 @@ final class Times {
         (interval.startOpen() ? base > left : base >= left)
             && (interval.endOpen() ? base < right : base <= right);
     if (known && !inside) {
-      problems.report(
-          ProblemKind.TIME_OUTSIDE_INTERVAL,
-          span,
-          "The time "
-              + number(unit.fromBase(base))
-              + unitText()
-              + " lies outside of the interval "
-              + shown()
-              + ": choose one inside or widen the interval.");
+      frame
+          .problems()
+          .report(
+              ProblemKind.TIME_OUTSIDE_INTERVAL,
+              span,
+              "The time "
+                  + number(unit.fromBase(base))
+                  + unitText()
+                  + " lies outside of the interval "
+                  + shown()
+                  + ": choose one inside or widen the interval.");
       return false;
     }
     return true;
