@@ -83,6 +83,18 @@ enum Command {
       return new StructureCommand(values, streams).run();
     }
   },
+  /** Writes matrices for other programs. */
+  EXPORT("export", "write A, b, the fundamental matrix or a basis for other programs") {
+    @Override
+    void describe(CommandSpec spec) {
+      ExportCommand.describe(spec);
+    }
+
+    @Override
+    int run(Options.Values values, Streams streams) throws CommandFailure {
+      return new ExportCommand(values, streams).run();
+    }
+  },
   /** Lays out model files. */
   FORMAT("format", "give model files their canonical layout") {
     @Override

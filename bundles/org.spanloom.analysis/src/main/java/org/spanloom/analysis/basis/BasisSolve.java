@@ -37,14 +37,29 @@ public final class BasisSolve {
    * @return the table, or why there is none
    */
   public static BasisAnswer solve(BasisRequest request, Progress progress) {
+    return solve(request, false, progress);
+  }
+
+  /**
+   * Solves for the principal basis of the start of the interval, whatever is declared.
+   *
+   * @param request what to list; its basis does not matter
+   * @param progress watched and asked while working
+   * @return the table, or why there is none
+   */
+  public static BasisAnswer principal(BasisRequest request, Progress progress) {
+    return solve(request, true, progress);
+  }
+
+  private static BasisAnswer solve(BasisRequest request, boolean principal, Progress progress) {
     try {
-      return answer(request, progress);
+      return answer(request, principal, progress);
     } catch (Choice.RefusedException refused) {
       return new BasisAnswer.Refused(refused.isUsage(), refused.getMessage());
     }
   }
 
-  private static BasisAnswer answer(BasisRequest request, Progress progress)
+  private static BasisAnswer answer(BasisRequest request, boolean principal, Progress progress)
       throws Choice.RefusedException {
     CompiledSystem system = Choice.system(request.model(), request.system(), request.parameters());
     List<Double> times = new ArrayList<>();
@@ -55,9 +70,9 @@ public final class BasisSolve {
       return new BasisAnswer.Refused(true, "no time was given; name at least one.");
     }
     List<Basis> declared = system.model().bases();
-    if (declared.isEmpty() && request.basis().isEmpty()) {
-      BasisColumns principal = BasisColumns.principal(system, start(system, times));
-      return columns(request, system, principal, times, progress);
+    if (principal || declared.isEmpty() && request.basis().isEmpty()) {
+      BasisColumns basis = BasisColumns.principal(system, start(system, times));
+      return columns(request, system, basis, times, progress);
     }
     if (declared.isEmpty()) {
       return new BasisAnswer.Refused(
