@@ -34,6 +34,10 @@ public enum FindingKind {
   BASIS_WITHOUT_DIGITS("basis-without-digits", Severity.WARNING),
   /** A declared basis that leaves fewer digits than the system asks for. */
   BASIS_ILL_CONDITIONED("basis-ill-conditioned", Severity.WARNING),
+  /** Changes of the sign of a term that could not be followed. */
+  SWITCHING_UNTRACED("switching-untraced", Severity.WARNING),
+  /** More corners and jumps of coefficients than can be stepped on. */
+  TOO_MANY_BREAKPOINTS("too-many-breakpoints", Severity.ERROR),
   /** A property of the system: its principal basis loses its fast directions. */
   BASIS_DEGENERATES("basis-degenerates", Severity.NOTE),
   /** The determinant of a basis does not follow Liouville's formula. */

@@ -18,6 +18,7 @@ import org.spanloom.analysis.requirement.RequirementCheck;
 import org.spanloom.analysis.requirement.RequirementResult;
 import org.spanloom.analysis.settings.Settings;
 import org.spanloom.analysis.solve.Refusals;
+import org.spanloom.language.model.Corners;
 import org.spanloom.language.model.InitialValues;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.Requirement;
@@ -101,7 +102,7 @@ public final class ModelCheck {
   private SystemReport check(SystemModel model, Progress part) {
     CompiledSystem system = SystemCompiler.compile(model, new LinkedHashMap<>());
     SystemSolutions solutions = new SystemSolutions(system, settings, part);
-    if (hasSingularMass(system, solutions)) {
+    if (hasTooManyBreakpoints(system) || hasSingularMass(system, solutions)) {
       return new SystemReport(model, List.of(), List.of(), List.of());
     }
     trajectories(system, solutions);
@@ -117,6 +118,21 @@ public final class ModelCheck {
       requirement(result);
     }
     return new SystemReport(model, boundaries.reports(), bases.reports(), results);
+  }
+
+  /** Reports what keeps the breakpoints of a system from being known; too many cannot be solved. */
+  private boolean hasTooManyBreakpoints(CompiledSystem system) {
+    if (system.gap().isPresent()) {
+      Corners.Gap gap = system.gap().get();
+      FindingKind kind =
+          switch (gap) {
+            case Corners.Untraced u -> FindingKind.SWITCHING_UNTRACED;
+            case Corners.TooMany m -> FindingKind.TOO_MANY_BREAKPOINTS;
+          };
+      findings.add(
+          kind.at(system.model().nameSpan(), Refusals.text(system, gap), new LinkedHashMap<>()));
+    }
+    return system.gap().filter(Corners.TooMany.class::isInstance).isPresent();
   }
 
   private boolean hasSingularMass(CompiledSystem system, SystemSolutions solutions) {

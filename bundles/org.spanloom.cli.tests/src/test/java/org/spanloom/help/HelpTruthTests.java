@@ -167,9 +167,9 @@ class HelpTruthTests {
     Set<String> expected = new TreeSet<>(Words.STATEMENT);
     expected.removeAll(later());
     expected.addAll(Words.CLAUSE);
-    expected.removeAll(List.of("if", "then", "else"));
     expected.addAll(Words.REQUIREMENT);
     expected.addAll(List.of("values", "scale", "outside", "every", "file"));
+    expected.addAll(List.of("time", "column", "hold", "linear", "monotone", "cubic", "extended"));
     assertEquals(expected, words);
   }
 

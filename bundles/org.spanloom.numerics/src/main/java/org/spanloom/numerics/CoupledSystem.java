@@ -127,6 +127,11 @@ public final class CoupledSystem implements LinearSystem {
     return rightSide.jumps();
   }
 
+  @Override
+  public double[] breakpoints(double from, double to) {
+    return rightSide.breakpoints(from, to);
+  }
+
   /**
    * Returns the reciprocal condition of M at a time, as LU estimates it: 0 where M is singular.
    *

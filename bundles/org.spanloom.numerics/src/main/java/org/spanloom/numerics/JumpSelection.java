@@ -77,4 +77,9 @@ public record JumpSelection(LinearSystem whole, List<Jump> jumps) implements Lin
   public double[] breakpoints() {
     return whole.breakpoints();
   }
+
+  @Override
+  public double[] breakpoints(double from, double to) {
+    return whole.breakpoints(from, to);
+  }
 }

@@ -5,6 +5,7 @@
  */
 package org.spanloom.numerics;
 
+import java.util.Arrays;
 import java.util.List;
 
 /**
@@ -62,5 +63,16 @@ public interface LinearSystem {
    */
   default List<Jump> jumps() {
     return List.of();
+  }
+
+  /**
+   * Returns the times strictly between two where A or b may jump, strictly increasing. A system
+   * whose range is not bounded may know them only so.
+   *
+   * @param from a time inside {@link #range()}
+   * @param to a later one
+   */
+  default double[] breakpoints(double from, double to) {
+    return Arrays.stream(breakpoints()).filter(t -> t > from && t < to).toArray();
   }
 }

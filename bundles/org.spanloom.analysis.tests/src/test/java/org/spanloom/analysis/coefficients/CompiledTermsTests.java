@@ -55,13 +55,18 @@ class CompiledTermsTests {
         double base = meaning(p.base(), t);
         yield exponent == 2 ? base * base : StrictMath.pow(base, exponent);
       }
+      case Term.Switch s ->
+          s.holds(meaning(s.gap(), t)) ? meaning(s.then(), t) : meaning(s.otherwise(), t);
+      case Term.CurveTerm c -> c.curve().at(meaning(c.time(), t));
+      case Term.Pulse p ->
+          (t - meaning(p.start(), t)) % meaning(p.period(), t) < meaning(p.width(), t) ? 1 : 0;
       case Term.FunctionTerm f ->
           f.function().apply(f.arguments().stream().mapToDouble(a -> meaning(a, t)).toArray());
     };
   }
 
   private static Term random(SplittableRandom random, int depth, List<Term> shared) {
-    int choice = random.nextInt(depth == 0 ? 3 : 12);
+    int choice = random.nextInt(depth == 0 ? 3 : 14);
     return switch (choice) {
       case 0 -> new Term.Constant(random.nextInt(9) - 4 + 0.25);
       case 1 -> TIME;
@@ -77,6 +82,15 @@ class CompiledTermsTests {
       case 9 -> new Term.Power(random(random, depth - 1, shared), new Term.Constant(2));
       case 10 ->
           new Term.Power(random(random, depth - 1, shared), new Term.Constant(random.nextInt(5)));
+      case 11 ->
+          new Term.Switch(
+              random(random, depth - 1, shared),
+              random.nextBoolean(),
+              random(random, depth - 1, shared),
+              random(random, depth - 1, shared));
+      case 12 ->
+          new Term.Pulse(
+              TIME, new Term.Constant(0.75), new Term.Constant(0.25), new Term.Constant(-64));
       default -> {
         Function function = Function.values()[random.nextInt(Function.values().length)];
         List<Term> arguments = new ArrayList<>();

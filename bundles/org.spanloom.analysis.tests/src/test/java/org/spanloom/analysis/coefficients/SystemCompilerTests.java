@@ -143,6 +143,64 @@ class SystemCompilerTests {
   }
 
   @Test
+  void switchesAndPulsesHaveTheirBranchesOnEachSide() {
+    CompiledSystem system =
+        compiled(
+            """
+            system Shed over t [h] from 0 to 12 {
+              parameter late [h] = 7.3
+              let heat(t) [K/h] = if t <= 6.1 then 2 else if t < late then 3 else 5
+              let door(t) = pulse(t, period = 4 [h], width = 30 [min])
+              state T [K] = 280
+              T' = heat(t) + 10 [K/h]*door(t)
+            }
+            """,
+            Map.of("late", 7.2 * 3600));
+    assertArrayEquals(new double[] {0.5, 4, 4.5, 6.1, 7.2, 8, 8.5}, system.linear().breakpoints());
+    double[][] sides = {
+      {0, 12, 12},
+      {0.5, 12, 2},
+      {4, 2, 12},
+      {4.5, 12, 2},
+      {6.1, 2, 3},
+      {7.2, 3, 5},
+      {8, 5, 15},
+      {8.5, 15, 5},
+      {12, 5, 15}
+    };
+    for (double[] row : sides) {
+      double[] b = new double[1];
+      if (row[0] > 0) {
+        system.linear().forcing(row[0], Side.BEFORE, b);
+        assertEquals(row[1], b[0], 1e-14, "before " + row[0]);
+      }
+      system.linear().forcing(row[0], Side.AFTER, b);
+      assertEquals(row[2], b[0], 1e-14, "after " + row[0]);
+    }
+  }
+
+  @Test
+  void breakpointsOfAnEndlessRangeAreFoundWhereTheyAreAskedFor() {
+    CompiledSystem system =
+        compiled(
+            """
+            system Lamp over t [h] from 0 {
+              state x = 1
+              x' = -pulse(t, period = 24, width = 8)*x/1 [h]
+            }
+            """,
+            Map.of());
+    assertArrayEquals(
+        new double[] {1_000_000 * 24.0}, system.linear().breakpoints(23_999_999, 24_000_001));
+    assertArrayEquals(new double[] {8, 24}, system.linear().breakpoints(0, 30));
+    double[] a = new double[1];
+    system.linear().matrix(24, Side.BEFORE, a);
+    assertEquals(0, a[0], 1e-300);
+    system.linear().matrix(24, Side.AFTER, a);
+    assertEquals(-1, a[0]);
+  }
+
+  @Test
   void jumpsOfCoupledMassesAreBreakpointsToo() {
     CompiledSystem system =
         compiled(

@@ -62,4 +62,9 @@ record CoefficientSystem(
   public double[] breakpoints() {
     return corners.times();
   }
+
+  @Override
+  public double[] breakpoints(double from, double to) {
+    return corners.between(from, to);
+  }
 }

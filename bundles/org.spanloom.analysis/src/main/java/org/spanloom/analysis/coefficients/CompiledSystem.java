@@ -7,6 +7,10 @@ package org.spanloom.analysis.coefficients;
 
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.DoubleStream;
+import org.spanloom.language.model.AffineValue;
+import org.spanloom.language.model.CornerSearch;
+import org.spanloom.language.model.Corners;
 import org.spanloom.language.model.InitialValues;
 import org.spanloom.language.model.Jump;
 import org.spanloom.language.model.StateComponent;
@@ -15,6 +19,7 @@ import org.spanloom.language.model.Term;
 import org.spanloom.numerics.Accuracy;
 import org.spanloom.numerics.CoupledSystem;
 import org.spanloom.numerics.LinearSystem;
+import org.spanloom.numerics.TimeRange;
 
 /**
  * A system of a model, ready for the numerics: states and times in declared units, parameters at
@@ -23,8 +28,10 @@ import org.spanloom.numerics.LinearSystem;
  * @param model the system
  * @param linear its coefficients
  * @param terms compiles further terms with the same parameters
+ * @param gap why breakpoints of the coefficients may be missing
  */
-public record CompiledSystem(SystemModel model, LinearSystem linear, TermCompiler terms) {
+public record CompiledSystem(
+    SystemModel model, LinearSystem linear, TermCompiler terms, Optional<Corners.Gap> gap) {
 
   /** Returns n. */
   public int dimension() {
@@ -54,6 +61,23 @@ public record CompiledSystem(SystemModel model, LinearSystem linear, TermCompile
       x[i] = states.get(i).unit().fromBase(terms.constant(initial.values().get(i)));
     }
     return x;
+  }
+
+  /**
+   * Returns the corners and jumps of a value's own coefficients.
+   *
+   * @param value a value affine in the states
+   * @param range where to look, bounded, in the declared unit
+   * @return the times beside them, from the left and from the right
+   */
+  public double[] besideCorners(AffineValue value, TimeRange range) {
+    CornerSearch search =
+        new CornerSearch(range.start(), range.end(), model.timeUnit().factor(), terms.parameters());
+    value.samples().forEach(s -> search.add(s.coefficient()));
+    search.add(value.constant());
+    return search.result().list().stream()
+        .flatMapToDouble(c -> DoubleStream.of(c.before(), c.after()))
+        .toArray();
   }
 
   /** Returns the error asked for, with the scales of the states. */

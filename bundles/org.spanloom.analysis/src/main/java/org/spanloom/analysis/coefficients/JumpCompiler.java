@@ -17,6 +17,7 @@ import org.spanloom.language.model.AffineValue;
 import org.spanloom.language.model.Jump;
 import org.spanloom.language.model.JumpTimes;
 import org.spanloom.language.model.SystemModel;
+import org.spanloom.language.model.Term;
 import org.spanloom.language.units.UnitOfMeasure;
 import org.spanloom.numerics.Side;
 import org.spanloom.numerics.TimeRange;
@@ -83,7 +84,10 @@ final class JumpCompiler {
           all.add(first.at(time));
         }
       } else {
-        Breakpoints corners = new Breakpoints(Kinks.of(graph, range()));
+        Breakpoints corners =
+            new Breakpoints(
+                coefficients(jump).toList(), model.timeUnit().factor(), parameters, range());
+        corners.between(times[0], times[times.length - 1]);
         for (double time : times) {
           // Functions of time are taken from the left, but at the start of the interval.
           double at = time == model.interval().start() ? time : corners.beside(time, Side.BEFORE);
@@ -101,13 +105,16 @@ final class JumpCompiler {
 
   /** Returns the factors and the constant of each line, one line after the other. */
   private static int[] nodes(Jump jump, TermGraph graph) {
+    return coefficients(jump).mapToInt(graph::add).toArray();
+  }
+
+  private static Stream<Term> coefficients(Jump jump) {
     return jump.changes().stream()
         .map(Jump.Change::value)
         .flatMap(v ->
             Stream.concat(
-                v.samples().stream().map(AffineValue.Sample::coefficient), Stream.of(v.constant())))
-        .mapToInt(graph::add)
-        .toArray();
+                v.samples().stream().map(AffineValue.Sample::coefficient),
+                Stream.of(v.constant())));
   }
 
   private org.spanloom.numerics.Jump jump(Jump jump, double time, double[] numbers) {

@@ -6,18 +6,19 @@
 package org.spanloom.analysis.coefficients;
 
 import java.util.List;
+import org.spanloom.language.model.Curve;
 
 /**
  * A program of several classes that share variables.
  *
  * @param parts the classes, in the order to run
  * @param variables number of shared variables
+ * @param curves what the programs take values of
  */
-record LinkedProgram(List<Part> parts, int variables) implements Program {
+record LinkedProgram(List<Part> parts, int variables, Curve[] curves) implements Program {
 
-  /** Copies the list. */
-  LinkedProgram {
-    parts = List.copyOf(parts);
+  LinkedProgram(List<Part> parts, int variables, List<Curve> curves) {
+    this(List.copyOf(parts), variables, curves.toArray(Curve[]::new));
   }
 
   /** The interface of a written class. */
@@ -28,15 +29,16 @@ record LinkedProgram(List<Part> parts, int variables) implements Program {
      * @param t time, in the declared unit of the system
      * @param variables shared with the other parts
      * @param out receives values at their places
+     * @param curves by number
      */
-    void run(double t, double[] variables, double[] out);
+    void run(double t, double[] variables, double[] out, Curve[] curves);
   }
 
   @Override
   public void run(double t, double[] out) {
     double[] shared = new double[variables];
     for (Part part : parts) {
-      part.run(t, shared, out);
+      part.run(t, shared, out, curves);
     }
   }
 }

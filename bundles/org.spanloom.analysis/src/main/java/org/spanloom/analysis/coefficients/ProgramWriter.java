@@ -9,8 +9,10 @@ import java.lang.invoke.MethodHandles;
 import java.util.ArrayList;
 import java.util.List;
 import org.objectweb.asm.ClassWriter;
+import org.objectweb.asm.Label;
 import org.objectweb.asm.MethodVisitor;
 import org.objectweb.asm.Opcodes;
+import org.spanloom.language.model.Curve;
 
 /**
  * Writes a {@link Program} as classes of its own, in JVM byte code.
@@ -45,7 +47,8 @@ final class ProgramWriter {
 
   private static final String NAME = "org/spanloom/analysis/coefficients/CompiledProgram";
   private static final String STRICT_MATH = "java/lang/StrictMath";
-  private static final String PART = "(D[D[D)V";
+  private static final String CURVE = Curve.class.getName().replace('.', '/');
+  private static final String PART = "(D[D[D[L" + CURVE + ";)V";
 
   private final TermGraph graph;
   private final int[] height;
@@ -91,6 +94,9 @@ final class ProgramWriter {
         if (node.right() >= 0) {
           uses[node.right()]++;
         }
+        if (node.third() >= 0) {
+          uses[node.third()]++;
+        }
       }
     }
     List<Step> steps = new ArrayList<>();
@@ -99,8 +105,9 @@ final class ProgramWriter {
       variable[i] = -1;
       TermGraph.Node node = graph.node(i);
       boolean leaf = node.left() < 0;
-      height[i] = leaf ? 0 : 1 + Math.max(of(height, node.left()), of(height, node.right()));
-      weight[i] = 1 + of(weight, node.left()) + of(weight, node.right());
+      int highest = Math.max(of(height, node.left()), of(height, node.right()));
+      height[i] = leaf ? 0 : 1 + Math.max(highest, of(height, node.third()));
+      weight[i] = 1 + of(weight, node.left()) + of(weight, node.right()) + of(weight, node.third());
       boolean large = height[i] > HIGHEST || weight[i] > LARGEST;
       if (uses[i] > 0 && !leaf && (uses[i] > 1 || large)) {
         variable[i] = variables++;
@@ -121,7 +128,7 @@ final class ProgramWriter {
       int to = Math.min(methods.size(), from + METHODS);
       parts.add(define(classOf(methods.subList(from, to))));
     }
-    return new LinkedProgram(parts, sharedVariables ? variables : 0);
+    return new LinkedProgram(parts, sharedVariables ? variables : 0, graph.curves());
   }
 
   private static int of(int[] measure, int node) {
@@ -152,14 +159,20 @@ final class ProgramWriter {
       return 6;
     }
     TermGraph.Node node = graph.node(number);
-    int own = node.left() < 0 ? 3 : 4;
+    int own =
+        switch (node.operation()) {
+          case CONSTANT, TIME -> 3;
+          case ADD, SUBTRACT, MULTIPLY, DIVIDE, NEGATE, POWER, CALL -> 4;
+          case SWITCH, CURVE -> 16;
+        };
     return own
         + (node.left() < 0 ? 0 : bytes(node.left(), false))
-        + (node.right() < 0 ? 0 : bytes(node.right(), false));
+        + (node.right() < 0 ? 0 : bytes(node.right(), false))
+        + (node.third() < 0 ? 0 : bytes(node.third(), false));
   }
 
   private byte[] classOf(List<List<Step>> methods) {
-    ClassWriter out = new ClassWriter(ClassWriter.COMPUTE_MAXS);
+    ClassWriter out = new ClassWriter(ClassWriter.COMPUTE_FRAMES);
     out.visit(
         Opcodes.V21,
         Opcodes.ACC_FINAL | Opcodes.ACC_SUPER,
@@ -178,6 +191,7 @@ final class ProgramWriter {
       run.visitVarInsn(Opcodes.DLOAD, 1);
       run.visitVarInsn(Opcodes.ALOAD, 3);
       run.visitVarInsn(Opcodes.ALOAD, 4);
+      run.visitVarInsn(Opcodes.ALOAD, 5);
       run.visitMethodInsn(Opcodes.INVOKESTATIC, NAME, "part" + k, PART, false);
       part(out, "part" + k, methods.get(k));
     }
@@ -186,7 +200,10 @@ final class ProgramWriter {
     return out.toByteArray();
   }
 
-  /** Arguments of a part: 0 and 1 time, 2 variables, 3 output; locals for variables follow. */
+  /**
+   * Arguments of a part: 0 and 1 time, 2 variables, 3 output, 4 curves; locals for variables
+   * follow.
+   */
   private void part(ClassWriter out, String name, List<Step> steps) {
     MethodVisitor code =
         out.visitMethod(Opcodes.ACC_PRIVATE | Opcodes.ACC_STATIC, name, PART, null, null);
@@ -211,7 +228,7 @@ final class ProgramWriter {
   }
 
   private int local(int node) {
-    return 4 + 2 * variable[node];
+    return 5 + 2 * variable[node];
   }
 
   private static void end(MethodVisitor code) {
@@ -253,7 +270,30 @@ final class ProgramWriter {
       }
       case POWER -> power(code, node);
       case CALL -> call(code, node);
+      case SWITCH -> choice(code, node);
+      case CURVE -> {
+        code.visitVarInsn(Opcodes.ALOAD, 4);
+        push(code, (int) node.bits());
+        code.visitInsn(Opcodes.AALOAD);
+        value(code, node.left(), false);
+        code.visitMethodInsn(Opcodes.INVOKEINTERFACE, CURVE, "at", "(D)D", true);
+      }
     }
+  }
+
+  /** Runs one of two branches; a gap that is no number takes the second one. */
+  private void choice(MethodVisitor code, TermGraph.Node node) {
+    Label otherwise = new Label();
+    Label end = new Label();
+    value(code, node.left(), false);
+    code.visitInsn(Opcodes.DCONST_0);
+    code.visitInsn(Opcodes.DCMPG);
+    code.visitJumpInsn(node.bits() == 1 ? Opcodes.IFGT : Opcodes.IFGE, otherwise);
+    value(code, node.right(), false);
+    code.visitJumpInsn(Opcodes.GOTO, end);
+    code.visitLabel(otherwise);
+    value(code, node.third(), false);
+    code.visitLabel(end);
   }
 
   private void operation(MethodVisitor code, TermGraph.Node node, int opcode) {

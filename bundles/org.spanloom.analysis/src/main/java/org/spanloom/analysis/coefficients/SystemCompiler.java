@@ -13,6 +13,7 @@ import java.util.Optional;
 import java.util.TreeSet;
 import org.spanloom.language.model.LinearForm;
 import org.spanloom.language.model.SystemModel;
+import org.spanloom.language.model.Term;
 import org.spanloom.language.model.TimeInterval;
 import org.spanloom.language.units.UnitOfMeasure;
 import org.spanloom.numerics.CoupledSystem;
@@ -61,7 +62,9 @@ public final class SystemCompiler {
             .orElseThrow(() -> new IllegalArgumentException(model.name() + " has no linear form"));
     SystemCompiler compiler = new SystemCompiler(model, form, parameters);
     List<Jump> jumps = new JumpCompiler(model, compiler.terms, parameters).jumps();
-    return new CompiledSystem(model, compiler.system(jumps), compiler.terms);
+    Breakpoints corners = compiler.breakpoints();
+    return new CompiledSystem(
+        model, compiler.system(jumps, corners), compiler.terms, corners.gap());
   }
 
   /**
@@ -74,7 +77,7 @@ public final class SystemCompiler {
     return JumpCompiler.refusal(model, parameters);
   }
 
-  private LinearSystem system(List<Jump> jumps) {
+  private LinearSystem system(List<Jump> jumps, Breakpoints corners) {
     int[] coupled = coupledRows();
     int[] divisor = divisors(coupled);
     int[] a = new int[n * n];
@@ -99,7 +102,6 @@ public final class SystemCompiler {
       b[i] = sum(b[i], graph.scaled(term, second / unit(i).factor()));
     }
     int[] mass = mass(coupled);
-    Breakpoints corners = new Breakpoints(Kinks.of(graph, range()));
     LinearSystem right =
         new CoefficientSystem(
             n,
@@ -110,6 +112,14 @@ public final class SystemCompiler {
             corners,
             jumps);
     return coupled.length == 0 ? right : coupled(right, coupled, mass, corners);
+  }
+
+  private Breakpoints breakpoints() {
+    List<Term> coefficients = new ArrayList<>();
+    form.mass().forEach(e -> coefficients.add(e.term()));
+    form.matrix().forEach(e -> coefficients.add(e.term()));
+    form.forcing().forEach(e -> coefficients.add(e.term()));
+    return new Breakpoints(coefficients, model.timeUnit().factor(), terms.parameters(), range());
   }
 
   private UnitOfMeasure unit(int component) {

@@ -12,8 +12,10 @@ import java.util.HashMap;
 import java.util.IdentityHashMap;
 import java.util.List;
 import java.util.Map;
+import org.spanloom.language.model.Curve;
 import org.spanloom.language.model.Function;
 import org.spanloom.language.model.Parameter;
+import org.spanloom.language.model.PulseTrain;
 import org.spanloom.language.model.Term;
 
 /**
@@ -44,7 +46,11 @@ final class TermGraph {
     /** Left to the power of right. */
     POWER,
     /** A function of left and, if it takes two arguments, right. */
-    CALL
+    CALL,
+    /** Right where left is negative (or 0, if the bits say so), else third. */
+    SWITCH,
+    /** A curve at the time left. */
+    CURVE
   }
 
   /**
@@ -53,9 +59,15 @@ final class TermGraph {
    * @param operation what it computes
    * @param left first operand, or -1
    * @param right second operand, or -1
-   * @param bits bits of a constant, number of the function of a call, else 0
+   * @param third third operand, or -1
+   * @param bits bits of a constant, number of the function of a call or of a curve, 1 for a switch
+   *     that counts a gap of 0 in, else 0
    */
-  record Node(Operation operation, int left, int right, long bits) {
+  record Node(Operation operation, int left, int right, int third, long bits) {
+
+    Node(Operation operation, int left, int right, long bits) {
+      this(operation, left, right, -1, bits);
+    }
 
     /** Returns the value of a constant. */
     double value() {
@@ -72,6 +84,8 @@ final class TermGraph {
 
   private final List<Node> nodes = new ArrayList<>();
   private final Map<Node, Integer> numbers = new HashMap<>();
+  private final List<Curve> curves = new ArrayList<>();
+  private final Map<Curve, Integer> curveNumbers = new HashMap<>();
   private final Map<Term, Integer> known = new IdentityHashMap<>();
   private final Map<String, Double> parameters;
   private final double timeFactor;
@@ -90,6 +104,11 @@ final class TermGraph {
   /** Returns a node by number. */
   Node node(int number) {
     return nodes.get(number);
+  }
+
+  /** Returns the curves, by their numbers. */
+  List<Curve> curves() {
+    return List.copyOf(curves);
   }
 
   /** Returns the number of nodes. */
@@ -155,6 +174,9 @@ final class TermGraph {
       case Term.Quotient q -> List.of(q.left(), q.right());
       case Term.Negation n -> List.of(n.operand());
       case Term.Power p -> List.of(p.base(), p.exponent());
+      case Term.Switch s -> List.of(s.gap(), s.then(), s.otherwise());
+      case Term.CurveTerm c -> List.of(c.time());
+      case Term.Pulse p -> List.of(p.time(), p.period(), p.width(), p.start());
       case Term.FunctionTerm f -> f.arguments();
     };
   }
@@ -171,6 +193,12 @@ final class TermGraph {
       case Term.Quotient q -> binary(Operation.DIVIDE, q.left(), q.right());
       case Term.Negation n -> combine(Operation.NEGATE, known.get(n.operand()), -1, 0);
       case Term.Power p -> binary(Operation.POWER, p.base(), p.exponent());
+      case Term.Switch s -> choice(s);
+      case Term.CurveTerm c -> curve(c.curve(), known.get(c.time()));
+      case Term.Pulse p ->
+          curve(
+              new PulseTrain(value(p.period()), value(p.width()), value(p.start())),
+              known.get(p.time()));
       case Term.FunctionTerm f -> call(f);
     };
   }
@@ -182,6 +210,33 @@ final class TermGraph {
 
   private int binary(Operation operation, Term left, Term right) {
     return combine(operation, known.get(left), known.get(right), 0);
+  }
+
+  private double value(Term constant) {
+    return node(known.get(constant)).value();
+  }
+
+  private int choice(Term.Switch term) {
+    int gap = known.get(term.gap());
+    int then = known.get(term.then());
+    int otherwise = known.get(term.otherwise());
+    if (isConstant(gap)) {
+      return term.holds(node(gap).value()) ? then : otherwise;
+    }
+    return intern(new Node(Operation.SWITCH, gap, then, otherwise, term.atZero() ? 1 : 0));
+  }
+
+  private int curve(Curve curve, int time) {
+    if (isConstant(time)) {
+      return constant(curve.at(node(time).value()));
+    }
+    Integer number = curveNumbers.get(curve);
+    if (number == null) {
+      number = curves.size();
+      curves.add(curve);
+      curveNumbers.put(curve, number);
+    }
+    return intern(new Node(Operation.CURVE, time, -1, number));
   }
 
   private int call(Term.FunctionTerm term) {
@@ -211,7 +266,8 @@ final class TermGraph {
 
   private static double value(Node node, double left, double right) {
     return switch (node.operation()) {
-      case CONSTANT, TIME -> throw new IllegalStateException(node + " has no operands");
+      case CONSTANT, TIME, SWITCH, CURVE ->
+          throw new IllegalStateException(node + " is not folded here");
       case ADD -> left + right;
       case SUBTRACT -> left - right;
       case MULTIPLY -> left * right;

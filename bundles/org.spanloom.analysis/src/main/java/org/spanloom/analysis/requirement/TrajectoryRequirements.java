@@ -5,9 +5,11 @@
  */
 package org.spanloom.analysis.requirement;
 
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.stream.Stream;
 import org.spanloom.analysis.Figures;
 import org.spanloom.analysis.SystemSolutions;
 import org.spanloom.analysis.coefficients.AffineEvaluator;
@@ -107,7 +109,15 @@ final class TrajectoryRequirements {
                     requirement.relation(),
                     along.estimate(left, t, side).value(),
                     along.estimate(right, t, side).value());
-        Place worst = along.least(margin, solution.nodes(), range(solution, requirement.until()));
+        double[] nodes =
+            Stream.of(
+                    solution.nodes(),
+                    system.besideCorners(requirement.left(), solution.range()),
+                    system.besideCorners(requirement.right(), solution.range()))
+                .flatMapToDouble(Arrays::stream)
+                .sorted()
+                .toArray();
+        Place worst = along.least(margin, nodes, range(solution, requirement.until()));
         yield Margins.compared(
             system.model(),
             requirement,

@@ -16,6 +16,7 @@ import java.util.function.Function;
 import java.util.stream.Collectors;
 import org.spanloom.analysis.coefficients.CompiledSystem;
 import org.spanloom.analysis.coefficients.SystemCompiler;
+import org.spanloom.language.model.Corners;
 import org.spanloom.language.model.Let;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.Parameter;
@@ -86,7 +87,11 @@ public final class Choice {
               + refusal.get()
               + ".");
     }
-    return SystemCompiler.compile(system, values);
+    CompiledSystem compiled = SystemCompiler.compile(system, values);
+    if (compiled.gap().isPresent() && compiled.gap().get() instanceof Corners.TooMany tooMany) {
+      throw new RefusedException(false, Refusals.text(compiled, tooMany) + ".");
+    }
+    return compiled;
   }
 
   private static Optional<String> firstError(Model model) {

@@ -7,6 +7,9 @@ package org.spanloom.analysis.solve;
 
 import org.spanloom.analysis.Figures;
 import org.spanloom.analysis.coefficients.CompiledSystem;
+import org.spanloom.language.model.Corners;
+import org.spanloom.language.model.Term;
+import org.spanloom.language.model.TermPrinter;
 import org.spanloom.numerics.Outcome;
 
 /** Says in words why the numerics have no result. */
@@ -38,5 +41,21 @@ public final class Refusals {
                   + " system";
         };
     return place + what + (unsolved.detail().isEmpty() ? "" : " (" + unsolved.detail() + ")") + ".";
+  }
+
+  /** Returns why corners and jumps of coefficients may be missing, and what to do. */
+  public static String text(CompiledSystem system, Corners.Gap gap) {
+    String name = system.model().name();
+    return switch (gap) {
+      case Corners.Untraced(Term term, double time) ->
+          "%s: from %s on, the times at which \"%s\" changes its sign could not all be found, so steps may cross them; write the condition more simply"
+              .formatted(
+                  name,
+                  Figures.at(system.model(), time),
+                  TermPrinter.text(term, system.model().timeName()));
+      case Corners.TooMany m ->
+          "%s: the coefficients have more than %s corners and jumps inside the interval, and each ends a step; shorten the interval, or take the mean of what changes so fast"
+              .formatted(name, Figures.text(Corners.LIMIT, 3));
+    };
   }
 }

@@ -97,6 +97,11 @@ class SimplifierTests {
       case Term.Quotient(Term a, Term b) -> Simplifier.quotient(rebuilt(a), rebuilt(b));
       case Term.Negation(Term a) -> Simplifier.negation(rebuilt(a));
       case Term.Power(Term a, Term b) -> Simplifier.power(rebuilt(a), rebuilt(b));
+      case Term.Switch(Term gap, boolean atZero, Term a, Term b) ->
+          Simplifier.choice(rebuilt(gap), atZero, rebuilt(a), rebuilt(b));
+      case Term.CurveTerm curve -> curve;
+      case Term.Pulse(Term time, Term period, Term width, Term start) ->
+          Simplifier.pulse(rebuilt(time), period, width, start);
       case Term.FunctionTerm(Function f, List<Term> a) ->
           Simplifier.call(f, a.stream().map(SimplifierTests::rebuilt).toList());
     };

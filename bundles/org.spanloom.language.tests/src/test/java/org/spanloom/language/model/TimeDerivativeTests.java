@@ -41,6 +41,12 @@ class TimeDerivativeTests {
       case Term.Negation(Term a) -> oracle(a, time).negate();
       case Term.Power(Term a, Term.Constant n) -> oracle(a, time).pow(n.value());
       case Term.Power(Term a, Term b) -> oracle(a, time).pow(oracle(b, time));
+      case Term.Switch choice ->
+          choice.holds(TermEvaluator.of(choice.gap()).at(time))
+              ? oracle(choice.then(), time)
+              : oracle(choice.otherwise(), time);
+      case Term.CurveTerm curve -> throw new IllegalArgumentException("no oracle for " + curve);
+      case Term.Pulse pulse -> ONE_VARIABLE.constant(TermEvaluator.of(pulse).at(time));
       case Term.FunctionTerm(Function function, List<Term> a) -> call(function, a, time);
     };
   }

@@ -46,7 +46,9 @@ class ProblemCasesTests {
           "inputs",
           "jumps",
           "matrices",
-          "parts");
+          "parts",
+          "switching",
+          "tables");
 
   private record Case(String file, String title, String input, String expected) {
 

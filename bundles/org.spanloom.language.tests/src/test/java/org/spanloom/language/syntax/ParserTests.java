@@ -63,6 +63,18 @@ class ParserTests {
       }
       case Expression.PowerExpression p ->
           "(" + grouped(p.base()) + "^" + grouped(p.exponent()) + ")";
+      case Expression.ChoiceExpression c ->
+          "(if "
+              + grouped(c.condition().left())
+              + " "
+              + c.condition().sign()
+              + " "
+              + grouped(c.condition().right())
+              + " then "
+              + grouped(c.then())
+              + " else "
+              + grouped(c.otherwise())
+              + ")";
       case Expression.ParenthesisedExpression p -> grouped(p.inner());
       case Expression.MissingExpression m -> "?";
     };

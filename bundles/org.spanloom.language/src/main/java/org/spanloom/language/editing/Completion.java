@@ -15,6 +15,7 @@ import org.spanloom.language.model.Function;
 import org.spanloom.language.model.MatrixFunction;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.NamedConstant;
+import org.spanloom.language.model.PulseTrain;
 import org.spanloom.language.syntax.Lexer;
 import org.spanloom.language.syntax.OverClause;
 import org.spanloom.language.syntax.Statement;
@@ -31,6 +32,7 @@ import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.PartStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Statement.TableStatement;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.syntax.Token;
 import org.spanloom.language.syntax.TokenKind;
@@ -52,6 +54,7 @@ public final class Completion {
           "state",
           "output",
           "matrix",
+          "table",
           "transfer",
           "jump",
           "initial values",
@@ -196,7 +199,15 @@ public final class Completion {
         values(true);
       }
       case "scaled" -> offer("condition", "2-norm condition number of a basis");
-      case "state", "parameter", "let", "input", "output", "matrix", "system", "values" -> {}
+      case "state",
+          "parameter",
+          "let",
+          "input",
+          "output",
+          "matrix",
+          "table",
+          "system",
+          "values" -> {}
       case "basis", "boundary" -> {}
       default -> {
         if (isCondition()) {
@@ -273,6 +284,9 @@ public final class Completion {
       case "jump" -> List.of("at", "every", "from", "to").forEach(w -> offer(w, "time of a jump"));
       case "system" ->
           List.of("over", "from", "to", "after", "before").forEach(w -> offer(w, "interval"));
+      case "table" ->
+          List.of("file", "time", "column", "hold", "linear", "monotone cubic", "extended")
+              .forEach(w -> offer(w, "table"));
       case "matrix" -> offer("file", "file \"NAME.mtx\", in the Matrix Market format");
       case "state" -> offer("scale", "size below which only absolute errors count");
       case "initial", "basis" -> offer("at", "time");
@@ -301,6 +315,7 @@ public final class Completion {
       for (Function function : Function.values()) {
         offer(function.code(), function.meaning());
       }
+      offer(PulseTrain.NAME, PulseTrain.MEANING);
       for (MatrixFunction function : MatrixFunction.values()) {
         offer(function.code(), function.meaning());
       }
@@ -345,6 +360,10 @@ public final class Completion {
               "input" + unit(input.unit().map(u -> u.code())));
       case StateStatement state ->
           offer(state.label(), "state" + unit(state.unit().map(u -> u.code())));
+      case TableStatement table ->
+          offer(
+              name + "(" + table.argument().text() + ")",
+              "table" + unit(table.unit().map(u -> u.code())));
       case MatrixStatement matrix ->
           offer(
               name + matrix.argument().map(a -> "(" + a.text() + ")").orElse(""),

@@ -18,6 +18,7 @@ import org.spanloom.language.model.Model;
 import org.spanloom.language.model.NamedConstant;
 import org.spanloom.language.model.NamedMatrix;
 import org.spanloom.language.model.Parameter;
+import org.spanloom.language.model.PulseTrain;
 import org.spanloom.language.model.StateComponent;
 import org.spanloom.language.model.SystemModel;
 import org.spanloom.language.model.TermEvaluator;
@@ -208,6 +209,9 @@ public final class Hover {
     Optional<Function> function = Function.named(name);
     function.ifPresent(f -> lines.add(f.code() + ": " + f.meaning()));
     MatrixFunction.named(name).ifPresent(f -> lines.add(f.code() + ": " + f.meaning()));
+    if (name.equals(PulseTrain.NAME)) {
+      lines.add(name + ": " + PulseTrain.MEANING);
+    }
     NamedConstant.named(name)
         .ifPresent(c -> lines.add(c.code() + " = " + c.value() + ": " + c.meaning()));
   }

@@ -16,6 +16,7 @@ import org.spanloom.language.editing.SymbolKind.Room;
 import org.spanloom.language.syntax.Comparison;
 import org.spanloom.language.syntax.Expression;
 import org.spanloom.language.syntax.Expression.CallExpression;
+import org.spanloom.language.syntax.Expression.ChoiceExpression;
 import org.spanloom.language.syntax.Expression.MissingExpression;
 import org.spanloom.language.syntax.Expression.NameExpression;
 import org.spanloom.language.syntax.Expression.NumberExpression;
@@ -62,9 +63,13 @@ import org.spanloom.language.syntax.Statement.Row;
 import org.spanloom.language.syntax.Statement.Setting;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Statement.TableStatement;
 import org.spanloom.language.syntax.Statement.TransferEnd;
 import org.spanloom.language.syntax.Statement.TransferStatement;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
+import org.spanloom.language.syntax.TableSource.TableFile;
+import org.spanloom.language.syntax.TableSource.TableRow;
+import org.spanloom.language.syntax.TableSource.TableRows;
 import org.spanloom.language.syntax.Token;
 import org.spanloom.language.syntax.TokenKind;
 import org.spanloom.language.text.SourceText;
@@ -126,6 +131,7 @@ final class NameBinder {
         state.scale().ifPresent(this::expression);
       }
       case MatrixStatement matrix -> matrix(matrix);
+      case TableStatement table -> table(table);
       case OutputStatement output -> {
         declared(Room.VALUES, output.name(), 0);
         expression(output.value());
@@ -170,6 +176,24 @@ final class NameBinder {
               found.add(
                   new Occurrence(symbol, Role.WRITTEN, target.name().span(), target.primes())));
       expression(binding.value());
+    }
+  }
+
+  private void table(TableStatement table) {
+    if (table.source() instanceof TableRows rows && !rows.allRead()) {
+      words(table.span());
+      return;
+    }
+    declared(Room.VALUES, table.name(), 0);
+    value(table.argument());
+    switch (table.source()) {
+      case TableFile file -> {}
+      case TableRows rows -> {
+        for (TableRow row : rows.rows()) {
+          expression(row.time());
+          expression(row.value());
+        }
+      }
     }
   }
 
@@ -317,6 +341,11 @@ final class NameBinder {
       case PowerExpression power -> {
         expression(power.base());
         expression(power.exponent());
+      }
+      case ChoiceExpression choice -> {
+        comparison(choice.condition());
+        expression(choice.then());
+        expression(choice.otherwise());
       }
       case ParenthesisedExpression parenthesised -> expression(parenthesised.inner());
     }

@@ -14,6 +14,7 @@ import java.util.Optional;
 import org.spanloom.language.model.Function;
 import org.spanloom.language.model.MatrixFunction;
 import org.spanloom.language.model.NamedConstant;
+import org.spanloom.language.model.PulseTrain;
 
 /** The names of one body and, around them, those of the bodies that hold it. */
 final class NameScope {
@@ -66,6 +67,10 @@ final class NameScope {
                 .map(c -> new Symbol(SymbolKind.CONSTANT, c.code(), List.of())))
         .or(() ->
             MatrixFunction.named(name)
-                .map(f -> new Symbol(SymbolKind.FUNCTION, f.code(), List.of())));
+                .map(f -> new Symbol(SymbolKind.FUNCTION, f.code(), List.of())))
+        .or(() ->
+            Optional.of(name)
+                .filter(PulseTrain.NAME::equals)
+                .map(n -> new Symbol(SymbolKind.FUNCTION, n, List.of())));
   }
 }

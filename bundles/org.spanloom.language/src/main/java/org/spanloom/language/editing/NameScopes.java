@@ -28,6 +28,7 @@ import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.PartStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Statement.TableStatement;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.syntax.SyntaxFile;
 import org.spanloom.language.text.Span;
@@ -154,6 +155,7 @@ final class NameScopes {
       case StateStatement s -> SymbolKind.STATE;
       case MatrixStatement s -> SymbolKind.MATRIX;
       case PartStatement s -> SymbolKind.PART;
+      case TableStatement s -> SymbolKind.TABLE;
       case OutputStatement s -> SymbolKind.OUTPUT;
       case InitialValuesStatement s -> SymbolKind.INITIAL_VALUES;
       case BoundaryStatement s -> SymbolKind.BOUNDARY;
@@ -171,6 +173,7 @@ final class NameScopes {
       case "state" -> SymbolKind.STATE;
       case "matrix" -> SymbolKind.MATRIX;
       case "part" -> SymbolKind.PART;
+      case "table" -> SymbolKind.TABLE;
       case "output" -> SymbolKind.OUTPUT;
       case "initial" -> SymbolKind.INITIAL_VALUES;
       case "boundary" -> SymbolKind.BOUNDARY;

@@ -28,6 +28,7 @@ import org.spanloom.language.syntax.Statement.PartStatement;
 import org.spanloom.language.syntax.Statement.RequireStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Statement.TableStatement;
 import org.spanloom.language.syntax.Statement.TransferStatement;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.syntax.SyntaxFile;
@@ -89,6 +90,14 @@ public final class Outline {
               unit(state.unit()),
               state.span(),
               state.name().span(),
+              List.of());
+      case TableStatement table ->
+          new OutlineNode(
+              Kind.LET,
+              table.name().text() + "(" + table.argument().text() + ")",
+              unit(table.unit()),
+              table.span(),
+              table.name().span(),
               List.of());
       case MatrixStatement matrix ->
           new OutlineNode(

@@ -29,6 +29,8 @@ public enum SymbolKind {
   MATRIX("matrix", Room.VALUES),
   /** A part. */
   PART("part", Room.VALUES),
+  /** A table. */
+  TABLE("table", Room.VALUES),
   /** A candidate basis. */
   BASIS("basis", Room.BASES),
   /** A declaration that could not be read. */

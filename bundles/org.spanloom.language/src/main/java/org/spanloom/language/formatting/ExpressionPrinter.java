@@ -11,6 +11,7 @@ import org.spanloom.language.syntax.Expression;
 import org.spanloom.language.syntax.Expression.Addend;
 import org.spanloom.language.syntax.Expression.Argument;
 import org.spanloom.language.syntax.Expression.CallExpression;
+import org.spanloom.language.syntax.Expression.ChoiceExpression;
 import org.spanloom.language.syntax.Expression.Factor;
 import org.spanloom.language.syntax.Expression.MissingExpression;
 import org.spanloom.language.syntax.Expression.NameExpression;
@@ -87,6 +88,11 @@ final class ExpressionPrinter {
       }
       case PowerExpression power ->
           expression(power.base()).words("^").expression(power.exponent());
+      case ChoiceExpression choice -> {
+        words("if").expression(choice.condition().left()).sign(choice.condition().sign());
+        expression(choice.condition().right());
+        words("then").expression(choice.then()).words("else").expression(choice.otherwise());
+      }
       case ParenthesisedExpression inner -> words("(").expression(inner.inner()).words(")");
       case MissingExpression missing -> {}
     }

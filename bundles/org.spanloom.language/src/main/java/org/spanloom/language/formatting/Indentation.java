@@ -65,7 +65,7 @@ final class Indentation {
     }
     if (!statement.tokens().isEmpty()) {
       lastWord = word;
-      rowsFollow = row || word.equals("basis") || word.equals("matrix");
+      rowsFollow = row || word.equals("basis") || word.equals("matrix") || word.equals("table");
     }
     boolean brace = statement.tokens().isEmpty() && statement.closesBlock();
     if (brace && !blocks.isEmpty()) {

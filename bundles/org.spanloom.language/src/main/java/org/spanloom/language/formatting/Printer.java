@@ -10,6 +10,7 @@ import org.spanloom.language.syntax.MatrixSource.MatrixExpression;
 import org.spanloom.language.syntax.MatrixSource.MatrixFile;
 import org.spanloom.language.syntax.MatrixSource.MatrixRow;
 import org.spanloom.language.syntax.MatrixSource.MatrixRows;
+import org.spanloom.language.syntax.QuotedText;
 import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.AccuracyStatement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
@@ -33,10 +34,14 @@ import org.spanloom.language.syntax.Statement.Row;
 import org.spanloom.language.syntax.Statement.Setting;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Statement.TableStatement;
 import org.spanloom.language.syntax.Statement.TransferEnd;
 import org.spanloom.language.syntax.Statement.TransferStatement;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.syntax.SyntaxFile;
+import org.spanloom.language.syntax.TableSource.TableFile;
+import org.spanloom.language.syntax.TableSource.TableRow;
+import org.spanloom.language.syntax.TableSource.TableRows;
 
 /**
  * Writes a tree as a model text in its canonical layout. Reading the text of a tree without
@@ -93,6 +98,7 @@ public final class Printer {
       case MatrixStatement matrix -> matrix(matrix);
       case ImportStatement read -> out.words("import", "\"" + read.path().text() + "\"");
       case PartStatement part -> part(part);
+      case TableStatement table -> table(table);
       case OutputStatement output -> {
         documentation(output.documentation());
         out.words("output", output.name().text()).unit(output.unit()).words("=");
@@ -142,6 +148,26 @@ public final class Printer {
     out.words("{").endLine();
     system.body().forEach(this::statement);
     out.words("}");
+  }
+
+  private void table(TableStatement table) {
+    documentation(table.documentation());
+    out.words("table", table.name().text(), "(", table.argument().text(), ")").unit(table.unit());
+    out.words("=");
+    if (table.source() instanceof TableFile file) {
+      out.words("file", quoted(file.path()), "time", quoted(file.time())).unit(file.timeUnit());
+      out.words("column", quoted(file.column()));
+    }
+    out.words(table.method().words(), table.extended() ? "extended" : "");
+    if (table.source() instanceof TableRows rows) {
+      for (TableRow row : rows.rows()) {
+        out.endLine().words("row").list(List.of(row.time(), row.value()));
+      }
+    }
+  }
+
+  private static String quoted(QuotedText text) {
+    return "\"" + text.text() + "\"";
   }
 
   private void matrix(MatrixStatement matrix) {

@@ -29,6 +29,7 @@ import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.TableStatement;
 import org.spanloom.language.syntax.Statement.Uncertainty;
 import org.spanloom.language.text.Span;
 import org.spanloom.language.units.Dimension;
@@ -47,6 +48,8 @@ final class Declarations {
   private final UnitResolver units;
   private final Resolver resolver;
   private final MatrixReader matrixReader;
+  private final TableReader tableReader;
+  private final Map<TableStatement, PiecewiseCurve> tables = new LinkedHashMap<>();
   private final Map<String, DeclaredItem> items = new LinkedHashMap<>();
   private final Map<String, Name> taken = new HashMap<>();
   private final Set<String> duplicates = new HashSet<>();
@@ -66,6 +69,7 @@ final class Declarations {
     this.units = frame.units();
     this.resolver = frame.resolver();
     this.matrixReader = new MatrixReader(frame);
+    this.tableReader = new TableReader(frame);
   }
 
   /** Returns the parameters read, in the order of the text. */
@@ -139,7 +143,8 @@ final class Declarations {
     boolean builtIn =
         Function.named(text).isPresent()
             || MatrixFunction.named(text).isPresent()
-            || NamedConstant.named(text).isPresent();
+            || NamedConstant.named(text).isPresent()
+            || text.equals(PulseTrain.NAME);
     if (builtIn) {
       problems.report(
           ProblemKind.NAME_RESERVED,
@@ -188,6 +193,7 @@ final class Declarations {
       case LetStatement let -> let(let);
       case InputStatement input -> input(input);
       case MatrixStatement matrix -> matrix(matrix);
+      case TableStatement table -> table(table);
       case OutputStatement output -> output(output);
       default -> Optional.empty();
     };
@@ -344,6 +350,36 @@ final class Declarations {
     return Optional.of(new LetMeaning(let, value.get().depth() + 1));
   }
 
+  private Optional<LetMeaning> table(TableStatement statement) {
+    Optional<UnitOfMeasure> unit = units.declared(statement.unit());
+    if (!isTime(statement.argument(), "a table") || unit.isEmpty()) {
+      return Optional.empty();
+    }
+    Optional<PiecewiseCurve> curve = tableReader.read(statement, unit.get());
+    if (curve.isEmpty()) {
+      return Optional.empty();
+    }
+    String name = frame.label(statement.name().text());
+    Let table =
+        new Let(
+            name,
+            unit.get(),
+            new Term.CurveTerm(name, curve.get(), new Term.Time()),
+            true,
+            false,
+            statement.documentation(),
+            frame.placed(statement.span()),
+            frame.placed(statement.name().span()));
+    lets.put(statement.span().start(), table);
+    tables.put(statement, curve.get());
+    return Optional.of(new LetMeaning(table, 2));
+  }
+
+  /** Reports tables that do not cover the interval. */
+  void checkTables(Times times) {
+    tables.forEach((statement, curve) -> tableReader.checkRange(statement, curve, times));
+  }
+
   private Optional<? extends Meaning> input(InputStatement statement) {
     Optional<UnitOfMeasure> unit = units.declared(statement.unit());
     if (!isTime(statement.argument(), "an input") || unit.isEmpty()) {
@@ -480,7 +516,10 @@ final class Declarations {
       reportUnused(matrix.name(), "matrix", matrix.nameSpan());
     }
     for (Let let : lets()) {
-      reportUnused(let.name(), let.isInput() ? "input" : "named expression", let.nameSpan());
+      reportUnused(
+          let.name(),
+          let.isInput() ? "input" : let.isTable() ? "table" : "named expression",
+          let.nameSpan());
     }
   }
 

@@ -20,6 +20,8 @@ import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
+import org.spanloom.language.syntax.Statement.TableStatement;
+import org.spanloom.language.syntax.TableSource.TableRows;
 
 /** A declaration of one frame that is to be read after those it uses. */
 record DeclaredItem(Declarations owner, Declaration declaration) {
@@ -57,6 +59,11 @@ record DeclaredItem(Declarations owner, Declaration declaration) {
       case LetStatement let -> expressions.add(let.value());
       case InputStatement input -> expressions.add(input.value());
       case MatrixStatement matrix -> expressions.addAll(expressions(matrix.source()));
+      case TableStatement table -> {
+        if (table.source() instanceof TableRows rows) {
+          rows.rows().forEach(r -> expressions.addAll(List.of(r.time(), r.value())));
+        }
+      }
       case OutputStatement output -> expressions.add(output.value());
       default -> {}
     }

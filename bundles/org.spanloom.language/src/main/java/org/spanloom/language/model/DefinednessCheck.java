@@ -166,6 +166,9 @@ final class DefinednessCheck {
           case Term.Quotient(Term a, Term b) ->
               b instanceof Term.Constant(double divisor) && divisor != 0 && isPlain(a, depth + 1);
           case Term.Power power -> false;
+          case Term.Switch choice -> false;
+          case Term.Pulse pulse -> false;
+          case Term.CurveTerm curve -> true;
           case Term.FunctionTerm call -> false;
         };
   }

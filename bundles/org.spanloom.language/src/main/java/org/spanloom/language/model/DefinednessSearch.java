@@ -48,6 +48,7 @@ final class DefinednessSearch {
 
   private final TermTape tape;
   private final TermIntervals intervals;
+  private final Liveness liveness;
   private final TermEvaluator value;
   private final double[] constants;
   private final List<Guard> guards = new ArrayList<>();
@@ -62,6 +63,7 @@ final class DefinednessSearch {
   DefinednessSearch(Term term, TimeInterval interval, UnitOfMeasure timeUnit, double start) {
     this.tape = TermTape.of(term);
     this.intervals = new TermIntervals(tape);
+    this.liveness = new Liveness(tape);
     this.value = TermEvaluator.of(tape);
     this.constants = value.constants();
     this.interval = interval;
@@ -99,6 +101,8 @@ final class DefinednessSearch {
       if (tape.varies(guard.node())
           || tape.varies(guard.owner()) && guard.kind() == Guard.Kind.POWER) {
         guards.add(guard);
+      } else if (failsAlways(guard) && mayBeAvoided(guard)) {
+        guards.add(guard);
       } else if (failsAlways(guard)) {
         double at = shown(origin);
         return new Definedness.Undefined(
@@ -122,6 +126,13 @@ final class DefinednessSearch {
             ? new Clear()
             : search(origin, first, interval.startOpen());
     return combined(left, right);
+  }
+
+  /** Tells whether a guard stands in a branch that is not always taken. */
+  private boolean mayBeAvoided(Guard guard) {
+    intervals.enclose(new Interval(first, last));
+    liveness.update(intervals);
+    return !liveness.matters(guard);
   }
 
   private boolean failsAlways(Guard guard) {
@@ -185,7 +196,7 @@ final class DefinednessSearch {
       if (work >= patience) {
         return new Open(range.near(), guard, "bounds on its values are too wide to tell");
       }
-      if (judged(guard) == Guard.Verdict.FAILS) {
+      if (judged(guard) == Guard.Verdict.FAILS && liveness.matters(guard)) {
         return fault(range.near(), guard);
       }
       boolean endsOpen = endOpen && range.far() == end;
@@ -233,8 +244,12 @@ final class DefinednessSearch {
   private Optional<Guard> firstInDoubt(Range range) {
     Interval times = range.times();
     intervals.enclose(times);
+    liveness.update(intervals);
     Map<Integer, Interval> known = new HashMap<>();
     for (Guard guard : guards) {
+      if (!liveness.mayMatter(guard)) {
+        continue;
+      }
       Guard.Verdict verdict = judged(guard);
       if (verdict == Guard.Verdict.OPEN && times.isBounded() && guard.kind() != Guard.Kind.FINITE) {
         GuardProbe probe = probe(guard);

@@ -12,6 +12,7 @@ import org.spanloom.language.syntax.Expression;
 import org.spanloom.language.syntax.Expression.Addend;
 import org.spanloom.language.syntax.Expression.Argument;
 import org.spanloom.language.syntax.Expression.CallExpression;
+import org.spanloom.language.syntax.Expression.ChoiceExpression;
 import org.spanloom.language.syntax.Expression.Factor;
 import org.spanloom.language.syntax.Expression.MissingExpression;
 import org.spanloom.language.syntax.Expression.NameExpression;
@@ -80,6 +81,12 @@ final class ExpressionNames {
       case PowerExpression power -> {
         visit(power.base(), visitor);
         visit(power.exponent(), visitor);
+      }
+      case ChoiceExpression choice -> {
+        visit(choice.condition().left(), visitor);
+        visit(choice.condition().right(), visitor);
+        visit(choice.then(), visitor);
+        visit(choice.otherwise(), visitor);
       }
       case ParenthesisedExpression parenthesised -> visit(parenthesised.inner(), visitor);
     }

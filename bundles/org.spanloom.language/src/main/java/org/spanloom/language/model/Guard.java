@@ -110,6 +110,12 @@ record Guard(Kind kind, int node, int owner, int shown) {
         case Term.Time t -> guards.add(factor.guard(kind, owner));
         case Term.Sum sum -> guards.add(factor.guard(kind, owner));
         case Term.Difference difference -> guards.add(factor.guard(kind, owner));
+        case Term.Switch choice -> {
+          open.push(factor.below(tape.operand(i, 2)));
+          open.push(factor.below(tape.operand(i, 1)));
+        }
+        case Term.Pulse pulse -> guards.add(factor.guard(kind, owner));
+        case Term.CurveTerm curve -> guards.add(factor.guard(kind, owner));
       }
     }
   }
@@ -157,6 +163,15 @@ record Guard(Kind kind, int node, int owner, int shown) {
       case DIVISOR, TANGENT -> true;
       case POWER -> isWhole(exponent);
       case LOGARITHM, ROOT, INVERSE, FINITE -> false;
+    };
+  }
+
+  /** Tells whether the operation grows without bound as the guard comes to fail. */
+  boolean keepsBounded(Interval exponent) {
+    return switch (kind) {
+      case DIVISOR, TANGENT, LOGARITHM -> true;
+      case POWER -> !exponent.isEmpty() && exponent.low() < 0;
+      case ROOT, INVERSE, FINITE -> false;
     };
   }
 

@@ -16,6 +16,7 @@ final class GuardProbe {
   private final Guard guard;
   private final TermTape tape;
   private final TermIntervals intervals;
+  private final Liveness liveness;
   private final TermTape slopeTape;
   private final TermIntervals slope;
   private final TermEvaluator slopeValue;
@@ -29,6 +30,7 @@ final class GuardProbe {
     this.guard = guard;
     this.tape = tape;
     this.intervals = intervals;
+    this.liveness = new Liveness(tape);
     Term derivative = TimeDerivative.of(tape.node(guard.node()));
     this.slopeTape = TermTape.of(derivative);
     this.slope = new TermIntervals(slopeTape);
@@ -40,9 +42,16 @@ final class GuardProbe {
     return guard.kind() == Guard.Kind.POWER ? intervals.exponent(guard.owner()) : Interval.EMPTY;
   }
 
-  /** Judges the guard at one time. */
+  /**
+   * Judges the guard at one time. In a branch that is not taken then it holds, unless it keeps a
+   * value from growing without bound as the branch is left.
+   */
   Guard.Verdict judge(double time) {
     intervals.enclose(Interval.at(time));
+    liveness.update(intervals);
+    if (!liveness.mayMatter(guard) && !guard.keepsBounded(exponent(guard, intervals))) {
+      return Guard.Verdict.HOLDS;
+    }
     return guard.judge(intervals.of(guard.node()), exponent(guard, intervals));
   }
 
@@ -133,7 +142,7 @@ final class GuardProbe {
    * @param limit how far to look at most
    */
   double touchNear(double time, double width, double limit) {
-    for (double h = width; h <= limit; h *= 2) {
+    for (double h = width; h > 0 && h <= limit; h *= 2) {
       double below = slopeValue.at(time - h);
       double above = slopeValue.at(time + h);
       if (below * above < 0) {
@@ -168,13 +177,21 @@ final class GuardProbe {
   boolean isContinuous(Interval times) {
     intervals.enclose(times);
     for (int i = 0; i <= guard.node(); i++) {
-      if (tape.varies(i)
-          && tape.node(i) instanceof Term.FunctionTerm call
-          && call.function() == Function.SIGN
-          && intervals.of(tape.operand(i, 0)).contains(0)) {
+      if (tape.varies(i) && mayJump(i)) {
         return false;
       }
     }
     return true;
+  }
+
+  private boolean mayJump(int i) {
+    return switch (tape.node(i)) {
+      case Term.FunctionTerm call ->
+          call.function() == Function.SIGN && intervals.of(tape.operand(i, 0)).contains(0);
+      case Term.Switch choice -> Branch.of(choice, intervals.of(tape.operand(i, 0))) == Branch.OPEN;
+      case Term.Pulse pulse -> !intervals.of(i).isPoint();
+      case Term.CurveTerm curve -> curve.curve().jumps() && !intervals.of(i).isPoint();
+      default -> false;
+    };
   }
 }

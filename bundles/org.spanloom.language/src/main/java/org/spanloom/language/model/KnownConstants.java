@@ -46,6 +46,13 @@ final class KnownConstants {
           case Term.Negation(Term a) -> -value(a);
           case Term.Power(Term base, Term exponent) -> power(value(base), value(exponent));
           case Term.FunctionTerm call -> call(call);
+          case Term.Switch(Term gap, boolean atZero, Term a, Term b) -> {
+            double size = value(gap);
+            boolean holds = atZero ? size <= 0 : size < 0;
+            yield Double.isNaN(size) ? UNKNOWN : value(holds ? a : b);
+          }
+          case Term.Pulse pulse -> UNKNOWN;
+          case Term.CurveTerm curve -> UNKNOWN;
           case Term.Time time -> UNKNOWN;
         };
     return Double.isFinite(value) ? value : UNKNOWN;

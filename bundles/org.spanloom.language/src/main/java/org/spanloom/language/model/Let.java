@@ -28,4 +28,10 @@ public record Let(
     boolean isInput,
     String documentation,
     Span span,
-    Span nameSpan) {}
+    Span nameSpan) {
+
+  /** Tells whether it was declared as a table. */
+  public boolean isTable() {
+    return value instanceof Term.CurveTerm;
+  }
+}

@@ -106,7 +106,8 @@ sealed interface Meaning {
     return switch (this) {
       case TimeMeaning m -> "the independent variable";
       case ParameterMeaning m -> "a parameter";
-      case LetMeaning m -> m.let().isInput() ? "an input" : "a named expression";
+      case LetMeaning m ->
+          m.let().isInput() ? "an input" : m.let().isTable() ? "a table" : "a named expression";
       case StateMeaning m -> "a state";
       case MatrixMeaning m -> "a matrix";
       case OutputMeaning m -> "an output";

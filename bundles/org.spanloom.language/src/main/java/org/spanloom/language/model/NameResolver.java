@@ -31,12 +31,14 @@ import org.spanloom.language.units.UnitOfMeasure;
 final class NameResolver {
 
   private final Resolver resolver;
+  private final Switching switching;
   private final Scope scope;
   private final Problems problems;
   private final MatrixNames matrices;
 
-  NameResolver(Resolver resolver, Scope scope, Problems problems) {
+  NameResolver(Resolver resolver, Switching switching, Scope scope, Problems problems) {
     this.resolver = resolver;
+    this.switching = switching;
     this.scope = scope;
     this.problems = problems;
     this.matrices = new MatrixNames(this, resolver, scope, problems);
@@ -113,7 +115,9 @@ final class NameResolver {
       return Optional.of(
           Quantity.constant(new Term.Constant(constant.get().value()), Dimension.NONE, 1));
     }
-    if (Function.named(word).isPresent() || MatrixFunction.named(word).isPresent()) {
+    if (Function.named(word).isPresent()
+        || MatrixFunction.named(word).isPresent()
+        || word.equals(PulseTrain.NAME)) {
       problems.report(
           ProblemKind.NAME_MISUSED,
           name.span(),
@@ -390,6 +394,9 @@ final class NameResolver {
   }
 
   private Optional<? extends Value> function(CallExpression call, Place place) {
+    if (call.callee().label().equals(PulseTrain.NAME)) {
+      return switching.pulse(call, place);
+    }
     NameExpression callee = call.callee();
     String word = callee.name().text();
     if (MatrixFunction.named(word).isPresent() && callee.primes() == 0) {
@@ -488,12 +495,7 @@ final class NameResolver {
     NameExpression callee = call.callee();
     useAll(call);
     String word = callee.name().text();
-    if (word.equals("pulse")) {
-      problems.report(
-          ProblemKind.STATEMENT_NOT_SUPPORTED,
-          call.span(),
-          "\"pulse\" is not read by this version yet: write a smooth function of time.");
-    } else if (NamedConstant.named(word).isPresent() || Function.named(word).isPresent()) {
+    if (NamedConstant.named(word).isPresent() || Function.named(word).isPresent()) {
       problems.report(
           ProblemKind.NAME_MISUSED,
           callee.span(),

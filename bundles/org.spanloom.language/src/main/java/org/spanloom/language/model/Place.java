@@ -38,5 +38,12 @@ record Place(String what, boolean time, boolean states, boolean samples) {
   static final Place LIMIT = new Place("a limit", false, false, false);
   static final Place PERIOD = new Place("a period", false, false, false);
   static final Place INVARIANT = new Place("an invariant", true, true, false);
+  static final Place TABLE = new Place("a row of a table", false, false, false);
+  static final Place PULSE = new Place("the shape of a pulse", false, false, false);
   static final Place COMPARISON = new Place("a requirement", true, true, true);
+
+  /** A condition in a place: states are read in it only to be reported. */
+  Place condition() {
+    return new Place("a condition", time, true, false);
+  }
 }

@@ -15,6 +15,7 @@ import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.syntax.Expression;
 import org.spanloom.language.syntax.Expression.Addend;
 import org.spanloom.language.syntax.Expression.CallExpression;
+import org.spanloom.language.syntax.Expression.ChoiceExpression;
 import org.spanloom.language.syntax.Expression.Factor;
 import org.spanloom.language.syntax.Expression.MissingExpression;
 import org.spanloom.language.syntax.Expression.NameExpression;
@@ -45,13 +46,15 @@ final class Resolver {
   private final Problems problems;
   private final Literals literals;
   private final NameResolver names;
+  private final Switching switching;
   private final MatrixAlgebra matrices;
 
   Resolver(Frame frame) {
     this.frame = frame;
     this.problems = frame.problems();
     this.literals = new Literals(problems, frame.units());
-    this.names = new NameResolver(this, frame.scope(), problems);
+    this.switching = new Switching(this, frame);
+    this.names = new NameResolver(this, switching, frame.scope(), problems);
     this.matrices = new MatrixAlgebra(this, frame);
   }
 
@@ -79,10 +82,18 @@ final class Resolver {
           case SumExpression sum -> sum(sum, place);
           case ProductExpression product -> product(product, place);
           case PowerExpression power -> power(power, place);
+          case ChoiceExpression choice ->
+              switching.choice(choice, place, branch -> quantity(branch, place));
           case ParenthesisedExpression parenthesised -> value(parenthesised.inner(), place);
           case MissingExpression missing -> Optional.empty();
         };
     return value.filter(v -> isWithinLimits(v, expression));
+  }
+
+  private static Expression inner(Expression expression) {
+    return expression instanceof ParenthesisedExpression parenthesised
+        ? inner(parenthesised.inner())
+        : expression;
   }
 
   private boolean isWithinLimits(Value value, Expression expression) {
@@ -128,6 +139,11 @@ final class Resolver {
       return value.isEmpty()
           ? Optional.empty()
           : inRange(expression, unit.toBase(value.getAsDouble()), unit.dimension());
+    }
+    if (inner(expression) instanceof ChoiceExpression choice) {
+      return switching
+          .choice(choice, place, branch -> given(branch, unit, what, place))
+          .filter(v -> isWithinLimits(v, expression));
     }
     return quantity(expression, place)
         .filter(v -> fits(v, unit.dimension(), unit.code(), expression.span(), what));
@@ -229,7 +245,7 @@ final class Resolver {
         first = value;
         firstSpan = expression.span();
       } else if (!value.get().zero()) {
-        sound = fitsFirst(first.orElseThrow(), firstSpan, value.get(), expression);
+        sound = fitsFirst(first.orElseThrow(), firstSpan, value.get(), expression, "added");
       }
       summands.add(new Summand(addend.subtracted(), value.get(), expression.span()));
     }
@@ -257,7 +273,8 @@ final class Resolver {
     return total.total(dimension);
   }
 
-  private boolean fitsFirst(Value first, Span firstSpan, Value value, Expression expression) {
+  /** Tells whether two values have one dimension; reports the second one if not. */
+  boolean fitsFirst(Value first, Span firstSpan, Value value, Expression expression, String done) {
     if (first.dimension().equals(value.dimension())) {
       return true;
     }
@@ -272,7 +289,9 @@ final class Resolver {
             + shown(firstSpan)
             + "\" is "
             + in(first.dimension())
-            + ": only values of one dimension can be added; check the factors and their units.",
+            + ": only values of one dimension can be "
+            + done
+            + "; check the factors and their units.",
         unitFix(expression, first.dimension()));
     return false;
   }

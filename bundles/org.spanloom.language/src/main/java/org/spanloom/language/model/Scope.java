@@ -155,6 +155,7 @@ final class Scope {
     for (MatrixFunction function : MatrixFunction.values()) {
       names.add(function.code());
     }
+    names.add(PulseTrain.NAME);
     return Nearest.of(word, names);
   }
 

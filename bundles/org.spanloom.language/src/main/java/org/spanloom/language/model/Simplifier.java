@@ -118,6 +118,9 @@ public final class Simplifier {
       case Term.Product product -> new Term.Negation(a);
       case Term.Quotient quotient -> new Term.Negation(a);
       case Term.Power power -> new Term.Negation(a);
+      case Term.Switch choice -> new Term.Negation(a);
+      case Term.Pulse pulse -> new Term.Negation(a);
+      case Term.CurveTerm curve -> new Term.Negation(a);
       case Term.FunctionTerm call -> new Term.Negation(a);
     };
   }
@@ -131,6 +134,28 @@ public final class Simplifier {
       return Term.ONE;
     }
     return folded(new Term.Power(a, b));
+  }
+
+  /**
+   * Returns {@code if gap < 0 then a else b}, or {@code <=}; a branch that is never taken is left
+   * out.
+   */
+  public static Term choice(Term gap, boolean atZero, Term then, Term otherwise) {
+    Term.Switch choice = new Term.Switch(gap, atZero, then, otherwise);
+    if (gap instanceof Term.Constant(double value)) {
+      return choice.holds(value) ? then : otherwise;
+    }
+    return isSame(then, otherwise) && surelyHasAValue(gap) ? then : choice;
+  }
+
+  /** Returns {@code pulse(time, period, width, start)}. */
+  public static Term pulse(Term time, Term period, Term width, Term start) {
+    return folded(new Term.Pulse(time, period, width, start));
+  }
+
+  /** Returns the value of a table at a time. */
+  public static Term curve(String name, PiecewiseCurve curve, Term time) {
+    return folded(new Term.CurveTerm(name, curve, time));
   }
 
   /** Returns the value of a function. */
@@ -194,6 +219,9 @@ public final class Simplifier {
       case Term.Difference difference -> true;
       case Term.Product product -> true;
       case Term.Negation negation -> true;
+      case Term.Switch choice -> true;
+      case Term.Pulse pulse -> true;
+      case Term.CurveTerm curve -> true;
     };
   }
 
@@ -235,6 +263,9 @@ public final class Simplifier {
       case Term.Quotient x -> b instanceof Term.Quotient;
       case Term.Negation x -> b instanceof Term.Negation;
       case Term.Power x -> b instanceof Term.Power;
+      case Term.Switch x -> b instanceof Term.Switch y && x.atZero() == y.atZero();
+      case Term.Pulse x -> b instanceof Term.Pulse;
+      case Term.CurveTerm x -> b instanceof Term.CurveTerm y && x.curve() == y.curve();
     };
   }
 }

@@ -38,6 +38,7 @@ import org.spanloom.language.syntax.Statement.PartStatement;
 import org.spanloom.language.syntax.Statement.RequireStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Statement.TableStatement;
 import org.spanloom.language.syntax.Statement.TransferStatement;
 import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.syntax.Token;
@@ -109,6 +110,7 @@ final class SystemReader {
     collect(system.root(), List.of(statement));
     Declarations.read(frames);
     Times times = new Times(system, statement.over(), timeKnown);
+    frames.forEach(frame -> frame.declarations().checkTables(times));
     EquationReader equations = new EquationReader(system);
     for (Frame frame : frames) {
       readEquations(frame, equations);
@@ -247,6 +249,7 @@ final class SystemReader {
         case LetStatement let -> declarations.collect(let);
         case InputStatement input -> declarations.collect(input);
         case MatrixStatement matrix -> declarations.collect(matrix);
+        case TableStatement table -> declarations.collect(table);
         case OutputStatement output -> declarations.collect(output);
         case StateStatement state when state.primes() > 0 -> derivatives.add(state);
         case StateStatement state -> {

@@ -49,6 +49,41 @@ public sealed interface Term {
   /** {@code a ^ b}; a whole constant exponent is multiplied out where that is exact. */
   record Power(Term base, Term exponent) implements Term {}
 
+  /**
+   * {@code if gap < 0 then a else b}; only the branch that is taken needs a value.
+   *
+   * @param gap the smaller side of the condition as written minus the larger one
+   * @param atZero whether the first branch is taken where the gap is 0, too
+   * @param then the value where the condition holds
+   * @param otherwise the value elsewhere
+   */
+  record Switch(Term gap, boolean atZero, Term then, Term otherwise) implements Term {
+
+    /** Tells whether the condition holds for a value of the gap; not for one that is no number. */
+    public boolean holds(double value) {
+      return atZero ? value <= 0 : value < 0;
+    }
+  }
+
+  /**
+   * {@code pulse(t, period = P, width = W, start = S)}; see {@link PulseTrain}.
+   *
+   * @param time the running time, or a time put in its place
+   * @param period without time
+   * @param width without time
+   * @param start without time
+   */
+  record Pulse(Term time, Term period, Term width, Term start) implements Term {}
+
+  /**
+   * The value of a table at a time.
+   *
+   * @param name name of the table
+   * @param curve its interpolation, or a derivative of it
+   * @param time the running time, or a time put in its place
+   */
+  record CurveTerm(String name, PiecewiseCurve curve, Term time) implements Term {}
+
   /** A call of a built-in function, for example {@code sin(w*t)}. */
   record FunctionTerm(Function function, List<Term> arguments) implements Term {
     /** Copies the list. */

@@ -89,6 +89,10 @@ public final class TermEvaluator {
       case Term.Quotient quotient -> operand(i, 0) / operand(i, 1);
       case Term.Negation negation -> -operand(i, 0);
       case Term.Power power -> power(operand(i, 0), operand(i, 1));
+      case Term.Switch choice -> operand(i, choice.holds(operand(i, 0)) ? 1 : 2);
+      case Term.Pulse pulse ->
+          new PulseTrain(operand(i, 1), operand(i, 2), operand(i, 3)).at(operand(i, 0));
+      case Term.CurveTerm curve -> curve.curve().at(operand(i, 0));
       case Term.FunctionTerm call ->
           call.arguments().size() == 1
               ? call.function().apply(operand(i, 0))

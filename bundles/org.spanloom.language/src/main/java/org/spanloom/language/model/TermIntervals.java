@@ -13,6 +13,7 @@ import java.util.Map;
 public final class TermIntervals {
 
   private final TermTape tape;
+  private final Map<String, Double> replaced;
   private final Interval[] ranges;
 
   /**
@@ -23,13 +24,23 @@ public final class TermIntervals {
 
   private final Map<Integer, Interval> narrowed = new HashMap<>();
 
-  /** Prepares a term; nodes without time are enclosed once. */
+  /** Prepares a term, parameters as declared. */
   TermIntervals(TermTape tape) {
+    this(tape, Map.of());
+  }
+
+  /**
+   * Prepares a term; nodes without time are enclosed once.
+   *
+   * @param replaced values of parameters in coherent SI units, by name
+   */
+  TermIntervals(TermTape tape, Map<String, Double> replaced) {
     this.tape = tape;
+    this.replaced = replaced;
     this.ranges = new Interval[tape.size()];
     for (int i = 0; i < ranges.length; i++) {
       if (tape.node(i) instanceof Term.Power power && !tape.varies(tape.operand(i, 1))) {
-        exponents.put(i, Interval.at(TermEvaluator.constant(power.exponent())));
+        exponents.put(i, Interval.at(TermEvaluator.of(power.exponent(), replaced).at(Double.NaN)));
       }
       if (!tape.varies(i)) {
         ranges[i] = range(i, Interval.EMPTY);
@@ -83,7 +94,10 @@ public final class TermIntervals {
     return switch (tape.node(i)) {
       case Term.Constant number -> Interval.at(number.value());
       case Term.Time t -> times;
-      case Term.ParameterTerm parameter -> below(i, 0);
+      case Term.ParameterTerm(Parameter parameter) ->
+          replaced.containsKey(parameter.name())
+              ? Interval.at(replaced.get(parameter.name()))
+              : below(i, 0);
       case Term.LetTerm let -> below(i, 0);
       case Term.Sum sum -> below(i, 0).plus(below(i, 1));
       case Term.Difference difference -> below(i, 0).minus(below(i, 1));
@@ -92,6 +106,14 @@ public final class TermIntervals {
       case Term.Quotient quotient -> below(i, 0).over(below(i, 1));
       case Term.Negation negation -> below(i, 0).negated();
       case Term.Power power -> power(below(i, 0), exponent(i));
+      case Term.Switch choice ->
+          switch (Branch.of(choice, below(i, 0))) {
+            case THEN -> below(i, 1);
+            case OTHERWISE -> below(i, 2);
+            case OPEN -> below(i, 1).hull(below(i, 2));
+          };
+      case Term.Pulse pulse -> pulse(i);
+      case Term.CurveTerm curve -> curve.curve().over(below(i, 0));
       case Term.FunctionTerm(Function function, List<Term> arguments) ->
           switch (function) {
             case MIN -> below(i, 0).smaller(below(i, 1));
@@ -114,6 +136,16 @@ public final class TermIntervals {
                 IntervalFunctions.image(function, below(i, 0));
           };
     };
+  }
+
+  private Interval pulse(int i) {
+    Interval period = below(i, 1);
+    Interval width = below(i, 2);
+    Interval start = below(i, 3);
+    boolean fixed = period.isPoint() && width.isPoint() && start.isPoint();
+    return fixed
+        ? new PulseTrain(period.low(), width.low(), start.low()).over(below(i, 0))
+        : new Interval(0, 1);
   }
 
   private boolean isSquare(int i) {

@@ -11,6 +11,7 @@ import java.util.List;
 public final class TermPrinter {
 
   private static final int LONGEST = 120;
+  private static final int CHOICE = 0;
   private static final int SUM = 1;
   private static final int PRODUCT = 2;
   private static final int POWER = 3;
@@ -60,11 +61,38 @@ public final class TermPrinter {
       case Term.Quotient quotient -> part(i, 0, PRODUCT) + "/" + part(i, 1, POWER);
       case Term.Negation negation -> "-" + part(i, 0, PRODUCT);
       case Term.Power power -> part(i, 0, ATOM) + "^" + part(i, 1, ATOM);
+      case Term.Switch choice -> choice(choice, i);
+      case Term.CurveTerm curve -> curve.name() + "(" + part(i, 0, SUM) + ")";
+      case Term.Pulse pulse ->
+          "pulse("
+              + part(i, 0, SUM)
+              + ", period = "
+              + part(i, 1, SUM)
+              + ", width = "
+              + part(i, 2, SUM)
+              + ", start = "
+              + part(i, 3, SUM)
+              + ")";
       case Term.FunctionTerm(Function function, List<Term> arguments) ->
           arguments.size() == 1
               ? function.code() + "(" + part(i, 0, SUM) + ")"
               : function.code() + "(" + part(i, 0, SUM) + ", " + part(i, 1, SUM) + ")";
     };
+  }
+
+  private String choice(Term.Switch choice, int i) {
+    int gap = tape.operand(i, 0);
+    boolean difference = choice.gap() instanceof Term.Difference;
+    String left = difference ? part(gap, 0, SUM) : part(i, 0, SUM);
+    String right = difference ? part(gap, 1, SUM) : "0";
+    return "if "
+        + left
+        + (choice.atZero() ? " <= " : " < ")
+        + right
+        + " then "
+        + part(i, 1, CHOICE)
+        + " else "
+        + part(i, 2, CHOICE);
   }
 
   private String part(int i, int which, int lowest) {
@@ -81,6 +109,9 @@ public final class TermPrinter {
       case Term.Product product -> PRODUCT;
       case Term.Quotient quotient -> PRODUCT;
       case Term.Power power -> POWER;
+      case Term.Switch choice -> CHOICE;
+      case Term.Pulse pulse -> ATOM;
+      case Term.CurveTerm curve -> ATOM;
       case Term.Time t -> ATOM;
       case Term.ParameterTerm parameter -> ATOM;
       case Term.LetTerm let -> ATOM;

@@ -74,7 +74,7 @@ final class TermTape {
    * Returns what stands for a term: time is one node, and so is each parameter and each named
    * expression.
    */
-  private static Object identity(Term term) {
+  static Object identity(Term term) {
     return switch (term) {
       case Term.Time time -> Term.Time.class;
       case Term.ParameterTerm parameter -> parameter.parameter();
@@ -86,6 +86,9 @@ final class TermTape {
       case Term.Quotient quotient -> quotient;
       case Term.Negation negation -> negation;
       case Term.Power power -> power;
+      case Term.Switch choice -> choice;
+      case Term.Pulse pulse -> pulse;
+      case Term.CurveTerm curve -> curve;
       case Term.FunctionTerm call -> call;
     };
   }
@@ -103,6 +106,9 @@ final class TermTape {
       case Term.Quotient quotient -> List.of(quotient.left(), quotient.right());
       case Term.Negation negation -> List.of(negation.operand());
       case Term.Power power -> List.of(power.base(), power.exponent());
+      case Term.Switch choice -> List.of(choice.gap(), choice.then(), choice.otherwise());
+      case Term.CurveTerm curve -> List.of(curve.time());
+      case Term.Pulse pulse -> List.of(pulse.time(), pulse.period(), pulse.width(), pulse.start());
       case Term.FunctionTerm call -> call.arguments();
     };
   }

@@ -12,7 +12,8 @@ import java.util.List;
  *
  * <p>Where a function has a corner the mean of both one-sided derivatives is taken: at {@code
  * abs(u)} for u = 0, at {@code min(u, v)} and {@code max(u, v)} for u = v. The jump of {@code
- * sign(u)} counts for nothing. Shared sub-terms stay shared.
+ * sign(u)} counts for nothing, and neither do those of a choice or a pulse. Shared sub-terms stay
+ * shared.
  */
 public final class TimeDerivative {
 
@@ -52,6 +53,11 @@ public final class TimeDerivative {
       case Term.Quotient(Term u, Term v) -> quotient(tape.node(i), below(i, 0), v, below(i, 1));
       case Term.Negation negation -> Simplifier.negation(below(i, 0));
       case Term.Power(Term u, Term v) -> power(tape.node(i), u, below(i, 0), v, below(i, 1));
+      case Term.Switch(Term gap, boolean atZero, Term a, Term b) ->
+          Simplifier.choice(gap, atZero, below(i, 1), below(i, 2));
+      case Term.Pulse pulse -> Term.ZERO;
+      case Term.CurveTerm(String name, PiecewiseCurve curve, Term time) ->
+          Simplifier.product(Simplifier.curve(name + "'", curve.derivative(), time), below(i, 0));
       case Term.FunctionTerm(Function f, List<Term> u) ->
           u.size() == 1
               ? Simplifier.product(outer(f, tape.node(i), u.getFirst()), below(i, 0))

@@ -64,6 +64,12 @@ final class TimeSubstitution {
       case Term.Quotient(Term a, Term b) -> Simplifier.quotient(in(a), in(b));
       case Term.Negation(Term a) -> Simplifier.negation(in(a));
       case Term.Power(Term a, Term b) -> Simplifier.power(in(a), in(b));
+      case Term.Switch(Term gap, boolean atZero, Term a, Term b) ->
+          Simplifier.choice(in(gap), atZero, in(a), in(b));
+      case Term.Pulse(Term time, Term period, Term width, Term start) ->
+          Simplifier.pulse(in(time), period, width, start);
+      case Term.CurveTerm(String name, PiecewiseCurve curve, Term time) ->
+          Simplifier.curve(name, curve, in(time));
       case Term.FunctionTerm(Function function, List<Term> arguments) -> {
         List<Term> changed = new ArrayList<>();
         arguments.forEach(a -> changed.add(in(a)));

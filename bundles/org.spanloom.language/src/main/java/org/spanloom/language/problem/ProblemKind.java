@@ -153,6 +153,12 @@ public enum ProblemKind {
   BASIS_ROW_DUPLICATE("A basis has two rows for one component."),
   /** Rows of different length. */
   BASIS_ROW_LENGTH("Rows of a basis differ in length."),
+  /** A pulse that cannot be. */
+  PULSE_INVALID("The period or the width of a pulse is not possible."),
+  /** A table whose rows cannot be used. */
+  TABLE_INVALID("The rows of a table cannot be used."),
+  /** A table that ends before the interval does. */
+  TABLE_RANGE("A table does not cover the interval."),
   /** An accuracy that cannot be asked for. */
   ACCURACY_OUT_OF_RANGE("The accuracy asked for is out of range."),
   /** A scale that is not positive. */

@@ -61,6 +61,10 @@ public sealed interface Expression {
   /** {@code a^b}. */
   record PowerExpression(Expression base, Expression exponent, Span span) implements Expression {}
 
+  /** {@code if t < 6 [h] then a else b}. */
+  record ChoiceExpression(Comparison condition, Expression then, Expression otherwise, Span span)
+      implements Expression {}
+
   /** {@code (a)}. */
   record ParenthesisedExpression(Expression inner, Span span) implements Expression {}
 

@@ -13,6 +13,7 @@ import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.syntax.Expression.Addend;
 import org.spanloom.language.syntax.Expression.Argument;
 import org.spanloom.language.syntax.Expression.CallExpression;
+import org.spanloom.language.syntax.Expression.ChoiceExpression;
 import org.spanloom.language.syntax.Expression.Factor;
 import org.spanloom.language.syntax.Expression.MissingExpression;
 import org.spanloom.language.syntax.Expression.NameExpression;
@@ -37,8 +38,55 @@ final class ExpressionParser {
     this.cursor = cursor;
   }
 
-  /** {@code expression = term, { ( "+" | "-" ), term } ;} */
+  /** {@code expression = choice | sum ;} */
   Expression expression() {
+    return cursor.isWord("if") ? choice() : sum();
+  }
+
+  /** {@code choice = "if", sum, sign, sum, "then", expression, "else", expression ;} */
+  private Expression choice() {
+    int start = cursor.take().start();
+    if (!enter()) {
+      return missing();
+    }
+    int from = cursor.peek().start();
+    Expression left = sum();
+    TokenKind sign = conditionSign();
+    Expression right = sum();
+    Comparison condition = new Comparison(left, sign, right, cursor.from(from));
+    word("then", "The word \"then\" and the value while the condition holds belong here");
+    Expression then = expression();
+    word("else", "The word \"else\" and the value while the condition does not hold belong here");
+    Expression otherwise = expression();
+    depth--;
+    return new ChoiceExpression(condition, then, otherwise, cursor.from(start));
+  }
+
+  private TokenKind conditionSign() {
+    TokenKind kind = cursor.kind();
+    switch (kind) {
+      case LESS, AT_MOST, GREATER, AT_LEAST -> cursor.take();
+      case EQUALS ->
+          cursor.fail(
+              ProblemKind.WORD_UNEXPECTED,
+              cursor.peek().span(),
+              "A condition compares by size: write one of <, <=, > and >=.");
+      default ->
+          cursor.failHere(
+              ProblemKind.WORD_UNEXPECTED,
+              "One of <, <=, > and >= belongs here, as in \"if t < 6 then 1 else 0\"");
+    }
+    return kind;
+  }
+
+  private void word(String word, String expected) {
+    if (!cursor.failed() && !cursor.acceptWord(word)) {
+      cursor.failHere(ProblemKind.WORD_UNEXPECTED, expected);
+    }
+  }
+
+  /** {@code sum = term, { ( "+" | "-" ), term } ;} */
+  private Expression sum() {
     int start = cursor.peek().start();
     Expression first = term();
     if (!cursor.is(TokenKind.PLUS) && !cursor.is(TokenKind.MINUS)) {
@@ -238,9 +286,10 @@ final class ExpressionParser {
     String word = cursor.text(token);
     if (word.equals("if")) {
       cursor.fail(
-          ProblemKind.STATEMENT_NOT_SUPPORTED,
+          ProblemKind.WORD_UNEXPECTED,
           token.span(),
-          "\"if\" is not read by this version yet: write an expression without a choice.");
+          "A choice inside of a sum or product stands in parentheses: write (if ... then ... else"
+              + " ...).");
     } else {
       cursor.fail(
           ProblemKind.NAME_RESERVED,

@@ -19,6 +19,9 @@ import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.Row;
 import org.spanloom.language.syntax.Statement.SystemStatement;
+import org.spanloom.language.syntax.Statement.TableStatement;
+import org.spanloom.language.syntax.TableSource.TableRow;
+import org.spanloom.language.syntax.TableSource.TableRows;
 import org.spanloom.language.text.SourceText;
 import org.spanloom.language.text.Span;
 
@@ -162,9 +165,10 @@ public final class Parser {
       case "boundary" -> blocks.boundary(line);
       case "basis" -> basis(line);
       case "matrix" -> matrix(line);
+      case "table" -> table(line);
       case "row" -> strayRow(line);
       case "part" -> blocks.part(line);
-      case "table", "for" -> later(line, word);
+      case "for" -> later(line, word);
       default -> simple(line);
     };
   }
@@ -281,6 +285,34 @@ public final class Parser {
     MatrixSource source = hasRows ? new MatrixRows(found.rows(), found.allRead()) : head.source();
     return new MatrixStatement(
         head.name(), head.argument(), head.unit(), source, head.documentation(), found.span());
+  }
+
+  /** A table with its rows, if it has any; see {@link TableParser}. */
+  private Statement table(StatementLine line) {
+    StatementParser parser = new StatementParser(text, line);
+    TableParser table = new TableParser(parser);
+    TableStatement head = table.head();
+    boolean hasRows = head.source() instanceof TableRows || parser.cursor().failed();
+    RowLines<TableRow> found = rows(line, hasRows, TableParser::row);
+    if (hasRows && found.allRead() && found.rows().isEmpty()) {
+      table.failWithoutRows();
+    }
+    note(parser.cursor());
+    if (last.opensBlock()) {
+      blocks.skip();
+    }
+    if (parser.cursor().failed()) {
+      return parser.unread();
+    }
+    return new TableStatement(
+        head.name(),
+        head.argument(),
+        head.unit(),
+        hasRows ? new TableRows(found.rows(), found.allRead()) : head.source(),
+        head.method(),
+        head.extended(),
+        head.documentation(),
+        found.span());
   }
 
   private Statement strayRow(StatementLine line) {

@@ -219,6 +219,23 @@ public sealed interface Statement {
       implements Declaration {}
 
   /**
+   * {@code table load(t) [kW] = linear} with rows, {@code table T_out(t) [K] = file "outside.csv"
+   * time "hour" [h] column "air" hold extended}.
+   *
+   * @param extended whether the end values hold beyond the first and the last time
+   */
+  record TableStatement(
+      Name name,
+      Name argument,
+      Optional<UnitText> unit,
+      TableSource source,
+      TableMethod method,
+      boolean extended,
+      String documentation,
+      Span span)
+      implements Declaration {}
+
+  /**
    * {@code boundary soak { T_air(0) = 277; T_wall(48) = 280 }}.
    *
    * @param allRead whether every line of the block could be read

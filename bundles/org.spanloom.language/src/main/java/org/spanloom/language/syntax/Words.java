@@ -87,7 +87,10 @@ public final class Words {
           case "values" -> previous.equals("initial");
           case "every" -> previous.equals("jump");
           case "outside" -> first.equals("transfer");
-          case "file" -> first.equals("matrix") && previous.isEmpty();
+          case "file" -> (first.equals("matrix") || first.equals("table")) && previous.isEmpty();
+          case "time", "column", "hold", "linear", "monotone" ->
+              first.equals("table") && previous.isEmpty();
+          case "extended", "cubic" -> first.equals("table") && !previous.equals("table");
           case "scale" -> first.equals("state") && !previous.equals("state");
           case "condition" -> previous.equals("scaled") || previous.equals("require");
           default -> REQUIREMENT_SET.contains(word) && previous.equals("require");

@@ -5,7 +5,6 @@
  */
 package org.spanloom.numerics.internal.step;
 
-import java.util.Arrays;
 import org.spanloom.numerics.LinearSystem;
 
 /** Times at which a step has to end. */
@@ -20,8 +19,7 @@ public final class Stops {
   public static double[] between(LinearSystem system, double t0, double end) {
     double low = Math.min(t0, end);
     double high = Math.max(t0, end);
-    double[] inside =
-        Arrays.stream(system.breakpoints()).filter(t -> t > low && t < high).toArray();
+    double[] inside = system.breakpoints(low, high);
     double[] stops = new double[inside.length + 1];
     for (int k = 0; k < inside.length; k++) {
       stops[k] = end > t0 ? inside[k] : inside[inside.length - 1 - k];
