@@ -57,7 +57,7 @@ class TableTests {
   void aFileIsReadWithQuotedFieldsAndAnyLineEnds() {
     PiecewiseCurve curve =
         curve(
-            "power,\"at, clock\",\"say \"\"so\"\"\"\r\n1.5,0,\"a\nb\"\r\n2,60,\n\"4e0\" , 600 ,x",
+            "power,\"at, clock\",\"say \"\"so\"\"\"\r\n1.5,0,\"a\nb\"\r\n2,60,\n\"4e0\", 600 ,x",
             "linear");
     assertEquals(1500, curve.at(0));
     assertEquals(1750, curve.at(1800));

@@ -20,6 +20,7 @@ public final class PiecewiseCurve implements Curve {
   private final double[] c2;
   private final double[] c3;
   private final double last;
+  private final double before;
   private final boolean jumps;
   private final Interval[] tree;
 
@@ -28,6 +29,7 @@ public final class PiecewiseCurve implements Curve {
    *
    * @param knots increasing times, at least one
    * @param c0 coefficients of the pieces, one less than knots
+   * @param before the value up to the first knot
    * @param last the value from the last knot on
    * @param jumps whether values may jump at knots
    */
@@ -37,6 +39,7 @@ public final class PiecewiseCurve implements Curve {
       double[] c1,
       double[] c2,
       double[] c3,
+      double before,
       double last,
       boolean jumps) {
     this.knots = knots;
@@ -44,6 +47,7 @@ public final class PiecewiseCurve implements Curve {
     this.c1 = c1;
     this.c2 = c2;
     this.c3 = c3;
+    this.before = before;
     this.last = last;
     this.jumps = jumps;
     this.tree = tree();
@@ -57,7 +61,8 @@ public final class PiecewiseCurve implements Curve {
   static PiecewiseCurve hold(double[] times, double[] values) {
     int n = times.length - 1;
     double[] none = new double[n];
-    return new PiecewiseCurve(times, Arrays.copyOf(values, n), none, none, none, values[n], true);
+    return new PiecewiseCurve(
+        times, Arrays.copyOf(values, n), none, none, none, values[0], values[n], true);
   }
 
   /** Interpolates by straight lines. */
@@ -69,7 +74,7 @@ public final class PiecewiseCurve implements Curve {
       slopes[k] = (values[k + 1] - values[k]) / (times[k + 1] - times[k]);
     }
     return new PiecewiseCurve(
-        times, Arrays.copyOf(values, n), slopes, none, none, values[n], false);
+        times, Arrays.copyOf(values, n), slopes, none, none, values[0], values[n], false);
   }
 
   /**
@@ -109,7 +114,14 @@ public final class PiecewiseCurve implements Curve {
       c3[k] = (slope[k] + slope[k + 1] - 2 * d[k]) / (h[k] * h[k]);
     }
     return new PiecewiseCurve(
-        times, Arrays.copyOf(values, n), Arrays.copyOf(slope, n), c2, c3, values[n], false);
+        times,
+        Arrays.copyOf(values, n),
+        Arrays.copyOf(slope, n),
+        c2,
+        c3,
+        values[0],
+        values[n],
+        false);
   }
 
   private static double end(double h0, double h1, double d0, double d1) {
@@ -158,7 +170,7 @@ public final class PiecewiseCurve implements Curve {
       return last;
     }
     if (!(time >= knots[0])) {
-      return Double.isNaN(time) ? time : before();
+      return Double.isNaN(time) ? time : before;
     }
     int found = Arrays.binarySearch(knots, time);
     int k = found < 0 ? -2 - found : found;
@@ -175,7 +187,7 @@ public final class PiecewiseCurve implements Curve {
       linear[k] = 2 * c2[k];
       square[k] = 3 * c3[k];
     }
-    return new PiecewiseCurve(knots, c1, linear, square, new double[n], 0, true);
+    return new PiecewiseCurve(knots, c1, linear, square, new double[n], 0, 0, true);
   }
 
   /** Encloses the values over a range of times. */
@@ -184,13 +196,10 @@ public final class PiecewiseCurve implements Curve {
       return Interval.EMPTY;
     }
     Interval range = times.high() >= lastTime() ? Interval.at(last) : Interval.EMPTY;
-    int n = c0.length;
-    if (n == 0) {
-      return Interval.at(last);
-    }
     if (times.low() < knots[0]) {
-      range = range.hull(Interval.at(before()));
+      range = range.hull(Interval.at(before));
     }
+    int n = c0.length;
     int from = Math.max(0, piece(times.low()));
     int to = Math.min(n - 1, piece(times.high()));
     if (from > to) {
@@ -198,10 +207,6 @@ public final class PiecewiseCurve implements Curve {
     }
     range = range.hull(part(from, times)).hull(part(to, times));
     return to - from > 1 ? range.hull(whole(from + 1, to - 1)) : range;
-  }
-
-  private double before() {
-    return c0[0];
   }
 
   /**
@@ -257,6 +262,7 @@ public final class PiecewiseCurve implements Curve {
   public boolean equals(Object other) {
     return other instanceof PiecewiseCurve curve
         && jumps == curve.jumps
+        && before == curve.before
         && last == curve.last
         && Arrays.equals(knots, curve.knots)
         && Arrays.equals(c0, curve.c0)
