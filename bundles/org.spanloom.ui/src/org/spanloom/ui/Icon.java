@@ -89,7 +89,7 @@ public enum Icon {
       case INITIAL_VALUES, BOUNDARY -> INITIAL;
       case BASIS -> BASIS;
       case REQUIREMENT -> REQUIREMENT;
-      case ACCURACY, UNREAD -> OTHER;
+      case ACCURACY, LOOP, UNREAD -> OTHER;
     };
   }
 }

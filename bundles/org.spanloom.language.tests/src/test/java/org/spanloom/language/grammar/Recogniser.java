@@ -21,6 +21,7 @@ import org.spanloom.language.grammar.Grammar.Repeated;
 import org.spanloom.language.grammar.Grammar.Sequence;
 import org.spanloom.language.grammar.Grammar.Special;
 import org.spanloom.language.grammar.Grammar.Terminal;
+import org.spanloom.language.syntax.Lexer;
 import org.spanloom.language.syntax.StatementLine;
 import org.spanloom.language.syntax.StatementLines;
 import org.spanloom.language.syntax.Token;
@@ -64,7 +65,10 @@ final class Recogniser {
     }
   }
 
-  /** Takes a token; a name and the point and the name behind it are one sign. */
+  /**
+   * Takes a token; a name and the point and the name behind it are one sign, and an index range is
+   * several.
+   */
   private void add(Token token) {
     int last = tokens.size() - 1;
     boolean joins =
@@ -76,6 +80,13 @@ final class Recogniser {
       tokens.removeLast();
       Token name = tokens.removeLast();
       tokens.add(new Token(TokenKind.NAME, name.start(), token.end()));
+    } else if (token.kind() == TokenKind.INDEX_RANGE) {
+      tokens.add(new Token(TokenKind.OPEN_BRACKET, token.start(), token.start() + 1));
+      int inner = token.start() + 1;
+      for (Token part : Lexer.lex(text.substring(inner, token.end() - 1))) {
+        tokens.add(new Token(part.kind(), inner + part.start(), inner + part.end(), part.word()));
+      }
+      tokens.add(new Token(TokenKind.CLOSE_BRACKET, token.end() - 1, token.end()));
     } else {
       tokens.add(token);
     }

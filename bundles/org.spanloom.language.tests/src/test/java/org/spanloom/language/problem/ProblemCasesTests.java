@@ -48,7 +48,8 @@ class ProblemCasesTests {
           "matrices",
           "parts",
           "switching",
-          "tables");
+          "tables",
+          "families");
 
   private record Case(String file, String title, String input, String expected) {
 

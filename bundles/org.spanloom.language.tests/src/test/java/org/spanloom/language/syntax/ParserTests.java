@@ -42,7 +42,7 @@ class ParserTests {
     return switch (expression) {
       case Expression.NumberExpression n ->
           n.digits() + n.unit().map(u -> "[" + u.code() + "]").orElse("");
-      case Expression.NameExpression n -> n.label();
+      case Expression.NameExpression n -> n.label() + indices(n);
       case Expression.CallExpression c ->
           c.callee().label()
               + c.arguments().stream()
@@ -75,9 +75,19 @@ class ParserTests {
               + " else "
               + grouped(c.otherwise())
               + ")";
+      case Expression.IndexedSumExpression s -> {
+        String turns = grouped(s.turns().from()) + ".." + grouped(s.turns().to());
+        yield "(sum " + s.turns().index().text() + " " + turns + ": " + grouped(s.body()) + ")";
+      }
       case Expression.ParenthesisedExpression p -> grouped(p.inner());
       case Expression.MissingExpression m -> "?";
     };
+  }
+
+  private static String indices(Expression.NameExpression name) {
+    return name.isIndexed()
+        ? name.indices().stream().map(ParserTests::grouped).toList().toString()
+        : "";
   }
 
   @ParameterizedTest
@@ -162,10 +172,9 @@ class ParserTests {
 
   @Test
   void laterStatementsAreSkippedWithTheirBlocks() {
-    List<Statement> body =
-        body("for i from 1 to 3 { c[i]' = 1\n jump at 3 { x becomes 2 }\n}\nlet a = 1");
+    List<Statement> body = body("table i = Tank { c = 1\n jump at 3 { x becomes 2 }\n}\nlet a = 1");
     assertEquals(2, body.size());
-    assertEquals("for", ((LaterStatement) body.get(0)).word());
+    assertEquals("table", ((LaterStatement) body.get(0)).word());
     assertInstanceOf(LetStatement.class, body.get(1));
   }
 

@@ -16,6 +16,7 @@ import org.spanloom.language.model.MatrixFunction;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.NamedConstant;
 import org.spanloom.language.model.PulseTrain;
+import org.spanloom.language.syntax.IndexRange;
 import org.spanloom.language.syntax.Lexer;
 import org.spanloom.language.syntax.OverClause;
 import org.spanloom.language.syntax.Statement;
@@ -56,6 +57,7 @@ public final class Completion {
           "matrix",
           "table",
           "transfer",
+          "for",
           "jump",
           "initial values",
           "boundary",
@@ -207,7 +209,8 @@ public final class Completion {
           "matrix",
           "table",
           "system",
-          "values" -> {}
+          "values",
+          "for" -> {}
       case "basis", "boundary" -> {}
       default -> {
         if (isCondition()) {
@@ -290,6 +293,7 @@ public final class Completion {
       case "matrix" -> offer("file", "file \"NAME.mtx\", in the Matrix Market format");
       case "state" -> offer("scale", "size below which only absolute errors count");
       case "initial", "basis" -> offer("at", "time");
+      case "for" -> List.of("from", "to").forEach(w -> offer(w, "bounds of the loop"));
       case "transfer" -> offer("outside", "where amounts come from or go to");
       case "require" ->
           List.of("throughout", "until", "under").forEach(w -> offer(w, "requirement"));
@@ -311,7 +315,9 @@ public final class Completion {
           .flatMap(SystemStatement::over)
           .ifPresent(o -> offer(o.name().text(), "independent variable"));
     }
+    indices().forEach(i -> offer(i, "index of a loop"));
     if (functions) {
+      offer("sum over", "sum over i from 1 to 3 of c[i]");
       for (Function function : Function.values()) {
         offer(function.code(), function.meaning());
       }
@@ -359,7 +365,10 @@ public final class Completion {
               name + "(" + input.argument().text() + ")",
               "input" + unit(input.unit().map(u -> u.code())));
       case StateStatement state ->
-          offer(state.label(), "state" + unit(state.unit().map(u -> u.code())));
+          offer(
+              state.isFamily() ? member(state) : state.label(),
+              (state.isFamily() ? "member of a family" : "state")
+                  + unit(state.unit().map(u -> u.code())));
       case TableStatement table ->
           offer(
               name + "(" + table.argument().text() + ")",
@@ -384,9 +393,28 @@ public final class Completion {
   private void states() {
     for (Statement statement : system().map(SystemStatement::body).orElse(List.of())) {
       if (statement instanceof StateStatement state) {
-        offer(state.label(), "state" + unit(state.unit().map(u -> u.code())));
+        name(state);
       }
     }
+  }
+
+  /**
+   * Returns a member of a family, by the indices of the loops around the caret if there are any.
+   */
+  private String member(StateStatement family) {
+    List<String> around = indices();
+    List<String> indices = new ArrayList<>();
+    for (IndexRange range : family.ranges()) {
+      int free = around.size() - family.ranges().size() + indices.size();
+      indices.add(free >= 0 ? around.get(free) : model.source().slice(range.from().span()));
+    }
+    return family.name().text() + "[" + String.join(",", indices) + "]";
+  }
+
+  /** Returns the indices of the loops around the caret, the outermost first. */
+  private List<String> indices() {
+    List<Statement> body = system().map(SystemStatement::body).orElse(List.of());
+    return LoopsAround.of(body, offset).reversed().stream().map(t -> t.index().text()).toList();
   }
 
   private void initialValues() {

@@ -7,7 +7,14 @@ package org.spanloom.language.editing;
 
 import java.util.ArrayList;
 import java.util.List;
+import org.spanloom.language.syntax.BlockLine;
+import org.spanloom.language.syntax.BlockLine.RepeatedLines;
 import org.spanloom.language.syntax.Statement;
+import org.spanloom.language.syntax.Statement.BasisStatement;
+import org.spanloom.language.syntax.Statement.BoundaryStatement;
+import org.spanloom.language.syntax.Statement.ForStatement;
+import org.spanloom.language.syntax.Statement.InitialValuesStatement;
+import org.spanloom.language.syntax.Statement.JumpStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
 import org.spanloom.language.syntax.SyntaxFile;
 import org.spanloom.language.syntax.Token;
@@ -35,8 +42,23 @@ public final class Folding {
   private void statements(List<Statement> statements) {
     for (Statement statement : statements) {
       add(statement.span());
-      if (statement instanceof SystemStatement system) {
-        statements(system.body());
+      switch (statement) {
+        case SystemStatement system -> statements(system.body());
+        case ForStatement loop -> statements(loop.body());
+        case InitialValuesStatement values -> lines(values.settings());
+        case BasisStatement basis -> lines(basis.rows());
+        case JumpStatement jump -> lines(jump.changes());
+        case BoundaryStatement boundary -> lines(boundary.conditions());
+        default -> {}
+      }
+    }
+  }
+
+  private <T> void lines(List<BlockLine<T>> lines) {
+    for (BlockLine<T> line : lines) {
+      if (line instanceof RepeatedLines<T> loop) {
+        add(loop.span());
+        lines(loop.lines());
       }
     }
   }

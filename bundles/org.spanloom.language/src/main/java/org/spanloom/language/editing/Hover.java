@@ -68,6 +68,8 @@ public final class Hover {
       builtIn(name.symbol().name());
     } else if (name.symbol().kind() == SymbolKind.TIME) {
       lines.add("independent variable: " + line(declared.get().statement()));
+    } else if (name.symbol().kind() == SymbolKind.INDEX) {
+      lines.add("index: " + line(declared.get().statement()));
     } else {
       declaration(name, declared.get());
     }
@@ -111,9 +113,14 @@ public final class Hover {
 
   private void meaning(SystemModel system, Occurrence name, Declared declared) {
     if (name.symbol().kind() == SymbolKind.STATE) {
-      system.states().stream()
-          .filter(c -> c.name().equals(name.symbol().name()))
-          .forEach(c -> component(system, c, name.primes()));
+      String family = name.symbol().name();
+      List<StateComponent> own =
+          system.states().stream().filter(c -> c.name().equals(family)).toList();
+      if (!own.isEmpty() && own.getFirst().label().startsWith(family + "[")) {
+        family(system, own, name.primes());
+      } else {
+        own.forEach(c -> component(system, c, name.primes()));
+      }
       return;
     }
     system.parameters().stream()
@@ -174,6 +181,28 @@ public final class Hover {
                 : ""));
   }
 
+  /** Says what the members of a family are, or their derivatives. */
+  private void family(SystemModel system, List<StateComponent> components, int primes) {
+    List<StateComponent> named = components.stream().filter(c -> c.order() == primes).toList();
+    long members = components.stream().filter(c -> c.order() == 0).count();
+    if (named.isEmpty()) {
+      lines.add("family of " + members + " states");
+      return;
+    }
+    lines.add(
+        "family of "
+            + members
+            + " states, components "
+            + named.getFirst().label()
+            + " to "
+            + named.getLast().label()
+            + in(named.getFirst().unit()));
+    StateComponent middle = named.get(named.size() / 2);
+    if (isLast(system, middle) && !middle.equation().equals(middle.declaration())) {
+      lines.add(middle.label() + " governed by: " + line(middle.equation()));
+    }
+  }
+
   private void component(SystemModel system, StateComponent component, int primes) {
     if (component.order() != primes && !isLast(system, component)) {
       return;
@@ -202,7 +231,8 @@ public final class Hover {
   private static boolean isLast(SystemModel system, StateComponent component) {
     int next = component.index() + 1;
     return next == system.states().size()
-        || !system.states().get(next).name().equals(component.name());
+        || !system.states().get(next).name().equals(component.name())
+        || system.states().get(next).order() == 0;
   }
 
   private void builtIn(String name) {

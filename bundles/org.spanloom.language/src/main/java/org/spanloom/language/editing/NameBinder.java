@@ -11,12 +11,18 @@ import java.util.IdentityHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.function.Consumer;
 import org.spanloom.language.editing.Occurrence.Role;
+import org.spanloom.language.editing.Symbol.Declared;
 import org.spanloom.language.editing.SymbolKind.Room;
+import org.spanloom.language.syntax.BlockLine;
+import org.spanloom.language.syntax.BlockLine.RepeatedLines;
+import org.spanloom.language.syntax.BlockLine.SingleLine;
 import org.spanloom.language.syntax.Comparison;
 import org.spanloom.language.syntax.Expression;
 import org.spanloom.language.syntax.Expression.CallExpression;
 import org.spanloom.language.syntax.Expression.ChoiceExpression;
+import org.spanloom.language.syntax.Expression.IndexedSumExpression;
 import org.spanloom.language.syntax.Expression.MissingExpression;
 import org.spanloom.language.syntax.Expression.NameExpression;
 import org.spanloom.language.syntax.Expression.NumberExpression;
@@ -25,6 +31,7 @@ import org.spanloom.language.syntax.Expression.PowerExpression;
 import org.spanloom.language.syntax.Expression.ProductExpression;
 import org.spanloom.language.syntax.Expression.SignedExpression;
 import org.spanloom.language.syntax.Expression.SumExpression;
+import org.spanloom.language.syntax.IndexRange;
 import org.spanloom.language.syntax.Lexer;
 import org.spanloom.language.syntax.MatrixSource.MatrixExpression;
 import org.spanloom.language.syntax.MatrixSource.MatrixFile;
@@ -43,9 +50,8 @@ import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.AccuracyStatement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
 import org.spanloom.language.syntax.Statement.BoundaryStatement;
-import org.spanloom.language.syntax.Statement.Change;
-import org.spanloom.language.syntax.Statement.Condition;
 import org.spanloom.language.syntax.Statement.EquationStatement;
+import org.spanloom.language.syntax.Statement.ForStatement;
 import org.spanloom.language.syntax.Statement.ImportStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
@@ -59,7 +65,6 @@ import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.PartStatement;
 import org.spanloom.language.syntax.Statement.RequireStatement;
-import org.spanloom.language.syntax.Statement.Row;
 import org.spanloom.language.syntax.Statement.Setting;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
@@ -72,6 +77,7 @@ import org.spanloom.language.syntax.TableSource.TableRow;
 import org.spanloom.language.syntax.TableSource.TableRows;
 import org.spanloom.language.syntax.Token;
 import org.spanloom.language.syntax.TokenKind;
+import org.spanloom.language.syntax.Turns;
 import org.spanloom.language.text.SourceText;
 import org.spanloom.language.text.Span;
 
@@ -127,6 +133,10 @@ final class NameBinder {
       }
       case StateStatement state -> {
         declared(Room.VALUES, state.name(), state.primes());
+        for (IndexRange range : state.ranges()) {
+          expression(range.from());
+          expression(range.to());
+        }
         state.initial().ifPresent(this::expression);
         state.scale().ifPresent(this::expression);
       }
@@ -149,6 +159,7 @@ final class NameBinder {
       }
       case PartStatement part -> part(part);
       case ImportStatement read -> {}
+      case ForStatement loop -> turns(loop.turns(), () -> loop.body().forEach(this::statement));
       case JumpStatement jump -> jump(jump);
       case InitialValuesStatement values -> initialValues(values);
       case BoundaryStatement boundary -> boundary(boundary);
@@ -256,10 +267,12 @@ final class NameBinder {
         expression(repeated.last());
       }
     }
-    for (Change change : jump.changes()) {
-      name(change.target(), Role.WRITTEN);
-      expression(change.value());
-    }
+    lines(
+        jump.changes(),
+        change -> {
+          name(change.target(), Role.WRITTEN);
+          expression(change.value());
+        });
   }
 
   private void boundary(BoundaryStatement boundary) {
@@ -268,10 +281,12 @@ final class NameBinder {
       return;
     }
     declared(Room.CONDITIONS, boundary.name(), 0);
-    for (Condition condition : boundary.conditions()) {
-      expression(condition.left());
-      expression(condition.right());
-    }
+    lines(
+        boundary.conditions(),
+        condition -> {
+          expression(condition.left());
+          expression(condition.right());
+        });
   }
 
   private void initialValues(InitialValuesStatement values) {
@@ -281,10 +296,12 @@ final class NameBinder {
     }
     declared(Room.CONDITIONS, values.name(), 0);
     values.time().ifPresent(this::expression);
-    for (Setting setting : values.settings()) {
-      name(setting.target(), Role.WRITTEN);
-      expression(setting.value());
-    }
+    lines(
+        values.settings(),
+        setting -> {
+          name(setting.target(), Role.WRITTEN);
+          expression(setting.value());
+        });
   }
 
   private void basis(BasisStatement basis) {
@@ -295,10 +312,43 @@ final class NameBinder {
     declared(Room.BASES, basis.name(), 0);
     basis.argument().ifPresent(this::value);
     basis.time().ifPresent(this::expression);
-    for (Row row : basis.rows()) {
-      name(row.target(), Role.WRITTEN);
-      row.values().forEach(this::expression);
+    lines(
+        basis.rows(),
+        row -> {
+          name(row.target(), Role.WRITTEN);
+          row.values().forEach(this::expression);
+        });
+  }
+
+  private <T> void lines(List<BlockLine<T>> lines, Consumer<T> reader) {
+    for (BlockLine<T> line : lines) {
+      switch (line) {
+        case SingleLine<T> single -> reader.accept(single.content());
+        case RepeatedLines<T> loop -> turns(loop.turns(), () -> lines(loop.lines(), reader));
+      }
     }
+  }
+
+  /** Takes the bounds of a loop or sum, and its body, in which the index has a name. */
+  private void turns(Turns turns, Runnable body) {
+    expression(turns.from());
+    expression(turns.to());
+    NameScope around = scope;
+    Name index = turns.index();
+    boolean time =
+        scope.find(Room.VALUES, index.text()).filter(s -> s.kind() == SymbolKind.TIME).isPresent();
+    if (time) {
+      // The independent variable cannot be an index; it stays what it is.
+      value(index);
+      body.run();
+      return;
+    }
+    Declared declared = new Declared(index.span(), 0, turns.span(), "");
+    Symbol symbol = new Symbol(SymbolKind.INDEX, index.text(), List.of(declared));
+    scope = new NameScope(Optional.of(around), List.of(symbol));
+    declared(Room.VALUES, index, 0);
+    body.run();
+    scope = around;
   }
 
   private void clause(RequireClause clause) {
@@ -347,6 +397,7 @@ final class NameBinder {
         expression(choice.then());
         expression(choice.otherwise());
       }
+      case IndexedSumExpression sum -> turns(sum.turns(), () -> expression(sum.body()));
       case ParenthesisedExpression parenthesised -> expression(parenthesised.inner());
     }
   }
@@ -361,6 +412,7 @@ final class NameBinder {
       return;
     }
     add(Room.VALUES, name.name().text(), role, name.name().span(), name.primes());
+    name.indices().forEach(this::expression);
   }
 
   /** Takes each word of a name such as {@code lower.T}: all but the last one are parts. */

@@ -15,6 +15,7 @@ import org.spanloom.language.syntax.Statement.AccuracyStatement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
 import org.spanloom.language.syntax.Statement.BoundaryStatement;
 import org.spanloom.language.syntax.Statement.EquationStatement;
+import org.spanloom.language.syntax.Statement.ForStatement;
 import org.spanloom.language.syntax.Statement.ImportStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
@@ -86,7 +87,7 @@ public final class Outline {
       case StateStatement state ->
           new OutlineNode(
               Kind.STATE,
-              state.label(),
+              state.label() + ranges(state),
               unit(state.unit()),
               state.span(),
               state.name().span(),
@@ -116,6 +117,14 @@ public final class Outline {
       case JumpStatement jump -> text(Kind.JUMP, jump.header(), jump.span());
       case BoundaryStatement boundary ->
           leaf(Kind.BOUNDARY, boundary.name(), "boundary conditions", boundary.span());
+      case ForStatement loop ->
+          new OutlineNode(
+              Kind.LOOP,
+              oneLine("for " + source.slice(loop.turns().span())),
+              "",
+              loop.span(),
+              loop.turns().span(),
+              nodes(loop.body()));
       case InitialValuesStatement values ->
           leaf(Kind.INITIAL_VALUES, values.name(), "initial values", values.span());
       case BasisStatement basis -> leaf(Kind.BASIS, basis.name(), "basis", basis.span());
@@ -135,6 +144,14 @@ public final class Outline {
         system.span(),
         system.name().span(),
         nodes(system.body()));
+  }
+
+  private String ranges(StateStatement state) {
+    return state.ranges().stream()
+        .map(r -> oneLine(source.slice(r.span())))
+        .reduce((a, b) -> a + ", " + b)
+        .map(text -> "[" + text + "]")
+        .orElse("");
   }
 
   private static OutlineNode leaf(Kind kind, Name name, String detail, Span span) {

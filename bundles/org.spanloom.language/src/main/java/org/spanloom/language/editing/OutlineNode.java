@@ -48,6 +48,8 @@ public record OutlineNode(
     EQUATION,
     /** A jump of the states. */
     JUMP,
+    /** A loop over equations, transfers and requirements. */
+    LOOP,
     /** A set of initial values. */
     INITIAL_VALUES,
     /** A set of boundary conditions. */

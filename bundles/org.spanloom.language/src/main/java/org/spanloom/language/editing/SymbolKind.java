@@ -19,6 +19,8 @@ public enum SymbolKind {
   INPUT("input", Room.VALUES),
   /** A state. */
   STATE("state", Room.VALUES),
+  /** The index of a loop or sum. */
+  INDEX("index", Room.VALUES),
   /** An output. */
   OUTPUT("output", Room.VALUES),
   /** A set of initial values. */

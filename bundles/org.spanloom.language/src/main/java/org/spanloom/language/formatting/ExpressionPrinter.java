@@ -13,6 +13,7 @@ import org.spanloom.language.syntax.Expression.Argument;
 import org.spanloom.language.syntax.Expression.CallExpression;
 import org.spanloom.language.syntax.Expression.ChoiceExpression;
 import org.spanloom.language.syntax.Expression.Factor;
+import org.spanloom.language.syntax.Expression.IndexedSumExpression;
 import org.spanloom.language.syntax.Expression.MissingExpression;
 import org.spanloom.language.syntax.Expression.NameExpression;
 import org.spanloom.language.syntax.Expression.NumberExpression;
@@ -21,6 +22,7 @@ import org.spanloom.language.syntax.Expression.PowerExpression;
 import org.spanloom.language.syntax.Expression.ProductExpression;
 import org.spanloom.language.syntax.Expression.SignedExpression;
 import org.spanloom.language.syntax.Expression.SumExpression;
+import org.spanloom.language.syntax.IndexRange;
 import org.spanloom.language.syntax.RequireClause;
 import org.spanloom.language.syntax.RequireClause.Compares;
 import org.spanloom.language.syntax.RequireClause.HasPeriod;
@@ -29,6 +31,7 @@ import org.spanloom.language.syntax.RequireClause.IsNonnegative;
 import org.spanloom.language.syntax.RequireClause.IsStable;
 import org.spanloom.language.syntax.RequireClause.LimitsCondition;
 import org.spanloom.language.syntax.TokenKind;
+import org.spanloom.language.syntax.Turns;
 import org.spanloom.language.syntax.UnitText;
 
 /** Writes expressions and clauses with a blank between any two signs; the layout comes later. */
@@ -70,7 +73,14 @@ final class ExpressionPrinter {
   ExpressionPrinter expression(Expression expression) {
     switch (expression) {
       case NumberExpression number -> words(number.digits()).unit(number.unit());
+      case NameExpression name when name.isIndexed() -> {
+        words(name.name().text(), "[").list(name.indices()).words("]");
+        words("'".repeat(name.primes()));
+      }
       case NameExpression name -> words(name.label());
+      case IndexedSumExpression sum -> {
+        words("sum", "over").turns(sum.turns()).words("of").expression(sum.body());
+      }
       case CallExpression call -> call(call);
       case SignedExpression signed ->
           words(signed.negative() ? "-" : "+").expression(signed.operand());
@@ -97,6 +107,19 @@ final class ExpressionPrinter {
       case MissingExpression missing -> {}
     }
     return this;
+  }
+
+  ExpressionPrinter turns(Turns turns) {
+    words(turns.index().text(), "from").expression(turns.from());
+    return words("to").expression(turns.to());
+  }
+
+  ExpressionPrinter ranges(List<IndexRange> ranges) {
+    for (int i = 0; i < ranges.size(); i++) {
+      words(i == 0 ? "[" : ",").expression(ranges.get(i).from());
+      words("..").expression(ranges.get(i).to());
+    }
+    return words(ranges.isEmpty() ? "" : "]");
   }
 
   private void call(CallExpression call) {

@@ -32,9 +32,45 @@ final class Indentation {
   /** For each statement the line whose indentation another must exceed for it to go on there. */
   private final int[] baseLines;
 
-  private final Deque<String> blocks = new ArrayDeque<>();
+  private final Deque<Block> blocks = new ArrayDeque<>();
+  private int depth;
   private String lastWord = "";
+  private int lastColumn;
   private boolean rowsFollow;
+  private boolean rowLoopFollows;
+
+  /**
+   * What is open around a statement.
+   *
+   * <p>It has a kind, the column its head begins in now, and how much deeper its lines stand.
+   */
+  private static final class Block {
+    private final BlockKind kind;
+    private final int column;
+    private final int steps;
+
+    /**
+     * The column of the first line in it that does not share its line with the head; -1 if none.
+     */
+    private int content = -1;
+
+    Block(BlockKind kind, int column, int steps) {
+      this.kind = kind;
+      this.column = column;
+      this.steps = steps;
+    }
+  }
+
+  private enum BlockKind {
+    SYSTEM,
+    /** Initial values, a jump or boundary conditions, and loops in them. */
+    VALUES,
+    LOOP,
+    /** A loop over rows; it is indented like a row. */
+    ROWS,
+    /** A loop without its brace; it holds what is deeper. */
+    BRACELESS
+  }
 
   private Indentation(Layout layout) {
     this.layout = layout;
@@ -55,41 +91,122 @@ final class Indentation {
   private void level(int index) {
     StatementLine statement = layout.statements().get(index);
     String word = layout.word(index);
-    boolean row = word.equals("row") && rowsFollow;
-    if (word.equals("system")) {
-      // A system ends the one before it, closed or not.
-      blocks.clear();
-    } else if (!word.isEmpty() && holdsLinesOnly(blocks.peek())) {
-      // Such a block holds lines of its own only; another statement ends it, closed or not.
-      blocks.pop();
+    boolean brace = statement.tokens().isEmpty() && statement.closesBlock();
+    int first = layout.firstOfStatement(index);
+    int column = layout.column(first);
+    boolean beginsLine = layout.first(layout.line(first)) == first;
+    boolean closesRows = leave(word, column, brace, beginsLine);
+    if (beginsLine && !brace && !blocks.isEmpty() && blocks.peek().content < 0) {
+      blocks.peek().content = column;
     }
+    boolean rowLoop = word.equals("for") && rowsFollow && holdsRows(index);
+    boolean likeRow = rowsFollow && (word.equals("row") || rowLoop) || closesRows;
     if (!statement.tokens().isEmpty()) {
       lastWord = word;
-      rowsFollow = row || word.equals("basis") || word.equals("matrix") || word.equals("table");
+      lastColumn = column;
+      rowLoopFollows = rowLoop;
+      rowsFollow = likeRow || word.equals("basis") || word.equals("matrix") || word.equals("table");
     }
-    boolean brace = statement.tokens().isEmpty() && statement.closesBlock();
-    if (brace && !blocks.isEmpty()) {
-      blocks.pop();
-    }
-    int first = layout.firstOfStatement(index);
-    boolean beginsLine = layout.first(layout.line(first)) == first;
     baseLines[index] = beginsLine || index == 0 ? layout.line(first) : baseLines[index - 1];
-    levels[index] = STEP * (depth() + (row ? 1 : 0));
-    if (statement.closesBlock() && !brace && !blocks.isEmpty()) {
-      blocks.pop();
+    levels[index] = STEP * (Math.min(depth, DEEPEST) + (likeRow ? 1 : 0));
+    if (statement.closesBlock() && !brace) {
+      closesRows = pop();
     }
     if (statement.opensBlock()) {
-      blocks.push(lastWord);
+      push(kindOfBlock(), lastColumn);
+    } else if (word.equals("for") && !opensLater(index) && !statement.closesBlock()) {
+      push(BlockKind.BRACELESS, column);
     }
     rowsFollow &= !statement.opensBlock() && !statement.closesBlock();
+    rowsFollow |= closesRows;
   }
 
-  private static boolean holdsLinesOnly(String block) {
-    return "initial".equals(block) || "jump".equals(block) || "boundary".equals(block);
+  /**
+   * Leaves the blocks that end before a statement, closed or not, and tells whether its brace
+   * closes a loop over rows. A system ends everything; initial values and loops end before
+   * statements that cannot stand in them.
+   */
+  private boolean leave(String word, int column, boolean brace, boolean beginsLine) {
+    if (word.equals("system")) {
+      blocks.clear();
+      depth = 0;
+    }
+    while (!blocks.isEmpty() && !brace && ends(blocks.peek(), word, column, beginsLine)) {
+      pop();
+    }
+    while (brace
+        && !blocks.isEmpty()
+        && blocks.peek().kind == BlockKind.BRACELESS
+        && column < blocks.peek().column) {
+      pop();
+    }
+    return brace && pop();
   }
 
-  private int depth() {
-    return Math.min(blocks.size(), DEEPEST);
+  private static boolean ends(Block block, String word, int column, boolean beginsLine) {
+    boolean deeper = column > block.column || !beginsLine;
+    boolean inside = column >= block.content || !beginsLine;
+    return switch (block.kind) {
+      case SYSTEM -> false;
+      case VALUES -> !word.isEmpty() && !(word.equals("for") && inside);
+      case ROWS -> !word.isEmpty() && !word.equals("row") && !(word.equals("for") && inside);
+      case LOOP -> isDeclaration(word) && !deeper;
+      case BRACELESS -> !deeper;
+    };
+  }
+
+  private static boolean isDeclaration(String word) {
+    return switch (word) {
+      case "", "for", "require", "transfer", "row" -> false;
+      default -> true;
+    };
+  }
+
+  /** Tells whether the first line of a loop, loops in it aside, is a row. */
+  private boolean holdsRows(int index) {
+    int inner = index;
+    while (inner < levels.length && layout.word(inner).equals("for") && opensLater(inner)) {
+      boolean alone = !layout.statements().get(inner).opensBlock();
+      inner += alone ? 2 : 1;
+    }
+    return inner < levels.length && layout.word(inner).equals("row");
+  }
+
+  /** Tells whether a brace opens a block at the end of a statement or on the next line. */
+  private boolean opensLater(int index) {
+    StatementLine statement = layout.statements().get(index);
+    if (statement.opensBlock() || index + 1 == levels.length) {
+      return statement.opensBlock();
+    }
+    StatementLine next = layout.statements().get(index + 1);
+    return next.tokens().isEmpty() && next.opensBlock();
+  }
+
+  private BlockKind kindOfBlock() {
+    boolean inValues = !blocks.isEmpty() && blocks.peek().kind == BlockKind.VALUES;
+    boolean inRows = !blocks.isEmpty() && blocks.peek().kind == BlockKind.ROWS;
+    return switch (lastWord) {
+      case "initial", "jump", "boundary" -> BlockKind.VALUES;
+      case "for" ->
+          inValues ? BlockKind.VALUES : rowLoopFollows || inRows ? BlockKind.ROWS : BlockKind.LOOP;
+      default -> BlockKind.SYSTEM;
+    };
+  }
+
+  private void push(BlockKind kind, int column) {
+    int steps = kind == BlockKind.ROWS && rowLoopFollows ? 2 : 1;
+    blocks.push(new Block(kind, column, steps));
+    depth += steps;
+  }
+
+  /** Leaves the innermost block and tells whether it was a loop that is indented like a row. */
+  private boolean pop() {
+    if (blocks.isEmpty()) {
+      return false;
+    }
+    Block block = blocks.pop();
+    depth -= block.steps;
+    return block.steps == 2;
   }
 
   private void lines() {
@@ -128,7 +245,7 @@ final class Indentation {
   /** Places comments that stand alone and belong to no statement, from the end on. */
   private void comments(int[] indents) {
     List<StatementLine> statements = layout.statements();
-    int below = STEP * depth();
+    int below = STEP * Math.min(depth, DEEPEST);
     for (int line = indents.length - 1; line >= 0; line--) {
       if (layout.isBlank(line)) {
         continue;

@@ -104,6 +104,12 @@ final class Layout {
     return tokens.get(i).start() - (i == 0 ? 0 : tokens.get(i - 1).end());
   }
 
+  /** Returns how many characters stand before a token on its line now. */
+  int column(int i) {
+    int first = firstOfLine[lineOf[i]];
+    return tokens.get(i).start() - (first == 0 ? 0 : tokens.get(first - 1).end());
+  }
+
   int lineCount() {
     return firstOfLine.length;
   }

@@ -6,6 +6,10 @@
 package org.spanloom.language.formatting;
 
 import java.util.List;
+import java.util.function.Consumer;
+import org.spanloom.language.syntax.BlockLine;
+import org.spanloom.language.syntax.BlockLine.RepeatedLines;
+import org.spanloom.language.syntax.BlockLine.SingleLine;
 import org.spanloom.language.syntax.MatrixSource.MatrixExpression;
 import org.spanloom.language.syntax.MatrixSource.MatrixFile;
 import org.spanloom.language.syntax.MatrixSource.MatrixRow;
@@ -15,9 +19,8 @@ import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.AccuracyStatement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
 import org.spanloom.language.syntax.Statement.BoundaryStatement;
-import org.spanloom.language.syntax.Statement.Change;
-import org.spanloom.language.syntax.Statement.Condition;
 import org.spanloom.language.syntax.Statement.EquationStatement;
+import org.spanloom.language.syntax.Statement.ForStatement;
 import org.spanloom.language.syntax.Statement.ImportStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
@@ -30,7 +33,6 @@ import org.spanloom.language.syntax.Statement.OutputStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.PartStatement;
 import org.spanloom.language.syntax.Statement.RequireStatement;
-import org.spanloom.language.syntax.Statement.Row;
 import org.spanloom.language.syntax.Statement.Setting;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
@@ -52,6 +54,7 @@ public final class Printer {
 
   private final SyntaxFile file;
   private final ExpressionPrinter out = new ExpressionPrinter();
+  private int loops;
 
   private Printer(SyntaxFile file) {
     this.file = file;
@@ -91,7 +94,8 @@ public final class Printer {
       }
       case StateStatement state -> {
         documentation(state.documentation());
-        out.words("state", state.label()).unit(state.unit());
+        out.words("state", state.name().text()).ranges(state.ranges());
+        out.words("'".repeat(state.primes())).unit(state.unit());
         state.initial().ifPresent(e -> out.words("=").expression(e));
         state.scale().ifPresent(e -> out.words("scale").expression(e));
       }
@@ -115,6 +119,17 @@ public final class Printer {
         out.words("->");
         end(transfer.to());
         out.words("=").expression(transfer.flow());
+      }
+      case ForStatement loop -> {
+        out.words("for").turns(loop.turns()).words("{").endLine();
+        // A declaration that is not indented would end the loop.
+        loops++;
+        for (Statement repeated : loop.body()) {
+          out.words(" ".repeat(loops));
+          statement(repeated);
+        }
+        loops--;
+        out.words("}");
       }
       case JumpStatement jump -> jump(jump);
       case InitialValuesStatement values -> initialValues(values);
@@ -202,9 +217,9 @@ public final class Printer {
       }
     }
     out.words("{").endLine();
-    for (Change change : jump.changes()) {
-      out.expression(change.target()).words("becomes").expression(change.value()).endLine();
-    }
+    lines(
+        jump.changes(),
+        c -> out.expression(c.target()).words("becomes").expression(c.value()).endLine());
     out.words("}");
   }
 
@@ -229,16 +244,18 @@ public final class Printer {
     out.words("initial", "values", values.name().text());
     values.time().ifPresent(e -> out.words("at").expression(e));
     out.words("{").endLine();
-    settings(values.settings());
+    lines(
+        values.settings(),
+        s -> out.expression(s.target()).words("=").expression(s.value()).endLine());
     out.words("}");
   }
 
   private void boundary(BoundaryStatement boundary) {
     documentation(boundary.documentation());
     out.words("boundary", boundary.name().text(), "{").endLine();
-    for (Condition condition : boundary.conditions()) {
-      out.expression(condition.left()).words("=").expression(condition.right()).endLine();
-    }
+    lines(
+        boundary.conditions(),
+        c -> out.expression(c.left()).words("=").expression(c.right()).endLine());
     out.words("}");
   }
 
@@ -248,9 +265,22 @@ public final class Printer {
     basis.argument().ifPresent(a -> out.words("(", a.text(), ")"));
     basis.time().ifPresent(e -> out.words("at").expression(e));
     out.words(basis.hasRows() ? "=" : "");
-    for (Row row : basis.rows()) {
-      out.endLine().words("row").expression(row.target()).words("=");
-      out.list(row.values());
+    out.endLine();
+    lines(
+        basis.rows(),
+        r -> out.words("row").expression(r.target()).words("=").list(r.values()).endLine());
+  }
+
+  private <T> void lines(List<BlockLine<T>> lines, Consumer<T> printer) {
+    for (BlockLine<T> line : lines) {
+      switch (line) {
+        case SingleLine<T> single -> printer.accept(single.content());
+        case RepeatedLines<T> loop -> {
+          out.words("for").turns(loop.turns()).words("{").endLine();
+          lines(loop.lines(), printer);
+          out.words("}").endLine();
+        }
+      }
     }
   }
 }

@@ -72,24 +72,19 @@ final class BasisReader {
       return;
     }
     Place place = time.isPresent() ? Place.GIVEN_BASIS : Place.CLOSED_FORM;
-    Optional<List<List<Term>>> rows = rows(statement, place);
-    if (rows.isEmpty()) {
+    Optional<Rows> read = rows(statement, place);
+    if (read.isEmpty()) {
       return;
     }
-    int columns = rows.get().getFirst().size();
-    List<Span> spans = spans(statement);
+    List<List<Term>> rows = read.get().terms;
+    int columns = rows.getFirst().size();
+    List<Span> spans = Arrays.asList(read.get().spans);
     bases.add(
         time.isPresent()
             ? new Basis.Given(
-                name,
-                time.get(),
-                columns,
-                rows.get(),
-                spans,
-                statement.span(),
-                statement.name().span())
+                name, time.get(), columns, rows, spans, statement.span(), statement.name().span())
             : new Basis.ClosedForm(
-                name, columns, rows.get(), spans, statement.span(), statement.name().span()));
+                name, columns, rows, spans, statement.span(), statement.name().span()));
   }
 
   private boolean isTime(Name argument) {
@@ -105,22 +100,25 @@ final class BasisReader {
     return same;
   }
 
-  private List<Span> spans(BasisStatement statement) {
-    Span[] spans = new Span[components.dimension()];
-    for (Row row : statement.rows()) {
-      components.find(system.root(), row.target()).ifPresent(c -> spans[c.index()] = row.span());
-    }
-    return Arrays.asList(spans);
-  }
+  /** The rows of a basis, by component, as far as they are read. */
+  private final class Rows {
+    private final Place place;
+    private final List<List<Term>> terms = new ArrayList<>();
+    private final Span[] spans = new Span[components.dimension()];
+    private final Set<Integer> given = new HashSet<>();
+    private int columns = -1;
+    private boolean sound = true;
 
-  private Optional<List<List<Term>>> rows(BasisStatement statement, Place place) {
-    List<List<Term>> rows = new ArrayList<>();
-    components.list().forEach(c -> rows.add(List.of()));
-    Set<Integer> given = new HashSet<>();
-    boolean sound = statement.allRead();
-    int columns = statement.rows().isEmpty() ? 0 : statement.rows().getFirst().values().size();
-    for (Row row : statement.rows()) {
-      Optional<StateComponent> component = components.find(system.root(), row.target());
+    Rows(Place place) {
+      this.place = place;
+      components.list().forEach(c -> terms.add(List.of()));
+    }
+
+    void add(Row row) {
+      if (columns < 0) {
+        columns = row.values().size();
+      }
+      Optional<StateComponent> component = single(row);
       if (component.isEmpty()) {
         sound = false;
       } else if (!given.add(component.get().index())) {
@@ -130,15 +128,37 @@ final class BasisReader {
             row.target().span(),
             "The basis has two rows for \"" + component.get().label() + "\": remove one.");
       } else {
-        Optional<List<Term>> terms = row(row, component.get(), columns, place);
-        terms.ifPresent(t -> rows.set(component.get().index(), t));
-        sound &= terms.isPresent();
+        Optional<List<Term>> read = row(row, component.get(), columns, place);
+        read.ifPresent(t -> terms.set(component.get().index(), t));
+        spans[component.get().index()] = row.span();
+        sound &= read.isPresent();
       }
     }
-    if (sound) {
-      sound = isComplete(statement, given) && hasRightSize(statement, columns);
+  }
+
+  private Optional<StateComponent> single(Row row) {
+    List<StateComponent> found = components.find(system.root(), row.target());
+    if (found.size() > 1) {
+      problems.report(
+          ProblemKind.NAME_MISUSED,
+          row.target().span(),
+          "\""
+              + row.target().label()
+              + "\" is a family, and each of its members has a row of its own: write row "
+              + found.getFirst().label()
+              + " = ..., or a for.");
     }
-    return sound && !rows.isEmpty() ? Optional.of(rows) : Optional.empty();
+    return found.size() == 1 ? Optional.of(found.getFirst()) : Optional.empty();
+  }
+
+  private Optional<Rows> rows(BasisStatement statement, Place place) {
+    Rows rows = new Rows(place);
+    boolean turnsKnown = system.resolver().loops().lines(statement.rows(), rows::add);
+    boolean sound = statement.allRead() && rows.sound && turnsKnown;
+    if (sound) {
+      sound = isComplete(statement, rows.given) && hasRightSize(statement, rows.columns);
+    }
+    return sound && !rows.terms.isEmpty() ? Optional.of(rows) : Optional.empty();
   }
 
   private boolean isComplete(BasisStatement statement, Set<Integer> given) {

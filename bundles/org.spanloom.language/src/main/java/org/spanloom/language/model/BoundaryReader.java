@@ -64,13 +64,19 @@ final class BoundaryReader {
       return;
     }
     List<Boundary.Condition> conditions = new ArrayList<>();
-    boolean sound = statement.allRead();
-    for (Condition line : statement.conditions()) {
-      Optional<Boundary.Condition> condition = condition(line);
-      condition.ifPresent(conditions::add);
-      sound &= condition.isPresent();
-    }
-    if (sound && isRightNumber(statement)) {
+    boolean[] allSound = {statement.allRead()};
+    boolean turnsKnown =
+        system
+            .resolver()
+            .loops()
+            .lines(
+                statement.conditions(),
+                line -> {
+                  Optional<Boundary.Condition> condition = condition(line);
+                  condition.ifPresent(conditions::add);
+                  allSound[0] &= condition.isPresent();
+                });
+    if (allSound[0] && turnsKnown && isRightNumber(statement, conditions.size())) {
       boundaries.add(new Boundary(name, conditions, statement.span(), statement.name().span()));
     }
   }
@@ -92,8 +98,7 @@ final class BoundaryReader {
     return free;
   }
 
-  private boolean isRightNumber(BoundaryStatement statement) {
-    int found = statement.conditions().size();
+  private boolean isRightNumber(BoundaryStatement statement, int found) {
     int n = components.dimension();
     if (found == n || n == 0) {
       return n > 0;

@@ -8,10 +8,13 @@ package org.spanloom.language.model;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.HashMap;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 import org.spanloom.language.model.AffineValue.Sample;
+import org.spanloom.language.model.Meaning.FamilyMeaning;
 import org.spanloom.language.model.Meaning.StateMeaning;
 import org.spanloom.language.problem.Fix;
 import org.spanloom.language.problem.Nearest;
@@ -32,6 +35,9 @@ final class Components {
   private final List<Frame> frames = new ArrayList<>();
   private final Map<String, Integer> indices = new HashMap<>();
 
+  /** Scales by their expressions; all members of a family share one. */
+  private final SharedValues<Double> scales = new SharedValues<>();
+
   Components(SystemScope system, StateVector vector, LinearFormBuilder equations) {
     this.system = system;
     this.vector = vector;
@@ -44,7 +50,9 @@ final class Components {
 
   private void add(StateMeaning state, int primes, Span equation) {
     String label = StateVector.label(state, primes);
-    Optional<SystemScope.Derivative> derivative = system.derivative(label);
+    String family = state.declaredName();
+    Optional<SystemScope.Derivative> derivative =
+        primes == 0 ? Optional.empty() : system.derivative(family + "'".repeat(primes));
     Frame frame = state.frame();
     Optional<StateStatement> declaration =
         primes == 0
@@ -59,12 +67,12 @@ final class Components {
         new StateComponent(
             list.size(),
             label,
-            state.name(),
+            family,
             primes,
             unit,
             declaration
                 .flatMap(StateStatement::scale)
-                .flatMap(s -> scale(frame, s, unit))
+                .flatMap(s -> scales.of(frame, s, () -> scale(frame, s, unit)))
                 .orElse(1.0),
             declaration.map(StateStatement::documentation).orElse(""),
             declared,
@@ -138,24 +146,89 @@ final class Components {
         + (some.size() > 5 ? " and " + (some.size() - 5) + " more" : "");
   }
 
+  /**
+   * Returns some components as they can be named, a family of which all are there by its name with
+   * primes.
+   */
+  List<String> shortest(List<Integer> some) {
+    Set<Integer> wanted = new HashSet<>(some);
+    List<String> names = new ArrayList<>();
+    Map<String, Boolean> whole = new HashMap<>();
+    for (int index : some) {
+      StateComponent component = list.get(index);
+      String name = component.name() + "'".repeat(component.order());
+      boolean first = !whole.containsKey(name);
+      boolean all = whole.computeIfAbsent(name, n -> isWhole(component, wanted));
+      if (first || !all) {
+        names.add(all ? name : component.label());
+      }
+    }
+    return names;
+  }
+
+  private boolean isWhole(StateComponent component, Set<Integer> wanted) {
+    return system.members(component.name()).stream()
+        .map(s -> StateKey.running(s.index(), component.order()))
+        .allMatch(k -> vector.isComponent(k) && wanted.contains(vector.component(k)));
+  }
+
+  /** Returns the component that a reference names, without reporting anything. */
+  Optional<StateComponent> quietly(NameExpression name) {
+    return system.problems().quietly(() -> find(system.root(), name)).stream().findFirst();
+  }
+
   /** Returns the component of a name with primes, without reporting anything. */
   Optional<StateComponent> labelled(String label) {
     return Optional.ofNullable(indices.get(label)).map(list::get);
   }
 
-  /** Returns the component of a name with primes; reports it if there is none. */
-  Optional<StateComponent> find(Frame frame, NameExpression name) {
-    Integer index = indices.get(frame.label(name.label()));
-    if (index != null) {
-      return Optional.of(list.get(index));
-    }
+  /**
+   * Returns the components that a reference names: one, or that of each member for a family without
+   * an index. Reports it and returns none if there is no such component.
+   */
+  List<StateComponent> find(Frame frame, NameExpression name) {
     Optional<Meaning> meaning = frame.scope().own(name.name().text());
+    if (name.isIndexed() || meaning.isPresent() && meaning.get() instanceof FamilyMeaning) {
+      return findMembers(frame, name, meaning);
+    }
+    Integer index = indices.get(frame.label(name.label()));
+    if (index == null) {
+      reportNoComponent(frame, name, meaning);
+      return List.of();
+    }
+    return List.of(list.get(index));
+  }
+
+  private List<StateComponent> findMembers(
+      Frame frame, NameExpression name, Optional<Meaning> meaning) {
+    List<StateMeaning> members = List.of();
+    if (!name.isIndexed() && meaning.isPresent() && meaning.get() instanceof FamilyMeaning family) {
+      members = family.members();
+    } else if (meaning.isEmpty() || meaning.get() instanceof Meaning.BrokenMeaning) {
+      reportNoComponent(frame, name, meaning);
+    } else if (frame.resolver().names().meaning(name, Place.OUTPUT).orElseThrow()
+        instanceof StateMeaning member) {
+      members = List.of(member);
+    }
+    List<StateComponent> found = new ArrayList<>();
+    for (StateMeaning member : members) {
+      StateKey key = StateKey.running(member.index(), name.primes());
+      if (!vector.isComponent(key)) {
+        reportNoComponent(frame, name, meaning);
+        return List.of();
+      }
+      found.add(list.get(vector.component(key)));
+    }
+    return found;
+  }
+
+  private void reportNoComponent(Frame frame, NameExpression name, Optional<Meaning> meaning) {
     boolean broken =
         meaning.isPresent() && meaning.get() instanceof Meaning.BrokenMeaning
             || system.derivative(frame.label(name.label())).isPresent();
     if (!broken) {
       Optional<String> nearest =
-          system.problems().maySuggest()
+          !name.isIndexed() && system.problems().maySuggest()
               ? Nearest.of(name.label(), list.stream().map(StateComponent::label).toList())
               : Optional.empty();
       system
@@ -164,7 +237,7 @@ final class Components {
               meaning.isPresent() ? ProblemKind.NAME_MISUSED : ProblemKind.NAME_UNKNOWN,
               name.span(),
               "\""
-                  + name.label()
+                  + system.resolver().shown(name.span())
                   + "\" is no component of the state vector"
                   + nearest
                       .map(n -> ": did you mean " + n + "?")
@@ -173,7 +246,6 @@ final class Components {
                   .map(n -> Fix.replace("Write " + n, name.span(), n))
                   .toArray(Fix[]::new));
     }
-    return Optional.empty();
   }
 
   /**

@@ -52,6 +52,8 @@ final class Declarations {
   private final Map<TableStatement, PiecewiseCurve> tables = new LinkedHashMap<>();
   private final Map<String, DeclaredItem> items = new LinkedHashMap<>();
   private final Map<String, Name> taken = new HashMap<>();
+  private final Set<String> cyclic = new HashSet<>();
+  private Optional<List<Declaration>> ordered = Optional.empty();
   private final Set<String> duplicates = new HashSet<>();
   private final InTextOrder<Parameter> parameters = new InTextOrder<>();
   private final InTextOrder<Let> lets = new InTextOrder<>();
@@ -174,10 +176,49 @@ final class Declarations {
 
   /** Gives everything that some frames collected a meaning. */
   static void read(List<Frame> frames) {
-    List<DeclaredItem> all = new ArrayList<>();
-    frames.forEach(frame -> all.addAll(frame.declarations().items.values()));
-    Set<String> cyclic = new HashSet<>();
-    for (DeclaredItem item : DeclarationOrder.of(all, cycle -> reportCycle(cycle, cyclic))) {
+    new Sequence(frames).read();
+  }
+
+  /** What some frames collected, on its way to its meaning. */
+  static final class Sequence {
+    private final Set<String> cyclic = new HashSet<>();
+    private List<DeclaredItem> open;
+
+    Sequence(List<Frame> frames) {
+      List<DeclaredItem> all = new ArrayList<>();
+      frames.forEach(frame -> all.addAll(frame.declarations().items.values()));
+      this.open = DeclarationOrder.of(all, cycle -> reportCycle(cycle, cyclic));
+    }
+
+    /** Gives constants that need nothing else a meaning, before the states are known. */
+    void readConstants() {
+      Set<String> rest = new HashSet<>();
+      List<DeclaredItem> later = new ArrayList<>();
+      for (DeclaredItem item : open) {
+        boolean constant =
+            switch (item.declaration()) {
+              case ParameterStatement parameter -> true;
+              case LetStatement let -> let.argument().isEmpty();
+              default -> false;
+            };
+        boolean needsRest = item.uses().stream().anyMatch(used -> rest.contains(used.label()));
+        if (constant && !needsRest) {
+          read(item);
+        } else {
+          rest.add(item.label());
+          later.add(item);
+        }
+      }
+      open = later;
+    }
+
+    /** Gives everything else a meaning. */
+    void read() {
+      open.forEach(this::read);
+      open = List.of();
+    }
+
+    private void read(DeclaredItem item) {
       Name name = item.declaration().name();
       Declarations owner = item.owner();
       Optional<? extends Meaning> meaning =

@@ -7,7 +7,10 @@ package org.spanloom.language.model;
 
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.HashSet;
+import java.util.IdentityHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalInt;
 import java.util.Set;
@@ -15,10 +18,10 @@ import org.spanloom.language.model.Meaning.MatrixMeaning;
 import org.spanloom.language.model.Meaning.StateMeaning;
 import org.spanloom.language.problem.Fix;
 import org.spanloom.language.problem.ProblemKind;
-import org.spanloom.language.syntax.Expression;
 import org.spanloom.language.syntax.Expression.NameExpression;
 import org.spanloom.language.syntax.Statement.EquationStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
+import org.spanloom.language.text.Span;
 
 /** Gives the equations of a system their meaning and finds the orders of its states. */
 final class EquationReader {
@@ -27,7 +30,13 @@ final class EquationReader {
   private final List<ResolvedEquation> equations = new ArrayList<>();
   private final boolean[] mentioned;
   private final int[] orders;
+  private final Map<EquationStatement, List<NameExpression>> derivatives = new IdentityHashMap<>();
   private final List<ResolvedEquation> balances = new ArrayList<>();
+
+  /** Families of which a member with an index that is wrong stands in some equation. */
+  private final Set<String> unclear = new HashSet<>();
+
+  private final Set<Span> refused = new HashSet<>();
   private boolean allRead = true;
 
   EquationReader(SystemScope system) {
@@ -38,8 +47,9 @@ final class EquationReader {
 
   /** Takes an equation of a frame. */
   void read(Frame frame, EquationStatement statement) {
-    noteDerivatives(frame, statement.left());
-    noteDerivatives(frame, statement.right());
+    for (NameExpression name : derivatives.computeIfAbsent(statement, s -> derivatives(s))) {
+      note(frame, name);
+    }
     Optional<? extends Value> left = frame.resolver().value(statement.left(), Place.EQUATION);
     Optional<? extends Value> right = frame.resolver().value(statement.right(), Place.EQUATION);
     if (left.isEmpty()
@@ -93,7 +103,7 @@ final class EquationReader {
   void noteUnread(Frame frame, Set<String> names) {
     allRead = false;
     for (String name : names) {
-      frame.state(name).ifPresent(state -> mentioned[state.index()] = true);
+      frame.states(name).forEach(state -> mentioned[state.index()] = true);
     }
   }
 
@@ -126,16 +136,33 @@ final class EquationReader {
     return mentioned[state];
   }
 
-  private void noteDerivatives(Frame frame, Expression side) {
-    for (NameExpression name : ExpressionNames.of(side)) {
-      if (name.primes() > 0) {
-        Optional<StateMeaning> state = frame.state(name.name().text());
-        state.ifPresent(s -> mention(s.index(), name.primes()));
-        if (state.isEmpty()
-            && frame.scope().own(name.name().text()).orElse(null) instanceof MatrixMeaning m) {
-          noteDerivatives(m.value(), name.primes());
+  private static List<NameExpression> derivatives(EquationStatement statement) {
+    List<NameExpression> names = new ArrayList<>(ExpressionNames.of(statement.left()));
+    names.addAll(ExpressionNames.of(statement.right()));
+    names.removeIf(name -> name.primes() == 0);
+    return List.copyOf(names);
+  }
+
+  /**
+   * Notes a derivative as written, so that it counts even where it cancels or the equation has no
+   * meaning. Of a family without a known index it may be that of any member.
+   */
+  private void note(Frame frame, NameExpression name) {
+    List<StateMeaning> states = frame.states(name.name().text());
+    if (name.isIndexed()) {
+      Optional<StateMeaning> member = frame.resolver().indices().quietMember(name);
+      if (member.isEmpty()) {
+        if (unclear.add(frame.label(name.name().text()))) {
+          states.forEach(state -> mentioned[state.index()] = true);
         }
+        return;
       }
+      states = List.of(member.get());
+    }
+    states.forEach(state -> mention(state.index(), name.primes()));
+    if (states.isEmpty()
+        && frame.scope().own(name.name().text()).orElse(null) instanceof MatrixMeaning m) {
+      noteDerivatives(m.value(), name.primes());
     }
   }
 
@@ -205,9 +232,12 @@ final class EquationReader {
     Arrays.setAll(
         known, i -> orders[i] > 0 ? orders[i] : Math.max(1, system.declaredDerivatives(i) + 1));
     for (SystemScope.Derivative derivative : system.derivatives()) {
-      StateMeaning state = derivative.state();
-      if (derivative.statement().primes() >= known[state.index()]) {
-        reportDerivativeAlone(derivative, known[state.index()]);
+      Optional<StateMeaning> lower =
+          derivative.states().stream()
+              .filter(state -> derivative.statement().primes() >= known[state.index()])
+              .findFirst();
+      if (lower.isPresent()) {
+        reportDerivativeAlone(derivative.statement(), lower.get(), known[lower.get().index()]);
         allRead = false;
       }
     }
@@ -222,6 +252,10 @@ final class EquationReader {
     for (ResolvedEquation equation : List.copyOf(equations)) {
       if (holdsHigher(equation.left(), state) || holdsHigher(equation.right(), state)) {
         String name = system.states().get(state).name();
+        equations.remove(equation);
+        if (!refused.add(equation.span())) {
+          continue;
+        }
         equation
             .frame()
             .problems()
@@ -234,7 +268,6 @@ final class EquationReader {
                     + name
                     + "'\", so no higher derivative of it can stand in an equation: remove the"
                     + " primes or the transfers.");
-        equations.remove(equation);
       }
     }
     orders[state] = 1;
@@ -245,11 +278,9 @@ final class EquationReader {
     return side.coefficients().keySet().stream().anyMatch(k -> k.state() == state && k.order() > 1);
   }
 
-  private static void reportDerivativeAlone(SystemScope.Derivative derivative, int order) {
-    StateStatement statement = derivative.statement();
-    String name = statement.name().text();
-    derivative
-        .state()
+  private static void reportDerivativeAlone(
+      StateStatement statement, StateMeaning state, int order) {
+    state
         .frame()
         .problems()
         .report(
@@ -258,12 +289,11 @@ final class EquationReader {
             "\""
                 + statement.label()
                 + "\" is declared, but no equation holds \""
-                + statement.label()
-                + "'\": the equations of \""
-                + name
+                + state.label(statement.primes() + 1)
+                + "\": the equations of \""
+                + state.name()
                 + "\" go up to \""
-                + name
-                + "'".repeat(order)
+                + state.label(order)
                 + "\". Remove the declaration or write an equation of higher order.",
             Fix.replace("Remove the declaration", statement.span(), ""));
   }

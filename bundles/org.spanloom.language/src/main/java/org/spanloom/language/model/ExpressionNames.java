@@ -14,6 +14,7 @@ import org.spanloom.language.syntax.Expression.Argument;
 import org.spanloom.language.syntax.Expression.CallExpression;
 import org.spanloom.language.syntax.Expression.ChoiceExpression;
 import org.spanloom.language.syntax.Expression.Factor;
+import org.spanloom.language.syntax.Expression.IndexedSumExpression;
 import org.spanloom.language.syntax.Expression.MissingExpression;
 import org.spanloom.language.syntax.Expression.NameExpression;
 import org.spanloom.language.syntax.Expression.NumberExpression;
@@ -60,7 +61,12 @@ final class ExpressionNames {
     switch (expression) {
       case NumberExpression number -> {}
       case MissingExpression missing -> {}
-      case NameExpression name -> {}
+      case NameExpression name -> name.indices().forEach(i -> visit(i, visitor));
+      case IndexedSumExpression sum -> {
+        visit(sum.turns().from(), visitor);
+        visit(sum.turns().to(), visitor);
+        visit(sum.body(), visitor);
+      }
       case CallExpression call -> {
         visit(call.callee(), visitor);
         for (Argument argument : call.arguments()) {

@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import org.spanloom.language.model.Meaning.BrokenMeaning;
+import org.spanloom.language.model.Meaning.FamilyMeaning;
 import org.spanloom.language.model.Meaning.StateMeaning;
 import org.spanloom.language.syntax.Name;
 import org.spanloom.language.syntax.QuotedText;
@@ -161,6 +162,19 @@ final class Frame {
   /** Returns a state that the frame declares or can name. */
   Optional<StateMeaning> state(String name) {
     return scope.own(name).filter(StateMeaning.class::isInstance).map(StateMeaning.class::cast);
+  }
+
+  /** Returns the state of a name, or the members of the family; nothing if it is neither. */
+  List<StateMeaning> states(String name) {
+    Optional<Meaning> meaning = scope.own(name);
+    if (meaning.isEmpty()) {
+      return List.of();
+    }
+    return switch (meaning.get()) {
+      case StateMeaning state -> List.of(state);
+      case FamilyMeaning family -> family.members();
+      default -> List.of();
+    };
   }
 
   boolean isBroken(String name) {

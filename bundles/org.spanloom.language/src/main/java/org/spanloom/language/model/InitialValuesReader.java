@@ -59,6 +59,7 @@ final class InitialValuesReader {
   void readDeclarations(Span header) {
     List<Integer> missing = new ArrayList<>();
     Term[] values = new Term[components.dimension()];
+    SharedValues<Term> shared = new SharedValues<>();
     boolean sound = true;
     for (StateComponent component : components.list()) {
       Optional<Binding> initial = components.initial(component.index());
@@ -67,7 +68,11 @@ final class InitialValuesReader {
         continue;
       }
       declarationsHaveValues = true;
-      Optional<Term> value = value(initial.get().frame(), component, initial.get().value());
+      // All members of a family share the expression and its value.
+      Frame frame = initial.get().frame();
+      Expression expression = initial.get().value();
+      Optional<Term> value =
+          shared.of(frame, expression, () -> value(frame, component, component.name(), expression));
       value.ifPresent(v -> values[component.index()] = v);
       sound &= value.isPresent();
     }
@@ -106,23 +111,22 @@ final class InitialValuesReader {
       return;
     }
     Optional<StateStatement> declaration = components.declaration(first.index());
+    String name = first.name() + "'".repeat(first.order());
     String code = first.unit().code();
     String unit = code.equals("1") ? "" : " [" + code + "]";
     Fix fix =
         declaration
             .map(d ->
                 Fix.insert(
-                    "Add = 0",
-                    d.unit().map(u -> u.span().end()).orElse(d.name().span().end() + d.primes()),
-                    " = 0"))
+                    "Add = 0", d.unit().map(u -> u.span().end()).orElse(d.headEnd()), " = 0"))
             .orElseGet(() ->
                 Fix.insert(
-                    "Declare " + first.label(),
+                    "Declare " + name,
                     first.declaration().end(),
                     "\n"
                         + system.root().indent(first.declaration())
                         + "state "
-                        + first.label()
+                        + name
                         + unit
                         + " = 0"));
     problems.report(
@@ -134,7 +138,7 @@ final class InitialValuesReader {
             + " none: "
             + (declaration.isPresent()
                 ? "give one in the declaration."
-                : "write state " + first.label() + unit + " = 0 or another value."),
+                : "write state " + name + unit + " = 0 or another value."),
         fix);
   }
 
@@ -155,23 +159,13 @@ final class InitialValuesReader {
     }
     Term[] values = new Term[components.dimension()];
     Set<Integer> given = new HashSet<>();
-    boolean sound = statement.allRead();
-    for (Setting setting : statement.settings()) {
-      Optional<StateComponent> component = components.find(system.root(), setting.target());
-      if (component.isEmpty()) {
-        sound = false;
-      } else if (!given.add(component.get().index())) {
-        sound = false;
-        problems.report(
-            ProblemKind.INITIAL_VALUE_DUPLICATE,
-            setting.target().span(),
-            "\"" + component.get().label() + "\" has two values in this set: remove one.");
-      } else {
-        Optional<Term> value = value(system.root(), component.get(), setting.value());
-        value.ifPresent(v -> values[component.get().index()] = v);
-        sound &= value.isPresent();
-      }
-    }
+    boolean[] allSound = {statement.allRead()};
+    boolean turnsKnown =
+        system
+            .resolver()
+            .loops()
+            .lines(statement.settings(), setting -> allSound[0] &= set(setting, values, given));
+    boolean sound = allSound[0] && turnsKnown;
     Optional<Term> time = time(statement);
     List<Integer> missing = new ArrayList<>();
     for (int i = 0; i < values.length; i++) {
@@ -185,6 +179,32 @@ final class InitialValuesReader {
     if (sound && missing.isEmpty() && time.isPresent()) {
       complete.add(new InitialValues(name, time.get(), Arrays.asList(values), statement.span()));
     }
+  }
+
+  /** Takes a value, of each member for a family without an index; returns false if it is wrong. */
+  private boolean set(Setting setting, Term[] values, Set<Integer> given) {
+    List<StateComponent> targets = components.find(system.root(), setting.target());
+    if (targets.isEmpty()) {
+      return false;
+    }
+    for (StateComponent component : targets) {
+      if (!given.add(component.index())) {
+        problems.report(
+            ProblemKind.INITIAL_VALUE_DUPLICATE,
+            setting.target().span(),
+            "\"" + component.label() + "\" has two values in this set: remove one.");
+        return false;
+      }
+    }
+    StateComponent first = targets.getFirst();
+    Optional<Term> value =
+        value(
+            system.root(),
+            first,
+            targets.size() == 1 ? first.label() : first.name(),
+            setting.value());
+    value.ifPresent(v -> targets.forEach(c -> values[c.index()] = v));
+    return value.isPresent();
   }
 
   private Optional<Term> time(InitialValuesStatement statement) {
@@ -208,9 +228,9 @@ final class InitialValuesReader {
 
   private void reportMissingSettings(InitialValuesStatement statement, List<Integer> missing) {
     StringBuilder text = new StringBuilder();
-    for (int index : missing) {
+    for (String target : components.shortest(missing)) {
       boolean first = text.isEmpty() && statement.settings().isEmpty();
-      text.append(first ? " " : "; ").append(components.get(index).label()).append(" = 0");
+      text.append(first ? " " : "; ").append(target).append(" = 0");
     }
     int offset =
         statement.settings().isEmpty()
@@ -228,11 +248,11 @@ final class InitialValuesReader {
   }
 
   private static Optional<Term> value(
-      Frame frame, StateComponent component, Expression expression) {
+      Frame frame, StateComponent component, String label, Expression expression) {
     Optional<Term> value =
         frame
             .resolver()
-            .given(expression, component.unit(), "the state " + component.label(), Place.INITIAL)
+            .given(expression, component.unit(), "the state " + label, Place.INITIAL)
             .map(q -> q.constant().term());
     if (value.isPresent() && !Double.isFinite(TermEvaluator.constant(value.get()))) {
       frame

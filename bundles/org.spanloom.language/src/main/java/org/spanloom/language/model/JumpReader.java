@@ -105,26 +105,14 @@ final class JumpReader {
   private Optional<List<Jump.Change>> changes(Frame frame, JumpStatement statement) {
     List<Jump.Change> changes = new ArrayList<>();
     Set<Integer> changed = new HashSet<>();
-    boolean sound = statement.allRead();
-    for (Change line : statement.changes()) {
-      Optional<StateComponent> component = components.find(frame, line.target());
-      if (component.isPresent() && !changed.add(component.get().index())) {
-        invalid(
-            frame,
-            line.target().span(),
-            "\""
-                + component.get().label()
-                + "\" becomes two values in this jump: all lines of a jump take place at once;"
-                + " remove one.");
-        sound = false;
-        continue;
-      }
-      Optional<AffineValue> value = component.flatMap(c -> value(frame, c, line));
-      component
-          .flatMap(c -> value.map(v -> new Jump.Change(c.index(), v, frame.placed(line.span()))))
-          .ifPresent(changes::add);
-      sound &= value.isPresent();
-    }
+    boolean[] allSound = {statement.allRead()};
+    boolean turnsKnown =
+        frame
+            .resolver()
+            .loops()
+            .lines(
+                statement.changes(), line -> allSound[0] &= change(frame, line, changes, changed));
+    boolean sound = allSound[0] && turnsKnown;
     if (sound && changes.isEmpty()) {
       invalid(
           frame,
@@ -133,6 +121,30 @@ final class JumpReader {
       return Optional.empty();
     }
     return sound ? Optional.of(changes) : Optional.empty();
+  }
+
+  /** Takes a line, for each member of a family without an index; returns false if it is wrong. */
+  private boolean change(
+      Frame frame, Change line, List<Jump.Change> changes, Set<Integer> changed) {
+    List<StateComponent> targets = components.find(frame, line.target());
+    for (StateComponent component : targets) {
+      if (!changed.add(component.index())) {
+        invalid(
+            frame,
+            line.target().span(),
+            "\""
+                + component.label()
+                + "\" becomes two values in this jump: all lines of a jump take place at once;"
+                + " remove one.");
+        return false;
+      }
+    }
+    Optional<AffineValue> value =
+        targets.isEmpty() ? Optional.empty() : value(frame, targets.getFirst(), line);
+    value.ifPresent(v ->
+        targets.forEach(
+            c -> changes.add(new Jump.Change(c.index(), v, frame.placed(line.span())))));
+    return value.isPresent();
   }
 
   /** Returns what a component becomes; a lone number takes its unit. */

@@ -6,7 +6,9 @@
 package org.spanloom.language.model;
 
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.TreeMap;
 import java.util.stream.IntStream;
@@ -65,22 +67,36 @@ final class LinearFormBuilder {
    */
   Optional<LinearForm> build() {
     boolean complete = reader.allRead();
+    Map<Span, List<Integer>> spare = new LinkedHashMap<>();
     for (int e = 0; e < equations.size(); e++) {
       if (matching.stateOf(e) < 0) {
-        complete = false;
-        reportSpareEquation(e);
+        spare.computeIfAbsent(equations.get(e).span(), s -> new ArrayList<>()).add(e);
       }
     }
+    spare.values().forEach(turns -> reportSpareEquation(turns.getFirst(), turns.size() - 1));
+    Map<String, List<StateMeaning>> alone = new LinkedHashMap<>();
     for (StateMeaning state : vector.states()) {
-      if (matching.equationOf(state.index()) < 0) {
-        complete = false;
-        reportStateAlone(state);
+      if (matching.equationOf(state.index()) < 0 && isToReport(state)) {
+        alone.computeIfAbsent(state.declaredName(), s -> new ArrayList<>()).add(state);
       }
+      complete &= matching.equationOf(state.index()) >= 0;
     }
+    alone.values().forEach(this::reportAlone);
+    complete &= spare.isEmpty();
     return complete && vector.dimension() > 0 ? Optional.of(form()) : Optional.empty();
   }
 
-  private void reportSpareEquation(int index) {
+  /** Says for how many more equations of a statement something is so. */
+  private static String more(int further) {
+    return further == 0
+        ? ""
+        : " (So it is with "
+            + further
+            + (further == 1 ? " more equation" : " more equations")
+            + " of this line.)";
+  }
+
+  private void reportSpareEquation(int index, int further) {
     ResolvedEquation equation = equations.get(index);
     int[] states =
         massSides.get(index).coefficients().keySet().stream().mapToInt(StateKey::state).toArray();
@@ -91,7 +107,9 @@ final class LinearFormBuilder {
           .report(
               ProblemKind.EQUATION_WITHOUT_STATE,
               equation.span(),
-              "The equation gives no derivative: " + reasonForNoDerivative(equation));
+              "The equation gives no derivative: "
+                  + reasonForNoDerivative(equation)
+                  + more(further));
     } else if (IntStream.of(states).allMatch(this::isBalanced)) {
       String name = vector.states().get(states[0]).name();
       equation
@@ -103,7 +121,8 @@ final class LinearFormBuilder {
               "\""
                   + name
                   + "\" is governed by transfers, and a state is governed by transfers or by an"
-                  + " equation, never both: write this as transfers or remove the others.");
+                  + " equation, never both: write this as transfers or remove the others."
+                  + more(further));
     } else if (reader.allRead()) {
       StateMeaning state = vector.states().get(states[0]);
       String highest = StateVector.label(state, vector.order(states[0]));
@@ -118,7 +137,8 @@ final class LinearFormBuilder {
                   + "\""
                   + (states.length == 1 ? " is" : " and the other derivatives in this one are")
                   + " given by other equations already. Remove one of them or declare another"
-                  + " state.");
+                  + " state."
+                  + more(further));
     }
   }
 
@@ -150,39 +170,58 @@ final class LinearFormBuilder {
             + "\".";
   }
 
-  private void reportStateAlone(StateMeaning state) {
-    String name = state.name();
+  private boolean isToReport(StateMeaning state) {
+    return reader.allRead() || !held[state.index()] && !reader.isMentioned(state.index());
+  }
+
+  /** Reports a state without an equation, or members of a family. */
+  private void reportAlone(List<StateMeaning> states) {
+    StateMeaning state = states.getFirst();
     String highest = StateVector.label(state, vector.order(state.index()));
+    String more =
+        states.size() == 1
+            ? ""
+            : " (So it is with "
+                + (states.size() - 1)
+                + " more member"
+                + (states.size() == 2 ? "" : "s")
+                + " of \""
+                + state.statement().name().text()
+                + "\".)";
+    Frame frame = state.frame();
     if (held[state.index()]) {
-      if (reader.allRead()) {
-        state
-            .frame()
-            .problems()
-            .report(
-                ProblemKind.SINGULAR_MASS_MATRIX,
-                state.statement().name().span(),
-                "The equations cannot be solved for \""
-                    + highest
-                    + "\": every equation that holds it is needed for another derivative. Write one"
-                    + " more.");
-      }
-    } else if (!reader.isMentioned(state.index()) || reader.allRead()) {
-      state
-          .frame()
+      frame
           .problems()
           .report(
-              ProblemKind.STATE_WITHOUT_EQUATION,
+              ProblemKind.SINGULAR_MASS_MATRIX,
               state.statement().name().span(),
-              "The state \""
-                  + name
-                  + "\" has no equation: \""
+              "The equations cannot be solved for \""
                   + highest
-                  + "\" stands in none. Write one, or declare a parameter instead.",
-              Fix.insert(
-                  "Insert an equation",
-                  state.frame().lastStatementEnd(state.statement().span().end()),
-                  "\n" + state.frame().indent(state.statement().span()) + highest + " = 0"));
+                  + "\": every equation that holds it is needed for another derivative. Write one"
+                  + " more."
+                  + more);
+      return;
     }
+    Fix[] fixes =
+        EquationStub.of(vector, states).stream()
+            .map(text ->
+                Fix.insert(
+                    states.size() == 1 ? "Insert an equation" : "Insert equations",
+                    frame.lastStatementEnd(state.statement().span().end()),
+                    text))
+            .toArray(Fix[]::new);
+    frame
+        .problems()
+        .report(
+            ProblemKind.STATE_WITHOUT_EQUATION,
+            state.statement().name().span(),
+            "The state \""
+                + state.name()
+                + "\" has no equation: \""
+                + highest
+                + "\" stands in none. Write one, or declare a parameter instead."
+                + more,
+            fixes);
   }
 
   private LinearForm form() {

@@ -5,6 +5,7 @@
  */
 package org.spanloom.language.model;
 
+import java.util.List;
 import org.spanloom.language.syntax.Statement.StateStatement;
 import org.spanloom.language.text.Span;
 import org.spanloom.language.units.UnitOfMeasure;
@@ -38,7 +39,7 @@ sealed interface Meaning {
    * A state.
    *
    * @param index place among the states of the system
-   * @param name how the whole system names it
+   * @param name how the whole system names it, a member of a family with its indices
    * @param statement its declaration
    * @param frame where that was read
    * @param unit its unit
@@ -54,6 +55,13 @@ sealed interface Meaning {
     /** Returns the name with primes, as the whole system uses it. */
     String label(int primes) {
       return primes == 0 ? name : name + "'".repeat(primes);
+    }
+
+    /**
+     * Returns the name of its declaration as the whole system uses it, of a member its family's.
+     */
+    String declaredName() {
+      return frame.label(statement.name().text());
     }
 
     /** Returns the place of the declaration. */
@@ -79,6 +87,36 @@ sealed interface Meaning {
       return matrix.nameSpan();
     }
   }
+
+  /**
+   * A family of states.
+   *
+   * @param members its members, the last index running fastest; none while the ranges are not known
+   * @param statement its declaration
+   * @param frame where that was read
+   * @param unit the unit of each member
+   * @param space its indices
+   */
+  record FamilyMeaning(
+      List<StateMeaning> members,
+      StateStatement statement,
+      Frame frame,
+      UnitOfMeasure unit,
+      IndexSpace space)
+      implements Meaning {
+    /** Copies the list. */
+    public FamilyMeaning {
+      members = List.copyOf(members);
+    }
+
+    @Override
+    public Span nameSpan() {
+      return frame.placed(statement.name().span());
+    }
+  }
+
+  /** The index of a loop or sum in one of its turns. */
+  record IndexMeaning(long value, Span nameSpan) implements Meaning {}
 
   /** An output. */
   record OutputMeaning(Quantity value, UnitOfMeasure unit, Span nameSpan) implements Meaning {}
@@ -110,6 +148,8 @@ sealed interface Meaning {
           m.let().isInput() ? "an input" : m.let().isTable() ? "a table" : "a named expression";
       case StateMeaning m -> "a state";
       case MatrixMeaning m -> "a matrix";
+      case FamilyMeaning m -> "a family";
+      case IndexMeaning m -> "an index";
       case OutputMeaning m -> "an output";
       case BoundInputMeaning m -> "an input";
       case PartMeaning m -> "a part";

@@ -8,8 +8,11 @@ package org.spanloom.language.model;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalInt;
 import org.spanloom.language.model.Meaning.BoundInputMeaning;
 import org.spanloom.language.model.Meaning.BrokenMeaning;
+import org.spanloom.language.model.Meaning.FamilyMeaning;
+import org.spanloom.language.model.Meaning.IndexMeaning;
 import org.spanloom.language.model.Meaning.LetMeaning;
 import org.spanloom.language.model.Meaning.MatrixMeaning;
 import org.spanloom.language.model.Meaning.OutputMeaning;
@@ -49,14 +52,118 @@ final class NameResolver {
         .own(name.name().text())
         .filter(m ->
             m instanceof StateMeaning
+                || m instanceof FamilyMeaning
                 || m instanceof OutputMeaning
                 || m instanceof BoundInputMeaning)
         .isPresent();
   }
 
+  /**
+   * Returns what a reference means, of a member of a family the state; empty where nothing has that
+   * name, and a broken meaning after a problem was reported.
+   */
+  Optional<Meaning> meaning(NameExpression name, Place place) {
+    Optional<Meaning> meaning = scope.use(name.name().text());
+    boolean family = meaning.isPresent() && meaning.get() instanceof FamilyMeaning;
+    if (meaning.isEmpty()) {
+      return builtInWithIndex(name) ? broken(name) : meaning;
+    }
+    if (family && !place.states()) {
+      reportMisplacedState(name, place);
+      return broken(name);
+    }
+    if (name.isIndexed() && meaning.get() instanceof MatrixMeaning matrix) {
+      return entry(matrix, name);
+    }
+    if (name.isIndexed()) {
+      return family
+          ? member((FamilyMeaning) meaning.get(), name)
+          : notIndexable(name, meaning.get());
+    }
+    return family ? bareFamily((FamilyMeaning) meaning.get(), name) : meaning;
+  }
+
+  private Optional<Meaning> member(FamilyMeaning family, NameExpression name) {
+    Optional<StateMeaning> state = resolver.indices().member(family, name);
+    return state.isPresent() ? Optional.of(state.get()) : broken(name);
+  }
+
+  /** Returns an entry of a matrix as a matrix of one row and one column. */
+  private Optional<Meaning> entry(MatrixMeaning matrix, NameExpression name) {
+    MatrixValue value = matrix.value();
+    IndexSpace space =
+        new IndexSpace(List.of(1L, 1L), List.of((long) value.rows(), (long) value.columns()));
+    OptionalInt place = resolver.indices().place(space, name);
+    if (place.isEmpty()) {
+      return broken(name);
+    }
+    Quantity found =
+        value.at(place.getAsInt() / value.columns(), place.getAsInt() % value.columns());
+    return Optional.of(
+        new MatrixMeaning(
+            matrix.matrix(),
+            new MatrixValue(1, 1, List.of(new MatrixValue.Entry(0, 0, found)), value.dimension())));
+  }
+
+  private static Optional<Meaning> broken(NameExpression name) {
+    return Optional.of(new BrokenMeaning(name.span()));
+  }
+
+  private boolean builtInWithIndex(NameExpression name) {
+    String word = name.name().text();
+    boolean builtIn = NamedConstant.named(word).isPresent() || Function.named(word).isPresent();
+    if (name.isIndexed() && builtIn) {
+      reportIndex(name, "is built in");
+    }
+    return name.isIndexed() && builtIn;
+  }
+
+  private Optional<Meaning> notIndexable(NameExpression name, Meaning meaning) {
+    if (!(meaning instanceof BrokenMeaning)) {
+      reportIndex(name, "is " + meaning.kind());
+    }
+    return broken(name);
+  }
+
+  private void reportIndex(NameExpression name, String found) {
+    Span index = new Span(name.name().span().end(), name.span().end() - name.primes());
+    problems.report(
+        ProblemKind.NAME_MISUSED,
+        name.span(),
+        "\""
+            + resolver.shown(name.span())
+            + "\": \""
+            + name.name().text()
+            + "\" "
+            + found
+            + ", not a family, and has no index; units stand behind numbers only: remove the"
+            + " brackets.",
+        Fix.replace("Remove the brackets", index, ""));
+  }
+
+  private Optional<Meaning> bareFamily(FamilyMeaning family, NameExpression name) {
+    String word = name.name().text();
+    String example = word + family.space().shown(0);
+    List<String> indices = problems.indices().names();
+    boolean fits = !indices.isEmpty() && indices.size() == family.space().rank();
+    String index = "[" + String.join(", ", indices) + "]";
+    problems.report(
+        ProblemKind.NAME_MISUSED,
+        name.span(),
+        "\""
+            + word
+            + "\" is a family of states: name one of its members here, as in "
+            + example
+            + ".",
+        fits
+            ? new Fix[] {Fix.insert("Write " + word + index, name.name().span().end(), index)}
+            : new Fix[0]);
+    return broken(name);
+  }
+
   /** Returns the value of a name without arguments. */
   Optional<? extends Value> name(NameExpression name, Place place) {
-    Optional<Meaning> meaning = scope.use(name.name().text());
+    Optional<Meaning> meaning = meaning(name, place);
     if (meaning.isEmpty()) {
       return builtIn(name);
     }
@@ -71,6 +178,9 @@ final class NameResolver {
       case StateMeaning m -> state(m, name, place);
       case MatrixMeaning m when m.matrix().dependsOnTime() -> bareFunctionOfTime(name);
       case MatrixMeaning m -> matrices.value(m, name, place);
+      case FamilyMeaning m -> Optional.empty();
+      case IndexMeaning m ->
+          Optional.of(Quantity.constant(new Term.Constant(m.value()), Dimension.NONE, 1));
       case OutputMeaning m -> output(m, name, place);
       case BoundInputMeaning m -> bareFunctionOfTime(name);
       case PartMeaning m -> barePart(name, m);
@@ -81,7 +191,7 @@ final class NameResolver {
   /** Returns the value of a name with arguments. */
   Optional<? extends Value> call(CallExpression call, Place place) {
     NameExpression callee = call.callee();
-    Optional<Meaning> meaning = scope.use(callee.name().text());
+    Optional<Meaning> meaning = meaning(callee, place);
     if (meaning.isEmpty()) {
       return function(call, place);
     }
@@ -93,6 +203,8 @@ final class NameResolver {
       case ParameterMeaning m -> notCallable(call, m);
       case LetMeaning m when m.let().dependsOnTime() ->
           isFunctionOfTime(call, place) ? Optional.of(let(m)) : Optional.empty();
+      case IndexMeaning m -> notCallable(call, m);
+      case FamilyMeaning m -> Optional.empty();
       case LetMeaning m -> notCallable(call, m);
       case MatrixMeaning m when m.matrix().dependsOnTime() ->
           isFunctionOfTime(call, place) ? matrices.value(m, callee, place) : Optional.empty();
@@ -128,7 +240,7 @@ final class NameResolver {
     return Optional.empty();
   }
 
-  private void unknown(NameExpression name) {
+  void unknown(NameExpression name) {
     String word = name.name().text();
     if (scope.isOpen()) {
       return;
@@ -247,24 +359,28 @@ final class NameResolver {
 
   private Optional<Quantity> state(StateMeaning state, NameExpression name, Place place) {
     if (!place.states()) {
-      problems.report(
-          ProblemKind.STATE_MISPLACED,
-          name.span(),
-          "The state \""
-              + name.label()
-              + "\" cannot stand in "
-              + place.what()
-              + ": only numbers and parameters can"
-              + (place.time() ? ", and functions of time." : ".")
-              + (place.what().startsWith("a named expression")
-                  ? " Declare it as an output instead."
-                  : ""));
+      reportMisplacedState(name, place);
       return Optional.empty();
     }
     return hasKnownUnit(name)
         ? Optional.of(
             Quantity.state(StateKey.running(state.index(), name.primes()), dimension(state, name)))
         : Optional.empty();
+  }
+
+  private void reportMisplacedState(NameExpression name, Place place) {
+    problems.report(
+        ProblemKind.STATE_MISPLACED,
+        name.span(),
+        "The state \""
+            + resolver.shown(name.span())
+            + "\" cannot stand in "
+            + place.what()
+            + ": only numbers and parameters can"
+            + (place.time() ? ", and functions of time." : ".")
+            + (place.what().startsWith("a named expression")
+                ? " Declare it as an output instead."
+                : ""));
   }
 
   /** A derivative has no known unit where that of time could not be read. */
@@ -349,7 +465,7 @@ final class NameResolver {
 
   /** Returns the one time in the parentheses behind a state or output. */
   private Optional<Term> namedTime(CallExpression call, Place place) {
-    String label = call.callee().label();
+    String label = resolver.shown(call.callee().span());
     if (call.arguments().size() != 1 || call.arguments().getFirst().label().isPresent()) {
       problems.report(
           ProblemKind.ARGUMENT_COUNT,

@@ -45,7 +45,10 @@ final class NamedValues {
         system
             .scope()
             .own(call.callee().name().text())
-            .filter(m -> m instanceof Meaning.StateMeaning || m instanceof Meaning.OutputMeaning)
+            .filter(m ->
+                m instanceof Meaning.StateMeaning
+                    || m instanceof Meaning.FamilyMeaning
+                    || m instanceof Meaning.OutputMeaning)
             .isPresent();
     boolean running =
         call.arguments().getFirst().value() instanceof NameExpression name
@@ -60,12 +63,17 @@ final class NamedValues {
       return Optional.empty();
     }
     if (reference.primes() > 0) {
-      return components.labelled(reference.label()).map(StateComponent::unit);
+      return (reference.isIndexed()
+              ? components.quietly(reference)
+              : components.labelled(reference.label()))
+          .map(StateComponent::unit);
     }
     Optional<Meaning> meaning = system.scope().use(reference.name().text());
     return meaning.flatMap(m ->
         switch (m) {
           case Meaning.StateMeaning state -> Optional.of(state.unit());
+          case Meaning.FamilyMeaning family -> Optional.of(family.unit());
+          case Meaning.IndexMeaning index -> Optional.of(UnitOfMeasure.ONE);
           case Meaning.OutputMeaning output -> Optional.of(output.unit());
           case Meaning.ParameterMeaning parameter -> Optional.of(parameter.parameter().unit());
           case Meaning.LetMeaning let -> Optional.of(let.let().unit());

@@ -77,8 +77,11 @@ final class RequirementReader {
     requirement.ifPresent(requirements::add);
   }
 
+  /** Returns the text of a requirement, and in a loop for which turn it stands. */
   private String text(RequireClause clause) {
-    return system.slice(clause.span());
+    String text = system.slice(clause.span());
+    IndexStack indices = problems.indices();
+    return indices.isEmpty() ? text : text + " (" + indices.text() + ")";
   }
 
   private Optional<Requirement> compares(Compares clause) {

@@ -7,6 +7,7 @@ package org.spanloom.language.model;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import org.spanloom.language.model.MatrixAlgebra.Summand;
@@ -17,6 +18,7 @@ import org.spanloom.language.syntax.Expression.Addend;
 import org.spanloom.language.syntax.Expression.CallExpression;
 import org.spanloom.language.syntax.Expression.ChoiceExpression;
 import org.spanloom.language.syntax.Expression.Factor;
+import org.spanloom.language.syntax.Expression.IndexedSumExpression;
 import org.spanloom.language.syntax.Expression.MissingExpression;
 import org.spanloom.language.syntax.Expression.NameExpression;
 import org.spanloom.language.syntax.Expression.NumberExpression;
@@ -48,6 +50,8 @@ final class Resolver {
   private final NameResolver names;
   private final Switching switching;
   private final MatrixAlgebra matrices;
+  private final IndexReader indices;
+  private final Loops loops;
 
   Resolver(Frame frame) {
     this.frame = frame;
@@ -56,6 +60,28 @@ final class Resolver {
     this.switching = new Switching(this, frame);
     this.names = new NameResolver(this, switching, frame.scope(), problems);
     this.matrices = new MatrixAlgebra(this, frame);
+    this.indices = new IndexReader(this, frame.scope(), problems);
+    this.loops = new Loops(frame.scope(), problems, indices);
+  }
+
+  /** Returns the reader of indices. */
+  IndexReader indices() {
+    return indices;
+  }
+
+  /** Returns what goes through the turns of loops. */
+  Loops loops() {
+    return loops;
+  }
+
+  /** Returns what reports names that are misused. */
+  NameResolver names() {
+    return names;
+  }
+
+  /** Reports a name that is not declared. */
+  void unknown(NameExpression name) {
+    names.unknown(name);
   }
 
   Literals literals() {
@@ -84,6 +110,7 @@ final class Resolver {
           case PowerExpression power -> power(power, place);
           case ChoiceExpression choice ->
               switching.choice(choice, place, branch -> quantity(branch, place));
+          case IndexedSumExpression indexed -> indexedSum(indexed, place);
           case ParenthesisedExpression parenthesised -> value(parenthesised.inner(), place);
           case MissingExpression missing -> Optional.empty();
         };
@@ -271,6 +298,40 @@ final class Resolver {
       }
     }
     return total.total(dimension);
+  }
+
+  /** Adds the body of a sum in each of its turns; without a turn it is 0, which fits all units. */
+  private Optional<Quantity> indexedSum(IndexedSumExpression indexed, Place place) {
+    Expression body = indexed.body();
+    Optional<UnitOfMeasure> offset = Literals.offsetUnit(body);
+    if (offset.isPresent()) {
+      return misusedOffset(body.span(), offset.get());
+    }
+    QuantitySum total = new QuantitySum();
+    List<Quantity> first = new ArrayList<>();
+    boolean[] sound = {true};
+    boolean known =
+        loops.each(
+            indexed.turns(),
+            () -> {
+              Optional<Quantity> value = quantity(body, place);
+              sound[0] = value.isPresent();
+              if (sound[0] && !value.get().zero()) {
+                if (first.isEmpty()) {
+                  first.add(value.get());
+                }
+                sound[0] = fitsFirst(first.getFirst(), body.span(), value.get(), body, "added");
+              }
+              value.ifPresent(v -> total.add(false, v, frame.placed(body.span())));
+              return sound[0];
+            });
+    if (!known || !sound[0]) {
+      return Optional.empty();
+    }
+    return Optional.of(
+        first.isEmpty()
+            ? new Quantity(Map.of(), Quantity.Part.ZERO, Dimension.NONE, true, 1)
+            : total.total(first.getFirst().dimension()));
   }
 
   /** Tells whether two values have one dimension; reports the second one if not. */
@@ -492,7 +553,7 @@ final class Resolver {
     if (states.isEmpty()) {
       return text + " holds a state";
     }
-    String first = "\"" + states.getFirst().label() + "\"";
+    String first = "\"" + shown(states.getFirst().span()) + "\"";
     return first.equals(text) ? text + " is a state" : text + " holds the state " + first;
   }
 

@@ -52,6 +52,15 @@ final class Scope {
     return open || outer.isPresent() && outer.get().isOpen();
   }
 
+  /** Gives a name back the meaning it had before; none if there was none. */
+  void restore(String name, Optional<Meaning> meaning) {
+    if (meaning.isPresent()) {
+      define(name, meaning.get());
+    } else {
+      meanings.remove(name);
+    }
+  }
+
   /** Returns the name of the independent variable; empty outside of systems. */
   String timeName() {
     return timeName;

@@ -8,6 +8,7 @@ package org.spanloom.language.model;
 import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.IdentityHashMap;
+import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -24,7 +25,9 @@ import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.AccuracyStatement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
 import org.spanloom.language.syntax.Statement.BoundaryStatement;
+import org.spanloom.language.syntax.Statement.Declaration;
 import org.spanloom.language.syntax.Statement.EquationStatement;
+import org.spanloom.language.syntax.Statement.ForStatement;
 import org.spanloom.language.syntax.Statement.ImportStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
@@ -58,6 +61,7 @@ final class SystemReader {
   private final BooleanSupplier cancelled;
   private final SystemScope system;
   private final List<Frame> frames = new ArrayList<>();
+  private final List<ReadDerivative> derivatives = new ArrayList<>();
   private final Map<Frame, Set<String>> unreadGoverned = new IdentityHashMap<>();
   private final Map<Frame, Set<String>> unreadNames = new IdentityHashMap<>();
   private final PartReader parts;
@@ -65,6 +69,9 @@ final class SystemReader {
   private boolean hasUnread;
   private double accuracy = SystemModel.DEFAULT_ACCURACY;
   private Span accuracySpan;
+
+  /** The declaration of a derivative with the frame it stands in. */
+  private record ReadDerivative(Frame frame, StateStatement statement) {}
 
   SystemReader(SystemStatement statement, FileReading file, Library library) {
     this.statement = statement;
@@ -108,18 +115,23 @@ final class SystemReader {
 
   SystemModel read() {
     collect(system.root(), List.of(statement));
-    Declarations.read(frames);
+    Declarations.Sequence declarations = new Declarations.Sequence(frames);
+    if (system.layout().layWithoutParameters()) {
+      declarations.readConstants();
+      system.layout().layAgain();
+    }
+    derivatives.forEach(d -> system.declareDerivative(d.frame(), d.statement()));
+    declarations.read();
     Times times = new Times(system, statement.over(), timeKnown);
     frames.forEach(frame -> frame.declarations().checkTables(times));
     EquationReader equations = new EquationReader(system);
+    readEquations(equations);
     for (Frame frame : frames) {
-      readEquations(frame, equations);
       Set<String> broken = frame.declarations().inBrokenMatrices();
       if (!broken.isEmpty()) {
         equations.noteUnread(frame, broken);
       }
     }
-    readTransfers(equations);
     if (hasUnread) {
       equations.noteUnread();
       unreadGoverned.forEach(equations::noteUnread);
@@ -165,11 +177,7 @@ final class SystemReader {
     }
     RequirementReader requirements =
         new RequirementReader(system, components, times, initialValues, boundaries, bases);
-    for (Statement s : statement.body()) {
-      if (s instanceof RequireStatement require) {
-        requirements.read(require.clause());
-      }
-    }
+    readRequirements(requirements);
     if (file.place().isEmpty()) {
       checkDefinedness(times, form, outputs, initialValues.complete(), bases.bases());
     }
@@ -210,26 +218,78 @@ final class SystemReader {
         statement.name().span());
   }
 
-  private void readEquations(Frame frame, EquationReader equations) {
-    for (Statement s : frame.body()) {
-      ModelReader.check(cancelled);
-      if (s instanceof EquationStatement equation) {
-        equations.read(frame, equation);
-      }
-    }
-  }
-
-  private void readTransfers(EquationReader equations) {
+  private void readEquations(EquationReader equations) {
     TransferReader transfers = new TransferReader(system, equations);
     for (Frame frame : frames) {
-      for (Statement s : frame.body()) {
-        ModelReader.check(cancelled);
-        if (s instanceof TransferStatement transfer) {
-          transfers.read(frame, transfer);
-        }
-      }
+      frame
+          .resolver()
+          .loops()
+          .statements(
+              frame.body(),
+              new LoopReading(frame) {
+                @Override
+                public boolean wants(Statement s) {
+                  return s instanceof EquationStatement || s instanceof TransferStatement;
+                }
+
+                @Override
+                public void read(Statement s) {
+                  ModelReader.check(cancelled);
+                  if (s instanceof EquationStatement equation) {
+                    equations.read(frame, equation);
+                  } else if (s instanceof TransferStatement transfer) {
+                    transfers.read(frame, transfer);
+                  }
+                }
+              });
     }
     transfers.finish();
+  }
+
+  private void readRequirements(RequirementReader requirements) {
+    system
+        .resolver()
+        .loops()
+        .statements(
+            statement.body(),
+            new LoopReading(system.root()) {
+              @Override
+              public boolean wants(Statement s) {
+                return s instanceof RequireStatement;
+              }
+
+              @Override
+              public void read(Statement s) {
+                ModelReader.check(cancelled);
+                if (s instanceof RequireStatement require) {
+                  requirements.read(require.clause());
+                }
+              }
+            });
+  }
+
+  /** Reads statements in loops; what a loop without turns names counts as used. */
+  private abstract class LoopReading implements Loops.Reading {
+    private final Frame frame;
+    private final Set<Span> seen = new HashSet<>();
+
+    LoopReading(Frame frame) {
+      this.frame = frame;
+    }
+
+    @Override
+    public void unread(ForStatement loop) {
+      if (seen.add(loop.span())) {
+        SystemReader.this.unread(frame, loop.span(), Optional.empty(), true);
+      }
+    }
+
+    @Override
+    public void empty(ForStatement loop) {
+      if (seen.add(loop.span())) {
+        namesUsed(frame, loop.span());
+      }
+    }
   }
 
   /**
@@ -242,7 +302,6 @@ final class SystemReader {
     frames.add(frame);
     collectTime(frame, types.getLast());
     Declarations declarations = frame.declarations();
-    List<StateStatement> derivatives = new ArrayList<>();
     for (Statement s : frame.body()) {
       switch (s) {
         case ParameterStatement parameter -> declarations.collect(parameter);
@@ -251,21 +310,19 @@ final class SystemReader {
         case MatrixStatement matrix -> declarations.collect(matrix);
         case TableStatement table -> declarations.collect(table);
         case OutputStatement output -> declarations.collect(output);
-        case StateStatement state when state.primes() > 0 -> derivatives.add(state);
+        case StateStatement state when state.primes() > 0 ->
+            derivatives.add(new ReadDerivative(frame, state));
         case StateStatement state -> {
           if (declarations.takesName(state.name())) {
-            system.declareState(frame, state);
+            system.layout().declare(frame, state);
           }
         }
         case PartStatement part -> collect(frame, types, part);
-        case UnreadStatement unread ->
-            unread(
-                frame,
-                unread.span(),
-                unread.declares(),
-                unread.word().isEmpty() || unread.word().equals("transfer"));
-        case LaterStatement later -> unread(frame, later.span(), later.declares(), true);
         case ImportStatement read -> misplacedImport(frame, read);
+        case ForStatement loop -> loop(frame, loop);
+        case UnreadStatement unread ->
+            unread(frame, unread.span(), unread.declares(), mayGovern(unread));
+        case LaterStatement later -> unread(frame, later.span(), later.declares(), true);
         case SystemStatement inner -> {}
         case EquationStatement equation -> {}
         case TransferStatement transfer -> {}
@@ -277,7 +334,46 @@ final class SystemReader {
         case AccuracyStatement stated -> {}
       }
     }
-    derivatives.forEach(d -> system.declareDerivative(frame, d));
+  }
+
+  private static boolean mayGovern(UnreadStatement unread) {
+    return switch (unread.word()) {
+      case "", "transfer", "for" -> true;
+      default -> false;
+    };
+  }
+
+  /** Checks what a loop repeats: equations, transfers, requirements and loops. */
+  private void loop(Frame frame, ForStatement loop) {
+    for (Statement s : loop.body()) {
+      switch (s) {
+        case EquationStatement equation -> {}
+        case TransferStatement transfer -> {}
+        case RequireStatement require -> {}
+        case ForStatement inner -> loop(frame, inner);
+        case UnreadStatement unread ->
+            unread(frame, unread.span(), unread.declares(), mayGovern(unread));
+        case LaterStatement later -> unread(frame, later.span(), later.declares(), true);
+        case Declaration declaration ->
+            misplaced(frame, declaration, Optional.of(declaration.name()));
+        case AccuracyStatement accuracy -> misplaced(frame, accuracy, Optional.empty());
+        case JumpStatement jump -> misplaced(frame, jump, Optional.empty());
+        case ImportStatement read -> misplacedImport(frame, read);
+      }
+    }
+  }
+
+  private void misplaced(Frame frame, Statement inLoop, Optional<Name> declares) {
+    unread(frame, inLoop.span(), declares, false);
+    frame
+        .problems()
+        .report(
+            ProblemKind.STATEMENT_MISPLACED,
+            inLoop.span(),
+            "A loop repeats equations, transfers and requirements: move this out of it"
+                + (inLoop instanceof JumpStatement
+                    ? ", and write the loop inside of the jump."
+                    : "."));
   }
 
   private void collectTime(Frame frame, SystemStatement type) {
@@ -366,16 +462,25 @@ final class SystemReader {
         frame.scope().define(name.text(), frame.broken(name));
       }
     });
+    Set<String> governed = unreadGoverned.get(frame);
+    for (String name : namesUsed(frame, span)) {
+      if (mayGovern) {
+        governed.add(name);
+      }
+    }
+  }
+
+  /** Notes the names in a text as used, and returns them. */
+  private Set<String> namesUsed(Frame frame, Span span) {
+    Set<String> names = new LinkedHashSet<>();
     String text = frame.slice(span);
     for (Token token : Lexer.lex(text)) {
       if (token.kind().isName()) {
-        String name = text.substring(token.start(), token.end());
-        unreadNames.computeIfAbsent(frame, f -> new HashSet<>()).add(name);
-        if (mayGovern) {
-          unreadGoverned.get(frame).add(name);
-        }
+        names.add(text.substring(token.start(), token.end()));
       }
     }
+    unreadNames.computeIfAbsent(frame, f -> new HashSet<>()).addAll(names);
+    return names;
   }
 
   private void reportNoStates() {

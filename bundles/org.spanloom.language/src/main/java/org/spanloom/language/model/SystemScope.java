@@ -5,14 +5,12 @@
  */
 package org.spanloom.language.model;
 
-import java.util.ArrayList;
 import java.util.Collection;
 import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import org.spanloom.language.model.Meaning.BrokenMeaning;
 import org.spanloom.language.model.Meaning.StateMeaning;
 import org.spanloom.language.problem.Fix;
 import org.spanloom.language.problem.ProblemKind;
@@ -24,12 +22,17 @@ import org.spanloom.language.units.UnitOfMeasure;
 final class SystemScope {
 
   private final Frame root;
-  private final List<StateMeaning> states = new ArrayList<>();
+  private final StateLayout layout = new StateLayout();
   private final Map<String, Derivative> derivatives = new LinkedHashMap<>();
   private final Map<Integer, Integer> declaredOrders = new HashMap<>();
 
-  /** A derivative of a state with a declaration of its own. */
-  record Derivative(StateMeaning state, StateStatement statement, UnitOfMeasure unit) {}
+  /** A derivative of a state, or of all members of a family, with a declaration of its own. */
+  record Derivative(List<StateMeaning> states, StateStatement statement, UnitOfMeasure unit) {
+    /** Copies the list. */
+    Derivative {
+      states = List.copyOf(states);
+    }
+  }
 
   SystemScope(Frame root) {
     this.root = root;
@@ -66,21 +69,12 @@ final class SystemScope {
 
   /** Returns the states, in the order of the text. */
   List<StateMeaning> states() {
-    return states;
+    return layout.states();
   }
 
-  /** Takes the declaration of a state, whose name is free in its frame. */
-  void declareState(Frame frame, StateStatement state) {
-    Optional<UnitOfMeasure> unit = frame.units().declared(state.unit());
-    String name = state.name().text();
-    if (unit.isEmpty()) {
-      frame.scope().define(name, new BrokenMeaning(state.name().span()));
-      return;
-    }
-    StateMeaning meaning =
-        new StateMeaning(states.size(), frame.label(name), state, frame, unit.get());
-    states.add(meaning);
-    frame.scope().define(name, meaning);
+  /** Returns what lays out the states. */
+  StateLayout layout() {
+    return layout;
   }
 
   /** Takes the declaration of a derivative, after all states of its frame. */
@@ -89,8 +83,8 @@ final class SystemScope {
     if (frame.scope().timeName().isEmpty() || frame.isBroken(name)) {
       return;
     }
-    Optional<StateMeaning> state = frame.state(name);
-    if (state.isEmpty()) {
+    List<StateMeaning> named = frame.states(name);
+    if (named.isEmpty()) {
       frame
           .problems()
           .report(
@@ -112,12 +106,13 @@ final class SystemScope {
     Optional<UnitOfMeasure> declared = frame.units().declared(derivative.unit());
     // A derivative whose unit is wrong still counts as declared, so that nothing else is reported
     // for want of it.
-    UnitOfMeasure unit = state.get().derivativeUnit(derivative.primes());
-    boolean sound = declared.isPresent() && fits(derivative, state.get(), declared.get());
+    StateMeaning state = named.getFirst();
+    UnitOfMeasure unit = state.derivativeUnit(derivative.primes());
+    boolean sound = declared.isPresent() && fits(derivative, state, declared.get());
     boolean twice =
         derivatives.putIfAbsent(
-                state.get().label(derivative.primes()),
-                new Derivative(state.get(), derivative, sound ? declared.get() : unit))
+                state.declaredName() + "'".repeat(derivative.primes()),
+                new Derivative(named, derivative, sound ? declared.get() : unit))
             != null;
     if (twice) {
       frame
@@ -129,7 +124,7 @@ final class SystemScope {
                   + derivative.label()
                   + "\" is declared twice: remove one of the two declarations.");
     }
-    declaredOrders.merge(state.get().index(), derivative.primes(), Math::max);
+    named.forEach(s -> declaredOrders.merge(s.index(), derivative.primes(), Math::max));
   }
 
   private static void reportTooManyPrimes(Frame frame, Span span) {
@@ -199,7 +194,12 @@ final class SystemScope {
     return declaredOrders.getOrDefault(state, 0);
   }
 
-  /** Returns the declaration of a derivative. */
+  /** Returns the state, or the members of the family, of a name that the whole system uses. */
+  List<StateMeaning> members(String declaredName) {
+    return states().stream().filter(s -> s.declaredName().equals(declaredName)).toList();
+  }
+
+  /** Returns the declaration of a derivative, by the declared name with its primes. */
   Optional<Derivative> derivative(String label) {
     return Optional.ofNullable(derivatives.get(label));
   }

@@ -100,9 +100,10 @@ final class TransferReader {
 
   /** Hands the balances over to the equations. */
   void finish() {
+    Set<Span> reported = new HashSet<>();
     for (Flow flow : flows) {
       for (StateKey key : flow.value().coefficients().keySet()) {
-        if (key.order() > 0 && balances.containsKey(key.state())) {
+        if (key.order() > 0 && balances.containsKey(key.state()) && reported.add(flow.span())) {
           reportDerivative(flow, key);
         }
       }
@@ -138,7 +139,7 @@ final class TransferReader {
 
   private Optional<StateMeaning> state(Frame frame, NameExpression end) {
     Name name = end.name();
-    Optional<Meaning> meaning = frame.scope().use(name.text());
+    Optional<Meaning> meaning = frame.resolver().names().meaning(end, Place.TRANSFER);
     if (meaning.isEmpty()) {
       reportUnknown(frame, name);
     } else if (meaning.get() instanceof StateMeaning state && end.primes() == 0) {
@@ -150,7 +151,7 @@ final class TransferReader {
               ProblemKind.NAME_MISUSED,
               end.span(),
               "\""
-                  + end.label()
+                  + frame.resolver().shown(end.span())
                   + "\" is "
                   + (end.primes() > 0 ? "a derivative" : meaning.get().kind())
                   + ": a transfer leads from a state to a state, or from or to outside.");
@@ -169,7 +170,7 @@ final class TransferReader {
             ProblemKind.UNIT_OFFSET,
             end.span(),
             "\""
-                + end.label()
+                + frame.resolver().shown(end.span())
                 + "\" is in "
                 + state.unit().code()
                 + ", a unit with a zero point of its own, and so is no amount: write an equation"
@@ -180,7 +181,9 @@ final class TransferReader {
   private void reportUnknown(Frame frame, Name name) {
     Optional<String> nearest =
         frame.problems().maySuggest()
-            ? Nearest.of(name.text(), system.states().stream().map(s -> s.name()).toList())
+            ? Nearest.of(
+                name.text(),
+                system.states().stream().map(s -> s.declaredName()).distinct().toList())
             : Optional.empty();
     frame
         .problems()

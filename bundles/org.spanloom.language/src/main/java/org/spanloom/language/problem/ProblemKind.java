@@ -62,6 +62,14 @@ public enum ProblemKind {
   NAME_CYCLE("Declarations need each other in a circle."),
   /** A name used as what it is not. */
   NAME_MISUSED("A name is used as something it is not."),
+  /** An index that is no whole constant, or the wrong number of indices. */
+  INDEX_INVALID("An index is not a whole constant, or there are too few or too many indices."),
+  /** An index that no member of the family has. */
+  INDEX_OUT_OF_RANGE("An index lies outside of the range of the family."),
+  /** A loop or sum without a turn. */
+  LOOP_EMPTY(Severity.WARNING, "A loop or sum has no turn."),
+  /** Families, loops or sums beyond the limit. */
+  EXPANSION_TOO_LARGE("Families, loops or sums are larger than the limit."),
   /** A function with the wrong number of arguments. */
   ARGUMENT_COUNT("A function has too few or too many arguments."),
   /** Files that import each other. */

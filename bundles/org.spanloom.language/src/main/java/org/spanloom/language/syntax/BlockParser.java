@@ -30,21 +30,18 @@ import org.spanloom.language.text.Span;
 final class BlockParser {
 
   private final String text;
-  private final StatementSplitter lines;
   private final List<Problem> problems;
+  private final Blocks blocks;
 
-  /** What stood in the braces. */
-  private record Block<T>(List<T> lines, boolean allRead, Span span) {}
-
-  BlockParser(String text, StatementSplitter lines, List<Problem> problems) {
+  BlockParser(String text, List<Problem> problems, Blocks blocks) {
     this.text = text;
-    this.lines = lines;
     this.problems = problems;
+    this.blocks = blocks;
   }
 
   /**
    * {@code initial values = "initial", "values", name, [ time ], "{", { setting, ( ";" | line end )
-   * }, "}" ;}
+   * | loop }, "}" ;}
    */
   Statement initialValues(StatementLine line) {
     StatementParser parser = new StatementParser(text, line);
@@ -60,16 +57,15 @@ final class BlockParser {
     if (!opens(line, parser, "The values stand in braces, as in \"{ T = 293; P = 0 }\"")) {
       return parser.unread();
     }
-    Block<Setting> block =
+    Blocks.Block<Setting> block =
         block(
             line,
             StatementParser::setting,
-            Setting::span,
             "The block of initial values is not closed: write \"}\" behind its last value.");
     return cursor.failed()
         ? unread("initial", named(name), block)
         : new InitialValuesStatement(
-            name, time, block.lines(), block.allRead(), line.documentation(), block.span());
+            name, time, block.content(), block.allRead(), line.documentation(), block.span());
   }
 
   /** {@code jump = "jump", jump time, "{", { change, ( ";" | line end ) }, "}" ;} */
@@ -79,16 +75,20 @@ final class BlockParser {
     if (!opens(line, parser, "What changes stands in braces, as in \"{ x becomes x + 1 }\"")) {
       return parser.unread();
     }
-    Block<Change> block =
+    Blocks.Block<Change> block =
         block(
             line,
             StatementParser::change,
-            Change::span,
             "The jump is not closed: write \"}\" behind its last line.");
     return parser.cursor().failed()
         ? unread("jump", Optional.empty(), block)
         : new JumpStatement(
-            time, block.lines(), block.allRead(), line.documentation(), line.span(), block.span());
+            time,
+            block.content(),
+            block.allRead(),
+            line.documentation(),
+            line.span(),
+            block.span());
   }
 
   /** {@code boundary = "boundary", name, "{", { condition, ( ";" | line end ) }, "}" ;} */
@@ -100,17 +100,16 @@ final class BlockParser {
         line, parser, "The conditions stand in braces, as in \"{ T(0) = 277; T(48) = 280 }\"")) {
       return parser.unread();
     }
-    Block<Condition> block =
+    Blocks.Block<Condition> block =
         block(
             line,
             StatementParser::condition,
-            Condition::span,
             "The block of boundary conditions is not closed: write \"}\" behind its last"
                 + " condition.");
     return parser.cursor().failed()
         ? unread("boundary", named(name), block)
         : new BoundaryStatement(
-            name, block.lines(), block.allRead(), line.documentation(), block.span());
+            name, block.content(), block.allRead(), line.documentation(), block.span());
   }
 
   /** {@code part = "part", name, "=", name, [ "{", { binding, ( ";" | line end ) }, "}" ] ;} */
@@ -118,21 +117,22 @@ final class BlockParser {
     StatementParser parser = new StatementParser(text, line);
     PartStatement head = parser.part();
     parser.cursor().problem().ifPresent(problems::add);
-    if (!line.opensBlock() && (line.closesBlock() || !acceptOpeningBrace())) {
+    if (!line.opensBlock() && (line.closesBlock() || !blocks.acceptOpeningBrace())) {
       return parser.cursor().failed() ? parser.unread() : head;
     }
-    Block<Setting> block =
+    Blocks.Block<Setting> block =
         block(
             line,
             StatementParser::binding,
-            Setting::span,
             "The part is not closed: write \"}\" behind its last line.");
+    List<Setting> bindings = new ArrayList<>();
+    BlockLine.each(block.content(), bindings::add);
     return parser.cursor().failed()
         ? unread("part", named(head.name()), block)
         : new PartStatement(
             head.name(),
             head.system(),
-            block.lines(),
+            bindings,
             block.allRead(),
             head.documentation(),
             line.span(),
@@ -143,7 +143,7 @@ final class BlockParser {
     return name.text().isEmpty() ? Optional.empty() : Optional.of(name);
   }
 
-  private UnreadStatement unread(String word, Optional<Name> declares, Block<?> block) {
+  private UnreadStatement unread(String word, Optional<Name> declares, Blocks.Block<?> block) {
     Span span = block.span();
     return new UnreadStatement(word, text.substring(span.start(), span.end()), declares, span);
   }
@@ -152,7 +152,7 @@ final class BlockParser {
   private boolean opens(StatementLine line, StatementParser parser, String what) {
     parser.expectEnd();
     Cursor cursor = parser.cursor();
-    boolean open = line.opensBlock() || !line.closesBlock() && acceptOpeningBrace();
+    boolean open = line.opensBlock() || !line.closesBlock() && blocks.acceptOpeningBrace();
     if (!open && !cursor.failed()) {
       cursor.fail(ProblemKind.BRACE_MISSING, cursor.peek().span(), what + ": write them here.");
     }
@@ -160,70 +160,13 @@ final class BlockParser {
     return open;
   }
 
-  /** Takes an opening brace on a line of its own. */
-  boolean acceptOpeningBrace() {
-    boolean found = lines.peek().kind() == TokenKind.OPEN_BRACE;
-    if (found) {
-      lines.next();
-    }
-    return found;
-  }
-
   /** Reads the lines of a block up to its closing brace. */
-  private <T> Block<T> block(
-      StatementLine header,
-      Function<StatementParser, Optional<T>> reader,
-      Function<T, Span> place,
-      String notClosed) {
-    List<T> read = new ArrayList<>();
-    boolean allRead = true;
-    int end = header.end().end();
-    boolean closed = false;
-    while (!closed && !endsBlock(lines.peek())) {
-      StatementLine inner = lines.next();
-      end = inner.end().end();
-      closed = inner.closesBlock();
-      if (!inner.tokens().isEmpty()) {
-        StatementParser parser = new StatementParser(text, inner);
-        Optional<T> value = reader.apply(parser);
-        parser.expectNoBlock();
-        parser.cursor().problem().ifPresent(problems::add);
-        value.ifPresent(read::add);
-        allRead &= value.isPresent();
-      }
-      if (inner.opensBlock()) {
-        end = skip();
-        allRead = false;
-      }
-    }
-    if (!closed) {
-      allRead = false;
+  private <T> Blocks.Block<T> block(
+      StatementLine header, Function<StatementParser, Optional<T>> reader, String notClosed) {
+    Blocks.Block<T> block = blocks.block(header, "", reader);
+    if (block.lacksBrace()) {
       problems.add(new Problem(ProblemKind.BRACE_MISSING, header.span(), notClosed, List.of()));
-      int last = read.isEmpty() ? header.end().end() : place.apply(read.getLast()).end();
-      end = Math.min(end, last);
     }
-    return new Block<>(read, allRead, new Span(header.span().start(), end));
-  }
-
-  /**
-   * Tells whether a block cannot go on here: at the end of the text and before a word that begins a
-   * statement.
-   */
-  private boolean endsBlock(Token next) {
-    return next.end() == next.start() || next.kind() == TokenKind.STATEMENT_WORD;
-  }
-
-  /**
-   * Passes over everything up to the brace that closes the block and returns the offset behind it.
-   */
-  int skip() {
-    int depth = 1;
-    int end = lines.peek().start();
-    while (depth > 0 && lines.peek().start() < text.length()) {
-      StatementLine line = lines.next();
-      depth += line.opensBlock() ? 1 : line.closesBlock() ? -1 : 0;
-      end = line.end().end();
-    }
-    return end;
+    return block;
   }
 }

@@ -22,6 +22,10 @@ final class Cursor {
   private final String text;
   private final List<Token> tokens;
   private final Token end;
+
+  /** What the tokens are together, for messages. */
+  private final String whole;
+
   private int at;
 
   /** The coming token. */
@@ -32,6 +36,7 @@ final class Cursor {
   Cursor(String text, StatementLine line) {
     this.text = text;
     this.tokens = line.tokens();
+    this.whole = "the statement";
     int last = line.span().end();
     this.end = new Token(TokenKind.NEWLINE, last, last);
     moveTo(0);
@@ -40,6 +45,19 @@ final class Cursor {
   private void moveTo(int index) {
     at = index;
     coming = index < tokens.size() ? tokens.get(index) : end;
+  }
+
+  private Cursor(String text, List<Token> tokens, int end, String whole) {
+    this.whole = whole;
+    this.text = text;
+    this.tokens = tokens;
+    this.end = new Token(TokenKind.NEWLINE, end, end);
+    moveTo(0);
+  }
+
+  /** Returns a cursor over the tokens of a part of the text that is one token for this one. */
+  Cursor inside(Span part) {
+    return new Cursor(text, Lexer.lexPart(text, part), part.end(), "the range");
   }
 
   /** Returns the coming token; at the end one of no length whose kind is a line end. */
@@ -54,6 +72,12 @@ final class Cursor {
   /** Returns the kind of the token behind the coming one. */
   TokenKind kindAfter() {
     return at + 1 < tokens.size() ? tokens.get(at + 1).kind() : TokenKind.NEWLINE;
+  }
+
+  /** Tells whether the coming token is a word with this text. */
+  boolean isWord(String word) {
+    Token token = peek();
+    return token.kind().isWord() && text(token).equals(word);
   }
 
   /** Tells whether the token behind the coming one is a word with this text. */
@@ -73,12 +97,6 @@ final class Cursor {
 
   boolean is(TokenKind kind) {
     return kind() == kind;
-  }
-
-  /** Tells whether the coming token is a word with this text. */
-  boolean isWord(String word) {
-    Token token = peek();
-    return token.kind().isWord() && token.word().equals(word);
   }
 
   /** Tells whether a sign of comparison is among the tokens to come. */
@@ -133,6 +151,14 @@ final class Cursor {
     return problem;
   }
 
+  /** Takes over a problem found inside of a token. */
+  void fail(Problem found) {
+    if (problem.isEmpty()) {
+      problem = Optional.of(found);
+    }
+    moveTo(tokens.size());
+  }
+
   void fail(ProblemKind kind, Span span, String message, Fix... fixes) {
     if (problem.isEmpty()) {
       problem = Optional.of(new Problem(kind, span, message, List.of(fixes)));
@@ -146,7 +172,7 @@ final class Cursor {
     if (!failBadToken()) {
       boolean quoted = token.kind() == TokenKind.STRING;
       String quote = quoted ? "" : "\"";
-      String found = atEnd() ? "the statement ends" : quote + shortened(token) + quote + " stands";
+      String found = atEnd() ? whole + " ends" : quote + shortened(token) + quote + " stands";
       fail(kind, token.span(), expected + ", but here " + found + ".", fixes);
     }
   }

@@ -22,9 +22,25 @@ public sealed interface Expression {
   record NumberExpression(String digits, Optional<UnitText> unit, Span span)
       implements Expression {}
 
-  /** {@code T_air}, {@code x''}. */
-  record NameExpression(Name name, int primes, Span span) implements Expression {
-    /** Returns the name with its primes. */
+  /** {@code T_air}, {@code x''}, {@code c[i-1]'}. */
+  record NameExpression(Name name, List<Expression> indices, int primes, Span span)
+      implements Expression {
+    /** Copies the list. */
+    public NameExpression {
+      indices = List.copyOf(indices);
+    }
+
+    /** Makes one without indices. */
+    public NameExpression(Name name, int primes, Span span) {
+      this(name, List.of(), primes, span);
+    }
+
+    /** Tells whether a member of a family is meant. */
+    public boolean isIndexed() {
+      return !indices.isEmpty();
+    }
+
+    /** Returns the name with its primes, without indices. */
     public String label() {
       return name.text() + "'".repeat(primes);
     }
@@ -57,6 +73,9 @@ public sealed interface Expression {
       factors = List.copyOf(factors);
     }
   }
+
+  /** {@code sum over i from 1 to 400 of c[i]}. */
+  record IndexedSumExpression(Turns turns, Expression body, Span span) implements Expression {}
 
   /** {@code a^b}. */
   record PowerExpression(Expression base, Expression exponent, Span span) implements Expression {}

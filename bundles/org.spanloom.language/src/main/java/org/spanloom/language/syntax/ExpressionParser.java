@@ -10,11 +10,13 @@ import java.util.List;
 import java.util.Optional;
 import org.spanloom.language.problem.Fix;
 import org.spanloom.language.problem.ProblemKind;
+import org.spanloom.language.problem.TextEdit;
 import org.spanloom.language.syntax.Expression.Addend;
 import org.spanloom.language.syntax.Expression.Argument;
 import org.spanloom.language.syntax.Expression.CallExpression;
 import org.spanloom.language.syntax.Expression.ChoiceExpression;
 import org.spanloom.language.syntax.Expression.Factor;
+import org.spanloom.language.syntax.Expression.IndexedSumExpression;
 import org.spanloom.language.syntax.Expression.MissingExpression;
 import org.spanloom.language.syntax.Expression.NameExpression;
 import org.spanloom.language.syntax.Expression.NumberExpression;
@@ -118,10 +120,14 @@ final class ExpressionParser {
   }
 
   /**
-   * {@code factor = [ "+" | "-" ], ( power | factor ) ;} so that {@code -x^2} is {@code -(x^2)}.
+   * {@code factor = ( "+" | "-" ), factor | indexed sum | power ;} so that {@code -x^2} is {@code
+   * -(x^2)}.
    */
   private Expression factor() {
     int start = cursor.peek().start();
+    if (cursor.isWord("sum") && cursor.isWordAfter("over")) {
+      return indexedSum();
+    }
     boolean negative = cursor.is(TokenKind.MINUS);
     if (!negative && !cursor.is(TokenKind.PLUS)) {
       return power();
@@ -133,6 +139,51 @@ final class ExpressionParser {
     Expression operand = factor();
     depth--;
     return new SignedExpression(negative, operand, cursor.from(start));
+  }
+
+  /**
+   * {@code indexed sum = "sum", "over", turns, "of", term ;} so that {@code sum over i from 1 to 3
+   * of k*c[i] + b} is {@code (sum over i from 1 to 3 of k*c[i]) + b}.
+   */
+  private Expression indexedSum() {
+    int start = cursor.take().start();
+    cursor.take();
+    if (!enter()) {
+      return missing();
+    }
+    Turns turns = turns();
+    if (!cursor.failed() && !cursor.acceptWord("of")) {
+      cursor.failHere(
+          ProblemKind.WORD_UNEXPECTED,
+          "\"of\" and what is added belong here",
+          Fix.insert("Insert of", cursor.lastEnd(), " of"));
+    }
+    Expression body = term();
+    depth--;
+    return new IndexedSumExpression(turns, body, cursor.from(start));
+  }
+
+  /** {@code turns = name, "from", expression, "to", expression ;} */
+  Turns turns() {
+    Token name = cursor.peek();
+    if (name.kind().isName()) {
+      cursor.take();
+    } else if (name.kind().isWord()) {
+      cursor.fail(
+          ProblemKind.NAME_RESERVED,
+          name.span(),
+          "\""
+              + cursor.text(name)
+              + "\" is a word of the language and cannot name an index: choose another name.");
+    } else {
+      cursor.failHere(ProblemKind.NAME_MISSING, "The name of an index belongs here, as in \"i\"");
+    }
+    word("from", "\"from\" and the first index belong here");
+    Expression from = expression();
+    word("to", "\"to\" and the last index belong here");
+    Expression to = expression();
+    Name index = new Name(cursor.text(name), name.span());
+    return new Turns(index, from, to, cursor.from(name.start()));
   }
 
   /** {@code power = primary, [ "^", factor ] ;} so that {@code a^b^c} is {@code a^(b^c)}. */
@@ -203,14 +254,60 @@ final class ExpressionParser {
     return new UnitText(code.strip(), token.span());
   }
 
-  /** {@code reference = name, { "." , name }, [ primes ] ;} */
+  /** {@code reference = name, { "." , name }, [ indices ], [ primes ] ;} */
   NameExpression reference() {
     Name name = dottedName();
-    if (!cursor.is(TokenKind.PRIMES)) {
-      return new NameExpression(name, 0, name.span());
+    if (!cursor.is(TokenKind.PRIMES) && !cursor.is(TokenKind.OPEN_BRACKET)) {
+      return new NameExpression(name, List.of(), 0, name.span());
     }
-    int primes = cursor.take().span().length();
-    return new NameExpression(name, primes, cursor.from(name.span().start()));
+    List<Expression> indices = cursor.is(TokenKind.OPEN_BRACKET) ? indices() : List.of();
+    int primes = 0;
+    if (cursor.is(TokenKind.PRIMES)) {
+      Token sign = cursor.take();
+      primes = sign.span().length();
+      if (cursor.is(TokenKind.OPEN_BRACKET) && indices.isEmpty()) {
+        failPrimesFirst(sign);
+      }
+    }
+    return new NameExpression(name, indices, primes, cursor.from(name.span().start()));
+  }
+
+  /** {@code indices = "[", expression, { ",", expression }, "]" ;} */
+  private List<Expression> indices() {
+    cursor.take();
+    List<Expression> indices = new ArrayList<>();
+    if (enter()) {
+      do {
+        indices.add(expression());
+      } while (cursor.accept(TokenKind.COMMA));
+      if (cursor.is(TokenKind.EQUALS) || cursor.is(TokenKind.PRIMES)) {
+        cursor.fail(
+            ProblemKind.PARENTHESIS_NOT_CLOSED,
+            cursor.peek().span(),
+            "The bracket of the index is not closed: write \"]\" before \""
+                + cursor.text(cursor.peek())
+                + "\".",
+            Fix.insert("Insert ]", cursor.lastEnd(), "]"));
+      }
+      close(TokenKind.CLOSE_BRACKET, "]");
+      depth--;
+    }
+    return indices;
+  }
+
+  private void failPrimesFirst(Token primes) {
+    indices();
+    if (!cursor.failed()) {
+      String sign = cursor.text(primes);
+      int end = cursor.lastEnd();
+      cursor.fail(
+          ProblemKind.WORD_UNEXPECTED,
+          primes.span(),
+          "Primes stand behind the index, as in c[i]': move them there.",
+          new Fix(
+              "Move the primes",
+              List.of(new TextEdit(primes.span(), ""), new TextEdit(new Span(end, end), sign))));
+    }
   }
 
   private Name dottedName() {
@@ -273,12 +370,6 @@ final class ExpressionParser {
 
   private Expression referenceOrCall() {
     NameExpression reference = reference();
-    if (cursor.is(TokenKind.OPEN_BRACKET)) {
-      cursor.fail(
-          ProblemKind.STATEMENT_NOT_SUPPORTED,
-          cursor.peek().span(),
-          "Indices are not read by this version yet: declare each state by a name of its own.");
-    }
     return cursor.is(TokenKind.OPEN_PARENTHESIS) ? call(reference) : reference;
   }
 

@@ -8,6 +8,7 @@ package org.spanloom.language.syntax;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Set;
+import org.spanloom.language.text.Span;
 
 /**
  * Cuts a text into tokens. Every character belongs to a token or is white space; nothing makes it
@@ -35,19 +36,21 @@ public final class Lexer {
   private int at;
   private String first = "";
   private String previousWord = "";
+  private String wordBeforeName = "";
   private boolean beforeEquals = true;
+  private int openSums;
 
-  private Lexer(String text, int from, boolean oneLine) {
+  private Lexer(String text, int from, int end, boolean oneLine) {
     this.text = text;
     this.at = from;
-    this.end = text.length();
+    this.end = end;
     this.oneLine = oneLine;
     this.spellings = new Spellings(text);
   }
 
   /** Returns the tokens of a whole text, line ends included. */
   public static List<Token> lex(String text) {
-    return new Lexer(text, 0, false).run();
+    return new Lexer(text, 0, text.length(), false).run();
   }
 
   /**
@@ -57,7 +60,12 @@ public final class Lexer {
    * @param lineStart offset at which the line begins
    */
   public static List<Token> lexLine(String text, int lineStart) {
-    return new Lexer(text, lineStart, true).run();
+    return new Lexer(text, lineStart, text.length(), true).run();
+  }
+
+  /** Returns the tokens of a part of a text, for example of what stands in an index range. */
+  static List<Token> lexPart(String text, Span part) {
+    return new Lexer(text, part.start(), part.end(), false).run();
   }
 
   private List<Token> run() {
@@ -86,6 +94,7 @@ public final class Lexer {
     first = "";
     previousWord = "";
     beforeEquals = true;
+    openSums = 0;
   }
 
   private void token(char c) {
@@ -166,9 +175,36 @@ public final class Lexer {
     }
     String word = spellings.of(at, i, hash);
     boolean name = !lowerCase || joinsNames();
-    add(name ? TokenKind.NAME : Words.kind(word, first, previousWord), word);
+    TokenKind kind = name ? TokenKind.NAME : Words.kind(word, first, previousWord);
+    boolean ofSum = !name && kind == TokenKind.NAME && isWordOfSum(word, i);
+    add(ofSum ? TokenKind.CONTEXT_WORD : kind, word);
+    // Behind the scale of a state stand expressions, as behind an equals sign.
+    beforeEquals &= kind != TokenKind.CONTEXT_WORD || !word.equals("scale");
     noteFirst(word);
+    wordBeforeName = previousWord;
     previousWord = word;
+  }
+
+  /**
+   * Tells whether a word is {@code sum} before {@code over}, or the {@code of} of such a sum on the
+   * same line; both are names everywhere else.
+   */
+  private boolean isWordOfSum(String word, int behind) {
+    if (word.equals("of") && openSums > 0) {
+      openSums--;
+      return true;
+    }
+    int i = behind;
+    while (i < end && isBlank(text.charAt(i))) {
+      i++;
+    }
+    boolean begins =
+        i > behind
+            && word.equals("sum")
+            && text.startsWith("over", i)
+            && !isNamePart(codePointAt(i + 4));
+    openSums += begins ? 1 : 0;
+    return begins;
   }
 
   private void noteFirst(String word) {
@@ -190,7 +226,10 @@ public final class Lexer {
     TokenKind before = previous();
     boolean afterQuantity =
         before == TokenKind.NUMBER || before == TokenKind.BAD_NUMBER || before == TokenKind.STRING;
-    boolean declares = beforeEquals && DECLARATIONS.contains(first);
+    boolean declares =
+        beforeEquals
+            && DECLARATIONS.contains(first)
+            && (!first.equals("system") || wordBeforeName.equals("over"));
     if (!afterQuantity && !declares) {
       add(TokenKind.OPEN_BRACKET, 1);
       return;

@@ -12,14 +12,18 @@ import java.util.function.Function;
 import org.spanloom.language.problem.Fix;
 import org.spanloom.language.problem.Problem;
 import org.spanloom.language.problem.ProblemKind;
+import org.spanloom.language.syntax.BlockLine.RepeatedLines;
+import org.spanloom.language.syntax.BlockLine.SingleLine;
 import org.spanloom.language.syntax.MatrixSource.MatrixRow;
 import org.spanloom.language.syntax.MatrixSource.MatrixRows;
 import org.spanloom.language.syntax.Statement.BasisStatement;
+import org.spanloom.language.syntax.Statement.ForStatement;
 import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.Row;
 import org.spanloom.language.syntax.Statement.SystemStatement;
 import org.spanloom.language.syntax.Statement.TableStatement;
+import org.spanloom.language.syntax.Statement.UnreadStatement;
 import org.spanloom.language.syntax.TableSource.TableRow;
 import org.spanloom.language.syntax.TableSource.TableRows;
 import org.spanloom.language.text.SourceText;
@@ -39,7 +43,11 @@ public final class Parser {
   private final String text;
   private final StatementSplitter lines;
   private final List<Problem> problems = new ArrayList<>();
-  private final BlockParser blocks;
+  private final Blocks blocks;
+  private final BlockParser blockStatements;
+
+  /** Whether a loop that reaches to the end of the system was reported as not closed. */
+  private boolean openLoopReported;
 
   /**
    * The last line of the statement read last, rows included; its end may close the block around the
@@ -51,8 +59,9 @@ public final class Parser {
     this.source = source;
     this.text = source.content();
     this.lines = new StatementSplitter(text);
-    this.blocks = new BlockParser(text, lines, problems);
-    this.last = new StatementLine(List.of(), new Token(TokenKind.NEWLINE, 0, 0), "");
+    this.blocks = new Blocks(source, lines, problems);
+    this.blockStatements = new BlockParser(text, problems, blocks);
+    this.last = closed(0);
   }
 
   /** Returns the tree of a text. */
@@ -122,20 +131,48 @@ public final class Parser {
     return last;
   }
 
-  /** Reads statements up to the closing brace and returns the offset behind it. */
-  private int body(Name system, List<Statement> body) {
-    int end = system.span().end();
+  /** Returns a line that ends nothing, for a place behind a block that has closed itself. */
+  private static StatementLine closed(int end) {
+    return new StatementLine(List.of(), new Token(TokenKind.NEWLINE, end, end), "");
+  }
+
+  /** {@code loop = "for", turns, "{", { statement }, "}" ;} */
+  private Statement loop(StatementLine line) {
+    boolean opened = line.opensBlock() || !line.closesBlock() && blocks.acceptOpeningBrace();
+    Optional<Turns> turns = blocks.loopHead(line, opened);
+    if (!opened && line.closesBlock()) {
+      return new StatementParser(text, line).unread();
+    }
+    List<Statement> body = new ArrayList<>();
+    Span span = new Span(line.span().start(), loopBody(line, opened, body));
+    last = closed(span.end());
+    return turns.isPresent()
+        ? new ForStatement(turns.get(), body, span)
+        : new UnreadStatement("for", source.slice(span), Optional.empty(), span);
+  }
+
+  /**
+   * Reads what a loop repeats and returns the offset behind it. A loop whose closing brace is
+   * missing ends before the next system, and before a declaration that is not indented deeper. One
+   * whose opening brace is missing holds what is indented deeper.
+   */
+  private int loopBody(StatementLine head, boolean opened, List<Statement> body) {
+    int end = head.span().end();
+    int column = blocks.column(head.tokens().getFirst());
     while (true) {
       Token next = lines.peek();
-      boolean over = isEndOfText(next);
-      if (over || isWord(next, "system")) {
-        problem(
-            ProblemKind.BRACE_MISSING,
-            system.span(),
-            "The system "
-                + system.text()
-                + " is not closed: write \"}\" behind its last statement.",
-            Fix.insert("Insert }", end, "\n}"));
+      boolean over = isEndOfText(next) || isWord(next, "system");
+      boolean deeper =
+          blocks.column(next) > column || blocks.lineOf(next) == blocks.lineOf(head.end());
+      if (over || !deeper && (!opened || isDeclaration(next))) {
+        boolean closes = !over && next.kind() == TokenKind.CLOSE_BRACE;
+        if (closes && blocks.column(next) == column) {
+          return lines.next().end().end();
+        }
+        if (opened && !openLoopReported) {
+          blocks.reportOpenLoop(head);
+          openLoopReported = over;
+        }
         return end;
       }
       StatementLine line = take();
@@ -144,11 +181,56 @@ public final class Parser {
         body.add(statement);
         end = Math.max(end, statement.span().end());
       } else if (line.opensBlock()) {
-        problem(
-            ProblemKind.WORD_UNEXPECTED,
-            line.end().span(),
-            "A block belongs to the statement before it: remove the brace or write the statement.");
-        blocks.skip();
+        strayBlock(line);
+      }
+      if (last.closesBlock()) {
+        return last.end().end();
+      }
+    }
+  }
+
+  private boolean isDeclaration(Token token) {
+    return token.kind() == TokenKind.STATEMENT_WORD
+        && switch (text(token)) {
+          case "for", "require", "transfer", "row" -> false;
+          default -> true;
+        };
+  }
+
+  private void strayBlock(StatementLine line) {
+    problem(
+        ProblemKind.WORD_UNEXPECTED,
+        line.end().span(),
+        "A block belongs to the statement before it: remove the brace or write the statement.");
+    blocks.skip();
+  }
+
+  /** Reads statements up to the closing brace and returns the offset behind it. */
+  private int body(Name system, List<Statement> body) {
+    int end = system.span().end();
+    while (true) {
+      Token next = lines.peek();
+      boolean over = isEndOfText(next);
+      if (over || isWord(next, "system")) {
+        if (!openLoopReported) {
+          problem(
+              ProblemKind.BRACE_MISSING,
+              system.span(),
+              "The system "
+                  + system.text()
+                  + " is not closed: write \"}\" behind its last statement.",
+              Fix.insert("Insert }", end, "\n}"));
+        }
+        openLoopReported = false;
+        return end;
+      }
+      StatementLine line = take();
+      if (!line.tokens().isEmpty()) {
+        Statement statement = statement(line);
+        body.add(statement);
+        end = Math.max(end, statement.span().end());
+      } else if (line.opensBlock()) {
+        strayBlock(line);
       }
       if (last.closesBlock()) {
         return last.end().end();
@@ -160,15 +242,15 @@ public final class Parser {
     Token first = line.tokens().getFirst();
     String word = first.kind() == TokenKind.STATEMENT_WORD ? text(first) : "";
     return switch (word) {
-      case "initial" -> blocks.initialValues(line);
-      case "jump" -> blocks.jump(line);
-      case "boundary" -> blocks.boundary(line);
+      case "initial" -> blockStatements.initialValues(line);
+      case "jump" -> blockStatements.jump(line);
+      case "boundary" -> blockStatements.boundary(line);
       case "basis" -> basis(line);
+      case "for" -> loop(line);
       case "matrix" -> matrix(line);
       case "table" -> table(line);
       case "row" -> strayRow(line);
-      case "part" -> blocks.part(line);
-      case "for" -> later(line, word);
+      case "part" -> blockStatements.part(line);
       default -> simple(line);
     };
   }
@@ -218,10 +300,26 @@ public final class Parser {
     }
     parser.expectEnd();
     parser.expectNoBlock();
+    List<BlockLine<Row>> rows = new ArrayList<>();
+    boolean allRead = true;
+    Span span = line.span();
     boolean mayHaveRows = hasRows || cursor.failed();
-    RowLines<Row> found = rows(line, mayHaveRows, StatementParser::row);
-    List<Row> rows = found.rows();
-    boolean allRead = found.allRead();
+    while (mayHaveRows && !last.closesBlock() && !last.opensBlock()) {
+      if (isWord(lines.peek(), "row")) {
+        take();
+        Optional<Row> row = row(last);
+        StatementLine rowLine = last;
+        row.ifPresent(r -> rows.add(new SingleLine<>(r, rowLine.span())));
+        allRead &= row.isPresent();
+        span = span.join(last.span());
+      } else if (lines.loopHolds("row")) {
+        take();
+        allRead &= rowLoop(last, rows);
+        span = new Span(span.start(), last.end().end());
+      } else {
+        break;
+      }
+    }
     if (hasRows && allRead && rows.isEmpty() && !cursor.failed()) {
       cursor.fail(
           ProblemKind.WORD_UNEXPECTED,
@@ -236,7 +334,7 @@ public final class Parser {
     return cursor.failed()
         ? parser.unread()
         : new BasisStatement(
-            name, argument, time, hasRows, rows, allRead, line.documentation(), found.span());
+            name, argument, time, hasRows, rows, allRead, line.documentation(), span);
   }
 
   /**
@@ -315,6 +413,27 @@ public final class Parser {
         found.span());
   }
 
+  private Optional<Row> row(StatementLine line) {
+    StatementParser parser = new StatementParser(text, line);
+    Optional<Row> row = parser.row();
+    parser.expectNoBlock();
+    note(parser.cursor());
+    return row;
+  }
+
+  /** Reads a loop over rows and tells whether all of it could be read. */
+  private boolean rowLoop(StatementLine line, List<BlockLine<Row>> rows) {
+    Optional<Turns> turns = blocks.loopHead(line, true);
+    Blocks.Block<Row> block = blocks.block(line, "row", StatementParser::row);
+    if (block.lacksBrace()) {
+      blocks.reportOpenLoop(line);
+    }
+    Span span = block.span();
+    turns.ifPresent(t -> rows.add(new RepeatedLines<>(t, block.content(), span)));
+    last = closed(span.end());
+    return turns.isPresent() && block.allRead();
+  }
+
   private Statement strayRow(StatementLine line) {
     StatementParser parser = new StatementParser(text, line);
     problem(
@@ -339,7 +458,7 @@ public final class Parser {
       span = new Span(span.start(), blocks.skip());
     }
     Optional<Name> declares =
-        line.tokens().size() > 1 && line.tokens().get(1).kind().isName() && !word.equals("for")
+        line.tokens().size() > 1 && line.tokens().get(1).kind().isName()
             ? Optional.of(new Name(text(line.tokens().get(1)), line.tokens().get(1).span()))
             : Optional.empty();
     return new LaterStatement(word, declares, span);

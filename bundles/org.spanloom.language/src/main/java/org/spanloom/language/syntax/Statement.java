@@ -106,9 +106,16 @@ public sealed interface Statement {
       Span span)
       implements Declaration {}
 
-  /** {@code state T [K] = 277 scale 10}, {@code state x' [m/s] = 0}. */
+  /**
+   * {@code state T [K] = 277 scale 10}, {@code state x' [m/s] = 0}, {@code state c[1..400]
+   * [mol/m3]}.
+   *
+   * @param ranges the ranges of the indices of a family; empty for a single state and for the
+   *     derivative of a family
+   */
   record StateStatement(
       Name name,
+      List<IndexRange> ranges,
       int primes,
       Optional<UnitText> unit,
       Optional<Expression> initial,
@@ -116,6 +123,21 @@ public sealed interface Statement {
       String documentation,
       Span span)
       implements Declaration {
+    /** Copies the list. */
+    public StateStatement {
+      ranges = List.copyOf(ranges);
+    }
+
+    /** Returns the offset behind the name, its range and its primes. */
+    public int headEnd() {
+      return isFamily() ? ranges.getLast().span().end() + 1 : name.span().end() + primes;
+    }
+
+    /** Tells whether it declares a family. */
+    public boolean isFamily() {
+      return !ranges.isEmpty();
+    }
+
     /** Returns the name with its primes. */
     public String label() {
       return name.text() + "'".repeat(primes);
@@ -148,7 +170,7 @@ public sealed interface Statement {
   record InitialValuesStatement(
       Name name,
       Optional<Expression> time,
-      List<Setting> settings,
+      List<BlockLine<Setting>> settings,
       boolean allRead,
       String documentation,
       Span span)
@@ -172,7 +194,7 @@ public sealed interface Statement {
       Optional<Name> argument,
       Optional<Expression> time,
       boolean hasRows,
-      List<Row> rows,
+      List<BlockLine<Row>> rows,
       boolean allRead,
       String documentation,
       Span span)
@@ -180,6 +202,14 @@ public sealed interface Statement {
     /** Copies the list. */
     public BasisStatement {
       rows = List.copyOf(rows);
+    }
+  }
+
+  /** {@code for i from 2 to 399 { c[i]' = k*(c[i-1] - c[i]) }}. */
+  record ForStatement(Turns turns, List<Statement> body, Span span) implements Statement {
+    /** Copies the list. */
+    public ForStatement {
+      body = List.copyOf(body);
     }
   }
 
@@ -191,7 +221,7 @@ public sealed interface Statement {
    */
   record JumpStatement(
       JumpTime time,
-      List<Change> changes,
+      List<BlockLine<Change>> changes,
       boolean allRead,
       String documentation,
       Span header,
@@ -241,7 +271,11 @@ public sealed interface Statement {
    * @param allRead whether every line of the block could be read
    */
   record BoundaryStatement(
-      Name name, List<Condition> conditions, boolean allRead, String documentation, Span span)
+      Name name,
+      List<BlockLine<Condition>> conditions,
+      boolean allRead,
+      String documentation,
+      Span span)
       implements Declaration {
     /** Copies the list. */
     public BoundaryStatement {

@@ -158,20 +158,62 @@ final class StatementParser {
   }
 
   /**
-   * {@code state = "state", name, [ primes ], [ unit ], [ "=", expression ], [ "scale", expression
-   * ] ;}
+   * {@code state = "state", name, [ ranges | primes ], [ unit ], [ "=", expression ], [ "scale",
+   * expression ] ;}
    */
   private Statement state() {
     cursor.take();
     Name name = name("state");
+    List<IndexRange> ranges = cursor.is(TokenKind.INDEX_RANGE) ? ranges() : List.of();
     int primes = cursor.is(TokenKind.PRIMES) ? cursor.take().span().length() : 0;
+    if (primes > 0 && !ranges.isEmpty()) {
+      Span range = new Span(name.span().end(), ranges.getLast().span().end() + 1);
+      cursor.fail(
+          ProblemKind.WORD_UNEXPECTED,
+          range,
+          "The range stands in the declaration of the family itself: write state "
+              + name.text()
+              + "' for its derivative.",
+          Fix.replace("Remove the range", range, ""));
+    }
     Optional<UnitText> unit = unit();
     Optional<Expression> initial =
         cursor.accept(TokenKind.EQUALS) ? Optional.of(expressions.expression()) : Optional.empty();
     Optional<Expression> scale =
         cursor.acceptWord("scale") ? Optional.of(expressions.expression()) : Optional.empty();
     return new StateStatement(
-        name, primes, unit, initial, scale, line.documentation(), line.span());
+        name, ranges, primes, unit, initial, scale, line.documentation(), line.span());
+  }
+
+  /**
+   * {@code ranges = "[", range, [ ",", range ], "]" ; range = expression, "..", expression ;} read
+   * as one token.
+   */
+  private List<IndexRange> ranges() {
+    Span token = cursor.take().span();
+    Cursor inner = cursor.inside(new Span(token.start() + 1, token.end() - 1));
+    ExpressionParser bounds = new ExpressionParser(inner);
+    List<IndexRange> ranges = new ArrayList<>();
+    do {
+      int start = inner.peek().start();
+      Expression from = bounds.expression();
+      if (!inner.failed() && !inner.accept(TokenKind.RANGE)) {
+        inner.failHere(ProblemKind.WORD_UNEXPECTED, "\"..\" and the last index belong here");
+      }
+      Expression to = bounds.expression();
+      ranges.add(new IndexRange(from, to, inner.from(start)));
+    } while (inner.accept(TokenKind.COMMA));
+    if (!inner.failed() && ranges.size() > 2) {
+      inner.fail(
+          ProblemKind.WORD_UNEXPECTED,
+          token,
+          "A family has one or two index ranges, not " + ranges.size() + ": remove some.");
+    }
+    if (!inner.failed() && !inner.atEnd()) {
+      inner.failHere(ProblemKind.WORD_UNEXPECTED, "The index range should end here");
+    }
+    inner.problem().ifPresent(cursor::fail);
+    return ranges;
   }
 
   /** {@code output = "output", name, [ unit ], "=", expression ;} */
@@ -210,7 +252,7 @@ final class StatementParser {
     return new TransferStatement(from, to, flow, line.documentation(), line.span());
   }
 
-  /** {@code transfer end = name | "outside" ;} */
+  /** {@code transfer end = name, [ indices ] | "outside" ;} */
   private TransferEnd transferEnd(String expected) {
     if (cursor.isWord("outside")) {
       return new TransferEnd(Optional.empty(), cursor.take().span());
@@ -242,7 +284,8 @@ final class StatementParser {
   /** Two names in a row at the start can only be a statement whose word is misspelt. */
   private boolean failMisspeltWord() {
     Token first = cursor.peek();
-    if (!first.kind().isName() || !cursor.kindAfter().isWord()) {
+    boolean sum = cursor.isWord("sum") && cursor.isWordAfter("over");
+    if (sum || !first.kind().isName() || !cursor.kindAfter().isWord()) {
       return false;
     }
     if (cursor.isWordAfter("becomes")) {
@@ -312,7 +355,15 @@ final class StatementParser {
     return cursor.acceptWord("at") ? Optional.of(expressions.expression()) : Optional.empty();
   }
 
-  /** {@code setting = name, [ primes ], "=", expression ;} */
+  /** {@code loop head = "for", turns ;} before the opening brace. */
+  Turns loopHead() {
+    cursor.take();
+    Turns turns = expressions.turns();
+    expectEnd();
+    return turns;
+  }
+
+  /** {@code setting = target, "=", expression ;} */
   Optional<Setting> setting() {
     NameExpression target = target("The name of a state belongs here, as in \"T = 293\"");
     equalsSign();
@@ -352,7 +403,7 @@ final class StatementParser {
     return expressions.expression();
   }
 
-  /** {@code change = name, [ primes ], "becomes", expression ;} */
+  /** {@code change = target, "becomes", expression ;} */
   Optional<Change> change() {
     NameExpression target =
         target("The name of a state belongs here, as in \"gut becomes gut + 250\"");
@@ -383,7 +434,7 @@ final class StatementParser {
         : Optional.of(new Condition(left, right, line.span()));
   }
 
-  /** {@code row = "row", name, [ primes ], "=", expression, { ",", expression } ;} */
+  /** {@code row = "row", target, "=", expression, { ",", expression } ;} */
   Optional<Row> row() {
     cursor.take();
     NameExpression target = target("The name of a state belongs here, as in \"row x = 1, 0\"");
@@ -442,6 +493,7 @@ final class StatementParser {
         : Optional.of(new Setting(target, value, line.span()));
   }
 
+  /** {@code target = name, [ indices ], [ primes ] ;} */
   private NameExpression target(String expected) {
     if (!cursor.kind().isName()) {
       cursor.failHere(ProblemKind.NAME_MISSING, expected);
@@ -503,10 +555,11 @@ final class StatementParser {
     }
     if (cursor.is(TokenKind.INDEX_RANGE)) {
       cursor.fail(
-          ProblemKind.STATEMENT_NOT_SUPPORTED,
+          ProblemKind.WORD_UNEXPECTED,
           cursor.peek().span(),
-          "Index ranges are not read by this version yet: declare each state by a name of its"
-              + " own.");
+          "An index range stands directly behind the name of a state, as in state c[1..4] [mol]:"
+              + " remove it or move it there.",
+          Fix.replace("Remove it", cursor.peek().span(), ""));
     } else if (cursor.is(TokenKind.OPEN_UNIT)) {
       cursor.failBadToken();
     }

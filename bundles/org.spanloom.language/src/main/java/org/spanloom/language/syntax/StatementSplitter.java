@@ -92,6 +92,38 @@ final class StatementSplitter {
     return new StatementLine(tokens, end, documentation);
   }
 
+  /**
+   * Tells whether the coming statement is a loop whose first line, loops in it aside, begins with a
+   * word.
+   */
+  boolean loopHolds(String word) {
+    if (!isWord(peek(), "for")) {
+      return false;
+    }
+    boolean begins = true;
+    for (int i = at; i < all.size(); i++) {
+      Token token = all.get(i);
+      if (token.kind() == TokenKind.OPEN_BRACE) {
+        begins = true;
+      } else if (token.kind() != TokenKind.NEWLINE && !isComment(token)) {
+        if (begins && !isWord(token, "for")) {
+          return isWord(token, word);
+        }
+        if (!begins && (token.kind() == TokenKind.STATEMENT_WORD || endsStatement(token.kind()))) {
+          return false;
+        }
+        begins = false;
+      }
+    }
+    return false;
+  }
+
+  private boolean isWord(Token token, String word) {
+    return token.kind() == TokenKind.STATEMENT_WORD
+        && token.span().length() == word.length()
+        && text.startsWith(word, token.start());
+  }
+
   private static boolean endsStatement(TokenKind kind) {
     return kind == TokenKind.SEMICOLON
         || kind == TokenKind.OPEN_BRACE
