@@ -121,4 +121,71 @@ class MatrixFormTests {
     assertTrue(converted(STORES.replace("south' = -h", "south' = -k")).isEmpty());
     assertTrue(converted("system S over t {\n  state x = 1\n  x' = -x\n}\n").isEmpty());
   }
+
+  @ParameterizedTest
+  @ValueSource(
+      strings = {
+        "-(g + h)/C*north + g/C*(loft - south)",
+        "g/C*(loft*0.3*exp(-t/3 [h]) - (south - 2*north))/7",
+        "north*g/C + loft/3 [h] + sin(t/1 [h])*1 [K/h]",
+      })
+  void theWayBackKeepsTheNumbers(String right) {
+    String text = STORES.replaceAll("north' = .*", "north' = " + right);
+    String matrices = converted(text).orElseThrow();
+    String scalars = scalars(matrices, "x' =").orElseThrow();
+    assertEquals(values(form(text)), values(form(scalars)), scalars);
+    assertTrue(!scalars.contains("matrix"), scalars);
+  }
+
+  private static Optional<String> scalars(String text, String at) {
+    return ScalarForm.at(read(text), text.indexOf(at)).map(f -> TextEdit.apply(text, f.edits()));
+  }
+
+  @Test
+  void aMassMatrixGivesCoupledEquations() {
+    String text =
+        """
+        system Boom over t [s] from 0 to 20 {
+          parameter k [N/m] = 30
+          state a [m] = 1
+          state b [m] = 0
+          state a' [m/s] = 0
+          state b' [m/s] = 0
+          matrix M [kg] =
+            row 2, 0.5
+            row 0, 1.5
+          matrix K(t) [N/m] =
+            row k + 2 [N/m], -k
+            row -k, k*(1 + 0.1*sin(t/1 [s]))
+          matrix q [m] =
+            row a
+            row b
+          M*q'' = -K(t)*q
+        }
+        """;
+    String scalars = scalars(text, "M*q''").orElseThrow();
+    assertEquals(
+        """
+        system Boom over t [s] from 0 to 20 {
+          parameter k [N/m] = 30
+          state a [m] = 1
+          state b [m] = 0
+          state a' [m/s] = 0
+          state b' [m/s] = 0
+          2 [kg]*a'' + 0.5 [kg]*b'' = -(k + 2 [N/m])*a + k*b
+          1.5 [kg]*b'' = k*a - k*(1 + 0.1*sin(t/1 [s]))*b
+        }
+        """,
+        scalars);
+    assertEquals(values(form(text)), values(form(scalars)));
+  }
+
+  @Test
+  void whatIsUsedElsewhereStays() {
+    String text = converted(STORES).orElseThrow();
+    String sound = text.replace("  require loft", "  output y = transpose(b)*x\n  require loft");
+    String scalars = scalars(sound, "x' =").orElseThrow();
+    assertTrue(scalars.contains("matrix b") && scalars.contains("matrix x"), scalars);
+    assertTrue(!scalars.contains("matrix A"), scalars);
+  }
 }

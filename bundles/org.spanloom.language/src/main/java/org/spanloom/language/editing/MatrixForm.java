@@ -105,9 +105,11 @@ public final class MatrixForm {
             .sorted((a, b) -> Integer.compare(a.start(), b.start()))
             .toList();
     List<TextEdit> edits = new ArrayList<>();
-    edits.add(new TextEdit(places.getFirst(), block(indent(places.getFirst()), names, rows)));
+    edits.add(
+        new TextEdit(
+            places.getFirst(), block(WholeLines.indent(source, places.getFirst()), names, rows)));
     for (Span place : places.subList(1, places.size())) {
-      edits.add(new TextEdit(withItsLine(place), ""));
+      edits.add(new TextEdit(WholeLines.around(source, place), ""));
     }
     return edits;
   }
@@ -179,23 +181,5 @@ public final class MatrixForm {
       name = wanted + "_" + i;
     }
     return name;
-  }
-
-  private String indent(Span span) {
-    Span line = source.lineSpan(source.line(span.start()));
-    String before = source.slice(new Span(line.start(), span.start()));
-    return before.isBlank() ? before : "";
-  }
-
-  /** Returns a place with its whole line where nothing else stands on that. */
-  private Span withItsLine(Span span) {
-    int line = source.line(span.start());
-    Span first = source.lineSpan(line);
-    Span last = source.lineSpan(source.line(span.end()));
-    boolean alone =
-        line > 1
-            && source.slice(new Span(first.start(), span.start())).isBlank()
-            && source.slice(new Span(span.end(), last.end())).isBlank();
-    return alone ? new Span(source.lineSpan(line - 1).end(), last.end()) : span;
   }
 }

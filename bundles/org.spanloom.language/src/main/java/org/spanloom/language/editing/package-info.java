@@ -18,7 +18,8 @@
  * <tr><td>What can stand here?</td><td>{@link org.spanloom.language.editing.Completion}</td></tr>
  * <tr><td>Can this long line be broken?</td><td>{@link org.spanloom.language.editing.LineSplit}</td></tr>
  * <tr><td>Can these equations be one of matrices, or the other way round?</td><td>{@link
- *     org.spanloom.language.editing.MatrixForm}</td></tr>
+ *     org.spanloom.language.editing.MatrixForm}, {@link
+ *     org.spanloom.language.editing.ScalarForm}</td></tr>
  * </table>
  *
  * <p>{@link org.spanloom.language.editing.Names} says what a name stands for, and every answer
