@@ -6,6 +6,7 @@
 package org.spanloom.language.model;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
 import java.util.Random;
@@ -175,5 +176,21 @@ class MatrixTests {
     assertEquals(
         List.of(ProblemKind.MATRIX_TOO_LARGE),
         ModelListing.read(text).problems().stream().map(p -> p.kind()).toList());
+  }
+
+  @Test
+  void partsShareTheBound() {
+    StringBuilder row = new StringBuilder("  row 1");
+    row.append(", 2".repeat(99));
+    StringBuilder text = new StringBuilder("matrix A =\n" + (row + "\n").repeat(100));
+    text.append("system Cell over t from 0 to 1 {\n  state x = 1\n  matrix B = A*A\n");
+    text.append("  x' = -x\n}\nsystem All over t from 0 to 1 {\n");
+    for (int i = 0; i < 200; i++) {
+      text.append("  part c" + i + " = Cell\n");
+    }
+    text.append("}\n");
+    assertTrue(
+        ModelListing.read(text.toString()).problems().stream()
+            .anyMatch(p -> p.kind() == ProblemKind.MATRIX_TOO_LARGE));
   }
 }

@@ -65,7 +65,7 @@ final class FileReading {
     this.place = place;
     this.frame =
         new Frame(
-            new SourceFile(key, syntax.source(), systems, library.files()),
+            new SourceFile(key, syntax.source(), systems, library.files(), library.matrices()),
             syntax.statements(),
             new Scope(Optional.empty()),
             problems,

@@ -30,6 +30,7 @@ final class Library {
   private final FileAccess files;
   private final BooleanSupplier cancelled;
   private final PartBudget budget = new PartBudget();
+  private final MatrixBudget matrices = new MatrixBudget();
   private final Map<FileKey, FileReading> done = new HashMap<>();
   private final List<FileReading> inOrder = new ArrayList<>();
   private final List<FileReading> open = new ArrayList<>();
@@ -50,6 +51,10 @@ final class Library {
 
   PartBudget budget() {
     return budget;
+  }
+
+  MatrixBudget matrices() {
+    return matrices;
   }
 
   /** Returns the imported files that were read, each after those it imports itself. */

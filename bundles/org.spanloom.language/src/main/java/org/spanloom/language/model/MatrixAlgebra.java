@@ -27,13 +27,9 @@ import org.spanloom.language.units.Dimension;
  */
 final class MatrixAlgebra {
 
-  /** Most entries that sums and products of one system may touch. */
-  static final int WORK_LIMIT = 4_000_000;
-
   private final Resolver resolver;
   private final Frame frame;
   private final Problems problems;
-  private long work;
 
   /** One value of a sum with its place. */
   record Summand(boolean subtracted, Value value, Span span) {}
@@ -83,14 +79,15 @@ final class MatrixAlgebra {
     List<MatrixValue.Entry> entries = new ArrayList<>();
     for (int row = 0; row < model.rows(); row++) {
       TreeMap<Integer, QuantitySum> sums = new TreeMap<>();
+      int touched = 0;
       for (Summand summand : terms) {
         for (MatrixValue.Entry entry : ((MatrixValue) summand.value()).row(row)) {
           sums.computeIfAbsent(entry.column(), c -> new QuantitySum())
               .add(summand.subtracted(), entry.value(), frame.placed(summand.span()));
-          work++;
+          touched++;
         }
       }
-      if (!mayGoOn(first.span())) {
+      if (!counted(touched, first.span())) {
         return Optional.empty();
       }
       addRow(row, sums, dimension, false, entries);
@@ -276,20 +273,15 @@ final class MatrixAlgebra {
   }
 
   private boolean counted(int entries, Span span) {
-    work += entries;
-    return mayGoOn(span);
-  }
-
-  private boolean mayGoOn(Span span) {
-    if (work > WORK_LIMIT) {
-      problems.report(
-          ProblemKind.MATRIX_TOO_LARGE,
-          span,
-          "The sums and products of matrices in this system have more than "
-              + WORK_LIMIT
-              + " entries together: use sparser or smaller matrices.");
-      return false;
+    if (frame.file().matrices().allows(entries)) {
+      return true;
     }
-    return true;
+    problems.report(
+        ProblemKind.MATRIX_TOO_LARGE,
+        span,
+        "The sums and products of matrices in this model have more than "
+            + MatrixBudget.ENTRY_LIMIT
+            + " entries together: use sparser or smaller matrices.");
+    return false;
   }
 }

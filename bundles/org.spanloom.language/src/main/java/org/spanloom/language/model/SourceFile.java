@@ -16,6 +16,11 @@ import org.spanloom.language.text.SourceText;
  * @param text its text
  * @param systems the systems that its statements can name, its own and those imported
  * @param files the other files of the project
+ * @param matrices what matrices may cost, shared by all files of a model
  */
 record SourceFile(
-    FileKey key, SourceText text, Map<String, SystemType> systems, FileAccess files) {}
+    FileKey key,
+    SourceText text,
+    Map<String, SystemType> systems,
+    FileAccess files,
+    MatrixBudget matrices) {}
