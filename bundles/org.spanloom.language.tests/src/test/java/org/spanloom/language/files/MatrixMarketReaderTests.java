@@ -114,7 +114,7 @@ class MatrixMarketReaderTests {
         "matrix coordinate real general|1000000000 2 5; 2 too large: a matrix has at most 100000"
             + " rows and columns",
         "matrix coordinate real general|100000 100000 600000; 2 too large: a matrix has at most"
-            + " 500000 entries that are not 0",
+            + " 200000 entries that are not 0",
         "matrix array real general|100000 100000; 2 too large: at most 4000000 values are read:"
             + " list those that are not 0",
         "matrix array real general|999999999999999999999 1; 2: the numbers of rows and columns"

@@ -24,7 +24,7 @@ public final class MatrixMarketReader {
   public static final int SIZE_LIMIT = 100_000;
 
   /** Most entries that are not 0, those that symmetry adds included. */
-  public static final int ENTRY_LIMIT = 500_000;
+  public static final int ENTRY_LIMIT = 200_000;
 
   /** Most values of a file that lists them all. */
   public static final int ARRAY_LIMIT = 4_000_000;

@@ -9,7 +9,7 @@ package org.spanloom.language.model;
 final class MatrixBudget {
 
   /** Most entries that they may touch together. */
-  static final int ENTRY_LIMIT = 4_000_000;
+  static final int ENTRY_LIMIT = 1_000_000;
 
   private long entries;
 
