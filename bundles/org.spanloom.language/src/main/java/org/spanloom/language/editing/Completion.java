@@ -46,7 +46,8 @@ import org.spanloom.language.units.UnitReader;
 /** Proposes what can stand at a caret. */
 public final class Completion {
 
-  private static final List<String> OUTSIDE = List.of("system", "parameter", "let", "matrix");
+  private static final List<String> OUTSIDE =
+      List.of("system", "import", "parameter", "let", "matrix");
   private static final List<String> INSIDE =
       List.of(
           "parameter",
@@ -56,6 +57,7 @@ public final class Completion {
           "output",
           "matrix",
           "table",
+          "part",
           "transfer",
           "for",
           "jump",
@@ -155,7 +157,9 @@ public final class Completion {
       default -> {}
     }
     String first = firstWord();
-    if (first.isEmpty()) {
+    if (last.kind() == TokenKind.DOT) {
+      inPart(last);
+    } else if (first.isEmpty()) {
       beginning();
     } else {
       insideStatement(first, text(last));
@@ -183,7 +187,52 @@ public final class Completion {
     return Names.of(model.syntax()).systemAt(offset);
   }
 
+  /** Proposes what the part before the point declares. */
+  private void inPart(Token dot) {
+    List<String> path =
+        PartNames.path(model.source(), dot.start()).stream().map(this::text).toList();
+    List<Statement> body = system().map(SystemStatement::body).orElse(List.of());
+    new PartNames(model)
+        .inside(body, path)
+        .map(found -> (SystemStatement) found.declaration())
+        .ifPresent(type -> declarations(type.body()));
+  }
+
+  private void declarations(List<Statement> body) {
+    for (Statement statement : body) {
+      if (statement instanceof Declaration declaration) {
+        name(declaration);
+      }
+    }
+  }
+
+  /** Proposes what the braces of a part can set. */
+  private void bindings(PartStatement part) {
+    PartNames names = new PartNames(model);
+    List<Statement> body =
+        names
+            .type(part)
+            .map(found -> ((SystemStatement) found.declaration()).body())
+            .orElse(List.of());
+    for (Statement statement : body) {
+      switch (statement) {
+        case ParameterStatement p ->
+            offer(p.name().text(), "parameter" + unit(p.unit().map(u -> u.code())));
+        case InputStatement i ->
+            offer(i.name().text(), "input" + unit(i.unit().map(u -> u.code())));
+        case StateStatement s ->
+            offer(s.label(), "initial value" + unit(s.unit().map(u -> u.code())));
+        default -> {}
+      }
+    }
+  }
+
   private void beginning() {
+    Optional<PartStatement> part = new PartNames(model).partAt(offset);
+    if (part.isPresent()) {
+      bindings(part.get());
+      return;
+    }
     boolean inside = system().filter(s -> offset > s.header().end()).isPresent();
     (inside ? INSIDE : OUTSIDE).forEach(w -> offer(w, "statement"));
     if (inside) {
@@ -193,6 +242,10 @@ public final class Completion {
   }
 
   private void insideStatement(String first, String last) {
+    if (first.equals("part") && last.equals("=")) {
+      new PartNames(model).systems().forEach(s -> offer(s.name().text(), "system"));
+      return;
+    }
     switch (last) {
       case "under" -> initialValues();
       case "initial" -> offer("values", "initial values NAME { ... }");
@@ -211,7 +264,7 @@ public final class Completion {
           "system",
           "values",
           "for" -> {}
-      case "basis", "boundary" -> {}
+      case "basis", "boundary", "part", "import" -> {}
       default -> {
         if (isCondition()) {
           bases();
@@ -305,11 +358,8 @@ public final class Completion {
     List<Statement> statements = new ArrayList<>();
     system().ifPresent(s -> statements.addAll(s.body()));
     statements.addAll(model.syntax().statements());
-    for (Statement statement : statements) {
-      if (statement instanceof Declaration declaration) {
-        name(declaration);
-      }
-    }
+    declarations(statements);
+    new PartNames(model).importedGlobals().forEach(this::name);
     if (reach != Reach.CONSTANTS) {
       system()
           .flatMap(SystemStatement::over)

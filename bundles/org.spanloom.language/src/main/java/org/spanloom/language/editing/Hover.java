@@ -23,6 +23,7 @@ import org.spanloom.language.model.StateComponent;
 import org.spanloom.language.model.SystemModel;
 import org.spanloom.language.model.TermEvaluator;
 import org.spanloom.language.syntax.Lexer;
+import org.spanloom.language.syntax.Statement.Declaration;
 import org.spanloom.language.syntax.Token;
 import org.spanloom.language.syntax.TokenKind;
 import org.spanloom.language.text.SourceText;
@@ -46,6 +47,12 @@ public final class Hover {
   /** Returns what to say about the name or unit at an offset. */
   public static Optional<HoverText> at(Model model, int offset) {
     Optional<Occurrence> name = Names.of(model.syntax()).at(offset);
+    if (name.isEmpty()) {
+      Optional<PartNames.Found> imported = new PartNames(model).importedAt(offset);
+      if (imported.isPresent()) {
+        return new Hover(model).imported(imported.get(), offset);
+      }
+    }
     return name.isPresent()
         ? new Hover(model).name(name.get())
         : unitAt(model.source(), offset).flatMap(unit -> new Hover(model).unit(unit));
@@ -60,6 +67,35 @@ public final class Hover {
         .filter(t -> t.kind() == TokenKind.UNIT && t.span().touches(offset))
         .map(Token::span)
         .findFirst();
+  }
+
+  private Optional<HoverText> imported(PartNames.Found found, int offset) {
+    SourceText source = found.syntax().source();
+    Declaration declaration = found.declaration();
+    lines.add(line(source, declaration.span()));
+    List<Token> path = PartNames.path(model.source(), offset);
+    Span word = path.getLast().span();
+    systemAt(offset)
+        .ifPresent(s -> inPart(s, model.source().slice(path.getFirst().span().join(word))));
+    lines.addAll(declaration.documentation().lines().toList());
+    lines.add(found.file().path() + ", line " + source.line(declaration.span().start()));
+    return result(word);
+  }
+
+  private Optional<SystemModel> systemAt(int offset) {
+    return model.systems().stream().filter(s -> s.span().touches(offset)).findFirst();
+  }
+
+  /** Says what something is whose name the whole system knows. */
+  private void inPart(SystemModel system, String name) {
+    system.states().stream()
+        .filter(c -> c.name().equals(name))
+        .forEach(c -> component(system, c, 0));
+    system.parameters().stream().filter(p -> p.name().equals(name)).forEach(this::parameter);
+    system.lets().stream().filter(l -> l.name().equals(name)).forEach(this::let);
+    system.outputs().stream()
+        .filter(o -> o.name().equals(name))
+        .forEach(o -> lines.add("output" + in(o.unit())));
   }
 
   private Optional<HoverText> name(Occurrence name) {
@@ -103,10 +139,16 @@ public final class Hover {
 
   private void declaration(Occurrence name, Declared declared) {
     lines.add(line(declared.statement()));
-    model.systems().stream()
-        .filter(s -> s.span().touches(name.span().start()))
-        .findFirst()
-        .ifPresent(s -> meaning(s, name, declared));
+    List<Token> path = PartNames.path(model.source(), name.span().end());
+    boolean dotted = path.size() > 1;
+    systemAt(name.span().start())
+        .ifPresent(s -> {
+          if (dotted) {
+            inPart(s, model.source().slice(path.getFirst().span().join(path.getLast().span())));
+          } else {
+            meaning(s, name, declared);
+          }
+        });
     lines.addAll(declared.documentation().lines().toList());
     lines.add("line " + model.source().line(declared.statement().start()));
   }
@@ -251,10 +293,12 @@ public final class Hover {
   }
 
   private String line(Span span) {
+    return line(model.source(), span);
+  }
+
+  private static String line(SourceText source, Span span) {
     String text =
-        model
-            .source()
-            .slice(new Span(span.start(), Math.min(span.end(), span.start() + 4 * LONGEST_LINE)));
+        source.slice(new Span(span.start(), Math.min(span.end(), span.start() + 4 * LONGEST_LINE)));
     String first = text.lines().findFirst().orElse("").strip();
     return first.length() <= LONGEST_LINE ? first : first.substring(0, LONGEST_LINE - 3) + "...";
   }

@@ -43,6 +43,7 @@ final class FileReading {
   private final Map<String, SystemType> systems = new LinkedHashMap<>();
   private final Map<String, Imported> imported = new HashMap<>();
   private final List<PartProblems> parts = new ArrayList<>();
+  private final List<ImportedFile> imports = new ArrayList<>();
   private final Frame frame;
 
   /** Where a name comes from that another file declares. */
@@ -177,6 +178,7 @@ final class FileReading {
 
   /** Brings the names that another file declares itself. */
   private void bring(FileReading other, ImportStatement read) {
+    imports.add(new ImportedFile(other.key(), other.syntax));
     for (Statement statement : other.syntax.statements()) {
       if (statement instanceof Declaration declaration && isFree(declaration.name(), other, read)) {
         String name = declaration.name().text();
@@ -297,6 +299,11 @@ final class FileReading {
   /** Returns what is wrong with the file, in the order of the text. */
   List<Problem> problems() {
     return problems.inTextOrder(syntax.problems());
+  }
+
+  /** Returns the files that its own imports name and that could be read. */
+  List<ImportedFile> imports() {
+    return imports;
   }
 
   /** Takes what is wrong with the statements of the file. */

@@ -20,6 +20,8 @@ import org.spanloom.language.text.SourceText;
  * @param syntax its tree
  * @param files the other files that were asked for while it was read, there or not, so that one
  *     knows when it must be read again
+ * @param imports the files that its own imports name and that could be read, in the order of the
+ *     text
  * @param systems its systems, in order; those with errors too, as far as they can be understood
  * @param problems everything found, in the order of the text
  */
@@ -27,12 +29,14 @@ public record Model(
     SourceText source,
     SyntaxFile syntax,
     List<FileKey> files,
+    List<ImportedFile> imports,
     List<SystemModel> systems,
     List<Problem> problems) {
 
   /** Copies the lists. */
   public Model {
     files = List.copyOf(files);
+    imports = List.copyOf(imports);
     systems = List.copyOf(systems);
     problems = List.copyOf(problems);
   }

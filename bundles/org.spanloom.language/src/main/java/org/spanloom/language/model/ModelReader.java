@@ -51,7 +51,8 @@ public final class ModelReader {
     FileAccess access = new FileAccess(files);
     FileReading reading = new Library(access, cancelled).read(file);
     List<SystemModel> systems = reading.readSystems();
-    return new Model(file.source(), file, access.asked(), systems, reading.problems());
+    return new Model(
+        file.source(), file, access.asked(), reading.imports(), systems, reading.problems());
   }
 
   static void check(BooleanSupplier cancelled) {
