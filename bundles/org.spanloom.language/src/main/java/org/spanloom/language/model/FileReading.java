@@ -13,6 +13,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import java.util.stream.Collectors;
 import org.spanloom.language.files.FileKey;
 import org.spanloom.language.model.Meaning.BrokenMeaning;
 import org.spanloom.language.model.PartReader.PartProblems;
@@ -268,22 +269,34 @@ final class FileReading {
    * for each part.
    */
   private void reportParts() {
-    Map<FileReading, Set<Problem>> known = new HashMap<>();
+    Map<FileReading, Set<Sort>> known = new HashMap<>();
     Set<Span> reported = new HashSet<>();
     for (PartProblems part : parts) {
-      for (Problem problem : part.found().inTextOrder(List.of())) {
-        FileReading file = library.reading(part.type().file());
-        boolean standsThere =
-            known.computeIfAbsent(file, f -> Set.copyOf(f.problems.inTextOrder(List.of()))).stream()
-                .anyMatch(p -> p.kind() == problem.kind() && p.span().equals(problem.span()));
-        if (!standsThere && problem.severity() == Severity.ERROR && reported.add(part.place())) {
-          problems.report(
-              problem.kind(),
-              part.place(),
-              "In the part \"" + part.part() + "\": " + problem.message());
-        }
+      FileReading file = library.reading(part.type().file());
+      if (reported.contains(part.place()) || file.problems.isFull()) {
+        continue;
       }
+      Set<Sort> there = known.computeIfAbsent(file, FileReading::sorts);
+      part.found().inTextOrder(List.of()).stream()
+          .filter(p -> p.severity() == Severity.ERROR && !there.contains(Sort.of(p)))
+          .findFirst()
+          .ifPresent(p -> {
+            reported.add(part.place());
+            problems.report(
+                p.kind(), part.place(), "In the part \"" + part.part() + "\": " + p.message());
+          });
     }
+  }
+
+  /** What tells problems of one text apart. */
+  private record Sort(ProblemKind kind, Span span) {
+    static Sort of(Problem problem) {
+      return new Sort(problem.kind(), problem.span());
+    }
+  }
+
+  private Set<Sort> sorts() {
+    return problems.inTextOrder(List.of()).stream().map(Sort::of).collect(Collectors.toSet());
   }
 
   private void reportUnused() {

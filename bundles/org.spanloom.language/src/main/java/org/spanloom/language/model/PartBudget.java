@@ -14,7 +14,7 @@ final class PartBudget {
   static final int DEPTH_LIMIT = 50;
 
   /** Most statements that all parts of the systems of a file may hold together. */
-  static final int STATEMENT_LIMIT = 500_000;
+  static final int STATEMENT_LIMIT = 100_000;
 
   private int statements;
   private boolean refused;
