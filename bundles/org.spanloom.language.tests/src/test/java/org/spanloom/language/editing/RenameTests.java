@@ -20,6 +20,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.spanloom.language.RecordText;
 import org.spanloom.language.TestTexts;
+import org.spanloom.language.files.FileKey;
 import org.spanloom.language.files.ProjectFiles;
 import org.spanloom.language.model.Model;
 import org.spanloom.language.model.ModelReader;
@@ -64,7 +65,7 @@ class RenameTests {
   private static String renamed(String text, int offset, String name) {
     return switch (Rename.at(file(text), offset, name)) {
       case Renaming.Changes changes ->
-          TextEdit.apply(text, changes.edits().getOrDefault("test.span", List.of()));
+          TextEdit.apply(text, changes.edits().getOrDefault(FileKey.NONE, List.of()));
       case Renaming.Refused refused -> "refused: " + refused.conflicts().getFirst().message();
       case Renaming.NothingToRename nothing -> "nothing";
     };
@@ -208,9 +209,9 @@ class RenameTests {
       }
       String name = fresh(text, symbol.name().length());
       Renaming renaming = Rename.at(file, symbol.declarations().getFirst().name().start(), name);
-      Map<String, List<TextEdit>> edits =
+      Map<FileKey, List<TextEdit>> edits =
           assertInstanceOf(Renaming.Changes.class, renaming, symbol + " -> " + renaming).edits();
-      String after = TextEdit.apply(text, edits.get("test.span"));
+      String after = TextEdit.apply(text, edits.get(FileKey.NONE));
       RecordText.assertSame(
           before.replaceAll("\\b" + symbol.name() + "\\b", name),
           listing(after, guesses).replaceAll("\\b" + symbol.name() + "\\b", name),

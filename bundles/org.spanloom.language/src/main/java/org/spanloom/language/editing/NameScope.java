@@ -11,6 +11,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import org.spanloom.language.files.FileKey;
 import org.spanloom.language.model.Function;
 import org.spanloom.language.model.MatrixFunction;
 import org.spanloom.language.model.NamedConstant;
@@ -61,16 +62,16 @@ final class NameScope {
   /** Returns the function or constant of a name. */
   static Optional<Symbol> builtIn(String name) {
     return Function.named(name)
-        .map(f -> new Symbol(SymbolKind.FUNCTION, f.code(), List.of()))
+        .map(f -> new Symbol(FileKey.NONE, SymbolKind.FUNCTION, f.code(), List.of()))
         .or(() ->
             NamedConstant.named(name)
-                .map(c -> new Symbol(SymbolKind.CONSTANT, c.code(), List.of())))
+                .map(c -> new Symbol(FileKey.NONE, SymbolKind.CONSTANT, c.code(), List.of())))
         .or(() ->
             MatrixFunction.named(name)
-                .map(f -> new Symbol(SymbolKind.FUNCTION, f.code(), List.of())))
+                .map(f -> new Symbol(FileKey.NONE, SymbolKind.FUNCTION, f.code(), List.of())))
         .or(() ->
             Optional.of(name)
                 .filter(PulseTrain.NAME::equals)
-                .map(n -> new Symbol(SymbolKind.FUNCTION, n, List.of())));
+                .map(n -> new Symbol(FileKey.NONE, SymbolKind.FUNCTION, n, List.of())));
   }
 }

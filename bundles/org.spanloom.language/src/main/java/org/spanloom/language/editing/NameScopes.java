@@ -13,6 +13,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import org.spanloom.language.editing.Symbol.Declared;
+import org.spanloom.language.files.FileKey;
 import org.spanloom.language.syntax.Name;
 import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.BasisStatement;
@@ -39,18 +40,37 @@ import org.spanloom.language.text.Span;
  */
 final class NameScopes {
 
-  private final NameScope file;
+  /** Through how many files, one importing the other, the type of a part is followed. */
+  private static final int DEPTH_LIMIT = 4;
+
+  private final FileKey key;
+  private final List<Symbol> declared;
+  private NameScope file;
+  private List<NameScopes> imported = List.of();
   private final Map<Symbol, String> partTypes = new IdentityHashMap<>();
   private final Map<String, SystemStatement> types = new HashMap<>();
   private final Map<SystemStatement, NameScope> systems = new IdentityHashMap<>();
 
-  NameScopes(SyntaxFile file) {
+  NameScopes(FileKey key, SyntaxFile file) {
+    this.key = key;
     for (Statement statement : file.statements()) {
       if (statement instanceof SystemStatement system) {
         types.putIfAbsent(system.name().text(), system);
       }
     }
-    this.file = new NameScope(Optional.empty(), symbols(file.statements(), Optional.empty()));
+    this.declared = symbols(file.statements(), Optional.empty());
+    this.file = new NameScope(Optional.empty(), declared);
+  }
+
+  /** Puts what other files declare around the names of this one; before anything is asked. */
+  void importing(List<NameScopes> others) {
+    imported = List.copyOf(others);
+    List<Symbol> symbols = others.stream().flatMap(o -> o.declared.stream()).toList();
+    file = new NameScope(Optional.of(new NameScope(Optional.empty(), symbols)), declared);
+  }
+
+  FileKey key() {
+    return key;
   }
 
   /** Returns the names of the file. */
@@ -58,14 +78,32 @@ final class NameScopes {
     return file;
   }
 
-  /** Returns the names of a system of this file; empty where there is none of that name. */
+  /** Returns the names of a system that can be a part here; empty where there is none. */
   Optional<NameScope> named(String system) {
+    return own(system).or(() -> imported.stream().flatMap(i -> i.own(system).stream()).findFirst());
+  }
+
+  private Optional<NameScope> own(String system) {
     return Optional.ofNullable(types.get(system)).map(this::of);
   }
 
-  /** Returns the names in a part; empty where it is the copy of a system of another file. */
+  /** Returns the names in a part; empty where nobody knows its system. */
   Optional<NameScope> inPart(Symbol part) {
-    return Optional.ofNullable(partTypes.get(part)).flatMap(this::named);
+    String type = partTypes.get(part);
+    return type == null
+        ? imported.stream().flatMap(i -> i.inPart(part, 1).stream()).findFirst()
+        : named(type);
+  }
+
+  /** Looks for a part of a system of an imported file; files may import each other in a circle. */
+  private Optional<NameScope> inPart(Symbol part, int depth) {
+    String type = partTypes.get(part);
+    if (type != null) {
+      return named(type);
+    }
+    return depth == DEPTH_LIMIT
+        ? Optional.empty()
+        : imported.stream().flatMap(i -> i.inPart(part, depth + 1).stream()).findFirst();
   }
 
   /** Returns the names of a system. */
@@ -125,11 +163,11 @@ final class NameScopes {
         (old, more) -> {
           List<Declared> both = new ArrayList<>(old.declarations());
           both.addAll(more.declarations());
-          return new Symbol(old.kind(), old.name(), both);
+          return new Symbol(old.file(), old.kind(), old.name(), both);
         });
   }
 
-  private static Symbol symbol(Declaration declaration) {
+  private Symbol symbol(Declaration declaration) {
     int primes = declaration instanceof StateStatement state ? state.primes() : 0;
     return symbol(
         kind(declaration),
@@ -138,12 +176,12 @@ final class NameScopes {
             declaration.name().span(), primes, declaration.span(), declaration.documentation()));
   }
 
-  private static Symbol symbol(SymbolKind kind, Name name, Span statement) {
+  private Symbol symbol(SymbolKind kind, Name name, Span statement) {
     return symbol(kind, name, new Declared(name.span(), 0, statement, ""));
   }
 
-  private static Symbol symbol(SymbolKind kind, Name name, Declared declared) {
-    return new Symbol(kind, name.text(), List.of(declared));
+  private Symbol symbol(SymbolKind kind, Name name, Declared declared) {
+    return new Symbol(key, kind, name.text(), List.of(declared));
   }
 
   private static SymbolKind kind(Declaration declaration) {

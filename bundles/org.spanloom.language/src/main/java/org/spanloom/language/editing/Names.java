@@ -9,6 +9,7 @@ import java.util.ArrayList;
 import java.util.Collections;
 import java.util.List;
 import java.util.Optional;
+import org.spanloom.language.files.FileKey;
 import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
 import org.spanloom.language.syntax.SyntaxFile;
@@ -23,14 +24,14 @@ public final class Names {
   private final SyntaxFile file;
   private final NameScopes scopes;
 
-  private Names(SyntaxFile file) {
+  Names(SyntaxFile file, NameScopes scopes) {
     this.file = file;
-    this.scopes = new NameScopes(file);
+    this.scopes = scopes;
   }
 
-  /** Returns the names of a file. */
+  /** Returns the names of a file by itself: what it imports is not known. */
   public static Names of(SyntaxFile file) {
-    return new Names(file);
+    return new Names(file, new NameScopes(FileKey.NONE, file));
   }
 
   /** Returns the file. */
@@ -83,9 +84,11 @@ public final class Names {
    */
   List<Symbol> sharingScope(Symbol symbol, String name) {
     SymbolKind.Room room = symbol.kind().room();
-    boolean ofFile = scopes.file().own(room, symbol.name()).filter(symbol::equals).isPresent();
+    boolean ofFile = scopes.file().find(room, symbol.name()).filter(symbol::equals).isPresent();
     List<Symbol> sharing = new ArrayList<>();
-    scopes.file().own(room, name).ifPresent(sharing::add);
+    if (ofFile || symbol.file().equals(scopes.key())) {
+      scopes.file().find(room, name).filter(s -> !s.kind().isBuiltIn()).ifPresent(sharing::add);
+    }
     for (Statement statement : file.statements()) {
       if (statement instanceof SystemStatement system) {
         NameScope scope = scopes.of(system);

@@ -10,10 +10,12 @@ import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.TreeMap;
 import org.spanloom.language.editing.Renaming.Changes;
 import org.spanloom.language.editing.Renaming.Conflict;
 import org.spanloom.language.editing.Renaming.NothingToRename;
 import org.spanloom.language.editing.Renaming.Refused;
+import org.spanloom.language.files.FileKey;
 import org.spanloom.language.problem.TextEdit;
 import org.spanloom.language.syntax.Lexer;
 import org.spanloom.language.syntax.Parser;
@@ -31,26 +33,37 @@ import org.spanloom.language.text.Span;
  */
 public final class Rename {
 
-  private final SyntaxFile file;
-  private final Names names;
+  private final ProjectNames project;
+  private final FileKey file;
   private final Occurrence place;
   private final String newName;
 
-  private Rename(Names names, Occurrence place, String newName) {
-    this.file = names.file();
-    this.names = names;
+  private Rename(ProjectNames project, FileKey file, Occurrence place, String newName) {
+    this.project = project;
+    this.file = file;
     this.place = place;
     this.newName = newName;
   }
 
-  /** Returns what comes of giving a new name to what is named at an offset. */
+  /** Returns what comes of giving a new name to what is named at an offset of a file by itself. */
   public static Renaming at(SyntaxFile file, int offset, String newName) {
-    Names names = Names.of(file);
-    Optional<Occurrence> place = names.at(offset);
+    return at(ProjectNames.of(Map.of(FileKey.NONE, file)), FileKey.NONE, offset, newName);
+  }
+
+  /**
+   * Returns what comes of giving a new name to what is named at an offset.
+   *
+   * @param project all files in which it may be named
+   * @param file the file of the offset
+   * @param offset where it is named
+   * @param newName the name it shall have
+   */
+  public static Renaming at(ProjectNames project, FileKey file, int offset, String newName) {
+    Optional<Occurrence> place = project.at(file, offset);
     if (place.isEmpty() || place.get().symbol().kind().isBuiltIn()) {
       return new NothingToRename();
     }
-    return new Rename(names, place.get(), newName).rename();
+    return new Rename(project, file, place.get(), newName).rename();
   }
 
   private Renaming rename() {
@@ -61,15 +74,14 @@ public final class Rename {
     if (unfit.isPresent()) {
       return new Refused(List.of(unfit.get()));
     }
-    List<Occurrence> before = names.occurrences();
-    List<TextEdit> edits =
-        before.stream()
-            .filter(o -> o.symbol().equals(place.symbol()))
-            .map(o -> new TextEdit(o.span(), newName))
-            .toList();
-    return changedMeaning(before, edits)
+    Map<FileKey, List<TextEdit>> edits = new TreeMap<>();
+    project
+        .of(place.symbol())
+        .forEach((key, places) ->
+            edits.put(key, places.stream().map(o -> new TextEdit(o.span(), newName)).toList()));
+    return changedMeaning(edits)
         .<Renaming>map(c -> new Refused(List.of(c)))
-        .orElseGet(() -> new Changes(Map.of(file.source().name(), edits)));
+        .orElseGet(() -> new Changes(edits));
   }
 
   /** Tells why a text cannot name anything. */
@@ -81,50 +93,76 @@ public final class Rename {
             && tokens.getFirst().span().length() == newName.length();
     if (!word) {
       return conflict(
+          file,
           place.span(),
           " is no name: a name is made of letters, digits and _, and does not begin with a digit.");
     }
     if (tokens.getFirst().kind() != TokenKind.NAME || Words.isReserved(newName)) {
       return conflict(
+          file,
           place.span(),
           " is a word of the language and cannot name anything: choose another name.");
     }
     return NameScope.builtIn(newName)
         .flatMap(s ->
-            conflict(place.span(), " is built in and cannot be declared: choose another name."));
+            conflict(
+                file, place.span(), " is built in and cannot be declared: choose another name."));
   }
 
-  private Optional<Conflict> conflict(Span span, String message) {
-    return Optional.of(new Conflict(span, "\"" + newName + "\"" + message));
+  private Optional<Conflict> conflict(FileKey in, Span span, String message) {
+    return Optional.of(new Conflict(in, span, "\"" + newName + "\"" + message));
   }
 
   /** Finds a declaration of the new name that would be the same, hide this one or be hidden. */
   private Optional<Conflict> taken() {
     SymbolKind.Room room = place.symbol().kind().room();
-    return names.sharingScope(place.symbol(), newName).stream()
-        .flatMap(s -> s.declarations().stream())
+    return project.names().values().stream()
+        .flatMap(names -> names.sharingScope(place.symbol(), newName).stream())
         .findFirst()
-        .flatMap(d ->
+        .flatMap(s ->
             conflict(
-                d.name(),
-                " is declared in line "
-                    + file.source().line(d.name().start())
+                s.file(),
+                s.declarations().getFirst().name(),
+                " is declared in "
+                    + line(s.file(), s.declarations().getFirst().name())
                     + ": choose another name."));
   }
 
-  /** A name with its place and the number of the first name that stands for the same. */
-  private record Bound(Span span, int primes, int first) {}
+  /** Names a line, and its file if that is another one. */
+  private String line(FileKey in, Span span) {
+    String line = "line " + project.files().get(in).source().line(span.start());
+    return in.equals(file) ? line : line + " of " + in.path();
+  }
+
+  /** A name with its place, the file of what it names, and the first name of the same thing. */
+  private record Bound(Span span, int primes, FileKey declaredIn, int first) {}
 
   /**
-   * Reads the changed text and finds the first name in it that would stand for something else, or
-   * could not be read.
+   * Reads the changed texts and finds the first name in them that would stand for something else,
+   * or could not be read.
    */
-  private Optional<Conflict> changedMeaning(List<Occurrence> before, List<TextEdit> edits) {
-    SourceText source = file.source();
-    SyntaxFile read =
-        Parser.parse(new SourceText(source.name(), TextEdit.apply(source.content(), edits)));
+  private Optional<Conflict> changedMeaning(Map<FileKey, List<TextEdit>> edits) {
+    Map<FileKey, SyntaxFile> changed = new TreeMap<>(project.files());
+    edits.forEach((key, changes) -> {
+      SourceText old = project.files().get(key).source();
+      String text = TextEdit.apply(old.content(), changes);
+      changed.put(key, Parser.parse(new SourceText(old.name(), text)));
+    });
+    ProjectNames after = ProjectNames.of(changed);
+    for (FileKey key : project.files().keySet()) {
+      Optional<Conflict> conflict = changedMeaning(key, after);
+      if (conflict.isPresent()) {
+        return conflict;
+      }
+    }
+    return Optional.empty();
+  }
+
+  private Optional<Conflict> changedMeaning(FileKey key, ProjectNames after) {
+    SyntaxFile old = project.files().get(key);
+    List<Occurrence> before = project.names().get(key).occurrences();
     List<Bound> expected = bound(before, newName.length() - place.span().length());
-    List<Bound> found = bound(Names.of(read).occurrences(), 0);
+    List<Bound> found = bound(after.names().get(key).occurrences(), 0);
     int same = 0;
     while (same < Math.min(expected.size(), found.size())
         && expected.get(same).equals(found.get(same))) {
@@ -132,16 +170,23 @@ public final class Rename {
     }
     if (same == expected.size()
         && same == found.size()
-        && read.problems().size() == file.problems().size()) {
+        && after.files().get(key).problems().size() == old.problems().size()) {
       return Optional.empty();
+    }
+    if (same == before.size() && !key.equals(file)) {
+      return conflict(
+          key,
+          new Span(0, 0),
+          " would give names in " + key.path() + " a meaning: choose another name.");
     }
     Span first = same < before.size() ? before.get(same).span() : place.span();
     return conflict(
+        key,
         first,
         " would change what \""
-            + source.slice(first)
-            + "\" in line "
-            + source.line(first.start())
+            + old.source().slice(first)
+            + "\" in "
+            + line(key, first)
             + " stands for: choose another name.");
   }
 
@@ -158,7 +203,7 @@ public final class Rename {
       int longer = o.symbol().equals(place.symbol()) ? growth : 0;
       Span span = new Span(o.span().start() + shift, o.span().end() + shift + longer);
       firsts.putIfAbsent(o.symbol(), bound.size());
-      bound.add(new Bound(span, o.primes(), firsts.get(o.symbol())));
+      bound.add(new Bound(span, o.primes(), o.symbol().file(), firsts.get(o.symbol())));
       shift += longer;
     }
     return bound;

@@ -7,6 +7,7 @@ package org.spanloom.language.editing;
 
 import java.util.List;
 import java.util.Map;
+import org.spanloom.language.files.FileKey;
 import org.spanloom.language.problem.TextEdit;
 import org.spanloom.language.text.Span;
 
@@ -16,9 +17,9 @@ public sealed interface Renaming {
   /**
    * The changes that rename it.
    *
-   * @param edits changes by the name of the file, in the order of its text; they do not overlap
+   * @param edits changes by file, in the order of its text; they do not overlap
    */
-  record Changes(Map<String, List<TextEdit>> edits) implements Renaming {
+  record Changes(Map<FileKey, List<TextEdit>> edits) implements Renaming {
     /** Copies the map. */
     public Changes {
       edits = Map.copyOf(edits);
@@ -43,8 +44,9 @@ public sealed interface Renaming {
   /**
    * A reason not to use a name.
    *
-   * @param span the place in the text that the reason is about
+   * @param file the file that the reason is about
+   * @param span the place in its text
    * @param message what stands in the way and what to do
    */
-  record Conflict(Span span, String message) {}
+  record Conflict(FileKey file, Span span, String message) {}
 }

@@ -7,17 +7,19 @@ package org.spanloom.language.editing;
 
 import java.util.List;
 import java.util.Optional;
+import org.spanloom.language.files.FileKey;
 import org.spanloom.language.text.Span;
 
 /**
  * Something that has a name.
  *
+ * @param file the file that declares it; {@link FileKey#NONE} for what is built in
  * @param kind what it is
  * @param name its name, without primes
  * @param declarations where it is declared, in the order of the text: a state may have one for each
  *     of its derivatives, a name declared twice has two, a built-in one has none
  */
-public record Symbol(SymbolKind kind, String name, List<Declared> declarations) {
+public record Symbol(FileKey file, SymbolKind kind, String name, List<Declared> declarations) {
 
   /**
    * One declaration of a name.
