@@ -7,6 +7,7 @@ package org.spanloom.language.editing;
 
 import java.util.Collection;
 import java.util.EnumMap;
+import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -19,6 +20,8 @@ import org.spanloom.language.model.PulseTrain;
 
 /** The names of one body and, around them, those of the bodies that hold it. */
 final class NameScope {
+
+  private static final Map<String, Symbol> BUILT_IN = builtIn();
 
   private final Optional<NameScope> outer;
   private final Map<SymbolKind.Room, Map<String, Symbol>> rooms =
@@ -50,28 +53,27 @@ final class NameScope {
     return Optional.ofNullable(rooms.getOrDefault(room, Map.of()).get(name));
   }
 
-  /** Returns the names of a room declared here, in the order of the text. */
-  Collection<Symbol> own(SymbolKind.Room room) {
-    return rooms.getOrDefault(room, Map.of()).values();
-  }
-
-  Optional<NameScope> outer() {
-    return outer;
-  }
-
   /** Returns the function or constant of a name. */
   static Optional<Symbol> builtIn(String name) {
-    return Function.named(name)
-        .map(f -> new Symbol(FileKey.NONE, SymbolKind.FUNCTION, f.code(), List.of()))
-        .or(() ->
-            NamedConstant.named(name)
-                .map(c -> new Symbol(FileKey.NONE, SymbolKind.CONSTANT, c.code(), List.of())))
-        .or(() ->
-            MatrixFunction.named(name)
-                .map(f -> new Symbol(FileKey.NONE, SymbolKind.FUNCTION, f.code(), List.of())))
-        .or(() ->
-            Optional.of(name)
-                .filter(PulseTrain.NAME::equals)
-                .map(n -> new Symbol(FileKey.NONE, SymbolKind.FUNCTION, n, List.of())));
+    return Optional.ofNullable(BUILT_IN.get(name));
+  }
+
+  private static Map<String, Symbol> builtIn() {
+    Map<String, Symbol> symbols = new HashMap<>();
+    for (Function function : Function.values()) {
+      symbols.put(function.code(), builtIn(SymbolKind.FUNCTION, function.code()));
+    }
+    for (MatrixFunction function : MatrixFunction.values()) {
+      symbols.put(function.code(), builtIn(SymbolKind.FUNCTION, function.code()));
+    }
+    for (NamedConstant constant : NamedConstant.values()) {
+      symbols.put(constant.code(), builtIn(SymbolKind.CONSTANT, constant.code()));
+    }
+    symbols.put(PulseTrain.NAME, builtIn(SymbolKind.FUNCTION, PulseTrain.NAME));
+    return symbols;
+  }
+
+  private static Symbol builtIn(SymbolKind kind, String code) {
+    return new Symbol(FileKey.NONE, kind, code, List.of());
   }
 }

@@ -43,6 +43,9 @@ final class NameScopes {
   /** Through how many files, one importing the other, the type of a part is followed. */
   private static final int DEPTH_LIMIT = 4;
 
+  /** Names of different rooms are different names. */
+  private record Key(SymbolKind.Room room, String name) {}
+
   private final FileKey key;
   private final List<Symbol> declared;
   private NameScope file;
@@ -125,7 +128,7 @@ final class NameScopes {
   }
 
   private List<Symbol> symbols(List<Statement> body, Optional<Symbol> first) {
-    Map<String, Symbol> symbols = new LinkedHashMap<>();
+    Map<Key, Symbol> symbols = new LinkedHashMap<>();
     first.ifPresent(s -> add(symbols, s));
     for (Statement statement : body) {
       switch (statement) {
@@ -143,7 +146,7 @@ final class NameScopes {
     }
     for (Statement statement : body) {
       if (statement instanceof PartStatement part) {
-        Symbol symbol = symbols.get(SymbolKind.PART.room() + " " + part.name().text());
+        Symbol symbol = symbols.get(new Key(SymbolKind.PART.room(), part.name().text()));
         if (symbol != null && symbol.kind() == SymbolKind.PART) {
           partTypes.putIfAbsent(symbol, part.system().text());
         }
@@ -153,12 +156,12 @@ final class NameScopes {
   }
 
   /** A name declared again is the same symbol; what it is, its first declaration says. */
-  private static void add(Map<String, Symbol> symbols, Symbol symbol) {
+  private static void add(Map<Key, Symbol> symbols, Symbol symbol) {
     if (symbol.name().isEmpty()) {
       return;
     }
     symbols.merge(
-        symbol.kind().room() + " " + symbol.name(),
+        new Key(symbol.kind().room(), symbol.name()),
         symbol,
         (old, more) -> {
           List<Declared> both = new ArrayList<>(old.declarations());

@@ -6,7 +6,7 @@
 package org.spanloom.language.editing;
 
 import java.util.ArrayList;
-import java.util.HashMap;
+import java.util.IdentityHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -196,7 +196,8 @@ public final class Rename {
    * @param growth how much longer each name that is to change becomes
    */
   private List<Bound> bound(List<Occurrence> occurrences, int growth) {
-    Map<Symbol, Integer> firsts = new HashMap<>();
+    // Within one reading of a file, one symbol is one object.
+    Map<Symbol, Integer> firsts = new IdentityHashMap<>();
     List<Bound> bound = new ArrayList<>();
     int shift = 0;
     for (Occurrence o : occurrences) {
