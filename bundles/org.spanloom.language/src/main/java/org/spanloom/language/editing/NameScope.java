@@ -12,7 +12,6 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import org.spanloom.language.files.FileKey;
 import org.spanloom.language.model.Function;
 import org.spanloom.language.model.MatrixFunction;
 import org.spanloom.language.model.NamedConstant;
@@ -74,6 +73,6 @@ final class NameScope {
   }
 
   private static Symbol builtIn(SymbolKind kind, String code) {
-    return new Symbol(FileKey.NONE, kind, code, List.of());
+    return new Symbol(kind, code, List.of());
   }
 }

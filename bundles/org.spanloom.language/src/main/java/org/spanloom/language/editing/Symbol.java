@@ -13,7 +13,7 @@ import org.spanloom.language.text.Span;
 /**
  * Something that has a name.
  *
- * @param file the file that declares it; {@link FileKey#NONE} for what is built in
+ * @param file the file that declares it; {@link FileKey#NONE} for what no other file sees
  * @param kind what it is
  * @param name its name, without primes
  * @param declarations where it is declared, in the order of the text: a state may have one for each
@@ -39,6 +39,11 @@ public record Symbol(FileKey file, SymbolKind kind, String name, List<Declared> 
   /** Copies the list. */
   public Symbol {
     declarations = List.copyOf(declarations);
+  }
+
+  /** Makes a symbol that no other file can see: a built-in one, or an index. */
+  Symbol(SymbolKind kind, String name, List<Declared> declarations) {
+    this(FileKey.NONE, kind, name, declarations);
   }
 
   /**
