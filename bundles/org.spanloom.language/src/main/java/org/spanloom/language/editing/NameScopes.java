@@ -128,7 +128,7 @@ final class NameScopes {
   }
 
   private List<Symbol> symbols(List<Statement> body, Optional<Symbol> first) {
-    Map<Key, Symbol> symbols = new LinkedHashMap<>();
+    Map<Key, List<Symbol>> symbols = new LinkedHashMap<>();
     first.ifPresent(s -> add(symbols, s));
     for (Statement statement : body) {
       switch (statement) {
@@ -144,30 +144,38 @@ final class NameScopes {
         default -> {}
       }
     }
+    Map<Key, Symbol> found = new LinkedHashMap<>();
+    symbols.forEach((key, declared) -> found.put(key, one(declared)));
     for (Statement statement : body) {
       if (statement instanceof PartStatement part) {
-        Symbol symbol = symbols.get(new Key(SymbolKind.PART.room(), part.name().text()));
+        Symbol symbol = found.get(new Key(SymbolKind.PART.room(), part.name().text()));
         if (symbol != null && symbol.kind() == SymbolKind.PART) {
           partTypes.putIfAbsent(symbol, part.system().text());
         }
       }
     }
-    return new ArrayList<>(symbols.values());
+    return new ArrayList<>(found.values());
+  }
+
+  private static void add(Map<Key, List<Symbol>> symbols, Symbol symbol) {
+    if (!symbol.name().isEmpty()) {
+      symbols
+          .computeIfAbsent(
+              new Key(symbol.kind().room(), symbol.name()), key -> new ArrayList<>())
+          .add(symbol);
+    }
   }
 
   /** A name declared again is the same symbol; what it is, its first declaration says. */
-  private static void add(Map<Key, Symbol> symbols, Symbol symbol) {
-    if (symbol.name().isEmpty()) {
-      return;
-    }
-    symbols.merge(
-        new Key(symbol.kind().room(), symbol.name()),
-        symbol,
-        (old, more) -> {
-          List<Declared> both = new ArrayList<>(old.declarations());
-          both.addAll(more.declarations());
-          return new Symbol(old.file(), old.kind(), old.name(), both);
-        });
+  private static Symbol one(List<Symbol> declared) {
+    Symbol first = declared.getFirst();
+    return declared.size() == 1
+        ? first
+        : new Symbol(
+            first.file(),
+            first.kind(),
+            first.name(),
+            declared.stream().flatMap(s -> s.declarations().stream()).toList());
   }
 
   private Symbol symbol(Declaration declaration) {

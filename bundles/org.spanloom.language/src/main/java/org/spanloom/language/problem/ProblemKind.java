@@ -48,6 +48,8 @@ public enum ProblemKind {
   STATEMENT_NOT_SUPPORTED("A statement that this version does not read yet."),
   /** Parentheses in parentheses beyond the limit. */
   NESTING_TOO_DEEP("Expressions are nested deeper than the limit."),
+  /** A statement with more words, numbers and signs than the limit. */
+  STATEMENT_TOO_LONG("A statement is longer than the limit."),
   /** More problems than the limit. */
   TOO_MANY_PROBLEMS("There are more problems than are listed."),
   /** A name declared twice. */

@@ -30,10 +30,10 @@ import org.spanloom.language.text.Span;
 final class BlockParser {
 
   private final String text;
-  private final List<Problem> problems;
+  private final SyntaxProblems problems;
   private final Blocks blocks;
 
-  BlockParser(String text, List<Problem> problems, Blocks blocks) {
+  BlockParser(String text, SyntaxProblems problems, Blocks blocks) {
     this.text = text;
     this.problems = problems;
     this.blocks = blocks;

@@ -23,9 +23,9 @@ final class Blocks {
   private final SourceText source;
   private final String text;
   private final StatementSplitter lines;
-  private final List<Problem> problems;
+  private final SyntaxProblems problems;
 
-  Blocks(SourceText source, StatementSplitter lines, List<Problem> problems) {
+  Blocks(SourceText source, StatementSplitter lines, SyntaxProblems problems) {
     this.source = source;
     this.text = source.content();
     this.lines = lines;

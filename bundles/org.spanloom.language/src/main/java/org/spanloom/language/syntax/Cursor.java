@@ -19,6 +19,9 @@ import org.spanloom.language.text.Span;
  */
 final class Cursor {
 
+  /** Most words, numbers and signs of one statement. */
+  static final int LENGTH_LIMIT = 100_000;
+
   private final String text;
   private final List<Token> tokens;
   private final Token end;
@@ -40,6 +43,16 @@ final class Cursor {
     int last = line.span().end();
     this.end = new Token(TokenKind.NEWLINE, last, last);
     moveTo(0);
+    if (tokens.size() > LENGTH_LIMIT) {
+      fail(
+          ProblemKind.STATEMENT_TOO_LONG,
+          tokens.getFirst().span(),
+          "The statement has "
+              + tokens.size()
+              + " words, numbers and signs, more than the limit of "
+              + LENGTH_LIMIT
+              + ": name parts of it with let, or divide it.");
+    }
   }
 
   private void moveTo(int index) {

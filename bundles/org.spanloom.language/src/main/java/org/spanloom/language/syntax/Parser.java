@@ -42,7 +42,7 @@ public final class Parser {
   private final SourceText source;
   private final String text;
   private final StatementSplitter lines;
-  private final List<Problem> problems = new ArrayList<>();
+  private final SyntaxProblems problems = new SyntaxProblems();
   private final Blocks blocks;
   private final BlockParser blockStatements;
 
@@ -86,7 +86,7 @@ public final class Parser {
         }
       }
     }
-    return new SyntaxFile(source, statements, lines.comments(), problems);
+    return new SyntaxFile(source, statements, lines.comments(), problems.list());
   }
 
   private boolean isEndOfText(Token token) {

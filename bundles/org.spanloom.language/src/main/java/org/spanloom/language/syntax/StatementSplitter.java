@@ -72,6 +72,7 @@ final class StatementSplitter {
           break;
         }
         lineStart = token.end();
+        skipToNextLine();
       } else if (endsStatement(token.kind())) {
         end = token;
         break;
@@ -165,6 +166,18 @@ final class StatementSplitter {
       }
     }
     return false;
+  }
+
+  /** Goes on to the line that continues the statement, past blank lines and comments. */
+  private void skipToNextLine() {
+    while (all.get(at).kind() == TokenKind.NEWLINE || isComment(all.get(at))) {
+      Token token = all.get(at++);
+      if (token.kind() == TokenKind.NEWLINE) {
+        lineStart = token.end();
+      } else {
+        take(token);
+      }
+    }
   }
 
   private void takeTrailingComment() {
