@@ -46,6 +46,22 @@ public record SparsityPattern(int[] rowStart, int[] columns) {
     return Arrays.binarySearch(columns, rowStart[row], rowStart[row + 1], column) >= 0;
   }
 
+  /**
+   * Writes a matrix with this pattern in full.
+   *
+   * @param values its entries in the order of the pattern
+   * @param full receives n*n values row by row
+   */
+  public void scatter(double[] values, double[] full) {
+    int n = dimension();
+    Arrays.fill(full, 0, n * n, 0);
+    for (int i = 0; i < n; i++) {
+      for (int k = rowStart[i]; k < rowStart[i + 1]; k++) {
+        full[i * n + columns[k]] = values[k];
+      }
+    }
+  }
+
   /** Returns the pattern of a full matrix. */
   public static SparsityPattern dense(int n) {
     int[] start = new int[n + 1];

@@ -17,7 +17,7 @@ import org.spanloom.numerics.TimeRange;
  *
  * @param dimension n
  * @param range the interval in the time unit
- * @param matrix A row by row, n*n values
+ * @param matrix the entries of A that the pattern lists, in its order
  * @param forcing b, n values
  * @param pattern entries of A that are not zero by structure
  * @param corners times inside the range where a coefficient has a corner or a jump, increasing
@@ -40,7 +40,12 @@ record CoefficientSystem(
 
   @Override
   public void matrix(double t, Side side, double[] a) {
-    matrix.evaluate(corners.beside(t, side), a);
+    double time = corners.beside(t, side);
+    if (pattern.count() == dimension * dimension) {
+      matrix.evaluate(time, a);
+    } else {
+      pattern.scatter(matrix.at(time), a);
+    }
   }
 
   @Override

@@ -7,6 +7,7 @@ package org.spanloom.analysis.coefficients;
 
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -38,6 +39,9 @@ public final class SystemCompiler {
   private final TermCompiler terms;
   private final TermGraph graph;
   private final int n;
+
+  /** An entry of A and the node of its value. */
+  private record Entry(int row, int column, int node) {}
 
   private SystemCompiler(SystemModel model, LinearForm form, Map<String, Double> parameters) {
     this.model = model;
@@ -80,8 +84,7 @@ public final class SystemCompiler {
   private LinearSystem system(List<Jump> jumps, Breakpoints corners) {
     int[] coupled = coupledRows();
     int[] divisor = divisors(coupled);
-    int[] a = new int[n * n];
-    Arrays.fill(a, -1);
+    List<Entry> a = new ArrayList<>();
     int[] b = new int[n];
     Arrays.fill(b, -1);
     double second = model.timeUnit().factor();
@@ -89,8 +92,8 @@ public final class SystemCompiler {
       int i = entry.row();
       int term = graph.add(entry.term());
       UnitOfMeasure from = unit(entry.column());
-      int place = i * n + entry.column();
-      a[place] = graph.scaled(divided(term, divisor[i]), second * from.factor() / unit(i).factor());
+      double size = second * from.factor() / unit(i).factor();
+      a.add(new Entry(i, entry.column(), graph.scaled(divided(term, divisor[i]), size)));
       if (from.offset() != 0) {
         double share = second * from.offset() / unit(i).factor();
         b[i] = sum(b[i], graph.scaled(divided(term, divisor[i]), share));
@@ -101,12 +104,13 @@ public final class SystemCompiler {
       int term = divided(graph.add(entry.term()), divisor[i]);
       b[i] = sum(b[i], graph.scaled(term, second / unit(i).factor()));
     }
+    a.sort(Comparator.comparingInt(Entry::row).thenComparingInt(Entry::column));
     int[] mass = mass(coupled);
     LinearSystem right =
         new CoefficientSystem(
             n,
             range(),
-            new CompiledTerms(graph, a),
+            new CompiledTerms(graph, a.stream().mapToInt(Entry::node).toArray()),
             new CompiledTerms(graph, b),
             pattern(a),
             corners,
@@ -168,18 +172,13 @@ public final class SystemCompiler {
     return new TimeRange(interval.start(), interval.end());
   }
 
-  private SparsityPattern pattern(int[] a) {
+  private SparsityPattern pattern(List<Entry> entries) {
     int[] start = new int[n + 1];
-    List<Integer> columns = new ArrayList<>();
+    entries.forEach(e -> start[e.row() + 1]++);
     for (int i = 0; i < n; i++) {
-      for (int j = 0; j < n; j++) {
-        if (a[i * n + j] >= 0) {
-          columns.add(j);
-        }
-      }
-      start[i + 1] = columns.size();
+      start[i + 1] += start[i];
     }
-    return new SparsityPattern(start, columns.stream().mapToInt(Integer::intValue).toArray());
+    return new SparsityPattern(start, entries.stream().mapToInt(Entry::column).toArray());
   }
 
   /**
