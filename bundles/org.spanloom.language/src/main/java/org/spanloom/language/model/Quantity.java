@@ -33,12 +33,19 @@ record Quantity(
    * A term with the places in the text it comes from.
    *
    * @param term the term
-   * @param sources the places, the outermost first
+   * @param sources the places, the outermost first; the first {@value #MOST_SOURCES} of them
    * @param placed whether the place in the statement at hand is among them already
    */
   record Part(Term term, List<Span> sources, boolean placed) {
 
     static final Part ZERO = new Part(Term.ZERO, List.of(), false);
+
+    /** Values that rest on values that rest on others would come from everywhere in the end. */
+    private static final int MOST_SOURCES = 100;
+
+    Part {
+      sources = List.copyOf(sources.subList(0, Math.min(sources.size(), MOST_SOURCES)));
+    }
 
     Part map(UnaryOperator<Term> change) {
       return new Part(change.apply(term), sources, placed);
