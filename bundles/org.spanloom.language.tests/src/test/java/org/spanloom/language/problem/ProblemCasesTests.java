@@ -90,6 +90,7 @@ class ProblemCasesTests {
                 ProblemKind.IMPORT_TOO_DEEP,
                 ProblemKind.PARTS_TOO_MANY,
                 ProblemKind.NESTING_TOO_DEEP,
+                ProblemKind.STATEMENT_TOO_LONG,
                 ProblemKind.COEFFICIENT_UNDECIDED));
     for (Case c : cases()) {
       read(new SourceText("case.span", c.text())).problems().forEach(p -> missing.remove(p.kind()));

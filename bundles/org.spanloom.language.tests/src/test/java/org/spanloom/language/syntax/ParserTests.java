@@ -208,10 +208,21 @@ class ParserTests {
   @ParameterizedTest
   @CsvSource({"(", "-", "2^", "sin("})
   void deepNestingIsAProblemAndNoOverflow(String piece) {
-    SyntaxFile file = parse("system S over t { let a = " + piece.repeat(1_000_000) + "1\n}");
+    SyntaxFile file = parse("system S over t { let a = " + piece.repeat(400_000) + "1\n}");
     assertEquals(
         List.of(ProblemKind.NESTING_TOO_DEEP),
         file.problems().stream().map(p -> p.kind()).toList());
+  }
+
+  @Test
+  void statementsBeyondTheLimitAreOneProblemAndTheNextIsRead() {
+    SyntaxFile file = parse("let a = 1" + " + 1".repeat(500_000) + "\nlet b = 1");
+    assertEquals(
+        List.of(
+            "The statement has 1000004 words, numbers and signs, more than the limit of 1000000:"
+                + " name parts of it with let, or divide it."),
+        file.problems().stream().map(p -> p.message()).toList());
+    assertEquals(2, file.statements().size());
   }
 
   @Test

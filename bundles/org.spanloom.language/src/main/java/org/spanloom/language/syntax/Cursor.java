@@ -20,7 +20,7 @@ import org.spanloom.language.text.Span;
 final class Cursor {
 
   /** Most words, numbers and signs of one statement. */
-  static final int LENGTH_LIMIT = 100_000;
+  static final int LENGTH_LIMIT = 1_000_000;
 
   private final String text;
   private final List<Token> tokens;
