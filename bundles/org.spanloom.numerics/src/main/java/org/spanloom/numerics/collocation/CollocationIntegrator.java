@@ -124,7 +124,7 @@ final class CollocationIntegrator {
     double ratioBefore = Double.POSITIVE_INFINITY;
     for (double stop : stops) {
       double direction = Math.signum(stop - t);
-      step = Math.min(step == 0 ? firstStep(t, stop) : step, range / 8);
+      step = Math.min(step == 0 ? firstStep(t, stop) : step, range / 4);
       while (t != stop) {
         watch.ask();
         if (++count > MOST_STEPS) {
@@ -150,7 +150,7 @@ final class CollocationIntegrator {
           if (giveUp && ratio > 1) {
             return Optional.of(new TooLoose(fraction, ratio, ratioBefore));
           }
-          step = Math.min(nextStep(control, h, wanted, local), range / 8);
+          step = Math.min(nextStep(control, h, wanted, local), range / 4);
         } else {
           step = control.afterFailure(h, local);
           if (step < 32 * Math.ulp(Math.max(Math.abs(t), Math.abs(stop)))) {
