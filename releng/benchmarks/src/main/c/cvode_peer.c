@@ -5,9 +5,9 @@
  *
  * Solves one of the benchmark problems by CVODE (SUNDIALS 6):
  *
- *   cvode_peer PROBLEM TOLERANCE
+ *   cvode_peer PROBLEM TOLERANCE RUNS
  *
- * Prints the processor seconds of the best of some runs, then the values at the end, row by row. The problems are
+ * Prints the processor seconds of the best of so many runs, fewer where they take long, then the values at the end, row by row. The problems are
  * those of PeerProblem.java, number for number. Columns are stacked into one system. Problems that are not stiff take
  * Adams methods with fixed-point iteration; stiff ones take BDF: a tridiagonal one with a banded matrix, and the
  * network with one factorisation of I - gamma A that serves all columns.
@@ -246,16 +246,17 @@ static void set_up(void) {
 }
 
 int main(int argc, char **argv) {
-  if (argc != 3 || strlen(argv[1]) > 7) return 2;
+  if (argc != 4 || strlen(argv[1]) > 7) return 2;
   strcpy(problem, argv[1]);
   double tolerance = atof(argv[2]);
   SUNContext context;
   SUNContext_Create(NULL, &context);
   set_up();
+  int runs = atoi(argv[3]);
   int stiff = problem[1] == '2' || problem[1] == '3';
   double best = 1e300, spent = 0;
   N_Vector y = N_VNew_Serial((sunindextype)n * m, context);
-  for (int run = 0; run < 5 && (run == 0 || spent < 3); run++) {
+  for (int run = 0; run < runs && (run == 0 || spent < 3); run++) {
     memcpy(N_VGetArrayPointer(y), start, sizeof(double) * n * m);
     clock_t began = clock();
     cvode = CVodeCreate(stiff ? CV_BDF : CV_ADAMS, context);

@@ -34,12 +34,18 @@ final class CvodeDriver {
   @SuppressWarnings("ArrayRecordComponent") // nobody compares results
   record Result(double seconds, double[] values) {}
 
-  /** Runs the driver; values that are not numbers where it failed. */
-  static Result run(PeerProblem problem, double tolerance) {
+  /**
+   * Runs the driver, and there the problem at most so many times; values that are not numbers where
+   * it failed.
+   */
+  static Result run(PeerProblem problem, double tolerance, int runs) {
     try {
       Process process =
           new ProcessBuilder(
-                  System.getProperty(PROPERTY), problem.driverName(), String.valueOf(tolerance))
+                  System.getProperty(PROPERTY),
+                  problem.driverName(),
+                  String.valueOf(tolerance),
+                  String.valueOf(runs))
               .redirectError(ProcessBuilder.Redirect.DISCARD)
               .start();
       try (BufferedReader reader =

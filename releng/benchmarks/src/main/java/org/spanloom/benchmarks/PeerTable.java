@@ -108,9 +108,10 @@ final class PeerTable {
 
   private static Optional<Time> cvode(PeerProblem problem, double[] reference, double target) {
     double tolerance =
-        Calibration.tolerance(asked -> CvodeDriver.run(problem, asked).values(), reference, target);
+        Calibration.tolerance(
+            asked -> CvodeDriver.run(problem, asked, 1).values(), reference, target);
     return tolerance == 0
         ? Optional.empty()
-        : Optional.of(new Time(CvodeDriver.run(problem, tolerance).seconds() * 1e3, tolerance));
+        : Optional.of(new Time(CvodeDriver.run(problem, tolerance, 5).seconds() * 1e3, tolerance));
   }
 }
