@@ -23,8 +23,8 @@ final class MagnusIntegrator {
 
   private static final int MOST_STEPS = 1_000_000;
 
-  /** Values and errors that are kept, 1.6 GB of them. */
-  private static final double MOST_NUMBERS = 2e8;
+  /** Values and errors that are kept, half a gigabyte of them. */
+  private static final double MOST_NUMBERS = 6e7;
 
   /** Steps after which the error at the end of the range is foretold. */
   private static final int STEPS_TO_FORETELL = 160;
