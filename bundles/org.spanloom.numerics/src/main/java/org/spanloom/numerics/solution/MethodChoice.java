@@ -85,7 +85,7 @@ public record MethodChoice(Method method, int order) {
     }
     Tempo tempo = Tempo.of(values, watch);
     if (tempo.suitsMagnus(n)) {
-      return new MethodChoice(Method.MAGNUS, relative >= 1e-2 ? 4 : relative >= 1e-4 ? 6 : 8);
+      return new MethodChoice(Method.MAGNUS, relative >= 1e-2 ? 6 : 8);
     }
     return tempo.decaysFast()
         ? new MethodChoice(Method.RADAU_COLLOCATION, 2 * stages(n, relative) - 1)
