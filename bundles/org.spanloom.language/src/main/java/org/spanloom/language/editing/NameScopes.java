@@ -160,8 +160,7 @@ final class NameScopes {
   private static void add(Map<Key, List<Symbol>> symbols, Symbol symbol) {
     if (!symbol.name().isEmpty()) {
       symbols
-          .computeIfAbsent(
-              new Key(symbol.kind().room(), symbol.name()), key -> new ArrayList<>())
+          .computeIfAbsent(new Key(symbol.kind().room(), symbol.name()), key -> new ArrayList<>())
           .add(symbol);
     }
   }
