@@ -14,6 +14,7 @@ import java.util.Optional;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import org.spanloom.language.problem.TextEdit;
+import org.spanloom.language.syntax.BlockLine;
 import org.spanloom.language.syntax.Expression;
 import org.spanloom.language.syntax.Expression.CallExpression;
 import org.spanloom.language.syntax.Expression.NameExpression;
@@ -96,7 +97,7 @@ final class UnitScaling {
       case TransferStatement transfer -> expression(transfer.flow());
       case InitialValuesStatement values -> {
         values.time().ifPresent(e -> given(e, timeFactor));
-        values.settings().forEach(s -> given(s.value(), factor(s.target())));
+        BlockLine.each(values.settings(), s -> given(s.value(), factor(s.target())));
       }
       case RequireStatement require -> clause(require.clause());
       case Statement.AccuracyStatement accuracy -> {}

@@ -149,7 +149,7 @@ final class EquationReader {
    */
   private void note(Frame frame, NameExpression name) {
     List<StateMeaning> states = frame.states(name.name().text());
-    if (name.isIndexed()) {
+    if (name.isIndexed() && !states.isEmpty()) {
       Optional<StateMeaning> member = frame.resolver().indices().quietMember(name);
       if (member.isEmpty()) {
         if (unclear.add(frame.label(name.name().text()))) {
@@ -160,8 +160,7 @@ final class EquationReader {
       states = List.of(member.get());
     }
     states.forEach(state -> mention(state.index(), name.primes()));
-    if (states.isEmpty()
-        && frame.scope().own(name.name().text()).orElse(null) instanceof MatrixMeaning m) {
+    if (frame.scope().own(name.name().text()).orElse(null) instanceof MatrixMeaning m) {
       noteDerivatives(m.value(), name.primes());
     }
   }
