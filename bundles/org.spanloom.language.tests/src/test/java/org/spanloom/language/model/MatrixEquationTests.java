@@ -132,4 +132,35 @@ class MatrixEquationTests {
             MATRICES.replace("F*cos(t/1 [s])", "0").replaceAll("(?m)^.*matrix F.*\n.*\n.*\n", ""));
     assertEquals(List.of(), system.equations().orElseThrow().forcing());
   }
+
+  @Test
+  void aFamilyByItsNameIsTheColumnOfItsMembers() {
+    String rest =
+        """
+          matrix K [N/m] =
+            row 50, -20
+            row -20, 20
+          matrix F [N] =
+            row 0
+            row 3
+          2 [kg]*q'' + K*q = F*cos(t/1 [s])
+          output sag [N.m] = transpose(F)*q + K[1,2]*q[2]*q_0
+        }
+        """;
+    SystemModel expected =
+        ModelListing.system(
+            "system S over t [s] from 0 to 10 {\n  parameter q_0 [m] = 2\n"
+                + "  state a [m] = 1\n  state b [m] = 1\n"
+                + "  state a' [m/s] = 0\n  state b' [m/s] = 0\n"
+                + "  matrix q [m] =\n    row a\n    row b\n"
+                + rest.replace("K[1,2]*q[2]", "-20 [N/m]*b"));
+    SystemModel system =
+        ModelListing.system(
+            "system S over t [s] from 0 to 10 {\n  parameter q_0 [m] = 2\n"
+                + "  state q[1..2] [m] = 1\n  state q' [m/s] = 0\n"
+                + rest);
+    assertEquals(
+        ModelListing.equations(expected).replace("a", "q[1]").replace("b", "q[2]"),
+        ModelListing.equations(system));
+  }
 }

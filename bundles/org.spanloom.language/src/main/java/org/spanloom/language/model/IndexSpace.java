@@ -27,7 +27,8 @@ record IndexSpace(List<Long> lows, List<Long> highs) {
     return lows.size();
   }
 
-  private long length(int range) {
+  /** Returns the number of indices in a range. */
+  long length(int range) {
     return highs.get(range) - lows.get(range) + 1;
   }
 

@@ -8,6 +8,7 @@ package org.spanloom.language.model;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import org.spanloom.language.model.Meaning.FamilyMeaning;
 import org.spanloom.language.model.Meaning.MatrixMeaning;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.syntax.Expression;
@@ -46,6 +47,26 @@ final class MatrixNames {
     Optional<MatrixValue> value =
         name.primes() == 0 ? Optional.of(meaning.value()) : derivative(meaning.value(), name);
     return value.map(MatrixAlgebra::simplest);
+  }
+
+  /**
+   * Returns the members of a family, or their derivatives, as a column; those of a family with two
+   * indices as a matrix.
+   */
+  Optional<Value> column(FamilyMeaning family, NameExpression name) {
+    if (name.primes() > 0 && scope.timeName().isEmpty()) {
+      return Optional.empty();
+    }
+    Dimension dimension = names.over(family.unit().dimension(), name.primes());
+    int members = family.members().size();
+    int columns = family.space().rank() == 1 ? 1 : (int) family.space().length(1);
+    List<MatrixValue.Entry> entries = new ArrayList<>(members);
+    for (int i = 0; i < members; i++) {
+      StateKey key = StateKey.running(family.members().get(i).index(), name.primes());
+      entries.add(new MatrixValue.Entry(i / columns, i % columns, Quantity.state(key, dimension)));
+    }
+    return Optional.of(
+        MatrixAlgebra.simplest(new MatrixValue(members / columns, columns, entries, dimension)));
   }
 
   /** A matrix whose entries are states has a derivative. */

@@ -161,8 +161,33 @@ final class NameResolver {
     return broken(name);
   }
 
+  /** Returns the family that a name without index stands for. */
+  private Optional<FamilyMeaning> family(NameExpression name) {
+    return name.isIndexed()
+        ? Optional.empty()
+        : scope
+            .own(name.name().text())
+            .filter(FamilyMeaning.class::isInstance)
+            .map(FamilyMeaning.class::cast)
+            .filter(family -> !family.members().isEmpty());
+  }
+
+  /** Reports a family without index where a single value belongs; tells whether there was one. */
+  boolean refusesFamily(Expression expression) {
+    Optional<NameExpression> name =
+        expression instanceof NameExpression n ? Optional.of(n) : Optional.empty();
+    Optional<FamilyMeaning> family = name.flatMap(this::family);
+    family.ifPresent(f -> bareFamily(f, name.orElseThrow()));
+    return family.isPresent();
+  }
+
   /** Returns the value of a name without arguments. */
   Optional<? extends Value> name(NameExpression name, Place place) {
+    Optional<FamilyMeaning> family = family(name).filter(f -> place.states());
+    if (family.isPresent()) {
+      scope.markUsed(name.name().text());
+      return matrices.column(family.get(), name);
+    }
     Optional<Meaning> meaning = meaning(name, place);
     if (meaning.isEmpty()) {
       return builtIn(name);

@@ -94,7 +94,10 @@ final class Resolver {
 
   /** Returns the value of an expression where a single one belongs. */
   Optional<Quantity> quantity(Expression expression, Place place) {
-    return value(expression, place).flatMap(v -> matrices.single(v, expression.span()));
+    Optional<? extends Value> value = value(expression, place);
+    boolean refused =
+        value.isPresent() && value.get() instanceof MatrixValue && names.refusesFamily(expression);
+    return refused ? Optional.empty() : value.flatMap(v -> matrices.single(v, expression.span()));
   }
 
   /** Returns the value of an expression, which may be a matrix. */
