@@ -18,7 +18,6 @@ import org.spanloom.language.syntax.Expression.SumExpression;
 import org.spanloom.language.syntax.Statement.BasisStatement;
 import org.spanloom.language.syntax.Statement.EquationStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
-import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
 import org.spanloom.language.syntax.Statement.StateStatement;
@@ -168,14 +167,6 @@ class ParserTests {
     assertEquals(2, file.statements().size());
     SystemStatement system = (SystemStatement) file.statements().getFirst();
     assertEquals(2, ((BasisStatement) system.body().getFirst()).rows().size());
-  }
-
-  @Test
-  void laterStatementsAreSkippedWithTheirBlocks() {
-    List<Statement> body = body("table i = Tank { c = 1\n jump at 3 { x becomes 2 }\n}\nlet a = 1");
-    assertEquals(2, body.size());
-    assertEquals("table", ((LaterStatement) body.get(0)).word());
-    assertInstanceOf(LetStatement.class, body.get(1));
   }
 
   @Test

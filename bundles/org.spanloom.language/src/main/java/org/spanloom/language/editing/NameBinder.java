@@ -58,7 +58,6 @@ import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.JumpStatement;
 import org.spanloom.language.syntax.Statement.JumpTime.Once;
 import org.spanloom.language.syntax.Statement.JumpTime.Repeated;
-import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
@@ -166,7 +165,6 @@ final class NameBinder {
       case BasisStatement basis -> basis(basis);
       case RequireStatement require -> clause(require.clause());
       case AccuracyStatement accuracy -> expression(accuracy.value());
-      case LaterStatement later -> words(later.span());
       case UnreadStatement unread -> words(unread.span());
     }
   }

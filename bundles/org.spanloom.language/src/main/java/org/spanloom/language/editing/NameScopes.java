@@ -21,7 +21,6 @@ import org.spanloom.language.syntax.Statement.BoundaryStatement;
 import org.spanloom.language.syntax.Statement.Declaration;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
-import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
@@ -136,10 +135,6 @@ final class NameScopes {
             unread
                 .declares()
                 .ifPresent(n -> add(symbols, symbol(kind(unread.word()), n, unread.span())));
-        case LaterStatement later ->
-            later
-                .declares()
-                .ifPresent(n -> add(symbols, symbol(SymbolKind.UNREAD, n, later.span())));
         case Declaration declaration -> add(symbols, symbol(declaration));
         default -> {}
       }

@@ -20,7 +20,6 @@ import org.spanloom.language.syntax.Statement.ImportStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.JumpStatement;
-import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
@@ -131,7 +130,6 @@ public final class Outline {
       case RequireStatement require ->
           text(Kind.REQUIREMENT, require.clause().span(), require.span());
       case AccuracyStatement accuracy -> text(Kind.ACCURACY, accuracy.span(), accuracy.span());
-      case LaterStatement later -> text(Kind.UNREAD, later.span(), later.span());
       case UnreadStatement unread -> text(Kind.UNREAD, unread.span(), unread.span());
     };
   }

@@ -68,7 +68,7 @@ public final class Formatter {
       boolean ofStatement =
           switch (problem.kind()) {
             case BRACE_MISSING, BRACE_NOT_OPEN -> false;
-            case STATEMENT_MISPLACED, STATEMENT_NOT_SUPPORTED -> false;
+            case STATEMENT_MISPLACED -> false;
             default -> true;
           };
       int low = -1;

@@ -26,7 +26,6 @@ import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.JumpStatement;
 import org.spanloom.language.syntax.Statement.JumpTime;
-import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
@@ -140,7 +139,6 @@ public final class Printer {
         out.words("require").clause(require.clause());
       }
       case AccuracyStatement accuracy -> out.words("accuracy").expression(accuracy.value());
-      case LaterStatement later -> out.words(file.source().slice(later.span()));
       case UnreadStatement unread -> out.words(file.source().slice(unread.span()));
     }
     out.endLine();

@@ -25,7 +25,6 @@ import org.spanloom.language.syntax.Name;
 import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.Declaration;
 import org.spanloom.language.syntax.Statement.ImportStatement;
-import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.ParameterStatement;
@@ -105,7 +104,6 @@ final class FileReading {
         case MatrixStatement matrix -> collect(globals, matrix);
         case SystemStatement system -> declare(system);
         case UnreadStatement unread -> unread.declares().ifPresent(this::broken);
-        case LaterStatement later -> later.declares().ifPresent(this::broken);
         default -> misplaced(statement);
       }
     }
@@ -300,9 +298,7 @@ final class FileReading {
   }
 
   private void reportUnused() {
-    boolean complete =
-        syntax.statements().stream()
-            .noneMatch(s -> s instanceof UnreadStatement || s instanceof LaterStatement);
+    boolean complete = syntax.statements().stream().noneMatch(UnreadStatement.class::isInstance);
     boolean holdsSystems = syntax.statements().stream().anyMatch(SystemStatement.class::isInstance);
     if (complete && holdsSystems) {
       frame.declarations().reportUnused();

@@ -32,7 +32,6 @@ import org.spanloom.language.syntax.Statement.ImportStatement;
 import org.spanloom.language.syntax.Statement.InitialValuesStatement;
 import org.spanloom.language.syntax.Statement.InputStatement;
 import org.spanloom.language.syntax.Statement.JumpStatement;
-import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.LetStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.OutputStatement;
@@ -322,7 +321,6 @@ final class SystemReader {
         case ForStatement loop -> loop(frame, loop);
         case UnreadStatement unread ->
             unread(frame, unread.span(), unread.declares(), mayGovern(unread));
-        case LaterStatement later -> unread(frame, later.span(), later.declares(), true);
         case SystemStatement inner -> {}
         case EquationStatement equation -> {}
         case TransferStatement transfer -> {}
@@ -353,7 +351,6 @@ final class SystemReader {
         case ForStatement inner -> loop(frame, inner);
         case UnreadStatement unread ->
             unread(frame, unread.span(), unread.declares(), mayGovern(unread));
-        case LaterStatement later -> unread(frame, later.span(), later.declares(), true);
         case Declaration declaration ->
             misplaced(frame, declaration, Optional.of(declaration.name()));
         case AccuracyStatement accuracy -> misplaced(frame, accuracy, Optional.empty());

@@ -44,8 +44,6 @@ public enum ProblemKind {
   STATEMENT_UNKNOWN("A line that is neither a statement nor an equation."),
   /** A statement in a place where it cannot stand. */
   STATEMENT_MISPLACED("A statement stands where it cannot stand."),
-  /** A statement that this version cannot read yet. */
-  STATEMENT_NOT_SUPPORTED("A statement that this version does not read yet."),
   /** Parentheses in parentheses beyond the limit. */
   NESTING_TOO_DEEP("Expressions are nested deeper than the limit."),
   /** A statement with more words, numbers and signs than the limit. */

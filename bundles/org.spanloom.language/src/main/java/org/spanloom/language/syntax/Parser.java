@@ -18,7 +18,6 @@ import org.spanloom.language.syntax.MatrixSource.MatrixRow;
 import org.spanloom.language.syntax.MatrixSource.MatrixRows;
 import org.spanloom.language.syntax.Statement.BasisStatement;
 import org.spanloom.language.syntax.Statement.ForStatement;
-import org.spanloom.language.syntax.Statement.LaterStatement;
 import org.spanloom.language.syntax.Statement.MatrixStatement;
 import org.spanloom.language.syntax.Statement.Row;
 import org.spanloom.language.syntax.Statement.SystemStatement;
@@ -445,23 +444,6 @@ public final class Parser {
       blocks.skip();
     }
     return parser.unread();
-  }
-
-  /** Passes over a statement, its block and its rows, of a kind that this version does not read. */
-  private Statement later(StatementLine line, String word) {
-    Span span = line.span();
-    problem(
-        ProblemKind.STATEMENT_NOT_SUPPORTED,
-        line.tokens().getFirst().span(),
-        "\"" + word + "\" is not read by this version yet: write the model without it.");
-    if (line.opensBlock()) {
-      span = new Span(span.start(), blocks.skip());
-    }
-    Optional<Name> declares =
-        line.tokens().size() > 1 && line.tokens().get(1).kind().isName()
-            ? Optional.of(new Name(text(line.tokens().get(1)), line.tokens().get(1).span()))
-            : Optional.empty();
-    return new LaterStatement(word, declares, span);
   }
 
   private void closesNothing(Token brace) {

@@ -291,14 +291,6 @@ public sealed interface Statement {
   record AccuracyStatement(Expression value, Span span) implements Statement {}
 
   /**
-   * A statement of the language that this version does not read yet.
-   *
-   * @param word its first word
-   * @param declares the name it declares, if it does
-   */
-  record LaterStatement(String word, Optional<Name> declares, Span span) implements Statement {}
-
-  /**
    * A statement that could not be read; the reason is among the problems of the file.
    *
    * @param word its first word if that is a reserved one, else empty
