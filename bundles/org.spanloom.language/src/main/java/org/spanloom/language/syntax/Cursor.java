@@ -112,15 +112,17 @@ final class Cursor {
     return kind() == kind;
   }
 
-  /** Tells whether a sign of comparison is among the tokens to come. */
+  /** Tells whether more signs of comparison are to come than conditions of choices. */
   boolean holdsComparison() {
-    return tokens.subList(at, tokens.size()).stream()
-        .map(Token::kind)
-        .anyMatch(k ->
-            k == TokenKind.LESS
-                || k == TokenKind.AT_MOST
-                || k == TokenKind.GREATER
-                || k == TokenKind.AT_LEAST);
+    int open = 0;
+    for (Token token : tokens.subList(at, tokens.size())) {
+      switch (token.kind()) {
+        case LESS, AT_MOST, GREATER, AT_LEAST -> open++;
+        case CLAUSE_WORD -> open -= text(token).equals("if") ? 1 : 0;
+        default -> {}
+      }
+    }
+    return open > 0;
   }
 
   boolean accept(TokenKind kind) {
