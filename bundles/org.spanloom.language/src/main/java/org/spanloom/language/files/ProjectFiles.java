@@ -3,7 +3,6 @@
  *
  * SPDX-License-Identifier: EPL-2.0
  */
-
 package org.spanloom.language.files;
 
 import java.util.List;
