@@ -44,6 +44,9 @@ class HelpTests {
           Command.SPECTRUM, List.of("FILE", "--system", "--at", "--output"),
           Command.STRUCTURE, List.of("FILE", "--system", "--state", "--output"),
           Command.BASIS, List.of("FILE", "--system", "--basis", "--at", "--output"),
+          Command.EXPORT,
+              List.of(
+                  "FILE", "--what", "--at", "--format", "--system", "--basis", "--set", "--output"),
           Command.FORMAT, List.of("PATH...", "--check"));
 
   @ParameterizedTest

@@ -325,6 +325,36 @@ final class BoundarySolverTests {
     assertTrue(unique.conditioning().toConditions() > 1e4);
   }
 
+  /** Conditions at one time are initial values: one solution, however fast it grows. */
+  @Test
+  void conditionsAtOneTime() {
+    LinearSystem system = FormulaSystem.constant(new double[] {0, 1, 900, 0}, 0, 1);
+    Unique unique =
+        assertInstanceOf(
+            Unique.class, solve(system, List.of(at(0.25, 0, 1), at(0.25, 1, 15)), 1e-9));
+    double exact = Math.cosh(22.5) + 0.5 * Math.sinh(22.5);
+    assertEquals(exact, value(unique.solution(), 1)[0], 1e-9 * exact);
+    assertEquals(Math.cosh(7.5) - 0.5 * Math.sinh(7.5), value(unique.solution(), 0)[0], 1e-6);
+    assertTrue(unique.conditioning().toConditions() > 1e9);
+  }
+
+  /** Beyond the last condition the solution is carried on, with the error it takes along. */
+  @Test
+  void carriesOnBeyondTheConditions() {
+    LinearSystem system = FormulaSystem.constant(new double[] {0, 1, 100, 0}, 0, 3);
+    Unique unique =
+        assertInstanceOf(Unique.class, solve(system, List.of(at(0, 0, 1), at(1, 0, 1)), 1e-9));
+    double b = (1 - Math.cosh(10)) / Math.sinh(10);
+    for (double t : new double[] {0.5, 1.5, 3}) {
+      double exact = Math.cosh(10 * t) + b * Math.sinh(10 * t);
+      double[] error = new double[2];
+      unique.solution().errorEstimate(t, error);
+      double rounding = 1e-14 * Math.exp(10 * t);
+      assertEquals(exact, value(unique.solution(), t)[0], error[0] + rounding, "at " + t);
+    }
+    assertEquals(3, unique.solution().range().end());
+  }
+
   /** Two conditions that say the same leave a direction open. */
   @Test
   void repeatedConditions() {

@@ -5,16 +5,23 @@
  */
 package org.spanloom.numerics.boundary;
 
+import java.util.ArrayList;
 import java.util.List;
 import org.spanloom.numerics.Accuracy;
+import org.spanloom.numerics.Jump;
+import org.spanloom.numerics.JumpSelection;
 import org.spanloom.numerics.LinearSystem;
 import org.spanloom.numerics.Outcome;
 import org.spanloom.numerics.Outcome.Reason;
 import org.spanloom.numerics.Progress;
+import org.spanloom.numerics.Side;
 import org.spanloom.numerics.TimeRange;
+import org.spanloom.numerics.internal.algebra.Rows;
 import org.spanloom.numerics.internal.work.Cancelled;
 import org.spanloom.numerics.internal.work.Hopeless;
 import org.spanloom.numerics.internal.work.Watch;
+import org.spanloom.numerics.solution.Solution;
+import org.spanloom.numerics.solution.SolutionSolver;
 
 /**
  * Solves linear boundary-value problems, two-point and multi-point, by Gauss collocation on an
@@ -68,8 +75,7 @@ public final class BoundarySolver {
     }
     try {
       requireSolvable(system, range, conditions);
-      BoundaryAnswer answer =
-          new MeshRefinement(system, range, conditions, accuracy, new Watch(progress)).run();
+      BoundaryAnswer answer = answer(system, range, conditions, accuracy, progress);
       progress.worked(1);
       return new Outcome.Solved<>(answer);
     } catch (Cancelled cancelled) {
@@ -77,6 +83,190 @@ public final class BoundarySolver {
     } catch (Hopeless hopeless) {
       return hopeless.outcome();
     }
+  }
+
+  /**
+   * Decides on the times between the first and the last condition, and carries a solution on from
+   * there: growth beyond them decides nothing.
+   */
+  private static BoundaryAnswer answer(
+      LinearSystem system,
+      TimeRange range,
+      List<BoundaryCondition> conditions,
+      Accuracy accuracy,
+      Progress progress) {
+    TimeRange hull = hull(conditions);
+    if (reachesBack(system, range, hull, conditions)) {
+      return new MeshRefinement(system, range, conditions, accuracy, new Watch(progress)).run();
+    }
+    boolean oneTime =
+        hull.length() == 0
+            && conditions.stream()
+                .flatMap(c -> c.samples().stream())
+                .allMatch(s -> s.side() == Side.AFTER);
+    if (oneTime) {
+      return atOneTime(system, range, hull.start(), conditions, accuracy, progress);
+    }
+    TimeRange decided = hull.length() == 0 ? range : hull;
+    BoundaryAnswer found =
+        new MeshRefinement(system, decided, conditions, accuracy, new Watch(progress)).run();
+    return switch (found) {
+      case BoundaryAnswer.Unique unique ->
+          new BoundaryAnswer.Unique(
+              extended(system, range, unique.solution(), accuracy, progress),
+              unique.conditioning());
+      case BoundaryAnswer.Family family ->
+          new BoundaryAnswer.Family(
+              extended(system, range, family.particular(), accuracy, progress),
+              family.directions(),
+              family.smallest());
+      case BoundaryAnswer.None none -> none;
+    };
+  }
+
+  /**
+   * Tells whether what lies before the first condition takes part in the decision: behind a jump
+   * that cannot be undone, or where a condition names the value before a jump.
+   */
+  private static boolean reachesBack(
+      LinearSystem system, TimeRange range, TimeRange hull, List<BoundaryCondition> conditions) {
+    boolean namesLeft =
+        conditions.stream()
+            .flatMap(c -> c.samples().stream())
+            .anyMatch(s -> s.side() == Side.BEFORE && s.time() == hull.start());
+    return system.jumps().stream()
+        .anyMatch(j ->
+            range.start() < j.time()
+                && (j.time() < hull.start() && j.isSingular()
+                    || j.time() == hull.start() && (j.isSingular() || namesLeft)));
+  }
+
+  private static TimeRange hull(List<BoundaryCondition> conditions) {
+    double first = Double.POSITIVE_INFINITY;
+    double last = Double.NEGATIVE_INFINITY;
+    for (BoundaryCondition condition : conditions) {
+      for (BoundaryCondition.Sample sample : condition.samples()) {
+        first = Math.min(first, sample.time());
+        last = Math.max(last, sample.time());
+      }
+    }
+    return new TimeRange(first, last);
+  }
+
+  private static BoundaryAnswer atOneTime(
+      LinearSystem system,
+      TimeRange range,
+      double time,
+      List<BoundaryCondition> conditions,
+      Accuracy accuracy,
+      Progress progress) {
+    OneTimeConditions found = OneTimeConditions.of(time, conditions, accuracy.scale());
+    int n = system.dimension();
+    if (found.rank() < n && found.mismatch() > 1e-10) {
+      return new BoundaryAnswer.None(found.directions(), found.mismatch(), found.smallest());
+    }
+    Solution start =
+        solved(
+            SolutionSolver.trajectory(
+                JumpSelection.without(system),
+                time,
+                found.value(),
+                new TimeRange(time, time),
+                accuracy,
+                progress));
+    Solution solution = extended(system, range, start, accuracy, progress);
+    if (found.rank() < n) {
+      return new BoundaryAnswer.Family(solution, found.directions(), found.smallest());
+    }
+    double growth = growth(solution, accuracy.scale()) / found.smallest();
+    return new BoundaryAnswer.Unique(
+        solution, new BoundaryAnswer.Conditioning(growth, Double.NaN, found.smallest()));
+  }
+
+  /** Returns the largest factor by which a value at the conditions grows on the range. */
+  private static double growth(Solution solution, double[] scale) {
+    return solution instanceof ExtendedSolution extended ? extended.growth(scale) : 1;
+  }
+
+  private static Solution extended(
+      LinearSystem system, TimeRange range, Solution middle, Accuracy accuracy, Progress progress) {
+    List<ExtendedSolution.Wing> wings = new ArrayList<>();
+    if (range.start() < middle.range().start()) {
+      wings.add(
+          wing(
+              system,
+              new TimeRange(range.start(), middle.range().start()),
+              middle,
+              middle.range().start(),
+              accuracy,
+              progress));
+    }
+    if (middle.range().end() < range.end()) {
+      wings.add(
+          wing(
+              system,
+              new TimeRange(middle.range().end(), range.end()),
+              middle,
+              middle.range().end(),
+              accuracy,
+              progress));
+    }
+    double[] jumpTimes =
+        system.jumps().stream()
+            .mapToDouble(Jump::time)
+            .filter(t -> range.start() < t && t <= range.end())
+            .distinct()
+            .toArray();
+    return wings.isEmpty() ? middle : new ExtendedSolution(middle, wings, jumpTimes);
+  }
+
+  private static ExtendedSolution.Wing wing(
+      LinearSystem system,
+      TimeRange span,
+      Solution middle,
+      double from,
+      Accuracy accuracy,
+      Progress progress) {
+    int n = system.dimension();
+    double[] x = new double[n];
+    double[] error = new double[n];
+    middle.value(from, Side.AFTER, x);
+    middle.errorEstimate(from, error);
+    if (from == span.end()) {
+      List<Jump> jumps = system.jumps().stream().filter(j -> j.time() == from).toList();
+      for (Jump jump : jumps.reversed()) {
+        x = jump.before(x, 1, true);
+        error = errorBefore(jump, error);
+      }
+    }
+    LinearSystem rest = JumpSelection.between(system, span.start(), span.end());
+    double[] identity = Rows.flat(Rows.identity(n), n);
+    Accuracy rough = accuracy.withRelative(Math.max(1e-6, accuracy.relative()));
+    return new ExtendedSolution.Wing(
+        solved(SolutionSolver.trajectory(rest, from, x, span, accuracy, progress)),
+        solved(SolutionSolver.homogeneous(rest, from, identity, span, rough, progress)),
+        error);
+  }
+
+  /** Returns what errors after a jump say of the values before it: |J^-1| times them. */
+  private static double[] errorBefore(Jump jump, double[] error) {
+    int n = error.length;
+    double[] inverse = jump.before(Rows.flat(Rows.identity(n), n), n, false);
+    double[] before = new double[n];
+    for (int i = 0; i < n; i++) {
+      for (int j = 0; j < n; j++) {
+        before[i] += Math.abs(inverse[i * n + j]) * error[j];
+      }
+    }
+    return before;
+  }
+
+  private static Solution solved(Outcome<Solution> outcome) {
+    return switch (outcome) {
+      case Outcome.Solved<Solution> s -> s.value();
+      case Outcome.Cancelled<Solution> c -> throw new Cancelled();
+      case Outcome.Unsolved<Solution> u -> throw new Hopeless(u.reason(), u.time(), u.detail());
+    };
   }
 
   private static void requireSolvable(
