@@ -7,113 +7,75 @@ package org.spanloom.cli;
 
 import java.util.Arrays;
 import java.util.Optional;
+import java.util.function.Consumer;
 import picocli.CommandLine.Model.CommandSpec;
 
 /** The commands, in the order of the help. */
 enum Command {
   /** Checks models. */
-  CHECK("check", "check models and report what is found in them") {
-    @Override
-    void describe(CommandSpec spec) {
-      CheckCommand.describe(spec);
-    }
-
-    @Override
-    int run(Options.Values values, Streams streams) throws CommandFailure {
-      return new CheckCommand(values, streams).run();
-    }
-  },
+  CHECK(
+      "check",
+      "check models and report what is found in them",
+      CheckCommand::describe,
+      (v, s) -> new CheckCommand(v, s).run()),
   /** Lists a solution. */
-  SOLVE("solve", "solve an initial value problem and list the solution") {
-    @Override
-    void describe(CommandSpec spec) {
-      SolveCommand.describe(spec);
-    }
-
-    @Override
-    int run(Options.Values values, Streams streams) throws CommandFailure {
-      return new SolveCommand(values, streams).run();
-    }
-  },
+  SOLVE(
+      "solve",
+      "solve an initial value problem and list the solution",
+      SolveCommand::describe,
+      (v, s) -> new SolveCommand(v, s).run()),
   /** Lists a basis. */
-  BASIS("basis", "list a basis of the solutions and how far it can be trusted") {
-    @Override
-    void describe(CommandSpec spec) {
-      BasisCommand.describe(spec);
-    }
-
-    @Override
-    int run(Options.Values values, Streams streams) throws CommandFailure {
-      return new BasisCommand(values, streams).run();
-    }
-  },
+  BASIS(
+      "basis",
+      "list a basis of the solutions and how far it can be trusted",
+      BasisCommand::describe,
+      (v, s) -> new BasisCommand(v, s).run()),
   /** Lists the solution of a boundary-value problem. */
-  BOUNDARY("boundary", "list the solution that meets boundary conditions") {
-    @Override
-    void describe(CommandSpec spec) {
-      BoundaryCommand.describe(spec);
-    }
-
-    @Override
-    int run(Options.Values values, Streams streams) throws CommandFailure {
-      return new BoundaryCommand(values, streams).run();
-    }
-  },
+  BOUNDARY(
+      "boundary",
+      "list the solution that meets boundary conditions",
+      BoundaryCommand::describe,
+      (v, s) -> new BoundaryCommand(v, s).run()),
   /** Lists eigenvalues or multipliers. */
-  SPECTRUM("spectrum", "list eigenvalues with their modes, or multipliers of a periodic system") {
-    @Override
-    void describe(CommandSpec spec) {
-      SpectrumCommand.describe(spec);
-    }
-
-    @Override
-    int run(Options.Values values, Streams streams) throws CommandFailure {
-      return new SpectrumCommand(values, streams).run();
-    }
-  },
+  SPECTRUM(
+      "spectrum",
+      "list eigenvalues with their modes, or multipliers of a periodic system",
+      SpectrumCommand::describe,
+      (v, s) -> new SpectrumCommand(v, s).run()),
   /** Lists which state depends on which. */
-  STRUCTURE("structure", "list which state depends on which, and the blocks of A") {
-    @Override
-    void describe(CommandSpec spec) {
-      StructureCommand.describe(spec);
-    }
-
-    @Override
-    int run(Options.Values values, Streams streams) throws CommandFailure {
-      return new StructureCommand(values, streams).run();
-    }
-  },
+  STRUCTURE(
+      "structure",
+      "list which state depends on which, and the blocks of A",
+      StructureCommand::describe,
+      (v, s) -> new StructureCommand(v, s).run()),
   /** Writes matrices for other programs. */
-  EXPORT("export", "write A, b, the fundamental matrix or a basis for other programs") {
-    @Override
-    void describe(CommandSpec spec) {
-      ExportCommand.describe(spec);
-    }
-
-    @Override
-    int run(Options.Values values, Streams streams) throws CommandFailure {
-      return new ExportCommand(values, streams).run();
-    }
-  },
+  EXPORT(
+      "export",
+      "write A, b, the fundamental matrix or a basis for other programs",
+      ExportCommand::describe,
+      (v, s) -> new ExportCommand(v, s).run()),
   /** Lays out model files. */
-  FORMAT("format", "give model files their canonical layout") {
-    @Override
-    void describe(CommandSpec spec) {
-      FormatCommand.describe(spec);
-    }
+  FORMAT(
+      "format",
+      "give model files their canonical layout",
+      FormatCommand::describe,
+      (v, s) -> new FormatCommand(v, s).run());
 
-    @Override
-    int run(Options.Values values, Streams streams) throws CommandFailure {
-      return new FormatCommand(values, streams).run();
-    }
-  };
+  /** Runs a command with its arguments. */
+  private interface Action {
+    int run(Options.Values values, Streams streams) throws CommandFailure;
+  }
 
   private final String word;
   private final String purpose;
+  private final Consumer<CommandSpec> description;
+  private final Action action;
 
-  Command(String word, String purpose) {
+  Command(String word, String purpose, Consumer<CommandSpec> description, Action action) {
     this.word = word;
     this.purpose = purpose;
+    this.description = description;
+    this.action = action;
   }
 
   /** Returns the word that calls it. */
@@ -127,10 +89,14 @@ enum Command {
   }
 
   /** Adds its arguments and its help text. */
-  abstract void describe(CommandSpec spec);
+  void describe(CommandSpec spec) {
+    description.accept(spec);
+  }
 
   /** Runs it and returns the exit code. */
-  abstract int run(Options.Values values, Streams streams) throws CommandFailure;
+  int run(Options.Values values, Streams streams) throws CommandFailure {
+    return action.run(values, streams);
+  }
 
   /** Returns the command of a word. */
   static Optional<Command> named(String word) {
