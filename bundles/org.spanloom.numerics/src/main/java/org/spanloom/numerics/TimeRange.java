@@ -13,11 +13,13 @@ package org.spanloom.numerics;
  */
 public record TimeRange(double start, double end) {
 
-  /** Checks the order of the ends. */
+  /** Checks the order of the ends; -0 becomes 0, so that sorting and comparing agree. */
   public TimeRange {
     if (!(start <= end)) {
       throw new IllegalArgumentException("a range from " + start + " to " + end + " is empty");
     }
+    start += 0.0;
+    end += 0.0;
   }
 
   /** Tells whether both ends are finite. */

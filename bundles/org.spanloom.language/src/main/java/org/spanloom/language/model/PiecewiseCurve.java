@@ -172,8 +172,7 @@ public final class PiecewiseCurve implements Curve {
     if (!(time >= knots[0])) {
       return Double.isNaN(time) ? time : before;
     }
-    int found = Arrays.binarySearch(knots, time);
-    int k = found < 0 ? -2 - found : found;
+    int k = piece(time);
     double s = time - knots[k];
     return c0[k] + s * (c1[k] + s * (c2[k] + s * c3[k]));
   }
@@ -213,7 +212,8 @@ public final class PiecewiseCurve implements Curve {
    * Returns the piece of a time: -1 before the first knot, the number of pieces behind the last.
    */
   private int piece(double time) {
-    int found = Arrays.binarySearch(knots, time);
+    // The sum makes 0 of -0, which would be looked for before it.
+    int found = Arrays.binarySearch(knots, time + 0.0);
     return found < 0 ? -2 - found : found;
   }
 

@@ -69,7 +69,8 @@ record BoundaryMesh(double[] times, int[] stations) {
 
   /** Returns the node at a time: of two, the one on the side asked for. */
   private static int node(double[] times, double time, Side side) {
-    int node = Arrays.binarySearch(times, time);
+    // The sum makes 0 of -0, which would be looked for before it.
+    int node = Arrays.binarySearch(times, time + 0.0);
     int before = node > 0 && times[node - 1] == time ? node - 1 : node;
     boolean twice = before + 1 < times.length && times[before + 1] == time;
     return twice && side == Side.AFTER ? before + 1 : before;

@@ -98,7 +98,8 @@ final class BoundarySolution implements Solution {
     if (!(t >= times[0] && t <= times[times.length - 1])) {
       throw new IllegalArgumentException("time " + t + " is outside " + range());
     }
-    int k = Arrays.binarySearch(times, t);
+    // The sum makes 0 of -0, which would be looked for before it.
+    int k = Arrays.binarySearch(times, t + 0.0);
     if (side == Side.AFTER && k >= 0 && k + 1 < times.length && times[k + 1] == t) {
       return k + 1;
     }

@@ -212,7 +212,8 @@ final class MagnusSolution implements Solution {
     if (!(t >= times[0] && t <= times[times.length - 1])) {
       throw new IllegalArgumentException("time " + t + " is outside " + range());
     }
-    return Arrays.binarySearch(times, t);
+    // The sum makes 0 of -0, which would be looked for before it.
+    return Arrays.binarySearch(times, t + 0.0);
   }
 
   @Override

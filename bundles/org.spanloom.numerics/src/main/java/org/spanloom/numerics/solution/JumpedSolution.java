@@ -100,7 +100,8 @@ final class JumpedSolution implements Solution {
     if (!range().contains(t)) {
       throw new IllegalArgumentException("time " + t + " is outside " + range());
     }
-    int found = Arrays.binarySearch(from, t);
+    // The sum makes 0 of -0, which would be looked for before it.
+    int found = Arrays.binarySearch(from, t + 0.0);
     int k = found >= 0 ? found : -found - 2;
     // Two pieces begin at one time where the first of them has the length 0.
     while (side == Side.AFTER && k + 1 < from.length && from[k + 1] == t) {
