@@ -66,6 +66,14 @@ class TableTests {
   }
 
   @Test
+  void minusZeroIsTheTimeZero() {
+    PiecewiseCurve curve = curve("\"at, clock\",power\n0,1.5\n600,4\n", "linear");
+    assertEquals(1500, curve.at(-0.0));
+    Interval values = curve.over(new Interval(-0.0, -0.0));
+    assertTrue(values.low() <= 1500 && 1500 <= values.high(), values.toString());
+  }
+
+  @Test
   void whatIsWrongInAFileHasItsLine() {
     String intro = "The file \"data/f.csv\" cannot be used, line ";
     String outro = ". Correct the file or the statement.";
