@@ -37,7 +37,9 @@ final class HostileReading {
   private static String read(String text) {
     try {
       double start = seconds();
-      Model model = ModelReader.read(new SourceText("hostile.span", text));
+      Model model =
+          ModelReader.read(
+              new SourceText("hostile.span", text), new HostileProject(), () -> false);
       double read = seconds();
       Formatter.format(text);
       Outline.of(model.syntax());

@@ -25,6 +25,10 @@ final class HostileTexts {
     all.repetition();
     all.growth();
     all.searches();
+    all.turns();
+    all.tables();
+    all.files();
+    all.steps();
     return all.texts;
   }
 
@@ -147,6 +151,119 @@ final class HostileTexts {
     line("product of poles", () -> "let z(t) = " + "1/(t - 0.5 [h])*1 [h]*".repeat(900) + "1");
     line("fast wave", () -> "let z(t) = 1/sin(1e12*t/1 [h])");
     lines("corners", 2_000, i -> "let z" + i + "(t) = abs(sin(1e6*t/" + (i + 1) + " [h]))");
+  }
+
+  private void turns() {
+    line("family times family", () -> "state c[1..100000] = 0\nstate d[1..100000, 1..100000] = 0");
+    line("families", () -> "state c[1..60000] = 0\nstate d[1..60000] = 0");
+    line("family without equations", () -> "state c[1..100000] = 0");
+    line("negative range", () -> "state c[-1000000000..1000000000] = 0");
+    line("index beyond all", () -> "state c[1..3] = 0\nx' = c[1000000000000000000000]");
+    line(
+        "long body, many turns",
+        () -> "for i from 1 to 1000000 {\n" + "x' = -x/1 [h]\n".repeat(20_000) + "}");
+    line(
+        "long sum, many turns",
+        () -> "x' = sum over i from 1 to 1000000 of (x" + " + x".repeat(20_000) + ")/1 [h]");
+    line(
+        "loops without equations",
+        () -> "for i from 1 to 1000000 {\n" + "parameter q = 1\n".repeat(100_000) + "}");
+    line(
+        "values in turns",
+        () -> "initial values w {\nfor i from 1 to 1000000 { " + "x = 1; ".repeat(10_000) + "}\n}");
+    line(
+        "rows in turns",
+        () -> "basis p at 0 =\nfor i from 1 to 1000000 {\n" + "row x = 1\n".repeat(10_000) + "}");
+    line("requirements in turns", () -> "for i from 1 to 1000000 { require x(1) < i }");
+    lines("loops without turns", 100_000, i -> "for i from 1 to 0 { x' = 1 }");
+    line("braceless loops", () -> deeper("for i from 1 to 2", 2_000));
+    line("loops in values", () -> "initial values w { " + "for i from 1 to 2 { ".repeat(100_000));
+    line("loops over rows", () -> "basis p at 0 =\n" + "for i from 1 to 2 { ".repeat(100_000));
+    line("choices, left", () -> "let a(t) = " + "if t < 1 [h] then (".repeat(100_000) + "1");
+  }
+
+  private static String deeper(String line, int depth) {
+    StringBuilder text = new StringBuilder();
+    for (int i = 0; i < depth; i++) {
+      text.append(" ".repeat(i)).append(line).append('\n');
+    }
+    return text.toString();
+  }
+
+  private void tables() {
+    lines("table, rows", 100_000, i -> i == 0 ? "table w(t) = linear" : "row " + i + ", 1");
+    lines("table, falling", 100_000, i -> i == 0 ? "table w(t) = hold" : "row -" + i + ", 1");
+    lines(
+        "table, smooth", 100_000, i -> i == 0 ? "table w(t) = monotone cubic" : "row " + i + ", 1");
+    for (String file : new String[] {"endless", "rows", "rising", "commas", "quote", "heads"}) {
+      line(
+          "table of " + file,
+          () ->
+              "table w(t) = file \""
+                  + file
+                  + ".csv\" time \"hour\" [h] column \"air\" monotone cubic");
+    }
+    lines(
+        "tables of one file",
+        10_000,
+        i -> "table w" + i + "(t) = file \"rows.csv\" time \"hour\" column \"air\" hold");
+  }
+
+  private void files() {
+    for (String file : new String[] {"endless", "claims", "dense"}) {
+      line("matrix of " + file, () -> "matrix M = file \"" + file + ".mtx\"");
+    }
+    texts.put("import of itself", () -> "import \"hostile.span\"\n");
+    texts.put("import of one that imports itself", () -> "import \"self.span\"\n");
+    texts.put("import in a ring", () -> "import \"ring.span\"\n");
+    texts.put("import without end", () -> "import \"doubling0.span\"\n");
+    texts.put("large import", () -> "import \"endless.span\"\n");
+    texts.put("path upwards", () -> "import \"../../secret.span\"\n");
+    texts.put("path from the root", () -> "import \"/etc/passwd\"\n");
+    texts.put("path with a drive", () -> "import \"C:\\\\secret.span\"\n");
+    texts.put("path that is long", () -> "import \"" + "a/".repeat(500_000) + "b.span\"\n");
+    texts.put("path up and up", () -> "import \"" + "../".repeat(300_000) + "b.span\"\n");
+    texts.put("parts that double", () -> doublingParts(40));
+    texts.put("parts in a chain", () -> chainOfParts(5_000));
+    texts.put("part of itself", () -> "system S over t from 0 to 1 { part a = S }\n");
+  }
+
+  private static String doublingParts(int count) {
+    StringBuilder text = new StringBuilder();
+    for (int i = 0; i < count; i++) {
+      text.append("system D").append(i).append(" over t [h] from 0 to 1 { state x = 1; x' = 0; ");
+      text.append("part a = D").append(i + 1).append("; part b = D").append(i + 1).append(" }\n");
+    }
+    return text + "system D" + count + " over t [h] from 0 to 1 { state x = 1; x' = 0 }\n";
+  }
+
+  private static String chainOfParts(int count) {
+    StringBuilder text = new StringBuilder();
+    for (int i = 0; i < count; i++) {
+      text.append("system D").append(i).append(" over t [h] from 0 to 1 { state x = 1; x' = 0; ");
+      text.append("part a = D").append(i + 1).append(" }\n");
+    }
+    return text + "system D" + count + " over t [h] from 0 to 1 { state x = 1; x' = 0 }\n";
+  }
+
+  private void steps() {
+    line("jumps, frequent", () -> "jump every 1e-9 from 0 to 1 { x becomes 2*x }");
+    lines("jumps, many", 100_000, i -> "jump at 0." + (i + 1) + " { x becomes 2*x }");
+    line("jump that changes much", () -> "jump at 0.5 {\n" + "x becomes x\n".repeat(100_000) + "}");
+    line(
+        "jump in turns",
+        () -> "jump at 0.5 {\nfor i from 1 to 1000000 { " + "x becomes x; ".repeat(10_000) + "}\n}");
+    line(
+        "boundary in turns",
+        () -> "boundary b {\nfor i from 1 to 1000000 { " + "x(0) = 1; ".repeat(10_000) + "}\n}");
+    line("boundary with much", () -> "boundary b {\n" + "x(0) = x(1)\n".repeat(100_000) + "}");
+    lines("pulses in pulses", 2_000, i -> "let p" + i + "(t) = " + pulse(i));
+  }
+
+  private static String pulse(int i) {
+    return i == 0
+        ? "t"
+        : "p" + (i - 1) + "(t)*pulse(t, period = 1e-" + i % 9 + " [h], width = 1e-12 [h])";
   }
 
   private static String twice(String name, int i) {

@@ -13,6 +13,7 @@ import java.util.List;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import org.junit.jupiter.params.provider.ValueSource;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.syntax.Expression.SumExpression;
 import org.spanloom.language.syntax.Statement.BasisStatement;
@@ -203,6 +204,28 @@ class ParserTests {
     assertEquals(
         List.of(ProblemKind.NESTING_TOO_DEEP),
         file.problems().stream().map(p -> p.kind()).toList());
+  }
+
+  @ParameterizedTest
+  @ValueSource(strings = {"", "jump at 1 {\n", "basis p at 0 =\n"})
+  void loopsInLoopsAreReadTwentyDeepAndFurtherOnesAreOneProblem(String head) {
+    String line = head.startsWith("jump") ? "x becomes 2" : head.isEmpty() ? "x' = 1" : "row x = 1";
+    String end = head.startsWith("jump") ? "\n}" : "";
+    String loop = "for i from 1 to 2 { ";
+    String sound = head + loop.repeat(20) + line + " }".repeat(20) + end + "\nlet b = 1";
+    assertEquals(List.of(), parse(sound).problems());
+    SyntaxFile file =
+        parse(head + loop.repeat(50_000) + line + " }".repeat(50_000) + end + "\nlet b = 1");
+    assertEquals(
+        List.of(
+            "Loops stand in one another at most 20 deep, and this one is deeper: write it outside"
+                + " of the others."),
+        file.problems().stream().map(p -> p.message()).distinct().toList());
+    assertEquals(
+        (head + loop.repeat(20)).length(), file.problems().getFirst().span().start());
+    assertInstanceOf(LetStatement.class, file.statements().getLast());
+    SyntaxFile open = parse(head + loop.repeat(50_000) + line);
+    assertTrue(open.problems().size() <= 3, open.problems().toString());
   }
 
   @Test

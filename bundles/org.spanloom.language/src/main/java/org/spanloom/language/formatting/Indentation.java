@@ -165,7 +165,8 @@ final class Indentation {
   /** Tells whether the first line of a loop, loops in it aside, is a row. */
   private boolean holdsRows(int index) {
     int inner = index;
-    while (inner < levels.length && layout.word(inner).equals("for") && opensLater(inner)) {
+    while (inner < index + 2 * DEEPEST
+        && inner < levels.length && layout.word(inner).equals("for") && opensLater(inner)) {
       boolean alone = !layout.statements().get(inner).opensBlock();
       inner += alone ? 2 : 1;
     }

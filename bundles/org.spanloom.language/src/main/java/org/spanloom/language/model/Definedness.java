@@ -88,6 +88,7 @@ public sealed interface Definedness {
    *     one outside or at an open end is moved inside
    */
   static Definedness of(Term term, TimeInterval interval, UnitOfMeasure timeUnit, double start) {
-    return new DefinednessSearch(term, interval, timeUnit, start).result();
+    return new DefinednessSearch(TermTape.of(term), interval, timeUnit, start, new SearchBudget())
+        .result();
   }
 }

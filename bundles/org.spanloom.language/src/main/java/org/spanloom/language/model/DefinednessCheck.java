@@ -35,6 +35,9 @@ final class DefinednessCheck {
   private final double start;
   private final BooleanSupplier cancelled;
   private final KnownConstants constants = new KnownConstants();
+  private final KnownRanges ranges;
+  private final SearchBudget budget = new SearchBudget();
+  private boolean spentReported;
   private final Set<Let> faulty = Collections.newSetFromMap(new IdentityHashMap<>());
   private final Set<Span> reported = new HashSet<>();
 
@@ -48,11 +51,20 @@ final class DefinednessCheck {
     this.times = times;
     this.start = start;
     this.cancelled = cancelled;
+    TimeInterval interval = times.interval();
+    this.ranges =
+        new KnownRanges(
+            new Interval(
+                times.unit().toBase(interval.start()), times.unit().toBase(interval.end())));
   }
 
   void lets(List<Let> lets) {
     for (Let let : lets) {
-      if (!isFine(let.value(), let.span(), let.nameSpan(), () -> "\"" + let.name() + "\"")) {
+      ModelReader.check(cancelled);
+      Optional<Interval> range = ranges.range(let.value());
+      if (range.isPresent()) {
+        ranges.note(let, range.get());
+      } else if (!isFine(let.value(), let.span(), let.nameSpan(), () -> "\"" + let.name() + "\"")) {
         faulty.add(let);
       }
     }
@@ -119,7 +131,13 @@ final class DefinednessCheck {
     if (trivial || constants.isKnown(term) || system.problems().isFull() || usesFaulty(term)) {
       return true;
     }
-    return switch (Definedness.of(term, times.interval(), times.unit(), start)) {
+    if (ranges.range(term).isPresent() || isSpent(shown)) {
+      return true;
+    }
+    TermTape tape = TermTape.of(term);
+    DefinednessSearch search =
+        new DefinednessSearch(tape, times.interval(), times.unit(), start, budget);
+    return switch (search.result()) {
       case Definedness.Defined defined -> true;
       case Definedness.Undefined undefined -> {
         boolean beyondNumbers =
@@ -147,6 +165,21 @@ final class DefinednessCheck {
         yield true;
       }
     };
+  }
+
+  /** Tells whether no more is looked at closely; reports the first term that this leaves out. */
+  private boolean isSpent(Span shown) {
+    if (budget.isSpent() && !spentReported) {
+      spentReported = true;
+      system
+          .problems()
+          .report(
+              ProblemKind.COEFFICIENT_UNDECIDED,
+              shown,
+              "From here on it was not looked whether expressions are finite everywhere: those"
+                  + " before took up the work that is spent on this. Make them simpler.");
+    }
+    return budget.isSpent();
   }
 
   /**

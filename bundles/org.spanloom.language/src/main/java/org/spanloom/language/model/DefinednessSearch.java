@@ -46,7 +46,11 @@ final class DefinednessSearch {
 
   private static final MathContext SHOWN = new MathContext(12);
 
+  private static final String SPENT =
+      "the other expressions of the system took up the work that is spent on this";
+
   private final TermTape tape;
+  private final SearchBudget budget;
   private final TermIntervals intervals;
   private final Liveness liveness;
   private final TermEvaluator value;
@@ -60,8 +64,15 @@ final class DefinednessSearch {
   private final double origin;
   private final double unitOfLength;
 
-  DefinednessSearch(Term term, TimeInterval interval, UnitOfMeasure timeUnit, double start) {
-    this.tape = TermTape.of(term);
+  DefinednessSearch(
+      TermTape tape,
+      TimeInterval interval,
+      UnitOfMeasure timeUnit,
+      double start,
+      SearchBudget budget) {
+    this.tape = tape;
+    this.budget = budget;
+    budget.spend(4L * tape.size());
     this.intervals = new TermIntervals(tape);
     this.liveness = new Liveness(tape);
     this.value = TermEvaluator.of(tape);
@@ -188,11 +199,15 @@ final class DefinednessSearch {
     ranges.push(new Range(from, end));
     for (int work = 0; !ranges.isEmpty(); work++) {
       Range range = ranges.pop();
+      budget.spend(tape.size());
       Optional<Guard> doubtful = firstInDoubt(range);
       if (doubtful.isEmpty()) {
         continue;
       }
       Guard guard = doubtful.get();
+      if (budget.isSpent()) {
+        return new Open(range.near(), guard, SPENT);
+      }
       if (work >= patience) {
         return new Open(range.near(), guard, "bounds on its values are too wide to tell");
       }

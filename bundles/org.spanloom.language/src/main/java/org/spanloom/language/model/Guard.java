@@ -97,6 +97,7 @@ record Guard(Kind kind, int node, int owner, int shown) {
         case Term.Negation negation -> open.push(factor.below(tape.operand(i, 0)));
         case Term.Power power -> open.push(factor.below(tape.operand(i, 0)));
         case Term.ParameterTerm parameter -> open.push(factor.named(tape.operand(i, 0)));
+        case Term.LetTerm let when tape.isClosed(i) -> guards.add(factor.guard(kind, owner));
         case Term.LetTerm let -> open.push(factor.named(tape.operand(i, 0)));
         case Term.FunctionTerm call -> {
           switch (call.function()) {

@@ -14,6 +14,7 @@ public final class TermIntervals {
 
   private final TermTape tape;
   private final Map<String, Double> replaced;
+  private final Map<Let, Interval> closed;
   private final Interval[] ranges;
 
   /**
@@ -35,11 +36,24 @@ public final class TermIntervals {
    * @param replaced values of parameters in coherent SI units, by name
    */
   TermIntervals(TermTape tape, Map<String, Double> replaced) {
+    this(tape, replaced, Map.of());
+  }
+
+  /**
+   * Prepares a term.
+   *
+   * @param replaced values of parameters in coherent SI units, by name
+   * @param closed what encloses the named expressions that have no operands on the tape
+   */
+  TermIntervals(TermTape tape, Map<String, Double> replaced, Map<Let, Interval> closed) {
     this.tape = tape;
     this.replaced = replaced;
+    this.closed = closed;
     this.ranges = new Interval[tape.size()];
     for (int i = 0; i < ranges.length; i++) {
-      if (tape.node(i) instanceof Term.Power power && !tape.varies(tape.operand(i, 1))) {
+      if (closed.isEmpty()
+          && tape.node(i) instanceof Term.Power power
+          && !tape.varies(tape.operand(i, 1))) {
         exponents.put(i, Interval.at(TermEvaluator.of(power.exponent(), replaced).at(Double.NaN)));
       }
       if (!tape.varies(i)) {
@@ -98,7 +112,7 @@ public final class TermIntervals {
           replaced.containsKey(parameter.name())
               ? Interval.at(replaced.get(parameter.name()))
               : below(i, 0);
-      case Term.LetTerm let -> below(i, 0);
+      case Term.LetTerm(Let let) -> tape.isClosed(i) ? closed.get(let) : below(i, 0);
       case Term.Sum sum -> below(i, 0).plus(below(i, 1));
       case Term.Difference difference -> below(i, 0).minus(below(i, 1));
       case Term.Product product ->

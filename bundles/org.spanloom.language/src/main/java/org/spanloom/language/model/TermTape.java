@@ -11,6 +11,7 @@ import java.util.Deque;
 import java.util.IdentityHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
 
 /**
  * The nodes of a term in an order in which every node comes after its operands, shared sub-terms
@@ -28,7 +29,11 @@ final class TermTape {
     this.operands = operands.toArray(int[][]::new);
     this.varying = new boolean[this.nodes.length];
     for (int i = 0; i < varying.length; i++) {
-      varying[i] = this.nodes[i] instanceof Term.Time;
+      varying[i] =
+          this.nodes[i] instanceof Term.Time
+              || this.operands[i].length == 0
+                  && this.nodes[i] instanceof Term.LetTerm(Let let)
+                  && let.dependsOnTime();
       for (int operand : this.operands[i]) {
         varying[i] |= varying[operand];
       }
@@ -37,6 +42,16 @@ final class TermTape {
 
   /** Lays out a term; the values of its parameters and named expressions belong to it. */
   static TermTape of(Term root) {
+    return of(root, Set.of());
+  }
+
+  /**
+   * Lays out a term.
+   *
+   * @param closed named expressions whose values do not belong to it: they are nodes without
+   *     operands
+   */
+  static TermTape of(Term root, Set<Let> closed) {
     List<Term> nodes = new ArrayList<>();
     List<int[]> operands = new ArrayList<>();
     Map<Object, Integer> places = new IdentityHashMap<>();
@@ -48,7 +63,8 @@ final class TermTape {
         open.pop();
         continue;
       }
-      List<Term> below = operands(term);
+      boolean isClosed = term instanceof Term.LetTerm(Let let) && closed.contains(let);
+      List<Term> below = isClosed ? List.of() : operands(term);
       int[] indices = new int[below.size()];
       boolean ready = true;
       for (int i = 0; i < indices.length; i++) {
@@ -121,6 +137,11 @@ final class TermTape {
   /** Returns a node. */
   Term node(int index) {
     return nodes[index];
+  }
+
+  /** Tells whether a node is a named expression whose value does not belong to the tape. */
+  boolean isClosed(int index) {
+    return operands[index].length == 0 && nodes[index] instanceof Term.LetTerm;
   }
 
   /** Returns the index of an operand of a node. */

@@ -45,7 +45,7 @@ public enum ProblemKind {
   /** A statement in a place where it cannot stand. */
   STATEMENT_MISPLACED("A statement stands where it cannot stand."),
   /** Parentheses in parentheses beyond the limit. */
-  NESTING_TOO_DEEP("Expressions are nested deeper than the limit."),
+  NESTING_TOO_DEEP("Expressions or loops are nested deeper than the limit."),
   /** A statement with more words, numbers and signs than the limit. */
   STATEMENT_TOO_LONG("A statement is longer than the limit."),
   /** More problems than the limit. */

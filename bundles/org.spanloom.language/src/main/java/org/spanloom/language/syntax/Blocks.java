@@ -20,10 +20,19 @@ import org.spanloom.language.text.Span;
 /** Reads what stands in braces, and the first lines of loops. */
 final class Blocks {
 
+  /** Most loops in one another. */
+  static final int LOOP_DEPTH_LIMIT = 20;
+
   private final SourceText source;
   private final String text;
   private final StatementSplitter lines;
   private final SyntaxProblems problems;
+
+  /** How many loops are being read, one in another. */
+  private int depth;
+
+  /** Whether a loop inside of the outermost one being read was reported as nested too deep. */
+  private boolean tooDeepReported;
 
   Blocks(SourceText source, StatementSplitter lines, SyntaxProblems problems) {
     this.source = source;
@@ -145,6 +154,18 @@ final class Blocks {
 
     private void loop(StatementLine line) {
       boolean opened = line.opensBlock() || !line.closesBlock() && acceptOpeningBrace();
+      if (!enterLoop(line)) {
+        end = opened ? skip() : line.end().end();
+        allRead = false;
+        closed = !opened && line.closesBlock();
+        reported = opened && atEndOfText();
+        return;
+      }
+      loop(line, opened);
+      leaveLoop();
+    }
+
+    private void loop(StatementLine line, boolean opened) {
       Optional<Turns> turns = loopHead(line, opened);
       end = line.end().end();
       if (!opened) {
@@ -199,6 +220,39 @@ final class Blocks {
     }
     cursor.problem().ifPresent(problems::add);
     return cursor.failed() ? Optional.empty() : Optional.of(turns);
+  }
+
+  /**
+   * Begins to read a loop, to be followed by {@link #leaveLoop}.
+   *
+   * @return whether it may be read; if not, that was reported and there is nothing to leave
+   */
+  boolean enterLoop(StatementLine head) {
+    if (depth < LOOP_DEPTH_LIMIT) {
+      depth++;
+      return true;
+    }
+    if (!tooDeepReported) {
+      problem(
+          ProblemKind.NESTING_TOO_DEEP,
+          head.span(),
+          "Loops stand in one another at most "
+              + LOOP_DEPTH_LIMIT
+              + " deep, and this one is deeper: write it outside of the others.");
+    }
+    tooDeepReported = true;
+    return false;
+  }
+
+  /** Ends the reading of a loop. */
+  void leaveLoop() {
+    depth--;
+    tooDeepReported &= depth > 0;
+  }
+
+  /** Tells whether nothing more is to come. */
+  boolean atEndOfText() {
+    return lines.peek().start() >= text.length();
   }
 
   /** Reports a loop whose closing brace is missing. */

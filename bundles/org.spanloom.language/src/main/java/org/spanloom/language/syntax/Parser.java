@@ -138,6 +138,26 @@ public final class Parser {
   /** {@code loop = "for", turns, "{", { statement }, "}" ;} */
   private Statement loop(StatementLine line) {
     boolean opened = line.opensBlock() || !line.closesBlock() && blocks.acceptOpeningBrace();
+    if (!blocks.enterLoop(line)) {
+      return loopNotRead(line, opened);
+    }
+    Statement loop = loop(line, opened);
+    blocks.leaveLoop();
+    return loop;
+  }
+
+  /** Passes over a loop that is nested too deep. */
+  private Statement loopNotRead(StatementLine line, boolean opened) {
+    if (!opened) {
+      return new StatementParser(text, line).unread();
+    }
+    Span span = new Span(line.span().start(), blocks.skip());
+    openLoopReported |= blocks.atEndOfText();
+    last = closed(span.end());
+    return new UnreadStatement("for", source.slice(span), Optional.empty(), span);
+  }
+
+  private Statement loop(StatementLine line, boolean opened) {
     Optional<Turns> turns = blocks.loopHead(line, opened);
     if (!opened && line.closesBlock()) {
       return new StatementParser(text, line).unread();
@@ -423,7 +443,9 @@ public final class Parser {
   /** Reads a loop over rows and tells whether all of it could be read. */
   private boolean rowLoop(StatementLine line, List<BlockLine<Row>> rows) {
     Optional<Turns> turns = blocks.loopHead(line, true);
+    blocks.enterLoop(line);
     Blocks.Block<Row> block = blocks.block(line, "row", StatementParser::row);
+    blocks.leaveLoop();
     if (block.lacksBrace()) {
       blocks.reportOpenLoop(line);
     }
