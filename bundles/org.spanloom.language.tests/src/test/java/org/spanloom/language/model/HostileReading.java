@@ -38,8 +38,7 @@ final class HostileReading {
     try {
       double start = seconds();
       Model model =
-          ModelReader.read(
-              new SourceText("hostile.span", text), new HostileProject(), () -> false);
+          ModelReader.read(new SourceText("hostile.span", text), new HostileProject(), () -> false);
       double read = seconds();
       Formatter.format(text);
       Outline.of(model.syntax());

@@ -206,7 +206,7 @@ final class HostileTexts {
     lines(
         "tables of one file",
         10_000,
-        i -> "table w" + i + "(t) = file \"rows.csv\" time \"hour\" column \"air\" hold");
+        i -> "table w" + i + "(t) = file \"rising.csv\" time \"hour\" column \"air\" hold");
   }
 
   private void files() {
@@ -252,7 +252,8 @@ final class HostileTexts {
     line("jump that changes much", () -> "jump at 0.5 {\n" + "x becomes x\n".repeat(100_000) + "}");
     line(
         "jump in turns",
-        () -> "jump at 0.5 {\nfor i from 1 to 1000000 { " + "x becomes x; ".repeat(10_000) + "}\n}");
+        () ->
+            "jump at 0.5 {\nfor i from 1 to 1000000 { " + "x becomes x; ".repeat(10_000) + "}\n}");
     line(
         "boundary in turns",
         () -> "boundary b {\nfor i from 1 to 1000000 { " + "x(0) = 1; ".repeat(10_000) + "}\n}");

@@ -221,8 +221,7 @@ class ParserTests {
             "Loops stand in one another at most 20 deep, and this one is deeper: write it outside"
                 + " of the others."),
         file.problems().stream().map(p -> p.message()).distinct().toList());
-    assertEquals(
-        (head + loop.repeat(20)).length(), file.problems().getFirst().span().start());
+    assertEquals((head + loop.repeat(20)).length(), file.problems().getFirst().span().start());
     assertInstanceOf(LetStatement.class, file.statements().getLast());
     SyntaxFile open = parse(head + loop.repeat(50_000) + line);
     assertTrue(open.problems().size() <= 3, open.problems().toString());

@@ -166,7 +166,9 @@ final class Indentation {
   private boolean holdsRows(int index) {
     int inner = index;
     while (inner < index + 2 * DEEPEST
-        && inner < levels.length && layout.word(inner).equals("for") && opensLater(inner)) {
+        && inner < levels.length
+        && layout.word(inner).equals("for")
+        && opensLater(inner)) {
       boolean alone = !layout.statements().get(inner).opensBlock();
       inner += alone ? 2 : 1;
     }

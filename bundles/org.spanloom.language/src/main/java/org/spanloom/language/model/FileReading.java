@@ -66,7 +66,14 @@ final class FileReading {
     this.place = place;
     this.frame =
         new Frame(
-            new SourceFile(key, syntax.source(), systems, library.files(), library.matrices()),
+            new SourceFile(
+                key,
+                syntax.source(),
+                systems,
+                library.files(),
+                library.matrices(),
+                library.repetition(),
+                library.tables()),
             syntax.statements(),
             new Scope(Optional.empty()),
             problems,

@@ -31,6 +31,8 @@ final class Library {
   private final BooleanSupplier cancelled;
   private final PartBudget budget = new PartBudget();
   private final MatrixBudget matrices = new MatrixBudget();
+  private final RepetitionBudget repetition = new RepetitionBudget();
+  private final TableBudget tables = new TableBudget();
   private final Map<FileKey, FileReading> done = new HashMap<>();
   private final List<FileReading> inOrder = new ArrayList<>();
   private final List<FileReading> open = new ArrayList<>();
@@ -55,6 +57,14 @@ final class Library {
 
   MatrixBudget matrices() {
     return matrices;
+  }
+
+  RepetitionBudget repetition() {
+    return repetition;
+  }
+
+  TableBudget tables() {
+    return tables;
   }
 
   /** Returns the imported files that were read, each after those it imports itself. */

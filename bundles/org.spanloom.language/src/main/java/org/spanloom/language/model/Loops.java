@@ -34,14 +34,16 @@ final class Loops {
   private final Scope scope;
   private final Problems problems;
   private final IndexReader indices;
+  private final RepetitionBudget repetition;
   private final Set<Span> namesSeen = new HashSet<>();
   private long turns;
   private boolean exhausted;
 
-  Loops(Scope scope, Problems problems, IndexReader indices) {
+  Loops(Scope scope, Problems problems, IndexReader indices, RepetitionBudget repetition) {
     this.scope = scope;
     this.problems = problems;
     this.indices = indices;
+    this.repetition = repetition;
   }
 
   /** What reads the statements of a body, loops followed. */
@@ -93,6 +95,7 @@ final class Loops {
     boolean known =
         each(
             loop.turns(),
+            loop.span(),
             () -> {
               empty[0] = false;
               statements(loop.body(), reading);
@@ -118,7 +121,7 @@ final class Loops {
             reader.accept(single.content());
         case SingleLine<T> single -> problems.inTurn(single, () -> reader.accept(single.content()));
         case RepeatedLines<T> repeated ->
-            known &= each(repeated.turns(), () -> lines(repeated.lines(), reader));
+            known &= each(repeated.turns(), repeated.span(), () -> lines(repeated.lines(), reader));
       }
     }
     return known && !exhausted;
@@ -127,10 +130,11 @@ final class Loops {
   /**
    * Goes through some turns.
    *
+   * @param repeated the text that is read in each turn
    * @param turn done in each turn; tells whether to go on
    * @return whether the turns are known and not too many
    */
-  boolean each(Turns turns, BooleanSupplier turn) {
+  boolean each(Turns turns, Span repeated, BooleanSupplier turn) {
     boolean outermost = problems.indices().isEmpty();
     long[] bounds = new long[2];
     boolean[] known = new boolean[1];
@@ -145,6 +149,10 @@ final class Loops {
     long count = Math.max(0, bounds[1] - bounds[0] + 1);
     if (count > TURN_LIMIT - this.turns) {
       reportTooMany(turns);
+      return false;
+    }
+    if (!repetition.allows(count, repeated.length())) {
+      reportTooMuchText(turns);
       return false;
     }
     this.turns += count;
@@ -222,6 +230,17 @@ final class Loops {
         "All loops and sums of a system have at most "
             + TURN_LIMIT
             + " turns together, and this one would exceed it: make its bounds narrower.");
+  }
+
+  private void reportTooMuchText(Turns turns) {
+    exhausted = true;
+    problems.report(
+        ProblemKind.EXPANSION_TOO_LARGE,
+        turns.span(),
+        "All loops and sums of a model repeat at most "
+            + RepetitionBudget.TEXT_LIMIT
+            + " characters of text together, and this one would exceed it: make its bounds"
+            + " narrower, or what it repeats shorter.");
   }
 
   private void reportEmpty(Turns turns, long[] bounds) {

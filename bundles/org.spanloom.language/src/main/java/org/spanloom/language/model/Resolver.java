@@ -61,7 +61,7 @@ final class Resolver {
     this.names = new NameResolver(this, switching, frame.scope(), problems);
     this.matrices = new MatrixAlgebra(this, frame);
     this.indices = new IndexReader(this, frame.scope(), problems);
-    this.loops = new Loops(frame.scope(), problems, indices);
+    this.loops = new Loops(frame.scope(), problems, indices, frame.file().repetition());
   }
 
   /** Returns the reader of indices. */
@@ -316,6 +316,7 @@ final class Resolver {
     boolean known =
         loops.each(
             indexed.turns(),
+            body.span(),
             () -> {
               Optional<Quantity> value = quantity(body, place);
               sound[0] = value.isPresent();

@@ -17,10 +17,14 @@ import org.spanloom.language.text.SourceText;
  * @param systems the systems that its statements can name, its own and those imported
  * @param files the other files of the project
  * @param matrices what matrices may cost, shared by all files of a model
+ * @param repetition what loops and sums may repeat, shared by all files of a model
+ * @param tables what tables may read from files, shared by all files of a model
  */
 record SourceFile(
     FileKey key,
     SourceText text,
     Map<String, SystemType> systems,
     FileAccess files,
-    MatrixBudget matrices) {}
+    MatrixBudget matrices,
+    RepetitionBudget repetition,
+    TableBudget tables) {}

@@ -125,18 +125,26 @@ final class TableReader {
               + ": give the unit of the times in the file.");
       return Optional.empty();
     }
-    return switch (CsvColumns.read(found.get().text(), file.time().text(), file.column().text())) {
-      case CsvColumns.Fault(int line, String reason) ->
-          refused(
-              file.path().span(),
-              "The file \""
-                  + Quotes.shortened(file.path().text())
-                  + "\" cannot be used, line "
-                  + line
-                  + ": "
-                  + reason
-                  + ". Correct the file or the statement.");
+    String text = found.get().text();
+    TableBudget budget = frame.file().tables();
+    if (!budget.allows(text)) {
+      return tooManyRows(file);
+    }
+    return switch (CsvColumns.read(text, file.time().text(), file.column().text())) {
+      case CsvColumns.Fault(int line, String reason) -> {
+        budget.spend(text, 0);
+        yield refused(
+            file.path().span(),
+            "The file \""
+                + Quotes.shortened(file.path().text())
+                + "\" cannot be used, line "
+                + line
+                + ": "
+                + reason
+                + ". Correct the file or the statement.");
+      }
       case CsvColumns.Columns(double[] times, double[] values, int[] lines) -> {
+        budget.spend(text, times.length);
         for (int k = 0; k < times.length; k++) {
           times[k] = own.toBase(times[k]);
           values[k] = unit.toBase(values[k]);
@@ -144,6 +152,15 @@ final class TableReader {
         yield Optional.of(new Rows(times, values, inFile(file, lines)));
       }
     };
+  }
+
+  private Optional<Rows> tooManyRows(TableFile file) {
+    return refused(
+        file.path().span(),
+        "All tables of a model read at most "
+            + TableBudget.ROW_LIMIT
+            + " rows from files together, and this one would exceed it: leave out rows or tables"
+            + " that the model does not need.");
   }
 
   private static Places inFile(TableFile file, int[] lines) {
