@@ -10,18 +10,27 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import static org.junit.jupiter.api.Assertions.fail;
 
 import java.util.List;
+import java.util.Map;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
 import org.spanloom.language.editing.Completion;
 import org.spanloom.language.editing.Definition;
 import org.spanloom.language.editing.Folding;
 import org.spanloom.language.editing.Hover;
+import org.spanloom.language.editing.LineSplit;
+import org.spanloom.language.editing.MatrixForm;
 import org.spanloom.language.editing.Outline;
+import org.spanloom.language.editing.OutlineNode;
+import org.spanloom.language.editing.References;
+import org.spanloom.language.editing.ScalarForm;
+import org.spanloom.language.files.TextFiles;
 import org.spanloom.language.formatting.Formatter;
+import org.spanloom.language.formatting.Printer;
 import org.spanloom.language.problem.Fix;
 import org.spanloom.language.problem.Problem;
 import org.spanloom.language.problem.ProblemKind;
 import org.spanloom.language.problem.TextEdit;
+import org.spanloom.language.syntax.Parser;
 import org.spanloom.language.syntax.Statement;
 import org.spanloom.language.syntax.Statement.SystemStatement;
 import org.spanloom.language.text.SourceText;
@@ -30,11 +39,12 @@ import org.spanloom.language.text.Span;
 /**
  * Texts spoilt at random, the same in every run: reading them never throws, takes bounded time, and
  * whatever it says lies inside the text. Runs for some seconds; {@code -Dspanloom.fuzz.seconds=N}
- * makes it run longer.
+ * makes it run longer, and {@code -Dspanloom.fuzz.seed=N} on other texts.
  */
 class FuzzTests {
 
-  private static final int SECONDS = Integer.getInteger("spanloom.fuzz.seconds", 5);
+  private static final int SECONDS = Integer.getInteger("spanloom.fuzz.seconds", 20);
+  private static final long SEED = Long.getLong("spanloom.fuzz.seed", 4711);
 
   private static final String SOUND =
       """
@@ -68,6 +78,88 @@ class FuzzTests {
         accuracy 1e-7
       }
       """;
+
+  private static final String ROW_OF_ROOMS =
+      """
+      import "zone.span"
+      ## A store of the Marrow Skerry field station, cell by cell. Invented data.
+      system Store over t [h] from 0 to 48 {
+        parameter k [1/h] = 0.2
+        parameter n = 3
+        matrix C = file "couplings.mtx"
+        matrix D [1/h] =
+          row 2, -1, 0
+          row -1, 2, -1
+          row 0, -1, 2
+        matrix E = transpose(C)*C + 2*C
+        table air(t) [Cel] = monotone cubic extended
+          row 0, 8
+          row 12, 14.5
+          row 24, 9
+        table wind(t) = file "wind.csv" time "hour" [h] column "wind" linear extended
+        input load(t) [K/h] = 2 [K/h]*pulse(t, period = 24 [h], width = 30 [min], start = 6 [h])
+        let lid(t) = if t < 6 [h] then 1 else if t < 18 [h] then 0.5 else 2
+        state c[1..n] [mol] = 1
+        state g[1..2, 1..3] [mol] = 0.1
+        state v[1..3] [K] = 0
+        state T [Cel] = 10
+        for i from 1 to 3 {
+          c[i]' = -k*lid(t)*(sum over j from 1 to 3 of E[i,j]*c[j])
+        }
+        for i from 1 to 2 {
+          for j from 1 to 3 { g[i,j]' = k*(c[j] - g[i,j])*i }
+        }
+        v' = -D*v
+        T' = k*(air(t) - T)*(1 + 0.1*wind(t)) + load(t)
+        part a = Zone { g = 0.7 [1/h]; u = T; x = 291 }
+        part b = Zone { u = a.x }
+        state spare [mol] = 1
+        transfer spare -> outside = k*spare
+        output mean [mol] = (sum over i from 1 to n of c[i])/n
+        jump at 6 { c[1] becomes c[1] + 2 [mol] }
+        jump every 8 from 8 to 40 {
+          for i from 2 to 3 { c[i] becomes 0.5*c[i] }
+          T becomes T + 1 [K]
+        }
+        initial values late at 1 { for i from 1 to n { c[i] = 2; v[i] = 0; g[1,i] = 1; g[2,i] = 2 }; spare = 1; T = 12; a.x = 290; b.x = 290 }
+        require c[1] < 9 [mol] throughout under late
+        require b.x < 400 [K] throughout until 12
+      }
+      system Rod over s [cm] from 0 to 40 {
+        parameter k [1/cm] = 0.1
+        state u [Cel]
+        state u' [K/cm]
+        u'' = k^2*(u - 5 [Cel])
+        basis fading(s) =
+          row u = exp(-k*s)*1 [K], exp(k*s)*1 [K]
+          row u' = -k*exp(-k*s)*1 [K], k*exp(k*s)*1 [K]
+        boundary held { u(0) = 21 [Cel]; u(40) = 3.5 [Cel] }
+        require u(20) < 30 [Cel] under held
+      }
+      """;
+
+  private static final TextFiles PROJECT =
+      new TextFiles(
+          "fuzz.span",
+          Map.of(
+              "zone.span",
+              """
+              system Zone over t [h] from 0 to 48 {
+                parameter g [1/h] = 0.5
+                input u(t) [K] = 280
+                state x [K] = 285
+                x' = g*(u(t) - x)
+              }
+              """,
+              "couplings.mtx",
+              "%%MatrixMarket matrix coordinate real general\n"
+                  + "3 3 4\n"
+                  + "1 1 2\n"
+                  + "2 2 2\n"
+                  + "3 3 2\n"
+                  + "1 2 0.5\n",
+              "wind.csv",
+              "hour,wind\n0,1.5\n24,2.5\n48,1\n"));
 
   private static final List<String> PIECES =
       List.of(
@@ -127,6 +219,48 @@ class FuzzTests {
           "for ",
           "table ",
           "matrix ",
+          "import \"",
+          "import \"fuzz.span\"\n",
+          "part a = Zone { ",
+          "part p = Store\n",
+          "input u(t) = ",
+          "transfer ",
+          "jump ",
+          "jump every ",
+          "becomes ",
+          "boundary b { ",
+          "for i from 1 to 2 { ",
+          "for i from 1 to 99 {\n",
+          "for i from 1 to n ",
+          "sum over j from 1 to 3 of ",
+          "sum over j from 1 to 1000000 of ",
+          "if t < 3 [h] then ",
+          "then ",
+          "else ",
+          "pulse(t, period = 1 [h], width = 1 [min])",
+          "pulse(",
+          "table w(t) = linear\n row 0, 1\n row 9, 2\n",
+          "monotone cubic ",
+          "extended",
+          "file \"wind.csv\" ",
+          "file \"couplings.mtx\"",
+          "file \"../",
+          "matrix M =\n row 1, 2\n row 3, 4\n",
+          "transpose(",
+          "[i]",
+          "[i,j]",
+          "[1..9]",
+          "[1..n]",
+          "[1..2, 1..2]",
+          "[0]",
+          "[1000000000]",
+          "a.x",
+          "b.g",
+          ".x",
+          "C*",
+          "c",
+          "(before 6)",
+          "outside ",
           " [m]",
           " [Cel]",
           " [",
@@ -152,19 +286,24 @@ class FuzzTests {
           "^9e99",
           "[10*400]");
 
+  private static Model read(String text) {
+    return ModelReader.read(new SourceText("fuzz.span", text), PROJECT, () -> false);
+  }
+
   @Test
   void spoiltTextsAreReadAllTheSame() {
-    assertEquals(
-        List.of(), ModelListing.read(SOUND).problems().stream().map(Problem::message).toList());
-    Random random = new Random(4711);
+    for (String sound : List.of(SOUND, ROW_OF_ROOMS)) {
+      assertEquals(List.of(), read(sound).problems().stream().map(Problem::message).toList());
+    }
+    Random random = new Random(SEED);
     long end = System.nanoTime() + SECONDS * 1_000_000_000L;
     int rounds = 0;
     while (System.nanoTime() < end) {
-      String text = spoilt(random);
+      String text = spoilt(random.nextBoolean() ? SOUND : ROW_OF_ROOMS, random);
       long start = System.nanoTime();
       try {
         check(text, random);
-      } catch (RuntimeException | StackOverflowError e) {
+      } catch (RuntimeException | StackOverflowError | AssertionError e) {
         fail("after " + rounds + " rounds in\n" + text, e);
       }
       double seconds = (System.nanoTime() - start) / 1e9;
@@ -174,8 +313,8 @@ class FuzzTests {
     assertTrue(rounds > 20, "rounds: " + rounds);
   }
 
-  private static String spoilt(Random random) {
-    StringBuilder text = new StringBuilder(SOUND);
+  private static String spoilt(String sound, Random random) {
+    StringBuilder text = new StringBuilder(sound);
     int changes = 1 + random.nextInt(random.nextInt(4) == 0 ? 40 : 4);
     for (int i = 0; i < changes; i++) {
       int at = random.nextInt(text.length() + 1);
@@ -201,8 +340,7 @@ class FuzzTests {
   }
 
   private static void check(String text, Random random) {
-    SourceText source = new SourceText("fuzz.span", text);
-    Model model = ModelReader.read(source);
+    Model model = read(text);
     Span whole = new Span(0, text.length());
     int last = 0;
     for (Problem problem : model.problems()) {
@@ -211,9 +349,7 @@ class FuzzTests {
       assertTrue(problem.message().length() < 1000, problem.message());
       last = problem.span().start();
       for (Fix fix : problem.fixes()) {
-        for (TextEdit edit : fix.edits()) {
-          assertTrue(whole.contains(edit.span()), problem.toString());
-        }
+        fix(fix, whole);
       }
     }
     statements(model.syntax().statements(), whole);
@@ -223,13 +359,38 @@ class FuzzTests {
       }
     }
     layout(model);
-    Outline.of(model.syntax());
-    Folding.of(model.syntax());
+    printed(model);
+    Outline.of(model.syntax()).forEach(node -> outline(node, whole));
+    Folding.of(model.syntax()).forEach(span -> assertTrue(whole.contains(span)));
     for (int i = 0; i < 5; i++) {
       int offset = random.nextInt(text.length() + 1);
       Completion.at(model, offset);
+      References.at(model.syntax(), offset).forEach(o -> assertTrue(whole.contains(o.span())));
+      LineSplit.at(model.syntax().source(), offset).ifPresent(f -> fix(f, whole));
+      ScalarForm.at(model, offset).ifPresent(f -> fix(f, whole));
+      MatrixForm.at(model, offset).ifPresent(f -> fix(f, whole));
       Definition.at(model, offset).ifPresent(s -> assertTrue(whole.contains(s)));
       Hover.at(model, offset).ifPresent(h -> assertTrue(whole.contains(h.span())));
+    }
+  }
+
+  private static void fix(Fix fix, Span whole) {
+    for (TextEdit edit : fix.edits()) {
+      assertTrue(whole.contains(edit.span()), fix.toString());
+    }
+  }
+
+  private static void outline(OutlineNode node, Span around) {
+    assertTrue(around.contains(node.span()), node.toString());
+    node.children().forEach(child -> outline(child, around));
+  }
+
+  /** What is printed of a text without mistakes of syntax is read without any, too. */
+  private static void printed(Model model) {
+    String printed = Printer.print(model.syntax());
+    if (model.syntax().problems().isEmpty()) {
+      assertEquals(
+          List.of(), Parser.parse(new SourceText("fuzz.span", printed)).problems(), printed);
     }
   }
 
@@ -237,7 +398,7 @@ class FuzzTests {
   private static void layout(Model model) {
     String laid = Formatter.format(model.syntax().source().content());
     assertEquals(laid, Formatter.format(laid));
-    Model other = ModelReader.read(new SourceText("fuzz.span", laid));
+    Model other = read(laid);
     assertEquals(kinds(model), kinds(other), laid);
     for (int i = 0; i < model.systems().size(); i++) {
       SystemModel system = model.systems().get(i);
