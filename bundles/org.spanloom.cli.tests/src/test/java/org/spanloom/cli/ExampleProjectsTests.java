@@ -73,6 +73,12 @@ class ExampleProjectsTests {
   }
 
   @Test
+  void theLargeModelIsClean() {
+    JsonObject report = report(EXAMPLES.resolve("marrow-skerry-large"), 0);
+    assertEquals(List.of(), found(report));
+  }
+
+  @Test
   void theCleanProjectIsCleanAndItsRequirementsHold() throws IOException {
     JsonObject report = report(CLEAN, 0);
     assertEquals(promised(CLEAN), found(report));

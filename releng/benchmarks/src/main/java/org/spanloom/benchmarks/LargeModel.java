@@ -46,9 +46,8 @@ public final class LargeModel {
           parameter flow [kg/s] = 2.35 ± 3 %
           let T_soil(t) = T_mean + T_year*sin(2*pi*t/year)
           let day(t) = max(0, cos(2*pi*(t - 13 [h])/(24 [h])))
-          input boiler(t) [kW] = 38
-
         """);
+    text.append("  input boiler(t) [kW] = ").append(segments / 20.0).append("\n\n");
     for (int i = 1; i <= segments; i++) {
       segment(text, i, i == 1 ? segments : i - 1, random);
     }
@@ -56,7 +55,7 @@ public final class LargeModel {
     for (int i = 1; i <= segments; i++) {
       text.append("    T").append(i).append(" = 283; W").append(i).append(" = 282\n");
     }
-    text.append("  }\n  require T1 < 368 [K] throughout\n  accuracy 1e-7\n}\n");
+    text.append("  }\n  require T1 < 398 [K] throughout\n  accuracy 1e-7\n}\n");
     return text.toString();
   }
 
