@@ -17,6 +17,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Set;
 import java.util.TreeSet;
+import java.util.stream.Collectors;
 import org.junit.jupiter.api.Test;
 import org.spanloom.language.files.FileKey;
 import org.spanloom.language.files.TextFiles;
@@ -242,6 +243,69 @@ class PartTests {
     assertEquals(
         -5e-6, TermEvaluator.constant(sips.changes().getFirst().value().constant()), 1e-20);
     assertEquals(List.of(0, 1), own.changes().stream().map(Jump.Change::component).toList());
+  }
+
+  @Test
+  void aFamilyInAPartMeansTheFamilyWrittenOut() {
+    String chain =
+        """
+        system Chain over t [min] from 0 to 240 {
+          parameter n = 3
+          parameter k [/h] = 0.5
+          input fed(t) [g/h] = 0.5
+          state c[1..n] [g] = 4
+          output out [g/h] = k*c[n]
+          c[1]' = fed(t) - k*c[1]
+          for i from 2 to n { c[i]' = k*(c[i-1] - c[i]) }
+        }
+        """;
+    SystemModel parts =
+        sound(
+            read(
+                chain
+                    + """
+                    system Two over t [h] from 0 to 4 {
+                      part upper = Chain { c = 6 }
+                      part lower = Chain { fed = upper.out; k = 0.25 [/h] }
+                      output held [g] = sum over i from 1 to 3 of (upper.c[i] + lower.c[i])
+                      initial values other { upper.c = 1; for i from 1 to 3 { lower.c[i] = i*1 [g] } }
+                      require lower.c[2] < 10 [g] throughout
+                    }
+                    """,
+                Map.of()),
+            "Two");
+    SystemModel flat =
+        sound(
+            read(
+                """
+                system Two over t [h] from 0 to 4 {
+                  parameter k [/h] = 0.5
+                  parameter l [/h] = 0.25
+                  state u[1..3] [g] = 6
+                  state v[1..3] [g] = 4
+                  u[1]' = 0.5 [g/h] - k*u[1]
+                  for i from 2 to 3 { u[i]' = k*(u[i-1] - u[i]) }
+                  v[1]' = k*u[3] - l*v[1]
+                  for i from 2 to 3 { v[i]' = l*(v[i-1] - v[i]) }
+                  initial values other { u = 1; for i from 1 to 3 { v[i] = i*1 [g] } }
+                }
+                """,
+                Map.of()),
+            "Two");
+    assertEquals(
+        numbers(flat, 600).stream()
+            .map(n -> n.replace("u[", "upper_c[").replace("v[", "lower_c["))
+            .collect(Collectors.toCollection(TreeSet::new)),
+        new TreeSet<>(numbers(parts, 600)));
+    for (int set = 0; set < 2; set++) {
+      assertEquals(values(flat, set), values(parts, set));
+    }
+    assertEquals(List.of(6.0, 6.0, 6.0, 4.0, 4.0, 4.0), values(parts, 0));
+    assertEquals("lower.c[2]", parts.states().get(4).label());
+  }
+
+  private static List<Double> values(SystemModel system, int set) {
+    return system.initialValues().get(set).values().stream().map(TermEvaluator::constant).toList();
   }
 
   @Test

@@ -129,8 +129,10 @@ final class Components {
   Optional<Binding> initial(int index) {
     StateComponent component = list.get(index);
     Frame frame = frames.get(index);
+    // A part gives a family one value, for all of its members.
+    String declared = component.name().substring(component.name().lastIndexOf('.') + 1);
     return frame
-        .binding(component.label().substring(component.label().lastIndexOf('.') + 1))
+        .binding(declared + "'".repeat(component.order()))
         .or(() ->
             declarations
                 .get(index)

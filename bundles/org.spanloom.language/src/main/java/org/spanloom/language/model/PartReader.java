@@ -164,6 +164,8 @@ final class PartReader {
       Declaration declaration = declared.get(target.name().text());
       if (declaration == null) {
         reportUnknownTarget(around, type, target, declared.keySet());
+      } else if (target.isIndexed()) {
+        reportIndexed(around, statement, target, declaration);
       } else if (!canBeBound(declaration, target)) {
         reportFixed(around, type, target, declaration);
       } else if (!seen.add(target.label())) {
@@ -204,6 +206,27 @@ final class PartReader {
         nearest.stream()
             .map(n -> Fix.replace("Write " + n, target.name().span(), n))
             .toArray(Fix[]::new));
+  }
+
+  private static void reportIndexed(
+      Frame around, PartStatement statement, NameExpression target, Declaration declaration) {
+    boolean family = declaration instanceof StateStatement state && state.isFamily();
+    String shown = Quotes.shortened(around.slice(target.span()));
+    Span index = new Span(target.name().span().end(), target.span().end() - target.primes());
+    report(
+        around,
+        ProblemKind.BINDING_INVALID,
+        target.span(),
+        family
+            ? "A part gives a family one value for all of its members: write \""
+                + target.label()
+                + "\" without an index, or give \""
+                + statement.name().text()
+                + "."
+                + shown
+                + "\" in a set of initial values."
+            : "\"" + shown + "\" has an index, but only a family of states has: remove it.",
+        Fix.replace("Remove the index", index, ""));
   }
 
   private static void reportFixed(
