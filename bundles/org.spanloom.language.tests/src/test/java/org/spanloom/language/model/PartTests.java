@@ -300,7 +300,8 @@ class PartTests {
     for (int set = 0; set < 2; set++) {
       assertEquals(values(flat, set), values(parts, set));
     }
-    assertEquals(List.of(6.0, 6.0, 6.0, 4.0, 4.0, 4.0), values(parts, 0));
+    // In kilograms.
+    assertEquals(List.of(0.006, 0.006, 0.006, 0.004, 0.004, 0.004), values(parts, 0));
     assertEquals("lower.c[2]", parts.states().get(4).label());
   }
 
