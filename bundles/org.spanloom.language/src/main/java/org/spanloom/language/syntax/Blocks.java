@@ -244,6 +244,11 @@ final class Blocks {
     return false;
   }
 
+  /** Tells whether the loop being read stands in another. */
+  boolean isInnerLoop() {
+    return depth > 1;
+  }
+
   /** Ends the reading of a loop. */
   void leaveLoop() {
     depth--;

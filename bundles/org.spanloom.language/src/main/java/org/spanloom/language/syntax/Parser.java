@@ -45,6 +45,9 @@ public final class Parser {
   private final Blocks blocks;
   private final BlockParser blockStatements;
 
+  /** Whether the statements of a system are being read. */
+  private boolean inSystem;
+
   /** Whether a loop that reaches to the end of the system was reported as not closed. */
   private boolean openLoopReported;
 
@@ -114,7 +117,9 @@ public final class Parser {
     }
     note(parser.cursor());
     List<Statement> body = new ArrayList<>();
+    inSystem = true;
     int end = line.closesBlock() ? line.span().end() : body(name, body);
+    inSystem = false;
     statements.add(
         new SystemStatement(
             name,
@@ -173,7 +178,8 @@ public final class Parser {
   /**
    * Reads what a loop repeats and returns the offset behind it. A loop whose closing brace is
    * missing ends before the next system, and before a declaration that is not indented deeper. One
-   * whose opening brace is missing holds what is indented deeper.
+   * whose opening brace is missing holds what is indented deeper; a brace behind it is its own if
+   * nothing is around it.
    */
   private int loopBody(StatementLine head, boolean opened, List<Statement> body) {
     int end = head.span().end();
@@ -185,7 +191,8 @@ public final class Parser {
           blocks.column(next) > column || blocks.lineOf(next) == blocks.lineOf(head.end());
       if (over || !deeper && (!opened || isDeclaration(next))) {
         boolean closes = !over && next.kind() == TokenKind.CLOSE_BRACE;
-        if (closes && blocks.column(next) == column) {
+        boolean alone = !inSystem && !blocks.isInnerLoop();
+        if (closes && (alone || blocks.column(next) == column)) {
           return lines.next().end().end();
         }
         if (opened && !openLoopReported) {
