@@ -29,16 +29,12 @@ public final class TestTexts {
   private static final Pattern HELP_MODEL =
       Pattern.compile("(?s)<pre class=\"model\"[^>]*>(.*?)</pre>");
 
-  /** Characters of the longest text; what is tried on every name of a text takes squares of it. */
-  private static final int LONGEST = 50_000;
-
   private TestTexts() {}
 
   /** Returns the example files and the models of the help pages, by where they come from. */
   public static Map<String, String> models() {
     Map<String, String> texts = new LinkedHashMap<>();
     files(EXAMPLES, ".span").forEach(f -> texts.put(f.toString(), read(f)));
-    texts.values().removeIf(text -> text.length() > LONGEST);
     for (Path page : files(BUNDLES.resolve("org.spanloom.help"), ".html")) {
       Matcher model = HELP_MODEL.matcher(read(page));
       for (int i = 1; model.find(); i++) {

@@ -44,7 +44,13 @@ import org.spanloom.language.text.Span;
  */
 class FuzzTests {
 
+  /**
+   * Rounds of the suite. Known to be wrong: with the seed of the suite, round 3,414 spoils a text
+   * with braces astray, and its loops are recovered in another way once it is laid out, since the
+   * recovery of loops looks at columns. Longer runs meet it.
+   */
   private static final int ROUNDS = 3_000;
+
   private static final int SECONDS = Integer.getInteger("spanloom.fuzz.seconds", 0);
   private static final long SEED = Long.getLong("spanloom.fuzz.seed", 4711);
 
